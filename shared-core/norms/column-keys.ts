@@ -1,0 +1,14 @@
+/** Columns a conversion table can carry beside the raw score and the percentile rank. */
+export const COLUMN_KEYS = [
+  'count',
+  'cumulative',
+  'exact-rank',
+  'z',
+  't',
+  'nce',
+  'deviation',
+  'sten',
+  'stanine',
+] as const;
+
+export type ColumnKey = (typeof COLUMN_KEYS)[number];

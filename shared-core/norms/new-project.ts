@@ -1,0 +1,51 @@
+import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
+
+/** Cautions that print unless the user rewrites them. */
+export const STANDING_CAUTIONS =
+  'A percentile rank is a place in a named group, not a per cent of correct answers. Its steps are unequal: do not add, ' +
+  'subtract or average percentile ranks. Use this table only for this form, season and group. Never let one score be ' +
+  'the only ground for a decision about a person; follow local rules and the judgement of a qualified professional.';
+
+export const STANDING_HOW_TO_READ =
+  'Find the raw score in the first column. The percentile rank beside it tells where that score stands in the group ' +
+  'this table was made from.';
+
+/** A project with nothing read yet and every choice at its default. */
+export function newProject(title: string): NormProject {
+  return {
+    format: PROJECT_FORMAT,
+    version: PROJECT_VERSION,
+    title,
+    subtitle: '',
+    people: 'people',
+    source: null,
+    reading: null,
+    tally: null,
+    groups: {
+      by: [],
+      choices: [],
+      documentation: { population: '', sampling: '', participation: '', testDates: '', weighting: '' },
+    },
+    curve: { definition: { kind: 'midpoint' } },
+    table: {
+      columns: ['stanine', 't'],
+      decimals: 0,
+      rounding: 'half-up',
+      ends: 'signs',
+      zSource: 'normalised',
+      zEnds: 'limits',
+    },
+    sheet: {
+      paper: 'a4',
+      orientation: 'portrait',
+      tableColumns: 3,
+      title: 'Raw score to percentile rank',
+      howToRead: STANDING_HOW_TO_READ,
+      cautions: STANDING_CAUTIONS,
+      notes: '',
+      ogive: true,
+      inverse: false,
+    },
+    release: { edition: '1.0', date: '', answers: [] },
+  };
+}
