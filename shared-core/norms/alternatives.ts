@@ -1,0 +1,189 @@
+import type { NormProject } from './norm-project.ts';
+import { definitionInWords } from './definitions.ts';
+import type { RankDefinition } from '../percentile/percentile-rank.ts';
+import type { ChoiceKey } from './statements.ts';
+
+/** One way a choice can be made: what it is, what it changes, and the project with it made. */
+export interface Alternative {
+  readonly label: string;
+  readonly explanation: string;
+  readonly chosen: boolean;
+  readonly project: NormProject;
+}
+
+/** Choices that are made from a short list; the others need a number, a text or several ticks. */
+export type ListedChoice = Exclude<ChoiceKey, 'scale' | 'missing' | 'grouping' | 'columns' | 'edition' | 'date'>;
+
+/** All alternatives of a choice for a project, the present one marked. */
+export function alternatives(project: NormProject, choice: ListedChoice): readonly Alternative[] {
+  switch (choice) {
+    case 'people':
+      return (['pupils', 'students', 'candidates', 'people'] as const).map((people) => ({
+        label: people,
+        explanation: `The sheet speaks of ${people}.`,
+        chosen: project.people === people,
+        project: { ...project, people },
+      }));
+    case 'direction':
+      return [
+        directionAlternative(project, 'high-is-good', 'high scores are good', 'Marks won: a rank tells how many did worse by scoring lower.'),
+        directionAlternative(project, 'low-is-good', 'low scores are good', 'Seconds or errors: a rank tells how many did worse by scoring higher.'),
+      ];
+    case 'duplicates':
+      return [
+        duplicateAlternative(project, 'keep-first', 'keep the first row', 'Later rows with the same identifier are left out.'),
+        duplicateAlternative(project, 'leave-out-all', 'keep none of them', 'Nobody knows which row is right, so none counts.'),
+        duplicateAlternative(project, 'keep-all', 'keep every row', 'Right only if the identifier does not name a person.'),
+      ];
+    case 'definition':
+      return definitionAlternatives(project);
+    case 'decimals':
+      return [
+        tableAlternative(project, { decimals: 0 }, 'as whole numbers', 'What most tables print; finer steps are rarely trustworthy.'),
+        tableAlternative(project, { decimals: 1 }, 'to one decimal', 'For large groups and for work at the ends of the scale.'),
+      ];
+    case 'rounding':
+      return [
+        tableAlternative(project, { rounding: 'half-up' }, 'halves rounded up', '62.5 prints 63. The usual rule.'),
+        tableAlternative(project, { rounding: 'half-even' }, 'halves rounded to even', '62.5 prints 62, 63.5 prints 64: no drift upwards.'),
+      ];
+    case 'ends':
+      return [
+        tableAlternative(project, { ends: 'signs' }, 'signs at the ends', 'Below the lowest printed rank stands “<”, above the highest “>”.'),
+        tableAlternative(project, { ends: 'held' }, 'held at the ends', 'Ranks outside print as the lowest or highest whole rank.'),
+      ];
+    case 'z-source':
+      return [
+        tableAlternative(project, { zSource: 'normalised' }, 'normal deviates of the ranks', 'z is the point of the normal curve with that rank, whatever the shape of the scores.'),
+        tableAlternative(project, { zSource: 'linear' }, 'linear', 'z is (score − mean) / SD and keeps the shape of the scores; stanines and stens follow z.'),
+      ];
+    case 'z-ends':
+      return [
+        tableAlternative(project, { zEnds: 'limits' }, 'held between −3 and 3', 'T prints from 20 to 80. Ranks 0 and 100, which have no z, print the limit.'),
+        tableAlternative(project, { zEnds: 'half-person' }, 'half a person at the ends', 'Ranks 0 and 100 are taken as half a person from the end; nothing is held.'),
+      ];
+    case 'paper':
+      return [
+        sheetAlternative(project, { paper: 'a4' }, 'A4', '210 × 297 mm.'),
+        sheetAlternative(project, { paper: 'letter' }, 'Letter', '8½ × 11 inches.'),
+        sheetAlternative(project, { paper: 'a5' }, 'A5', '148 × 210 mm, for a small booklet.'),
+      ];
+    case 'orientation':
+      return [
+        sheetAlternative(project, { orientation: 'portrait' }, 'portrait', 'Upright.'),
+        sheetAlternative(project, { orientation: 'landscape' }, 'landscape', 'On its side.'),
+      ];
+    case 'table-columns':
+      return [
+        sheetAlternative(project, { tableColumns: 1 }, 'one column', 'The table runs down the page once.'),
+        sheetAlternative(project, { tableColumns: 2 }, 'two columns', 'The table is split in two, the heading repeated.'),
+        sheetAlternative(project, { tableColumns: 3 }, 'three columns', 'The table is split in three, the heading repeated.'),
+      ];
+    case 'ogive':
+      return [
+        sheetAlternative(project, { ogive: true }, 'with its ogive', 'The cumulative distribution as a picture below the table.'),
+        sheetAlternative(project, { ogive: false }, 'without a picture', 'The table and its notes alone.'),
+      ];
+    case 'inverse':
+      return [
+        sheetAlternative(project, { inverse: false }, 'without an inverse table', 'From raw score to rank only.'),
+        sheetAlternative(project, { inverse: true }, 'with the lowest score for each percentile', 'Also from percentile to raw score: the poorest score that reaches it.'),
+      ];
+  }
+}
+
+function directionAlternative(
+  project: NormProject,
+  direction: 'high-is-good' | 'low-is-good',
+  label: string,
+  explanation: string,
+): Alternative {
+  const { tally, reading } = project;
+  const now = tally?.scale.direction ?? reading?.scale?.direction ?? 'high-is-good';
+  return {
+    label,
+    explanation,
+    chosen: now === direction,
+    project: {
+      ...project,
+      tally: tally === null ? null : { ...tally, scale: { ...tally.scale, direction } },
+      reading:
+        reading === null || reading.scale === null ? reading : { ...reading, scale: { ...reading.scale, direction } },
+    },
+  };
+}
+
+function duplicateAlternative(
+  project: NormProject,
+  duplicateId: 'keep-first' | 'leave-out-all' | 'keep-all',
+  label: string,
+  explanation: string,
+): Alternative {
+  const { reading } = project;
+  return {
+    label,
+    explanation,
+    chosen: reading?.decisions.duplicateId === duplicateId,
+    project:
+      reading === null
+        ? project
+        : { ...project, reading: { ...reading, decisions: { ...reading.decisions, duplicateId } } },
+  };
+}
+
+function definitionAlternatives(project: NormProject): readonly Alternative[] {
+  const step = project.tally?.scale.step ?? 1;
+  const listed: readonly (readonly [RankDefinition, string])[] = [
+    [
+      { kind: 'midpoint' },
+      'Half of those who share the score count as below. The mean over everybody is 50; the usual choice in testing.',
+    ],
+    [
+      { kind: 'at-or-below' },
+      'The height of the cumulative curve. Kind to each score: the best score always stands at 100, printed as the upper end.',
+    ],
+    [{ kind: 'below' }, 'Only those surpassed count. Strict: the poorest score always stands at 0, printed as the lower end.'],
+    [
+      { kind: 'plotting-position', offset: '3/8' },
+      'Blom’s position, with a = 3/8: leaves room beyond both ends for people not drawn; best for small groups.',
+    ],
+    [{ kind: 'plotting-position', offset: '1/3' }, 'Tukey’s position, with a = 1/3.'],
+    [{ kind: 'plotting-position', offset: '1/2' }, 'Hazen’s position, with a = 1/2: the midpoint rank for scores that occur.'],
+    [{ kind: 'plotting-position', offset: '0' }, 'Weibull’s and van der Waerden’s position, with a = 0.'],
+    [
+      { kind: 'grouped', width: step * 5 },
+      'Scores are taken in classes and spread evenly within them, as in hand-worked tables. Hides detail within a class.',
+    ],
+  ];
+  const direction = project.tally?.scale.direction ?? 'high-is-good';
+  return listed.map(([definition, explanation]) => ({
+    label: definitionInWords(definition, direction),
+    explanation,
+    chosen: JSON.stringify(project.curve.definition) === JSON.stringify(definition),
+    project: { ...project, curve: { definition } },
+  }));
+}
+
+function tableAlternative(
+  project: NormProject,
+  change: Partial<NormProject['table']>,
+  label: string,
+  explanation: string,
+): Alternative {
+  const table = { ...project.table, ...change };
+  return { label, explanation, chosen: sameChoices(project.table, table), project: { ...project, table } };
+}
+
+function sheetAlternative(
+  project: NormProject,
+  change: Partial<NormProject['sheet']>,
+  label: string,
+  explanation: string,
+): Alternative {
+  const sheet = { ...project.sheet, ...change };
+  return { label, explanation, chosen: sameChoices(project.sheet, sheet), project: { ...project, sheet } };
+}
+
+function sameChoices(now: object, then: object): boolean {
+  return JSON.stringify(now) === JSON.stringify(then);
+}

@@ -1,0 +1,175 @@
+import { compareToWhole, ratio, ratioToNumber, type ExactRatio } from '../percentile/exact-ratio.ts';
+import { percentileRanks, rankParts, type RankDefinition, type RankParts } from '../percentile/percentile-rank.ts';
+import { attainableScores } from '../scale/score-scale.ts';
+import {
+  derivedScores,
+  linearScale,
+  NCE_FACTOR,
+  normalisedZ,
+  stanineOfZ,
+  stenOfZ,
+  type DerivedScores,
+} from '../scores/derived-score.ts';
+import {
+  printCount,
+  printNumber,
+  printRank,
+  printRatio,
+  printScore,
+  printWeight,
+  type EndTaken,
+} from '../scores/printed-number.ts';
+import type { CohortSummary } from '../tally/cohort-summary.ts';
+import type { FrequencyTable } from '../tally/frequency-table.ts';
+import type { ColumnKey } from './column-keys.ts';
+import type { TableChoices } from './norm-project.ts';
+
+/** Where a printed derived score comes from. */
+export type DerivedFrom = 'rank' | 'linear' | 'held-at-limit' | 'half-person' | 'none';
+
+/** For each cell of a row: what it was made of. */
+export interface RowProvenance {
+  readonly percentileRank: {
+    readonly from: 'counts' | 'weights';
+    /** False where nobody obtained the score and the rank follows from its neighbours. */
+    readonly observed: boolean;
+    /** People, or weight, that did worse, at the score, and of all. */
+    readonly below: number;
+    readonly at: number;
+    readonly all: number;
+  };
+  readonly printed: { readonly end: EndTaken };
+  readonly derived: DerivedFrom;
+}
+
+export interface ConversionRow {
+  /** Raw-score points. */
+  readonly score: number;
+  readonly scoreText: string;
+  /** People at the score. */
+  readonly count: number;
+  readonly parts: RankParts;
+  /** Sum of weights at the score, and at it or on its poor side; people without weights. */
+  readonly weight: number;
+  readonly cumulative: number;
+  /** Exact percentile rank, 0–100. */
+  readonly rank: ExactRatio;
+  /** The same as the nearest double. */
+  readonly percentileRank: number;
+  /** As printed everywhere. */
+  readonly printed: string;
+  /** Unrounded; null where no finite value exists. */
+  readonly derived: DerivedScores;
+  /** Printed text of every column that a table can carry. */
+  readonly texts: Readonly<Record<ColumnKey, string>>;
+  readonly provenance: RowProvenance;
+}
+
+/** Printed z is held between −3 and 3 where the limits stand in for missing values. */
+export const Z_LIMIT = 3;
+const NO_VALUE = '\u2013';
+
+/**
+ * One row for each attainable score, lowest first. The only place where a group's numbers become printed texts. Throws
+ * on a group without people.
+ */
+export function conversionRows(
+  table: FrequencyTable,
+  summary: CohortSummary,
+  definition: RankDefinition,
+  choices: TableChoices,
+): readonly ConversionRow[] {
+  const ranks = percentileRanks(table, definition);
+  const parts = rankParts(table);
+  return attainableScores(table.scale).map((score, position) => {
+    const rank = ranks[position];
+    const part = parts[position];
+    if (rank === undefined || part === undefined) throw new RangeError('a score without a rank');
+    return rowOf({ table, summary, choices, score, rank, part, count: table.counts[position] ?? 0 });
+  });
+}
+
+interface RowParts {
+  readonly table: FrequencyTable;
+  readonly summary: CohortSummary;
+  readonly choices: TableChoices;
+  readonly score: number;
+  readonly rank: ExactRatio;
+  readonly part: RankParts;
+  readonly count: number;
+}
+
+function rowOf({ table, summary, choices, score, rank, part, count }: RowParts): ConversionRow {
+  const linear = choices.zSource === 'linear';
+  const normal = derivedScores(rank, linear ? linearZ(table, summary, score) : normalisedZ(rank));
+  const derived =
+    linear && normal.z !== null ? { ...normal, stanine: stanineOfZ(normal.z), sten: stenOfZ(normal.z) } : normal;
+  const printedZ = zForPrint(derived.z, rank, summary.n, choices);
+  const printed = printRank(rank, choices);
+  const asNumber = (units: bigint): number => ratioToNumber(ratio(units, table.weightUnit));
+  const fromZ = (mean: number, spread: number, low: number, high: number, decimals: number): string =>
+    printedZ.z === null ? NO_VALUE : printNumber(held(linearScale(printedZ.z, mean, spread), low, high, choices), decimals);
+  return {
+    score,
+    scoreText: printScore(table.scale, score),
+    count,
+    parts: part,
+    weight: asNumber(part.at),
+    cumulative: asNumber(part.below + part.at),
+    rank,
+    percentileRank: ratioToNumber(rank),
+    printed: printed.text,
+    derived,
+    texts: {
+      count: printCount(count),
+      cumulative: printWeight(part.below + part.at, table.weightUnit),
+      'exact-rank': printRatio(rank, 2),
+      z: fromZ(0, 1, -Z_LIMIT, Z_LIMIT, 2),
+      t: fromZ(50, 10, 50 - 10 * Z_LIMIT, 50 + 10 * Z_LIMIT, 0),
+      nce: fromZ(50, NCE_FACTOR, 1, 99, 0),
+      deviation: fromZ(100, 15, 100 - 15 * Z_LIMIT, 100 + 15 * Z_LIMIT, 0),
+      sten: derived.sten === null ? NO_VALUE : String(derived.sten),
+      stanine: String(derived.stanine),
+    },
+    provenance: {
+      percentileRank: {
+        from: table.weighted ? 'weights' : 'counts',
+        observed: count > 0,
+        below: asNumber(part.below),
+        at: asNumber(part.at),
+        all: asNumber(part.all),
+      },
+      printed: { end: printed.end },
+      derived: printedZ.from,
+    },
+  };
+}
+
+function linearZ(table: FrequencyTable, summary: CohortSummary, score: number): number | null {
+  if (summary.sd === null || summary.sd === 0) return null;
+  const z = (score - summary.mean) / summary.sd;
+  return table.scale.direction === 'high-is-good' ? z : -z;
+}
+
+/** The z behind printed derived scores: as it is, or what the user's rule puts where ranks 0 and 100 leave none. */
+function zForPrint(
+  z: number | null,
+  rank: ExactRatio,
+  n: number,
+  choices: TableChoices,
+): { readonly z: number | null; readonly from: DerivedFrom } {
+  if (z !== null) {
+    if (choices.zEnds === 'limits' && Math.abs(z) > Z_LIMIT) return { z, from: 'held-at-limit' };
+    return { z, from: choices.zSource === 'linear' ? 'linear' : 'rank' };
+  }
+  const low = compareToWhole(rank, 0n) <= 0;
+  if (choices.zSource === 'linear' || (!low && compareToWhole(rank, 100n) < 0)) return { z: null, from: 'none' };
+  if (choices.zEnds === 'limits') return { z: low ? -Z_LIMIT : Z_LIMIT, from: 'held-at-limit' };
+  const people = BigInt(n);
+  const half = low ? ratio(100n, 2n * people) : ratio(100n * (2n * people - 1n), 2n * people);
+  return { z: normalisedZ(half), from: 'half-person' };
+}
+
+function held(value: number, low: number, high: number, choices: TableChoices): number {
+  return choices.zEnds === 'limits' ? Math.min(high, Math.max(low, value)) : value;
+}

@@ -1,0 +1,72 @@
+import { sha256 } from '@noble/hashes/sha2.js';
+import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
+import { definitionProblem } from '../percentile/percentile-rank.ts';
+import { summarise, type CohortSummary } from '../tally/cohort-summary.ts';
+import { peopleIn } from '../tally/frequency-table.ts';
+import { conversionRows, type ConversionRow } from './conversion-table.ts';
+import { definitionKey } from './definitions.ts';
+import { inverseTable, type InverseRow } from './inverse-table.ts';
+import { normGroups, type NormGroup } from './norm-groups.ts';
+import type { NormProject } from './norm-project.ts';
+import { queriesOf, type Query } from './queries.ts';
+
+/** One group with its numbers: everything that is printed of it. */
+export interface GroupNorms {
+  readonly group: NormGroup;
+  readonly summary: CohortSummary;
+  /** One row for each attainable score, lowest first. */
+  readonly rows: readonly ConversionRow[];
+  readonly inverse: readonly InverseRow[];
+}
+
+/** Every number that screen, PDF, workbook and csv print, from one project. */
+export interface NormSet {
+  readonly project: NormProject;
+  /** Groups that get a table, in print order. */
+  readonly groups: readonly GroupNorms[];
+  readonly queries: readonly Query[];
+  /** "7F3A-91C2": the same on every page and machine for the same printed numbers, another when one differs. */
+  readonly check: string;
+}
+
+export type NormSetBuilt =
+  | { readonly ok: true; readonly normSet: NormSet }
+  | { readonly ok: false; readonly problem: string };
+
+/** Pure: the same project gives the same set everywhere. What stands in the way comes back as a sentence. */
+export function buildNormSet(project: NormProject): NormSetBuilt {
+  if (project.tally === null) {
+    return { ok: false, problem: 'No cohort has been read yet. Choose a file at the Cohort station, or type the counts.' };
+  }
+  const { definition } = project.curve;
+  const problem = definitionProblem(project.tally.scale, definition);
+  if (problem !== null) return { ok: false, problem };
+  const printed = normGroups(project).filter((group) => group.printed && peopleIn(group.table) > 0);
+  if (printed.length === 0) {
+    return { ok: false, problem: 'No group gets a table. At the Groups station, let at least one be printed.' };
+  }
+  const { direction } = project.tally.scale;
+  const groups = printed.map((group) => {
+    const summary = summarise(group.table);
+    const rows = conversionRows(group.table, summary, definition, project.table);
+    return { group, summary, rows, inverse: inverseTable(rows, direction) };
+  });
+  return { ok: true, normSet: { project, groups, queries: queriesOf(project, groups), check: checkCode(project, groups) } };
+}
+
+function checkCode(project: NormProject, groups: readonly GroupNorms[]): string {
+  const printed = [
+    project.title,
+    project.subtitle,
+    project.release.edition,
+    definitionKey(project.curve.definition),
+    project.table.columns,
+    groups.map(({ group, summary, rows }) => [
+      group.title,
+      summary.n,
+      rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
+    ]),
+  ];
+  const hash = bytesToHex(sha256(utf8ToBytes(JSON.stringify(printed)))).toUpperCase();
+  return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;
+}

@@ -1,0 +1,168 @@
+import { scaleInWords } from '../scale/score-scale.ts';
+import { columnInWords, onePerson } from './norm-groups.ts';
+import { definitionInWords } from './definitions.ts';
+import type { NormProject } from './norm-project.ts';
+import { columnOf } from './table-columns.ts';
+
+/** Phrases of the statements that stand for a choice. */
+export type ChoiceKey =
+  | 'people'
+  | 'direction'
+  | 'scale'
+  | 'missing'
+  | 'duplicates'
+  | 'grouping'
+  | 'definition'
+  | 'decimals'
+  | 'rounding'
+  | 'ends'
+  | 'columns'
+  | 'z-source'
+  | 'z-ends'
+  | 'paper'
+  | 'orientation'
+  | 'table-columns'
+  | 'ogive'
+  | 'inverse'
+  | 'edition'
+  | 'date';
+
+export interface StatementPart {
+  readonly text: string;
+  /** Null for plain words. */
+  readonly choice: ChoiceKey | null;
+}
+
+const words = (text: string): StatementPart => ({ text, choice: null });
+const phrase = (choice: ChoiceKey, text: string): StatementPart => ({ choice, text });
+
+/** The statement as one plain sentence, for print. */
+export function statementText(parts: readonly StatementPart[]): string {
+  return parts.map((part) => part.text).join('');
+}
+
+/** "a, b and c" */
+export function joined(items: readonly string[]): string {
+  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1)}`;
+}
+
+export function cohortStatement(project: NormProject): readonly StatementPart[] {
+  const reading = project.reading;
+  const scale = reading?.scale ?? project.tally?.scale ?? null;
+  const declared = reading === null || reading.scale !== null;
+  const codes = reading?.missing ?? [];
+  const duplicates = reading?.decisions.duplicateId ?? 'keep-first';
+  const hasId = reading?.roles.some(({ role }) => role === 'id') ?? false;
+  return [
+    words('The rows are '),
+    phrase('people', project.people),
+    words(' whose scores run from '),
+    phrase('scale', scale === null ? 'the lowest to the highest met' : `${scaleInWords(scale)}${declared ? '' : ', as met'}`),
+    words('; '),
+    phrase('direction', scale?.direction === 'low-is-good' ? 'low scores are good' : 'high scores are good'),
+    ...(reading === null
+      ? []
+      : [
+          words('. '),
+          phrase('missing', codes.length === 0 ? 'No code stands' : `${joined(codes)} ${codes.length === 1 ? 'stands' : 'stand'}`),
+          words(' for a missing score'),
+        ]),
+    ...(hasId
+      ? [
+          words('; of repeated identifiers '),
+          phrase(
+            'duplicates',
+            { 'keep-first': 'the first row is kept', 'leave-out-all': 'no row is kept', 'keep-all': 'every row is kept' }[duplicates],
+          ),
+        ]
+      : []),
+    words('.'),
+  ];
+}
+
+export function groupsStatement(project: NormProject): readonly StatementPart[] {
+  const { by } = project.groups;
+  const columns = by.map((column) => columnInWords(column).toLowerCase());
+  return [
+    words('There is '),
+    phrase('grouping', by.length === 0 ? `one table for all ${project.people}` : `one table for each ${columns.join(' and ')}`),
+    words('.'),
+  ];
+}
+
+export function curveStatement(project: NormProject): readonly StatementPart[] {
+  const direction = project.tally?.scale.direction ?? 'high-is-good';
+  const one = onePerson(project.people);
+  return [
+    words(`A ${one}’s percentile rank is the share of the group scoring `),
+    phrase('definition', definitionInWords(project.curve.definition, direction)),
+    words('.'),
+  ];
+}
+
+export function tableStatement(project: NormProject): readonly StatementPart[] {
+  const { columns, decimals, rounding, ends, zSource, zEnds } = project.table;
+  const names = columns.map((key) => columnOf(key, project).name);
+  const derived = columns.some((key) => ['z', 't', 'nce', 'deviation', 'sten'].includes(key) || (key === 'stanine' && zSource === 'linear'));
+  const low = decimals === 0 ? '1' : '0.1';
+  const high = decimals === 0 ? '99' : '99.9';
+  return [
+    words('Percentile ranks are printed '),
+    phrase('decimals', decimals === 0 ? 'as whole numbers' : 'to one decimal'),
+    words(', '),
+    phrase('rounding', rounding === 'half-up' ? 'halves rounded up' : 'halves rounded to even'),
+    words(', '),
+    phrase('ends', ends === 'signs' ? `with <${low} and >${high} at the ends` : `held at ${low} and ${high}`),
+    words('; beside them '),
+    phrase('columns', names.length === 0 ? 'nothing else' : names.length === 1 ? `the ${names[0]}` : `the ${joined(names)}`),
+    words('.'),
+    ...(derived
+      ? [
+          words(' z scores are '),
+          phrase('z-source', zSource === 'normalised' ? 'normal deviates of the ranks' : 'linear, from mean and standard deviation'),
+          words('; '),
+          phrase(
+            'z-ends',
+            zEnds === 'limits' ? 'they are held between −3 and 3' : 'at ranks 0 and 100 half a person stands in',
+          ),
+          words('.'),
+        ]
+      : []),
+  ];
+}
+
+const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
+const NUMBER_WORDS = { 1: 'one column', 2: 'two columns', 3: 'three columns' } as const;
+
+export function sheetStatement(project: NormProject): readonly StatementPart[] {
+  const { paper, orientation, tableColumns, ogive, inverse } = project.sheet;
+  return [
+    words('Each table is set on '),
+    phrase('paper', PAPER_NAMES[paper]),
+    words(', '),
+    phrase('orientation', orientation),
+    words(', in '),
+    phrase('table-columns', NUMBER_WORDS[tableColumns]),
+    words(', '),
+    phrase('ogive', ogive ? 'with its ogive' : 'without a picture'),
+    words(' and '),
+    phrase('inverse', inverse ? 'with the lowest score for each percentile' : 'without an inverse table'),
+    words('.'),
+  ];
+}
+
+export function releaseStatement(project: NormProject): readonly StatementPart[] {
+  const { edition, date } = project.release;
+  return [
+    words('This is edition '),
+    phrase('edition', edition.trim() === '' ? '(no number)' : edition),
+    words(', dated '),
+    phrase('date', date === '' ? '(no date)' : date),
+    words('.'),
+  ];
+}
+
+/** The method as it is printed on a sheet: the statements of the Curve and Table stations. */
+export function methodText(project: NormProject): string {
+  return [curveStatement(project), tableStatement(project)].map(statementText).join(' ');
+}
