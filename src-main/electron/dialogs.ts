@@ -1,0 +1,50 @@
+import { existsSync } from 'node:fs';
+import { dialog } from 'electron';
+import type { BrowserWindow, FileFilter } from 'electron';
+import type { Dialogs } from '../dialogs.ts';
+import { openedKind } from './opened-file.ts';
+
+const FILTERS: Readonly<Record<'cohort' | 'project', FileFilter[]>> = {
+  cohort: [
+    { name: 'Cohort files', extensions: ['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls'] },
+    { name: 'All files', extensions: ['*'] },
+  ],
+  project: [{ name: 'Normloom projects', extensions: ['normloom'] }],
+};
+
+const askWhereToSave = async (holder: BrowserWindow, suggested: string): Promise<string | null> => {
+  const answer = await dialog.showSaveDialog(holder, {
+    defaultPath: suggested,
+    filters: FILTERS.project,
+    properties: ['createDirectory', 'showOverwriteConfirmation'],
+  });
+  if (answer.canceled || answer.filePath === '') return null;
+  if (openedKind(answer.filePath) === 'project') return answer.filePath;
+  // Some systems leave the ending off. Where the full name is taken, the dialog asks again, and about the right file.
+  const path = `${answer.filePath}.normloom`;
+  return existsSync(path) ? askWhereToSave(holder, path) : path;
+};
+
+/** The system's own dialogs, held by the window. `chosen` hears the path of every project that was chosen or named. */
+export const nativeDialogs = (window: () => BrowserWindow | null, chosen: (path: string) => void): Dialogs => {
+  const open = async (properties: ('openFile' | 'openDirectory')[], filters: FileFilter[]): Promise<string | null> => {
+    const holder = window();
+    if (holder === null) return null;
+    const answer = await dialog.showOpenDialog(holder, { properties, filters });
+    return answer.canceled ? null : (answer.filePaths[0] ?? null);
+  };
+  return {
+    async chooseFile(kind) {
+      const path = await open(['openFile'], FILTERS[kind]);
+      if (path !== null && kind === 'project') chosen(path);
+      return path;
+    },
+    async chooseSave(suggested) {
+      const holder = window();
+      const path = holder === null ? null : await askWhereToSave(holder, suggested);
+      if (path !== null) chosen(path);
+      return path;
+    },
+    chooseFolder: () => open(['openDirectory'], []),
+  };
+};

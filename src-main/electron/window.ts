@@ -1,0 +1,39 @@
+import { BrowserWindow, nativeTheme } from 'electron';
+import type { BrowserWindowConstructorOptions } from 'electron';
+
+const PAPER = '#fdfcf9';
+const DARK_PAPER = '#1b1d1f';
+
+/** The window's options: a sandboxed page without Node that meets the host only through the preload script. */
+const windowOptions = (preload: string, icon: string, dark: boolean): BrowserWindowConstructorOptions => ({
+  title: 'Normloom',
+  width: 1320,
+  height: 880,
+  minWidth: 1024,
+  minHeight: 700,
+  show: false,
+  backgroundColor: dark ? DARK_PAPER : PAPER,
+  icon,
+  webPreferences: {
+    preload,
+    contextIsolation: true,
+    sandbox: true,
+    nodeIntegration: false,
+    nodeIntegrationInWorker: false,
+    nodeIntegrationInSubFrames: false,
+    webSecurity: true,
+    allowRunningInsecureContent: false,
+    webviewTag: false,
+    spellcheck: false,
+    navigateOnDragDrop: false,
+  },
+});
+
+/** Makes the program's one window, which shows itself once its page has been drawn. Paths are absolute. */
+export const createWindow = (preload: string, icon: string): BrowserWindow => {
+  const window = new BrowserWindow(windowOptions(preload, icon, nativeTheme.shouldUseDarkColors));
+  window.once('ready-to-show', () => {
+    window.show();
+  });
+  return window;
+};
