@@ -21,12 +21,20 @@ export interface ProjectListing {
 }
 
 /** Work that was not yet saved when the program ended. */
-export interface DraftListing extends ProjectListing {
+export interface DraftListing {
   readonly draft: string;
+  /** Name of the file it belongs to; empty when it was never saved. */
+  readonly file: string;
+  readonly title: string;
+  /** Milliseconds since 1970. */
+  readonly changedAt: number;
 }
 
 export interface OpenedProject {
-  /** Names this work for autosave; a new one for each time a project is opened. */
+  /**
+   * Names this work for autosave; a new one for each time a project is opened. A page that starts a new project makes up
+   * a name of its own: 8 to 64 small letters, digits and hyphens.
+   */
   readonly draft: string;
   readonly project: NormProject;
   /** File it is saved to; null for a new project, the sample, or a recovered draft without a file. */
@@ -98,7 +106,12 @@ export interface DeskRequests {
   'about': { ask: Record<never, never>; answer: About };
   'list-projects': {
     ask: Record<never, never>;
-    answer: { readonly recent: readonly ProjectListing[]; readonly drafts: readonly DraftListing[] };
+    answer: {
+      readonly recent: readonly ProjectListing[];
+      readonly drafts: readonly DraftListing[];
+      /** Sentences about drafts that cannot be read. */
+      readonly problems: readonly string[];
+    };
   };
   /** A dialog where the host has one; null when the user closed it. Browser hosts answer with a problem: they upload. */
   'choose-file': { ask: { readonly kind: 'cohort' | 'project' }; answer: { readonly handle: FileHandle } | null };
