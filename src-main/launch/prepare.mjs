@@ -1,0 +1,3 @@
+import { ensurePackages } from './packages.mjs';
+
+ensurePackages((line) => process.stderr.write(`${line}\n`));

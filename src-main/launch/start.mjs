@@ -1,0 +1,59 @@
+import { spawn } from 'node:child_process';
+import { resolve } from 'node:path';
+import { parseArgs } from 'node:util';
+import { findElectron, noWindowReason } from './electron-binary.mjs';
+import { ROOT, USER_FOLDER, inRoot } from './folders.mjs';
+import { ensureBuild } from './programs.mjs';
+
+const USAGE = 'Usage: npm start -- [--browser] [--no-window] [FILE]';
+
+/** @param {string} line */
+const say = (line) => process.stderr.write(`${line}\n`);
+
+const readWords = () => {
+  try {
+    const { values, positionals } = parseArgs({
+      options: { browser: { type: 'boolean' }, 'no-window': { type: 'boolean' } },
+      allowPositionals: true,
+    });
+    if (positionals.length > 1) throw new Error('Only one file can be opened at a time.');
+    return { browser: values.browser ?? false, noWindow: values['no-window'] ?? false, file: positionals[0] ?? null };
+  } catch (problem) {
+    say(`${problem.message}\n${USAGE}`);
+    return process.exit(2);
+  }
+};
+
+/** Runs a program until it ends, and ends as it did. @param {string} program @param {string[]} words */
+const become = (program, words) => {
+  const child = spawn(program, words, { cwd: ROOT, stdio: 'inherit' });
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => child.kill(signal));
+  child.on('error', (problem) => {
+    say(`The program could not be started: ${problem.message}`);
+    process.exitCode = 1;
+  });
+  child.on('close', (code) => {
+    process.exitCode = code ?? 0;
+  });
+};
+
+/** The Electron program to use, or null and a line that says why the browser is used instead. @param {boolean} browser */
+const chooseElectron = async (browser) => {
+  if (browser) return null;
+  const reason = noWindowReason();
+  const electron = reason === null ? await findElectron(say) : null;
+  if (electron === null)
+    say(`Using the browser: ${reason ?? 'the Electron window is not installed and could not be fetched'}.`);
+  return electron;
+};
+
+const { browser, noWindow, file } = readWords();
+await ensureBuild(say);
+const files = file === null ? [] : [resolve(USER_FOLDER, file)];
+const electron = await chooseElectron(browser || noWindow);
+if (electron === null) {
+  become(process.execPath, [inRoot('dist', 'main', 'browser-host.js'), ...(noWindow ? ['--no-window'] : []), ...files]);
+} else {
+  say('Opening Normloom in its Electron window.');
+  become(electron, [ROOT, ...files]);
+}
