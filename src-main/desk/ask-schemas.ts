@@ -1,0 +1,34 @@
+import * as v from 'valibot';
+import type { DeskRequest, DeskRequests } from '../../shared-core/desk.ts';
+import { normProjectSchema } from '../../shared-core/norms/norm-project.ts';
+import { draftNameSchema } from '../project-file/drafts.ts';
+
+/** What each request may be asked with. Keys that are not named here are left behind. */
+type AskSchemas = {
+  readonly [R in DeskRequest]: v.GenericSchema<unknown, DeskRequests[R]['ask']>;
+};
+
+const nothing = v.object({});
+const handle = v.pipe(v.string(), v.maxLength(64));
+const name = v.pipe(v.string(), v.maxLength(400));
+const job = v.pipe(v.string(), v.maxLength(64));
+const reading = normProjectSchema.entries.reading;
+
+export const ASK_SCHEMAS: AskSchemas = {
+  about: nothing,
+  'list-projects': nothing,
+  'choose-file': v.object({ kind: v.picklist(['cohort', 'project']) }),
+  'open-project': v.object({ handle }),
+  'open-draft': v.object({ draft: draftNameSchema }),
+  'open-sample': nothing,
+  'forget-draft': v.object({ draft: draftNameSchema }),
+  'keep-draft': v.object({ draft: draftNameSchema, handle: v.nullable(handle), project: normProjectSchema }),
+  'save-project': v.object({ draft: draftNameSchema, handle: v.nullable(handle), name, project: normProjectSchema }),
+  'look-at-cohort': v.object({ handle, reading }),
+  'tally-cohort': v.object({ handle, reading: reading.wrapped }),
+  'draw-pages': v.object({ project: normProjectSchema }),
+  press: v.object({ project: normProjectSchema, name }),
+  'job-state': v.object({ job }),
+  'cancel-job': v.object({ job }),
+  'show-pressed': nothing,
+};
