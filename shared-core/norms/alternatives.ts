@@ -1,6 +1,7 @@
 import type { NormProject } from './norm-project.ts';
-import { definitionInWords } from './definitions.ts';
+import { definitionInWords, definitionKey } from './definitions.ts';
 import type { RankDefinition } from '../percentile/percentile-rank.ts';
+import { decimalOf } from '../scale/decimal.ts';
 import type { ChoiceKey } from './statements.ts';
 
 /** One way a choice can be made: what it is, what it changes, and the project with it made. */
@@ -26,41 +27,111 @@ export function alternatives(project: NormProject, choice: ListedChoice): readon
       }));
     case 'direction':
       return [
-        directionAlternative(project, 'high-is-good', 'high scores are good', 'Marks won: a rank tells how many did worse by scoring lower.'),
-        directionAlternative(project, 'low-is-good', 'low scores are good', 'Seconds or errors: a rank tells how many did worse by scoring higher.'),
+        directionAlternative(
+          project,
+          'high-is-good',
+          'high scores are good',
+          'Marks won: a rank tells how many did worse by scoring lower.',
+        ),
+        directionAlternative(
+          project,
+          'low-is-good',
+          'low scores are good',
+          'Seconds or errors: a rank tells how many did worse by scoring higher.',
+        ),
       ];
     case 'duplicates':
       return [
-        duplicateAlternative(project, 'keep-first', 'keep the first row', 'Later rows with the same identifier are left out.'),
-        duplicateAlternative(project, 'leave-out-all', 'keep none of them', 'Nobody knows which row is right, so none counts.'),
-        duplicateAlternative(project, 'keep-all', 'keep every row', 'Right only if the identifier does not name a person.'),
+        duplicateAlternative(
+          project,
+          'keep-first',
+          'keep the first row',
+          'Later rows with the same identifier are left out.',
+        ),
+        duplicateAlternative(
+          project,
+          'leave-out-all',
+          'keep none of them',
+          'Nobody knows which row is right, so none counts.',
+        ),
+        duplicateAlternative(
+          project,
+          'keep-all',
+          'keep every row',
+          'Right only if the identifier does not name a person.',
+        ),
       ];
     case 'definition':
       return definitionAlternatives(project);
     case 'decimals':
       return [
-        tableAlternative(project, { decimals: 0 }, 'as whole numbers', 'What most tables print; finer steps are rarely trustworthy.'),
-        tableAlternative(project, { decimals: 1 }, 'to one decimal', 'For large groups and for work at the ends of the scale.'),
+        tableAlternative(
+          project,
+          { decimals: 0 },
+          'as whole numbers',
+          'What most tables print; finer steps are rarely trustworthy.',
+        ),
+        tableAlternative(
+          project,
+          { decimals: 1 },
+          'to one decimal',
+          'For large groups and for work at the ends of the scale.',
+        ),
       ];
     case 'rounding':
       return [
         tableAlternative(project, { rounding: 'half-up' }, 'halves rounded up', '62.5 prints 63. The usual rule.'),
-        tableAlternative(project, { rounding: 'half-even' }, 'halves rounded to even', '62.5 prints 62, 63.5 prints 64: no drift upwards.'),
+        tableAlternative(
+          project,
+          { rounding: 'half-even' },
+          'halves rounded to even',
+          '62.5 prints 62, 63.5 prints 64: no drift upwards.',
+        ),
       ];
     case 'ends':
       return [
-        tableAlternative(project, { ends: 'signs' }, 'signs at the ends', 'Below the lowest printed rank stands “<”, above the highest “>”.'),
-        tableAlternative(project, { ends: 'held' }, 'held at the ends', 'Ranks outside print as the lowest or highest whole rank.'),
+        tableAlternative(
+          project,
+          { ends: 'signs' },
+          'signs at the ends',
+          'Below the lowest printed rank stands “<”, above the highest “>”.',
+        ),
+        tableAlternative(
+          project,
+          { ends: 'held' },
+          'held at the ends',
+          'Ranks outside print as the lowest or highest whole rank.',
+        ),
       ];
     case 'z-source':
       return [
-        tableAlternative(project, { zSource: 'normalised' }, 'normal deviates of the ranks', 'z is the point of the normal curve with that rank, whatever the shape of the scores.'),
-        tableAlternative(project, { zSource: 'linear' }, 'linear', 'z is (score − mean) / SD and keeps the shape of the scores; stanines and stens follow z.'),
+        tableAlternative(
+          project,
+          { zSource: 'normalised' },
+          'normal deviates of the ranks',
+          'z is the point of the normal curve with that rank, whatever the shape of the scores.',
+        ),
+        tableAlternative(
+          project,
+          { zSource: 'linear' },
+          'linear',
+          'z is (score − mean) / SD and keeps the shape of the scores; stanines and stens follow z.',
+        ),
       ];
     case 'z-ends':
       return [
-        tableAlternative(project, { zEnds: 'limits' }, 'held between −3 and 3', 'T prints from 20 to 80. Ranks 0 and 100, which have no z, print the limit.'),
-        tableAlternative(project, { zEnds: 'half-person' }, 'half a person at the ends', 'Ranks 0 and 100 are taken as half a person from the end; nothing is held.'),
+        tableAlternative(
+          project,
+          { zEnds: 'limits' },
+          'held between −3 and 3',
+          'T prints from 20 to 80. Ranks 0 and 100, which have no z, print the limit.',
+        ),
+        tableAlternative(
+          project,
+          { zEnds: 'half-person' },
+          'half a person at the ends',
+          'Ranks 0 and 100 are taken as half a person from the end; nothing is held.',
+        ),
       ];
     case 'paper':
       return [
@@ -76,18 +147,38 @@ export function alternatives(project: NormProject, choice: ListedChoice): readon
     case 'table-columns':
       return [
         sheetAlternative(project, { tableColumns: 1 }, 'one column', 'The table runs down the page once.'),
-        sheetAlternative(project, { tableColumns: 2 }, 'two columns', 'The table is split in two, the heading repeated.'),
-        sheetAlternative(project, { tableColumns: 3 }, 'three columns', 'The table is split in three, the heading repeated.'),
+        sheetAlternative(
+          project,
+          { tableColumns: 2 },
+          'two columns',
+          'The table is split in two, the heading repeated.',
+        ),
+        sheetAlternative(
+          project,
+          { tableColumns: 3 },
+          'three columns',
+          'The table is split in three, the heading repeated.',
+        ),
       ];
     case 'ogive':
       return [
-        sheetAlternative(project, { ogive: true }, 'with its ogive', 'The cumulative distribution as a picture below the table.'),
+        sheetAlternative(
+          project,
+          { ogive: true },
+          'with its ogive',
+          'The cumulative distribution as a picture below the table.',
+        ),
         sheetAlternative(project, { ogive: false }, 'without a picture', 'The table and its notes alone.'),
       ];
     case 'inverse':
       return [
         sheetAlternative(project, { inverse: false }, 'without an inverse table', 'From raw score to rank only.'),
-        sheetAlternative(project, { inverse: true }, 'with the lowest score for each percentile', 'Also from percentile to raw score: the poorest score that reaches it.'),
+        sheetAlternative(
+          project,
+          { inverse: true },
+          'with the lowest score for each percentile',
+          'Also from percentile to raw score: the poorest score that reaches it.',
+        ),
       ];
   }
 }
@@ -132,7 +223,6 @@ function duplicateAlternative(
 }
 
 function definitionAlternatives(project: NormProject): readonly Alternative[] {
-  const step = project.tally?.scale.step ?? 1;
   const listed: readonly (readonly [RankDefinition, string])[] = [
     [
       { kind: 'midpoint' },
@@ -142,26 +232,42 @@ function definitionAlternatives(project: NormProject): readonly Alternative[] {
       { kind: 'at-or-below' },
       'The height of the cumulative curve. Kind to each score: the best score always stands at 100, printed as the upper end.',
     ],
-    [{ kind: 'below' }, 'Only those surpassed count. Strict: the poorest score always stands at 0, printed as the lower end.'],
+    [
+      { kind: 'below' },
+      'Only those surpassed count. Strict: the poorest score always stands at 0, printed as the lower end.',
+    ],
     [
       { kind: 'plotting-position', offset: '3/8' },
       'Blom’s position, with a = 3/8: leaves room beyond both ends for people not drawn; best for small groups.',
     ],
     [{ kind: 'plotting-position', offset: '1/3' }, 'Tukey’s position, with a = 1/3.'],
-    [{ kind: 'plotting-position', offset: '1/2' }, 'Hazen’s position, with a = 1/2: the midpoint rank for scores that occur.'],
+    [
+      { kind: 'plotting-position', offset: '1/2' },
+      'Hazen’s position, with a = 1/2: the midpoint rank for scores that occur.',
+    ],
     [{ kind: 'plotting-position', offset: '0' }, 'Weibull’s and van der Waerden’s position, with a = 0.'],
     [
-      { kind: 'grouped', width: step * 5 },
+      { kind: 'grouped', width: fiveTimes(project.tally?.scale.step ?? 1) },
       'Scores are taken in classes and spread evenly within them, as in hand-worked tables. Hides detail within a class.',
     ],
   ];
+  const now = definitionKey(project.curve.definition);
+  const others: typeof listed = listed.some(([definition]) => definitionKey(definition) === now)
+    ? []
+    : [[project.curve.definition, 'As this project has it.']];
   const direction = project.tally?.scale.direction ?? 'high-is-good';
-  return listed.map(([definition, explanation]) => ({
+  return [...listed, ...others].map(([definition, explanation]) => ({
     label: definitionInWords(definition, direction),
     explanation,
-    chosen: JSON.stringify(project.curve.definition) === JSON.stringify(definition),
+    chosen: definitionKey(definition) === now,
     project: { ...project, curve: { definition } },
   }));
+}
+
+/** Five steps of a scale, free of the error of a product of doubles. */
+function fiveTimes(step: number): number {
+  const { units, decimals } = decimalOf(step);
+  return Number(5n * units) / 10 ** decimals;
 }
 
 function tableAlternative(

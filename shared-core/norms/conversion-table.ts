@@ -60,14 +60,24 @@ export interface ConversionRow {
   readonly printed: string;
   /** Unrounded; null where no finite value exists. */
   readonly derived: DerivedScores;
+  /** The z that printed scores are made from, before they are held: that of `derived`, or what stands in for it. */
+  readonly printedZ: number | null;
   /** Printed text of every column that a table can carry. */
   readonly texts: Readonly<Record<ColumnKey, string>>;
   readonly provenance: RowProvenance;
 }
 
 /** Printed z is held between −3 and 3 where the limits stand in for missing values. */
-export const Z_LIMIT = 3;
+const Z_LIMIT = 3;
 const NO_VALUE = '\u2013';
+
+/** How printed scores follow from z: mean + spread · z, with the limits where they are held and the printed decimals. */
+export const PRINTED_SCALES = {
+  z: { mean: 0, spread: 1, low: -Z_LIMIT, high: Z_LIMIT, decimals: 2 },
+  t: { mean: 50, spread: 10, low: 50 - 10 * Z_LIMIT, high: 50 + 10 * Z_LIMIT, decimals: 0 },
+  nce: { mean: 50, spread: NCE_FACTOR, low: 1, high: 99, decimals: 0 },
+  deviation: { mean: 100, spread: 15, low: 100 - 15 * Z_LIMIT, high: 100 + 15 * Z_LIMIT, decimals: 0 },
+} as const;
 
 /**
  * One row for each attainable score, lowest first. The only place where a group's numbers become printed texts. Throws
@@ -104,11 +114,14 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
   const normal = derivedScores(rank, linear ? linearZ(table, summary, score) : normalisedZ(rank));
   const derived =
     linear && normal.z !== null ? { ...normal, stanine: stanineOfZ(normal.z), sten: stenOfZ(normal.z) } : normal;
-  const printedZ = zForPrint(derived.z, rank, summary.n, choices);
+  const behindPrint = zForPrint(derived.z, rank, summary.n, choices);
   const printed = printRank(rank, choices);
   const asNumber = (units: bigint): number => ratioToNumber(ratio(units, table.weightUnit));
-  const fromZ = (mean: number, spread: number, low: number, high: number, decimals: number): string =>
-    printedZ.z === null ? NO_VALUE : printNumber(held(linearScale(printedZ.z, mean, spread), low, high, choices), decimals);
+  const fromZ = (key: keyof typeof PRINTED_SCALES): string => {
+    if (behindPrint.z === null) return NO_VALUE;
+    const { mean, spread, low, high, decimals } = PRINTED_SCALES[key];
+    return printNumber(held(linearScale(behindPrint.z, mean, spread), low, high, choices), decimals);
+  };
   return {
     score,
     scoreText: printScore(table.scale, score),
@@ -120,14 +133,15 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
     percentileRank: ratioToNumber(rank),
     printed: printed.text,
     derived,
+    printedZ: behindPrint.z,
     texts: {
       count: printCount(count),
       cumulative: printWeight(part.below + part.at, table.weightUnit),
       'exact-rank': printRatio(rank, 2),
-      z: fromZ(0, 1, -Z_LIMIT, Z_LIMIT, 2),
-      t: fromZ(50, 10, 50 - 10 * Z_LIMIT, 50 + 10 * Z_LIMIT, 0),
-      nce: fromZ(50, NCE_FACTOR, 1, 99, 0),
-      deviation: fromZ(100, 15, 100 - 15 * Z_LIMIT, 100 + 15 * Z_LIMIT, 0),
+      z: fromZ('z'),
+      t: fromZ('t'),
+      nce: fromZ('nce'),
+      deviation: fromZ('deviation'),
       sten: derived.sten === null ? NO_VALUE : String(derived.sten),
       stanine: String(derived.stanine),
     },
@@ -140,7 +154,7 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
         all: asNumber(part.all),
       },
       printed: { end: printed.end },
-      derived: printedZ.from,
+      derived: behindPrint.from,
     },
   };
 }

@@ -11,7 +11,7 @@ import { LEFT_OUT_RULES } from './reading.ts';
 const shortText = v.pipe(v.string(), v.maxLength(400));
 const longText = v.pipe(v.string(), v.maxLength(8000));
 const wholeNumber = v.pipe(v.number(), v.safeInteger(), v.minValue(0));
-const unitText = v.pipe(v.string(), v.regex(/^\d{1,60}$/));
+const unitText = v.pipe(v.string(), v.regex(/^\d{1,160}$/));
 
 const scoreScale = v.pipe(
   v.object({
@@ -239,8 +239,17 @@ function tallyFits({ tally, groups }: TallyBearing): boolean {
         cell.values.length === tally.groupColumns.length &&
         cell.counts.length === length &&
         (weighted
-          ? cell.weights?.length === length && cell.squares?.length === length
+          ? weighsWhereCounted(cell.counts, cell.weights) && weighsWhereCounted(cell.counts, cell.squares)
           : cell.weights === null && cell.squares === null),
     )
+  );
+}
+
+/** Sums of weights stand at exactly the scores that somebody obtained. */
+function weighsWhereCounted(counts: readonly number[], sums: readonly string[] | null): boolean {
+  return (
+    sums !== null &&
+    sums.length === counts.length &&
+    counts.every((count, position) => count > 0 === /[1-9]/.test(sums[position] ?? ''))
   );
 }

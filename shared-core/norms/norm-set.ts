@@ -1,6 +1,7 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import { definitionProblem } from '../percentile/percentile-rank.ts';
+import { printNumber } from '../scores/printed-number.ts';
 import { summarise, type CohortSummary } from '../tally/cohort-summary.ts';
 import { peopleIn } from '../tally/frequency-table.ts';
 import { conversionRows, type ConversionRow } from './conversion-table.ts';
@@ -9,6 +10,7 @@ import { inverseTable, type InverseRow } from './inverse-table.ts';
 import { normGroups, type NormGroup } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
 import { queriesOf, type Query } from './queries.ts';
+import { methodText } from './statements.ts';
 
 /** One group with its numbers: everything that is printed of it. */
 export interface GroupNorms {
@@ -25,18 +27,20 @@ export interface NormSet {
   /** Groups that get a table, in print order. */
   readonly groups: readonly GroupNorms[];
   readonly queries: readonly Query[];
-  /** "7F3A-91C2": the same on every page and machine for the same printed numbers, another when one differs. */
+  /** "7F3A-91C2": the same on every page and machine for the same printed texts, another when one differs. */
   readonly check: string;
 }
 
 export type NormSetBuilt =
-  | { readonly ok: true; readonly normSet: NormSet }
-  | { readonly ok: false; readonly problem: string };
+  { readonly ok: true; readonly normSet: NormSet } | { readonly ok: false; readonly problem: string };
 
 /** Pure: the same project gives the same set everywhere. What stands in the way comes back as a sentence. */
 export function buildNormSet(project: NormProject): NormSetBuilt {
   if (project.tally === null) {
-    return { ok: false, problem: 'No cohort has been read yet. Choose a file at the Cohort station, or type the counts.' };
+    return {
+      ok: false,
+      problem: 'No cohort has been read yet. Choose a file at the Cohort station, or type the counts.',
+    };
   }
   const { definition } = project.curve;
   const problem = definitionProblem(project.tally.scale, definition);
@@ -51,22 +55,45 @@ export function buildNormSet(project: NormProject): NormSetBuilt {
     const rows = conversionRows(group.table, summary, definition, project.table);
     return { group, summary, rows, inverse: inverseTable(rows, direction) };
   });
-  return { ok: true, normSet: { project, groups, queries: queriesOf(project, groups), check: checkCode(project, groups) } };
+  return {
+    ok: true,
+    normSet: { project, groups, queries: queriesOf(project, groups), check: checkCode(project, groups) },
+  };
 }
 
+/** Of everything that is printed, except the paper it is printed on. */
 function checkCode(project: NormProject, groups: readonly GroupNorms[]): string {
+  const { title, subtitle, people, source, sheet, release } = project;
+  const { documentation } = project.groups;
   const printed = [
-    project.title,
-    project.subtitle,
-    project.release.edition,
-    definitionKey(project.curve.definition),
+    [title, subtitle, people, release.edition, release.date, definitionKey(project.curve.definition)],
+    [sheet.title, sheet.howToRead, sheet.cautions, sheet.notes, methodText(project)],
+    [documentation.population, documentation.sampling, documentation.participation],
+    [documentation.testDates, documentation.weighting],
+    source === null ? [] : [source.file, source.sha256, source.rowsRead, source.rowsKept],
     project.table.columns,
-    groups.map(({ group, summary, rows }) => [
+    groups.map(({ group, summary, rows, inverse }) => [
       group.title,
-      summary.n,
+      factsIn(summary),
       rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
+      sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
     ]),
   ];
   const hash = bytesToHex(sha256(utf8ToBytes(JSON.stringify(printed)))).toUpperCase();
   return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;
+}
+
+/** Rounded, so that the last digit of a machine's square roots decides nothing. */
+function factsIn({
+  n,
+  weightSum,
+  effectiveN,
+  mean,
+  sd,
+  skewness,
+  excessKurtosis,
+  fiveNumbers,
+}: CohortSummary): unknown {
+  const rounded = [weightSum, effectiveN, mean, sd, skewness, excessKurtosis, ...fiveNumbers];
+  return [n, rounded.map((value) => (value === null ? null : printNumber(value, 2)))];
 }

@@ -8,8 +8,7 @@ export function projectToText(project: NormProject): string {
 }
 
 export type ProjectRead =
-  | { readonly ok: true; readonly project: NormProject }
-  | { readonly ok: false; readonly problem: string };
+  { readonly ok: true; readonly project: NormProject } | { readonly ok: false; readonly problem: string };
 
 /** Reads the text of a `*.normloom` file. Unknown keys are left behind; whatever is wrong comes back as a sentence. */
 export function projectFromText(text: string): ProjectRead {

@@ -37,7 +37,11 @@ const WIDE_STEP = 10;
 
 /** All queries of a project, most pressing first, those with a reason given last. */
 export function queriesOf(project: NormProject, groups: readonly GroupNorms[]): readonly Query[] {
-  const asked = [...cohortQueries(project), ...releaseQueries(project), ...groups.flatMap((one) => groupQueries(project, one))];
+  const asked = [
+    ...cohortQueries(project),
+    ...releaseQueries(project),
+    ...groups.flatMap((one) => groupQueries(project, one)),
+  ];
   const weights = { must: 0, should: 1, note: 2 } as const;
   return asked
     .map((query) => ({
@@ -82,7 +86,7 @@ function cohortQueries({ source, reading }: NormProject): readonly Asked[] {
       whatToDo: 'Look at the rules of the exclusion flow and the rows they name.',
     });
   }
-  if (reading?.decisions.duplicateId === 'keep-all') {
+  if (reading?.decisions.duplicateId === 'keep-all' && reading.roles.some(({ role }) => role === 'id')) {
     asked.push({
       id: 'duplicates-kept',
       station: 'cohort',

@@ -57,14 +57,20 @@ export function cohortStatement(project: NormProject): readonly StatementPart[] 
     words('The rows are '),
     phrase('people', project.people),
     words(' whose scores run from '),
-    phrase('scale', scale === null ? 'the lowest to the highest met' : `${scaleInWords(scale)}${declared ? '' : ', as met'}`),
+    phrase(
+      'scale',
+      scale === null ? 'the lowest to the highest met' : `${scaleInWords(scale)}${declared ? '' : ', as met'}`,
+    ),
     words('; '),
     phrase('direction', scale?.direction === 'low-is-good' ? 'low scores are good' : 'high scores are good'),
     ...(reading === null
       ? []
       : [
           words('. '),
-          phrase('missing', codes.length === 0 ? 'No code stands' : `${joined(codes)} ${codes.length === 1 ? 'stands' : 'stand'}`),
+          phrase(
+            'missing',
+            codes.length === 0 ? 'No code stands' : `${joined(codes)} ${codes.length === 1 ? 'stands' : 'stand'}`,
+          ),
           words(' for a missing score'),
         ]),
     ...(hasId
@@ -72,7 +78,11 @@ export function cohortStatement(project: NormProject): readonly StatementPart[] 
           words('; of repeated identifiers '),
           phrase(
             'duplicates',
-            { 'keep-first': 'the first row is kept', 'leave-out-all': 'no row is kept', 'keep-all': 'every row is kept' }[duplicates],
+            {
+              'keep-first': 'the first row is kept',
+              'leave-out-all': 'no row is kept',
+              'keep-all': 'every row is kept',
+            }[duplicates],
           ),
         ]
       : []),
@@ -85,7 +95,10 @@ export function groupsStatement(project: NormProject): readonly StatementPart[] 
   const columns = by.map((column) => columnInWords(column).toLowerCase());
   return [
     words('There is '),
-    phrase('grouping', by.length === 0 ? `one table for all ${project.people}` : `one table for each ${columns.join(' and ')}`),
+    phrase(
+      'grouping',
+      by.length === 0 ? `one table for all ${project.people}` : `one table for each ${columns.join(' and ')}`,
+    ),
     words('.'),
   ];
 }
@@ -103,7 +116,9 @@ export function curveStatement(project: NormProject): readonly StatementPart[] {
 export function tableStatement(project: NormProject): readonly StatementPart[] {
   const { columns, decimals, rounding, ends, zSource, zEnds } = project.table;
   const names = columns.map((key) => columnOf(key, project).name);
-  const derived = columns.some((key) => ['z', 't', 'nce', 'deviation', 'sten'].includes(key) || (key === 'stanine' && zSource === 'linear'));
+  const derived = columns.some(
+    (key) => ['z', 't', 'nce', 'deviation', 'sten'].includes(key) || (key === 'stanine' && zSource === 'linear'),
+  );
   const low = decimals === 0 ? '1' : '0.1';
   const high = decimals === 0 ? '99' : '99.9';
   return [
@@ -114,12 +129,18 @@ export function tableStatement(project: NormProject): readonly StatementPart[] {
     words(', '),
     phrase('ends', ends === 'signs' ? `with <${low} and >${high} at the ends` : `held at ${low} and ${high}`),
     words('; beside them '),
-    phrase('columns', names.length === 0 ? 'nothing else' : names.length === 1 ? `the ${names[0]}` : `the ${joined(names)}`),
+    phrase(
+      'columns',
+      names.length === 0 ? 'nothing else' : names.length === 1 ? `the ${names[0]}` : `the ${joined(names)}`,
+    ),
     words('.'),
     ...(derived
       ? [
           words(' z scores are '),
-          phrase('z-source', zSource === 'normalised' ? 'normal deviates of the ranks' : 'linear, from mean and standard deviation'),
+          phrase(
+            'z-source',
+            zSource === 'normalised' ? 'normal deviates of the ranks' : 'linear, from mean and standard deviation',
+          ),
           words('; '),
           phrase(
             'z-ends',

@@ -12,7 +12,12 @@ export interface TableColumn {
 }
 
 export function scoreColumn(): TableColumn {
-  return { key: 'score', heading: ['Raw', 'score'], name: 'raw score', explanation: 'The score as counted on the test.' };
+  return {
+    key: 'score',
+    heading: ['Raw', 'score'],
+    name: 'raw score',
+    explanation: 'The score as counted on the test.',
+  };
 }
 
 export function rankColumn(): TableColumn {
@@ -30,7 +35,12 @@ export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
   const good = project.tally?.scale.direction !== 'low-is-good';
   switch (key) {
     case 'count':
-      return { key, heading: [people], name: `number of ${project.people}`, explanation: 'How many obtained the score.' };
+      return {
+        key,
+        heading: [people],
+        name: `number of ${project.people}`,
+        explanation: 'How many obtained the score.',
+      };
     case 'cumulative':
       return {
         key,
