@@ -1,0 +1,22 @@
+source("lib.R")
+cat("== NIST\n"); g<-c(95.1772,95.1567,95.1937,95.1959,95.1442,95.0610,95.1591,95.1195,95.1065,95.0925,95.1990,95.1682)
+print(sapply(1:9,function(t)quantile(g,.9,type=t,names=FALSE)),digits=12)
+cat("== data12..9 Q1 Med Q3 for types 1..9\n"); d<-c(2,3,5,7,11,13,17,19,23,29,31,37)
+for(n in 12:9){x<-d[1:n];cat("n=",n,"fivenum",fivenum(x),"\n");for(t in 1:9)cat("  type",t,format(quantile(x,c(.25,.5,.75),type=t,names=FALSE),digits=10),"\n")}
+cat("== 6 values\n");x<-c(1,12,14,3,96,111);print(summary(x),digits=7);print(quantile(x,c(.25,.5,.75),type=1))
+cat("== encyclopedia quartile\n");x<-c(6,7,15,36,39,40,41,42,43,47,49);print(fivenum(x));print(quantile(x,type=7));print(quantile(x,type=6));print(quantile(x[1:8],type=7));print(fivenum(x[1:8]))
+x<-c(7,15,36,39,40,41);print(fivenum(x))
+cat("== 15 20 35 40 50\n");x<-c(15,20,35,40,50);print(sapply(1:9,function(t)quantile(x,c(.05,.25,.3,.4,.95),type=t,names=FALSE)))
+print(fivenum(c(100,93,90,82,76,72,64,61,60,47)));print(fivenum(c(0,0,1,2,63,61,27,13)))
+cat("== Wilson/CP/Jeff\n");for(p in list(c(81,263),c(15,148),c(0,20),c(1,29),c(5,25),c(57,60),c(5,5),c(4,5),c(90,100),c(0,10),c(20,60),c(5,60))){x<-p[1];n<-p[2];cat(x,n,"W",sprintf("%.6f",wilson(x,n,.95))," CP",sprintf("%.6f",clopper(x,n,.95))," J",sprintf("%.6f",jeffreys(x,n,.95)),"\n")}
+midp<-function(x,n,a=.05){lo<-if(x==0)0 else uniroot(function(p)1-pbinom(x,n,p)+.5*dbinom(x,n,p)-a/2,c(1e-12,1-1e-12),tol=1e-13)$root;hi<-if(x==n)1 else uniroot(function(p)pbinom(x-1,n,p)+.5*dbinom(x,n,p)-a/2,c(1e-12,1-1e-12),tol=1e-13)$root;c(lo,hi)}
+for(p in list(c(81,263),c(15,148),c(0,20),c(1,29)))cat(p,"midP",sprintf("%.6f",midp(p[1],p[2])),"\n")
+cat("== LMS\n");L<-rbind(c(0,1.815151075,3.530203168,.152385273),c(.5,1.547523128,4.003106424,.146025021),c(1.5,1.068795548,4.879525083,.136478767),c(2.5,.695973505,5.672888765,.129677511),c(3.5,.41981509,6.391391982,.124717085))
+z<-qnorm(c(.03,.05,.1,.25,.5,.75,.9,.95,.97));P<-t(apply(L,1,function(r)r[3]*(1+r[2]*r[4]*z)^(1/r[2])));print(P,digits=10)
+pub<-rbind(c(2.355450986,2.52690402,2.773801848,3.150611082,3.530203168,3.879076559,4.17249339,4.34029274,4.446488308),c(2.799548641,2.964655655,3.209510017,3.597395573,4.003106424,4.387422565,4.718161283,4.910130108,5.032624982),c(3.614688072,3.774848862,4.020561446,4.428872952,4.879525083,5.327327567,5.728152752,5.967101615,6.121929103),c(4.34234145,4.503255345,4.754479354,5.183377547,5.672888765,6.175598158,6.638979132,6.921119162,7.106250132),c(4.992897896,5.157411653,5.416802856,5.866806254,6.391391982,6.942217106,7.460702368,7.781401145,7.993878049))
+print(max(abs(P-pub))); print(abs(P-pub),digits=3)
+l<- -.1600954;m<-9.476500305;s<-.11218624;cat(sprintf("%.6f",c(((9.7/m)^l-1)/(l*s),100*pnorm(((9.7/m)^l-1)/(l*s)),m*(1+l*s*-1.645)^(1/l),m*(1+l*s*qnorm(.05))^(1/l))),"\n")
+cat("== NCE/T/IQ/stanine/sten\n");p<-c(1,2,5,10,20,25,30,40,50,60,70,75,80,90,95,98,99);z<-qnorm(p/100);print(data.frame(p,z=round(z,6),nce=round(50+21.06*z,4),nce_exact=round(50+49/qnorm(.99)*z,4),T=round(50+10*z,4),IQ=round(100+15*z,4),sten=round(5.5+2*z,4),stanine=stanine_pr(p)))
+cat("exact area of z-defined stanines %:",sprintf("%.4f",100*diff(pnorm(c(-Inf,seq(-1.75,1.75,.5),Inf)))),"\n cum",sprintf("%.4f",100*pnorm(seq(-1.75,1.75,.5))),"\n sten areas",sprintf("%.4f",100*diff(pnorm(c(-Inf,seq(-2,2,.5),Inf)))),"\n nce factor",sprintf("%.10f",49/qnorm(.99)),"\n")
+cat("== grouped\n");x<-c(55,65,75,85,95);f<-c(2,3,4,7,4);L<-c(49.5,59.5,69.5,79.5,89.5);cf<-cumsum(f);cat("P30",69.5+10*(6-5)/4,"P88",89.5+10*(.88*20-16)/4,"PR77",100*(5+4*(77-69.5)/10)/20,"PR90",100*(16+4*(90-89.5)/10)/20,"\n")
+cat("== normal scores n=10\n");r<-1:10;n<-10;print(data.frame(r,blom=qnorm((r-3/8)/(n+1/4)),tukey=qnorm((r-1/3)/(n+1/3)),rankit=qnorm((r-.5)/n),vdw=qnorm(r/(n+1))),digits=10)
