@@ -18,12 +18,12 @@ const TOP = 112;
 
 const width = (RIGHT - LEFT) / SHARES.length;
 const height = (share) => BASE - share * (BASE - TOP);
-const steps = SHARES.map((share, index) => `V${height(share).toFixed(1)}H${(LEFT + (index + 1) * width).toFixed(1)}`);
+const steps = SHARES.map((share, index) => `${height(share).toFixed(1)}H${(LEFT + (index + 1) * width).toFixed(1)}`);
 
 const svg = `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${SIZE} ${SIZE}" width="${SIZE}" height="${SIZE}">
   <rect x="20" y="20" width="472" height="472" rx="72" fill="${PAPER}" stroke="${EDGE}" stroke-width="8"/>
   <path d="M${LEFT} ${BASE + 26}H${RIGHT}" fill="none" stroke="${EDGE}" stroke-width="12" stroke-linecap="round"/>
-  <path d="M${LEFT} ${BASE}${steps.join('')}" fill="none" stroke="${CURVE}" stroke-width="26" stroke-linejoin="round" stroke-linecap="round"/>
+  <path d="M${LEFT} ${steps.join('V')}" fill="none" stroke="${CURVE}" stroke-width="26" stroke-linejoin="round" stroke-linecap="round"/>
 </svg>
 `;
 
