@@ -10,13 +10,18 @@ export function ratio(numerator: bigint, denominator: bigint): ExactRatio {
 }
 
 const SAFE = BigInt(Number.MAX_SAFE_INTEGER);
-const EXTRA_BITS = 80n;
+const QUOTIENT_BITS = 64;
 
-/** The nearest double (within 1 part in 2^52) of a ratio. */
+/** The nearest double (within 1 part in 2^52) of a ratio, however small or large its two numbers are. */
 export function ratioToNumber({ numerator, denominator }: ExactRatio): number {
   const size = numerator < 0n ? -numerator : numerator;
   if (size <= SAFE && denominator <= SAFE) return Number(numerator) / Number(denominator);
-  return Number((numerator << EXTRA_BITS) / denominator) / 2 ** Number(EXTRA_BITS);
+  const shift = Math.max(0, QUOTIENT_BITS + bitsIn(denominator) - bitsIn(size));
+  return Number((numerator << BigInt(shift)) / denominator) / 2 ** shift;
+}
+
+function bitsIn(size: bigint): number {
+  return size.toString(2).length;
 }
 
 /** Below 0, 0 or above 0 as the ratio lies below, on or above a whole number. */

@@ -1,4 +1,4 @@
-import { decimalOf, powerOfTen } from '../scale/decimal.ts';
+import { decimalOf, parseDecimal, powerOfTen } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
 import { mirrorTable, peopleIn, weightUnitsIn, type FrequencyTable } from '../tally/frequency-table.ts';
 import { ratio, type ExactRatio } from './exact-ratio.ts';
@@ -34,7 +34,8 @@ export function parseOffset(text: string): ExactRatio | null {
     value = ratio(BigInt(fraction[1] ?? '0'), denominator);
   } else {
     if (!/^\d*\.?\d{1,12}$/.test(text.trim())) return null;
-    const decimal = decimalOf(Number(text));
+    const decimal = parseDecimal(text);
+    if (decimal === null) return null;
     value = ratio(decimal.units, powerOfTen(decimal.decimals));
   }
   return value.numerator < value.denominator ? value : null;

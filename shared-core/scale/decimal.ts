@@ -8,6 +8,8 @@ export type DecimalMark = '.' | ',';
 
 const PLAIN = /^([+-]?)(\d*)(?:\.(\d*))?(?:[eE]([+-]?\d{1,3}))?$/;
 const MAX_DIGITS = 40;
+/** Beyond the exponents of doubles (5e-324 to 1.8e308). */
+const MAX_DOUBLE_SHIFT = 400;
 
 export function powerOfTen(exponent: number): bigint {
   return 10n ** BigInt(exponent);
@@ -24,7 +26,10 @@ export function parseDecimal(text: string, mark: DecimalMark = '.'): Decimal | n
     if (plain.includes('.')) return null;
     plain = plain.replace(',', '.');
   }
-  plain = plain.replace(/^[\u2212\u2013]/, '-');
+  return readPlain(plain.replace(/^[\u2212\u2013]/, '-'), MAX_DIGITS);
+}
+
+function readPlain(plain: string, maxShift: number): Decimal | null {
   const match = PLAIN.exec(plain);
   if (match === null) return null;
   const whole = match[2] ?? '';
@@ -34,13 +39,13 @@ export function parseDecimal(text: string, mark: DecimalMark = '.'): Decimal | n
   const sign = match[1] === '-' ? -1n : 1n;
   const units = sign * BigInt(whole + fraction || '0');
   const shift = fraction.length - Number(match[4] ?? '0');
-  if (shift > MAX_DIGITS || shift < -MAX_DIGITS) return null;
+  if (shift > maxShift || shift < -maxShift) return null;
   return shift >= 0 ? { units, decimals: shift } : { units: units * powerOfTen(-shift), decimals: 0 };
 }
 
 /** The decimal that the shortest text of a finite number stands for (0.1 is one tenth). */
 export function decimalOf(value: number): Decimal {
-  const decimal = parseDecimal(String(value));
+  const decimal = readPlain(String(value), MAX_DOUBLE_SHIFT);
   if (decimal === null) throw new RangeError(`not a finite number: ${value}`);
   return decimal;
 }

@@ -58,12 +58,12 @@ export function printRatio(value: ExactRatio, decimals: number): string {
   return withDecimals(roundRatio(value, decimals, 'half-up'), decimals);
 }
 
-/** Whole numbers with a narrow space between thousands: 4 812. Four digits and fewer than 10 000 stay closed in tables. */
+/** Whole numbers of 0 or more with a narrow space between thousands: 4 812. */
 export function printCount(count: number): string {
   return String(count).replace(/\B(?=(\d{3})+$)/g, '\u202f');
 }
 
-/** A weight sum given in whole units of 10^-decimals, to at most two decimals. */
+/** A weight sum given in whole units of 10^-decimals, to one decimal; a count of people stays whole. */
 export function printWeight(units: bigint, weightUnit: bigint): string {
   return printRatio(ratio(units, weightUnit), weightUnit === 1n ? 0 : 1);
 }

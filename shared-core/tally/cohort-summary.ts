@@ -48,7 +48,7 @@ export function summarise(table: FrequencyTable): CohortSummary {
   const m2 = sumOver(scores, shares, (score) => (score - mean) ** 2);
   const m3 = sumOver(scores, shares, (score) => (score - mean) ** 3);
   const m4 = sumOver(scores, shares, (score) => (score - mean) ** 4);
-  const varies = table.counts.filter((count) => count > 0).length > 1;
+  const varies = table.weights.filter((weight) => weight > 0n).length > 1;
   return {
     n,
     weightSum: ratioToNumber(ratio(weightSum, table.weightUnit)),
