@@ -32,7 +32,7 @@ const answer = (
   ask: Readonly<Record<string, unknown>>,
 ): Promise<Reply<unknown>> =>
   // The desk checks the fields of what it is asked when it runs; the wire only knows that it is an object.
-  desk.ask(request, ask as DeskRequests[DeskRequest]['ask']);
+  desk.ask(request, ask);
 
 /**
  * Answers the page's requests and hands out handles for files dropped on it. Anything not sent by the program's own page
