@@ -1,7 +1,7 @@
 import { isAbsolute } from 'node:path';
 import { ipcMain } from 'electron';
 import { DESK_REQUESTS } from '../../shared-core/desk.ts';
-import type { DeskRequest, DeskRequests, FileHandle, Reply } from '../../shared-core/desk.ts';
+import type { DeskRequest, FileHandle, Reply } from '../../shared-core/desk.ts';
 import type { DeskHost } from '../desk.ts';
 import { DESK_CHANNEL } from './bridge.ts';
 import type { DeskMessage } from './bridge.ts';
@@ -26,14 +26,6 @@ const readMessage = (message: unknown): DeskMessage | null => {
 
 const refusal = (problem: string): Reply<never> => ({ ok: false, problem });
 
-const answer = (
-  desk: DeskHost,
-  request: DeskRequest,
-  ask: Readonly<Record<string, unknown>>,
-): Promise<Reply<unknown>> =>
-  // The desk checks the fields of what it is asked when it runs; the wire only knows that it is an object.
-  desk.ask(request, ask);
-
 /**
  * Answers the page's requests and hands out handles for files dropped on it. Anything not sent by the program's own page
  * is refused by throwing, so that it learns nothing. `received` hears the path of each file that got a handle.
@@ -54,7 +46,8 @@ export const answerDesk = (desk: DeskHost, received: (path: string) => void): vo
         if (!isDeskRequest(read.request) || !isRecord(read.ask)) {
           return refusal(`The desk does not know the request “${read.request}”. Restart the program.`);
         }
-        return answer(desk, read.request, read.ask);
+        // The desk checks the fields of what it is asked; the wire only knows that it is an object.
+        return desk.ask(read.request, read.ask);
       }
     }
   });
