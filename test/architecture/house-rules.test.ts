@@ -1,4 +1,3 @@
-import { homedir } from 'node:os';
 import { describe, expect, it } from 'vitest';
 import { ROOT, readText, repositoryFiles } from './source-files.ts';
 
@@ -29,10 +28,10 @@ const word = (...halves: readonly string[]): string => halves.join('');
 const OPEN_TASKS = new RegExp(
   `\\b(?:${[word('TO', 'DO'), word('FIX', 'ME'), word('XX', 'X'), word('HA', 'CK')].join('|')})\\b`,
 );
-/** The folders of the machine that the tests run on, and homes of others; `someone` is nobody's home. */
+/** The folder of this very clone, and homes; `someone` is nobody's home. */
 const HOME_PATHS = new RegExp(
   [
-    ...[ROOT, `${homedir()}/`].map((path) => path.replace(/[.*+?^${}()|[\]\\]/g, '\\$&')),
+    `(?<![\\w/.:-])${ROOT.replace(/[.*+?^${}()|[\]\\]/g, '\\$&')}`,
     word('/ro', 'ot/'),
     word('/(?:ho', 'me|Users)/(?!someone/)[a-z]+/'),
     word('C:\\\\+Us', 'ers'),
