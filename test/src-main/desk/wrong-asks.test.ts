@@ -1,0 +1,85 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { DESK_REQUESTS } from '../../../shared-core/desk.ts';
+import { newProject } from '../../../shared-core/norms/new-project.ts';
+import { deskAtHand, READING, type DeskAtHand } from './desk-at-hand.ts';
+
+const project = newProject('Ostrey Vale');
+const draft = 'a-draft-name';
+
+/** For every request: things it must not be asked with. */
+const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>> = {
+  about: ['x'],
+  'list-projects': [7],
+  'choose-file': [{}, { kind: 'folder' }],
+  'open-project': [{}, { handle: 3 }, { handle: 'x'.repeat(65) }, { handle: null }],
+  'open-draft': [{}, { draft: '../../secret' }, { draft: 'short' }, { draft: 'CAPITALS-HERE' }],
+  'open-sample': [false],
+  'forget-draft': [{}, { draft: '..' }, { draft: 'a/../../b-c-d-e' }],
+  'keep-draft': [
+    { draft, project },
+    { draft, handle: null },
+    { draft, handle: null, project: { ...project, version: 2 } },
+  ],
+  'save-project': [
+    { draft, handle: null, project },
+    { draft, handle: null, name: 'x'.repeat(401), project },
+    { draft, handle: null, name: 'x', project: { ...project, people: 'sheep' } },
+    { draft: '../draft', handle: null, name: 'x', project },
+  ],
+  'look-at-cohort': [{ handle: 'x' }, { handle: 'x', reading: { ...READING, separator: 'x' } }],
+  'tally-cohort': [
+    { handle: 'x', reading: null },
+    { handle: 'x', reading: { ...READING, scale: { min: 0, max: 0 } } },
+  ],
+  'draw-pages': [{}, { project: { ...project, title: 7 } }],
+  press: [{ project }, { project: { ...project, sheet: null }, name: 'x' }],
+  'job-state': [{}, { job: {} }],
+  'cancel-job': [{}, { job: 'x'.repeat(65) }],
+  'show-pressed': ['x'],
+};
+
+describe('what a desk is asked is checked when it is asked', () => {
+  let hand: DeskAtHand;
+  beforeAll(async () => {
+    hand = await deskAtHand();
+  });
+  afterAll(() => hand.close());
+
+  it.each(DESK_REQUESTS)('%s refuses wrong arguments with a sentence', async (request) => {
+    for (const wrong of [null, undefined, ...WRONG[request]]) {
+      expect(await hand.problem(request, wrong), JSON.stringify(wrong)).toMatch(/^The request ".*" was not understood/);
+    }
+  });
+
+  it('refuses requests it does not know, names of object members too', async () => {
+    for (const request of ['', 'read-file', 'constructor', '__proto__', 'toString']) {
+      expect(await hand.problem(request, {})).toBe('Normloom does not know this request.');
+    }
+  });
+
+  it('refuses handles, drafts and jobs that it did not give out', async () => {
+    const handle = 'AAAAAAAAAAAAAAAAAAAAAA';
+    const unknown = /no longer knows this file/;
+    expect(await hand.problem('open-project', { handle })).toMatch(unknown);
+    expect(await hand.problem('look-at-cohort', { handle, reading: null })).toMatch(unknown);
+    expect(await hand.problem('tally-cohort', { handle, reading: READING })).toMatch(unknown);
+    expect(await hand.problem('keep-draft', { draft, handle, project })).toMatch(unknown);
+    expect(await hand.problem('save-project', { draft, handle, name: 'x', project })).toMatch(unknown);
+    expect(await hand.problem('open-draft', { draft })).toMatch(/no longer there/);
+    expect(await hand.problem('job-state', { job: 'x' })).toMatch(/Start it again/);
+    expect(await hand.problem('show-pressed', {})).toMatch(/Nothing was pressed/);
+    expect(await hand.problem('choose-file', { kind: 'cohort' })).toMatch(/Drop the file/);
+    expect(await hand.problem('open-sample', {})).toMatch(/ostrey-vale\.normloom could not be read/);
+    expect(await hand.ask('forget-draft', { draft })).toBeNull();
+    expect(await hand.ask('cancel-job', { job: 'x' })).toBeNull();
+  });
+
+  it('refuses a project larger than any file may be', async () => {
+    const many = Array.from({ length: 9000 }, () => ({ query: 'q', reason: 'r'.repeat(8000) }));
+    const large = { ...project, release: { ...project.release, answers: many } };
+    expect(await hand.problem('save-project', { draft, handle: null, name: 'x', project: large })).toMatch(
+      /more than 64 MB/,
+    );
+    expect(await hand.problem('keep-draft', { draft, handle: null, project: large })).toMatch(/more than 64 MB/);
+  });
+});
