@@ -103,7 +103,7 @@ export interface About {
 
 /** Every request: what is asked and what comes back. */
 export interface DeskRequests {
-  'about': { ask: Record<never, never>; answer: About };
+  about: { ask: Record<never, never>; answer: About };
   'list-projects': {
     ask: Record<never, never>;
     answer: {
@@ -143,7 +143,7 @@ export interface DeskRequests {
   /** The booklet of a project as a PDF, for the Sheet station. */
   'draw-pages': { ask: { readonly project: NormProject }; answer: { readonly job: string } };
   /** Writes booklet, workbook, csv and norm set into a folder named after the project. */
-  'press': { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
+  press: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
   'job-state': { ask: { readonly job: string }; answer: JobState };
   'cancel-job': { ask: { readonly job: string }; answer: null };
   /** Shows the folder of the last press in the file manager, where the host can. */

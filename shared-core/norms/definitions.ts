@@ -26,9 +26,7 @@ export function definitionFromKey(key: string): RankDefinition | null {
       return parameter !== undefined && parseOffset(parameter) !== null ? { kind, offset: parameter } : null;
     case 'grouped': {
       const width = Number(parameter);
-      return parameter !== undefined && parameter.trim() !== '' && Number.isFinite(width) && width > 0
-        ? { kind, width }
-        : null;
+      return /^\d*\.?\d+$/.test(parameter ?? '') && Number.isFinite(width) && width > 0 ? { kind, width } : null;
     }
     default:
       return null;

@@ -3,7 +3,12 @@
  * every depth. Values are left alone, so text that the user typed must never serve as a key.
  */
 export function toFileKeys(value: unknown): unknown {
-  return renameKeys(value, (key) => key.replace(/[A-Z]/g, (letter) => `-${letter.toLowerCase()}`));
+  return renameKeys(value, fileKey);
+}
+
+/** One key, or a path of keys with dots between them, as files write it. */
+export function fileKey(key: string): string {
+  return key.replace(/[A-Z]/g, (letter) => `-${letter.toLowerCase()}`);
 }
 
 export function fromFileKeys(value: unknown): unknown {

@@ -1,5 +1,5 @@
 import * as v from 'valibot';
-import { fromFileKeys, toFileKeys } from './file-keys.ts';
+import { fileKey, fromFileKeys, toFileKeys } from './file-keys.ts';
 import { normProjectSchema, PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
 
 /** Turns a project into the text of a `*.normloom` file: JSON, keys in lower-case-with-hyphens, one line at the end. */
@@ -31,7 +31,7 @@ export function projectFromText(text: string): ProjectRead {
   const parsed = v.safeParse(normProjectSchema, fromFileKeys(value));
   if (parsed.success) return { ok: true, project: parsed.output };
   const issue = parsed.issues[0];
-  return damaged(`${v.getDotPath(issue) ?? 'the whole'}: ${issue.message}`);
+  return damaged(`${fileKey(v.getDotPath(issue) ?? 'the whole')}: ${issue.message}`);
 }
 
 function damaged(why: string): ProjectRead {

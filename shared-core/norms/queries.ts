@@ -149,7 +149,7 @@ function groupQueries(project: NormProject, { group, summary, rows }: GroupNorms
     add('small-group', {
       station: 'groups',
       weight: summary.n < TINY_GROUP ? 'must' : 'should',
-      lead: `${group.title} has only ${people}.`,
+      lead: `Only ${people} in ${group.title}.`,
       why: `One ${summary.n < TINY_GROUP ? 'alone' : 'of them'} is worth ${printNumber(100 / summary.n, 1)} points of percentile rank.`,
       whatToDo: 'Merge groups, gather more data, or say on the sheet how coarse the ranks are.',
     });
@@ -158,7 +158,7 @@ function groupQueries(project: NormProject, { group, summary, rows }: GroupNorms
     add('uneven-weights', {
       station: 'groups',
       weight: 'should',
-      lead: `${group.title} weighs as ${printNumber(summary.effectiveN, 0)}, not ${printCount(summary.n)}.`,
+      lead: `By their weights, the ${printCount(summary.n)} in ${group.title} count as ${printNumber(summary.effectiveN, 0)}.`,
       why: 'Very uneven weights let few people decide the ranks.',
       whatToDo: 'Check the largest weights in the file.',
     });

@@ -77,7 +77,10 @@ export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
         key,
         heading: ['Sta-', 'nine'],
         name: 'stanine',
-        explanation: 'Nine bands holding 4, 7, 12, 17, 20, 17, 12, 7 and 4 per cent.',
+        explanation:
+          project.table.zSource === 'normalised'
+            ? 'Nine bands holding 4, 7, 12, 17, 20, 17, 12, 7 and 4 per cent.'
+            : 'Nine bands, half a standard deviation wide.',
       };
   }
 }

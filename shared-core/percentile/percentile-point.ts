@@ -105,7 +105,9 @@ interface Found {
 }
 
 function mirrored(table: FrequencyTable, share: ExactRatio, definition: PointDefinition, classWidth: number): Found {
-  const scores = attainableScores(table.scale).map((score) => -score).toReversed();
+  const scores = attainableScores(table.scale)
+    .map((score) => -score)
+    .toReversed();
   const found = pointOf(mirrorTable(table), scores, share, definition, classWidth);
   return { ...found, score: -found.score };
 }
@@ -130,7 +132,10 @@ function pointOf(
     case 'type-3':
       return { score: personAt(table, scores, nearestEven(table, share)), flat: false };
     default:
-      return { score: interpolated(table, scores, positionOf(BigInt(peopleIn(table)), share, definition)), flat: false };
+      return {
+        score: interpolated(table, scores, positionOf(BigInt(peopleIn(table)), share, definition)),
+        flat: false,
+      };
   }
 }
 

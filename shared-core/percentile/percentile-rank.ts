@@ -1,7 +1,7 @@
 import { decimalOf, parseDecimal, powerOfTen } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
 import { mirrorTable, peopleIn, weightUnitsIn, type FrequencyTable } from '../tally/frequency-table.ts';
-import { ratio, type ExactRatio } from './exact-ratio.ts';
+import { compareToWhole, ratio, type ExactRatio } from './exact-ratio.ts';
 
 /**
  * What a percentile rank means here. `midpoint`, `at-or-below` and `below` stand side by side in the Standards for
@@ -85,7 +85,8 @@ export function rankParts(table: FrequencyTable): readonly RankParts[] {
 
 /**
  * The exact percentile rank, 0–100, of every attainable score, lowest score first. Where low scores are good,
- * "below" reads "did worse". With weights, plotting positions are taken on weights rescaled to sum to N.
+ * "below" reads "did worse". With weights, plotting positions are taken on weights rescaled to sum to N; they are held
+ * at 0 and 100.
  * Throws on an empty table or an unusable definition; ask `definitionProblem` first.
  */
 export function percentileRanks(table: FrequencyTable, definition: RankDefinition): readonly ExactRatio[] {
@@ -114,8 +115,14 @@ function plottingPositions(parts: readonly RankParts[], people: bigint, offset: 
   const divisor = (people + 1n) * a.denominator - 2n * a.numerator;
   return parts.map(({ below, at, all }) => {
     const twiceRank = (2n * below + at) * people + all;
-    return ratio(100n * (twiceRank * a.denominator - 2n * all * a.numerator), 2n * all * divisor);
+    return held(ratio(100n * (twiceRank * a.denominator - 2n * all * a.numerator), 2n * all * divisor));
   });
+}
+
+/** Held at 0 and 100, which offsets above 1/2 would pass where nobody, or little weight, lies at an end. */
+function held(rank: ExactRatio): ExactRatio {
+  if (compareToWhole(rank, 0n) < 0) return ratio(0n, 1n);
+  return compareToWhole(rank, 100n) > 0 ? ratio(100n, 1n) : rank;
 }
 
 function groupedRanks(table: FrequencyTable, width: number): readonly ExactRatio[] {

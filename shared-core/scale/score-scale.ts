@@ -26,7 +26,8 @@ const MAX_SCALE_DECIMALS = 4;
 /** What is wrong with a scale, in sentences; empty when it can be used. */
 export function scaleProblems(scale: ScoreScale): readonly string[] {
   const parts = [scale.min, scale.max, scale.step];
-  if (!parts.every(Number.isFinite)) return ['The scale needs a lowest score, a highest score and a step, all numbers.'];
+  if (!parts.every(Number.isFinite))
+    return ['The scale needs a lowest score, a highest score and a step, all numbers.'];
   if (scale.step <= 0) return ['The step of the scale must be above 0, for example 1 or 0.5.'];
   if (scale.max <= scale.min) return ['The highest score of the scale must lie above the lowest.'];
   const decimals = parts.map((part) => decimalOf(part).decimals);
@@ -36,7 +37,9 @@ export function scaleProblems(scale: ScoreScale): readonly string[] {
   const grid = gridOf(scale);
   const span = unitsAt(decimalOf(scale.max), grid.decimals) - grid.minUnits;
   if (span % grid.stepUnits !== 0n) {
-    return [`From ${scale.min} in steps of ${scale.step} the scale never reaches ${scale.max}. Change the step or an end.`];
+    return [
+      `From ${scale.min} in steps of ${scale.step} the scale never reaches ${scale.max}. Change the step or an end.`,
+    ];
   }
   if (grid.length > MAX_ATTAINABLE_SCORES) {
     return [`The scale has ${grid.length} scores; at most ${MAX_ATTAINABLE_SCORES} can be tabled. Use a larger step.`];
@@ -66,8 +69,9 @@ export function scaleGrid(scale: ScoreScale): ScaleGrid {
 export function attainableScores(scale: ScoreScale): readonly number[] {
   const grid = scaleGrid(scale);
   const divisor = 10 ** grid.decimals;
-  return Array.from({ length: grid.length }, (_, position) =>
-    Number(grid.minUnits + BigInt(position) * grid.stepUnits) / divisor,
+  return Array.from(
+    { length: grid.length },
+    (_, position) => Number(grid.minUnits + BigInt(position) * grid.stepUnits) / divisor,
   );
 }
 

@@ -1,0 +1,54 @@
+import { getDocument, GlobalWorkerOptions, type PDFDocumentProxy } from 'pdfjs-dist';
+import workerUrl from 'pdfjs-dist/build/pdf.worker.min.mjs?url';
+
+/** Lets only scripts of the program's own origin become workers. */
+interface WorkerPolicy {
+  createScriptURL(url: string): string;
+}
+
+interface PolicyMaker {
+  createPolicy(name: string, rules: WorkerPolicy): WorkerPolicy;
+}
+
+function ownScript(url: string): string {
+  const resolved = new URL(url, window.location.href);
+  if (resolved.origin !== window.location.origin) throw new TypeError('a worker of another origin');
+  return resolved.href;
+}
+
+let ready = false;
+
+function prepareWorker(): void {
+  if (ready) return;
+  const maker = (window as unknown as { readonly trustedTypes?: PolicyMaker }).trustedTypes;
+  const policy = maker?.createPolicy('normloom-worker', { createScriptURL: ownScript });
+  GlobalWorkerOptions.workerPort = new Worker(policy?.createScriptURL(workerUrl) ?? ownScript(workerUrl), {
+    type: 'module',
+  });
+  ready = true;
+}
+
+/** Opens a PDF given as base64. */
+export async function openPages(base64: string): Promise<PDFDocumentProxy> {
+  prepareWorker();
+  const binary = atob(base64);
+  const data = Uint8Array.from(binary, (letter) => letter.charCodeAt(0));
+  return getDocument({ data, isEvalSupported: false, useWorkerFetch: false }).promise;
+}
+
+/** Draws a page (from 1) into a canvas so wide that it fills `width` CSS pixels; returns its height in CSS pixels. */
+export async function drawPage(
+  pages: PDFDocumentProxy,
+  number: number,
+  canvas: HTMLCanvasElement,
+  width: number,
+): Promise<number> {
+  const page = await pages.getPage(number);
+  const whole = page.getViewport({ scale: 1 });
+  const density = Math.max(1, window.devicePixelRatio);
+  const viewport = page.getViewport({ scale: (width / whole.width) * density });
+  canvas.width = Math.round(viewport.width);
+  canvas.height = Math.round(viewport.height);
+  await page.render({ canvas, viewport }).promise;
+  return viewport.height / density;
+}
