@@ -1,0 +1,68 @@
+import { describe, expect, it } from 'vitest';
+import { normSetForFile } from '../../../shared-core/norms/norm-set-file.ts';
+import { percentilePoint } from '../../../shared-core/percentile/percentile-point.ts';
+import { builtSet, projectOf, settledProject, TEN_COUNTS } from './small-projects.ts';
+
+describe('a norm set as plain JSON', () => {
+  it('has exactly these keys', () => {
+    const file = normSetForFile(builtSet(settledProject()), ({ group }) => [
+      percentilePoint(group.table, 0.5, 'type-7', 1),
+    ]);
+    expect(Object.keys(file)).toEqual(['source', 'scale', 'definition', 'groups']);
+    const plain = JSON.parse(JSON.stringify(file));
+    expect(Object.keys(plain.source)).toEqual(['file', 'sha256', 'rows-read', 'rows-kept', 'left-out']);
+    expect(plain.source['left-out']).toEqual([{ rule: 'missing-code', count: 2, rows: [7, 9] }]);
+    expect(plain.scale).toEqual({ min: 0, max: 20, step: 1 });
+    expect(plain.definition).toBe('midpoint');
+    const [first, second] = plain.groups;
+    expect([first.group, second.group]).toEqual([{ grade: '4' }, { grade: '10' }]);
+    expect(Object.keys(first)).toEqual([
+      'group',
+      'n',
+      'weight-sum',
+      'effective-n',
+      'mean',
+      'sd',
+      'skewness',
+      'excess-kurtosis',
+      'five-number',
+      'points',
+      'rows',
+    ]);
+    expect(first.points).toEqual([{ proportion: 0.5, definition: 'type-7', score: 10 }]);
+    const [row] = first.rows;
+    expect(Object.keys(row)).toEqual([
+      'score',
+      'count',
+      'weight',
+      'cumulative',
+      'percentile-rank',
+      'printed',
+      'derived',
+      'provenance',
+    ]);
+    expect(Object.keys(row.derived).toSorted()).toEqual(['deviation', 'nce', 'stanine', 'sten', 't', 'z']);
+    expect(row.provenance).toEqual({
+      'percentile-rank': { from: 'counts', observed: true, below: 0, at: 20, all: 420 },
+      printed: { end: null },
+      derived: 'rank',
+    });
+  });
+
+  it('holds numbers unrounded', () => {
+    const file = JSON.parse(JSON.stringify(normSetForFile(builtSet(projectOf(TEN_COUNTS)), () => [])));
+    const [group] = file.groups;
+    expect(group.group).toEqual({});
+    expect(group.sd).toBeCloseTo(Math.sqrt(20.4 / 9), 13);
+    expect(group['five-number']).toEqual([0, 1, 2, 4, 4]);
+    expect(group.rows[0].derived.z).toBeCloseTo(-1.6448536269514722, 12);
+  });
+
+  it('takes any column name as it is', () => {
+    const project = settledProject();
+    const tally = project.tally && { ...project.tally, groupColumns: ['__proto__', 'test-dates'] };
+    const by = ['__proto__', 'test-dates'];
+    const file = normSetForFile(builtSet({ ...project, tally, groups: { ...project.groups, by } }), () => []);
+    expect(JSON.stringify(file)).toContain('"group":{"__proto__":"4","test-dates":"A"}');
+  });
+});

@@ -1,0 +1,33 @@
+import { describe, expect, it } from 'vitest';
+import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
+import { columnOf, tableColumns } from '../../../shared-core/norms/table-columns.ts';
+import { projectOf, scaleTo, settledProject, TEN_COUNTS } from './small-projects.ts';
+
+describe('columns of a table', () => {
+  it('stand in the order the user gave, after raw score and percentile rank', () => {
+    const project = settledProject();
+    const columns = tableColumns({ ...project, table: { ...project.table, columns: ['t', 'count', 'stanine'] } });
+    expect(columns.map(({ key }) => key)).toEqual(['score', 'rank', 't', 'count', 'stanine']);
+  });
+
+  it('have names, headings and explanations unlike one another', () => {
+    const columns = COLUMN_KEYS.map((key) => columnOf(key, settledProject()));
+    for (const part of ['name', 'heading', 'explanation'] as const) {
+      expect(new Set(columns.map((column) => String(column[part]))).size).toBe(COLUMN_KEYS.length);
+    }
+  });
+
+  it('speak of the people and of the poor end', () => {
+    expect(columnOf('count', settledProject()).heading).toEqual(['Pupils']);
+    const seconds = projectOf(TEN_COUNTS, scaleTo(4, 'low-is-good'));
+    expect(columnOf('cumulative', seconds).heading).toEqual(['At or', 'above']);
+    expect(columnOf('cumulative', projectOf(TEN_COUNTS)).heading).toEqual(['At or', 'below']);
+  });
+
+  it('explain stanines by ranks or by z, as they are made', () => {
+    const project = settledProject();
+    const linear = { ...project, table: { ...project.table, zSource: 'linear' as const } };
+    expect(columnOf('stanine', project).explanation).toContain('per cent');
+    expect(columnOf('stanine', linear).explanation).toBe('Nine bands, half a standard deviation wide.');
+  });
+});
