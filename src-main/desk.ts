@@ -10,7 +10,10 @@ export function createDesk(options: DeskOptions): DeskHost {
   const { workers } = options;
   return openDesk(options, {
     lookAtCohort,
-    tally: (path, file, reading, hooks, signal) => startTallyJob(path, file, reading, hooks, signal, workers.tally),
+    async tally(path, file, reading, hooks, signal) {
+      const reply = await startTallyJob(workers.tally, path, file, reading, hooks, signal);
+      return reply.ok ? { ok: true, value: { kind: 'tallied', tallied: reply.value } } : reply;
+    },
     press: (request, hooks, signal) => startPressJob(request, hooks, signal, workers.press),
   });
 }
