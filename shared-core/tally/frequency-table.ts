@@ -47,7 +47,7 @@ export function tableFromCell(tally: Tally, cell: TallyCell): FrequencyTable {
 
 /** People of two tables of one scale and one weight unit taken together. */
 export function mergeTables(left: FrequencyTable, right: FrequencyTable): FrequencyTable {
-  if (left.weightUnit !== right.weightUnit || left.counts.length !== right.counts.length) {
+  if (left.weighted !== right.weighted || left.weightUnit !== right.weightUnit || !sameScale(left.scale, right.scale)) {
     throw new RangeError('only tables of one scale and one weight unit can be merged');
   }
   return {
@@ -56,6 +56,12 @@ export function mergeTables(left: FrequencyTable, right: FrequencyTable): Freque
     weights: left.weights.map((weight, index) => weight + (right.weights[index] ?? 0n)),
     squares: left.squares.map((square, index) => square + (right.squares[index] ?? 0n)),
   };
+}
+
+function sameScale(left: ScoreScale, right: ScoreScale): boolean {
+  return (
+    left.min === right.min && left.max === right.max && left.step === right.step && left.direction === right.direction
+  );
 }
 
 /** The table read from the other end of the scale: position 0 becomes the last. */

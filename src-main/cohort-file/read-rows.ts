@@ -1,0 +1,31 @@
+import type { Reply } from '../../shared-core/desk.ts';
+import type { Reading } from '../../shared-core/norms/reading.ts';
+import { readDelimited } from './delimited-rows.ts';
+import type { KnownFile } from './file-kind.ts';
+import type { PassEnd, ReadHooks, RowTaker } from './row-taker.ts';
+import { readWholeWorkbook, wholeWorkbookSheets } from './whole-workbook-rows.ts';
+import { readXlsx, xlsxSheets } from './workbook-rows.ts';
+
+/** One pass over a cohort file of any kind, from its first row until the taker stops or the file ends. */
+export function readRows(known: KnownFile, reading: Reading, taker: RowTaker, hooks: ReadHooks): Promise<PassEnd> {
+  switch (known.kind) {
+    case 'text':
+      return readDelimited(known, reading, taker, hooks);
+    case 'xlsx':
+      return readXlsx(known, reading, taker, hooks);
+    case 'whole-workbook':
+      return readWholeWorkbook(known, reading, taker, hooks);
+  }
+}
+
+/** Names of the sheets of a workbook; none for a text. */
+export async function sheetsOf(known: KnownFile): Promise<Reply<readonly string[]>> {
+  switch (known.kind) {
+    case 'text':
+      return { ok: true, value: [] };
+    case 'xlsx':
+      return xlsxSheets(known);
+    case 'whole-workbook':
+      return wholeWorkbookSheets(known);
+  }
+}
