@@ -5,19 +5,32 @@ import { findElectron, noWindowReason } from './electron-binary.mjs';
 import { ROOT, USER_FOLDER, inRoot } from './folders.mjs';
 import { ensureBuild } from './programs.mjs';
 
-const USAGE = 'Usage: npm start -- [--browser] [--no-window] [FILE]';
+const USAGE = 'Usage: npm start -- [FILE] [--browser] [--no-window] [--port N] [--folder FOLDER]';
 
 /** @param {string} line */
 const say = (line) => process.stderr.write(`${line}\n`);
 
+/** What the user typed; everything but a file is for the browser host. */
 const readWords = () => {
   try {
     const { values, positionals } = parseArgs({
-      options: { browser: { type: 'boolean' }, 'no-window': { type: 'boolean' } },
+      options: {
+        browser: { type: 'boolean' },
+        'no-window': { type: 'boolean' },
+        port: { type: 'string' },
+        folder: { type: 'string' },
+      },
       allowPositionals: true,
     });
     if (positionals.length > 1) throw new Error('Only one file can be opened at a time.');
-    return { browser: values.browser ?? false, noWindow: values['no-window'] ?? false, file: positionals[0] ?? null };
+    const { 'no-window': noWindow, port, folder } = values;
+    const file = positionals.map((word) => resolve(USER_FOLDER, word));
+    const options = [
+      ...(noWindow ? ['--no-window'] : []),
+      ...(port === undefined ? [] : ['--port', port]),
+      ...(folder === undefined ? [] : ['--folder', resolve(USER_FOLDER, folder)]),
+    ];
+    return { browser: values.browser === true || options.length > 0, options, file };
   } catch (problem) {
     say(`${problem.message}\n${USAGE}`);
     return process.exit(2);
@@ -47,13 +60,12 @@ const chooseElectron = async (browser) => {
   return electron;
 };
 
-const { browser, noWindow, file } = readWords();
+const { browser, options, file } = readWords();
 await ensureBuild(say);
-const files = file === null ? [] : [resolve(USER_FOLDER, file)];
-const electron = await chooseElectron(browser || noWindow);
+const electron = await chooseElectron(browser);
 if (electron === null) {
-  become(process.execPath, [inRoot('dist', 'main', 'browser-host.js'), ...(noWindow ? ['--no-window'] : []), ...files]);
+  become(process.execPath, [inRoot('dist', 'main', 'browser-host.js'), ...options, ...file]);
 } else {
   say('Opening Normloom in its Electron window.');
-  become(electron, [ROOT, ...files]);
+  become(electron, [ROOT, ...file]);
 }
