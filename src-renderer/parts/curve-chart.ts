@@ -1,7 +1,7 @@
 import type { ChartConfiguration, ChartDataset, Point } from 'chart.js';
 import type { GroupNorms } from '../../shared-core/norms/norm-set.ts';
 import { printNumber } from '../../shared-core/scores/printed-number.ts';
-import type { ChartInks } from './ChartCanvas.svelte';
+import type { ChartInks } from './chart-inks.ts';
 
 const FONT = { family: "'Source Sans 3', sans-serif", size: 12 };
 

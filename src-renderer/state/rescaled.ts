@@ -30,5 +30,5 @@ export function rescaled(project: NormProject, scale: ScoreScale): NormProject |
     ...project,
     source: { ...source, scaleInferred: false },
     tally: { ...tally, scale, cells: tally.cells.map(move) },
-  } as NormProject;
+  };
 }

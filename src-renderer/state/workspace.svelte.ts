@@ -175,7 +175,7 @@ export class Workspace {
     const running = this.work;
     if (running === null) return;
     await this.#wire.ask('cancel-job', { job: running.job });
-    if (this.work?.job === running.job) this.work = null;
+    this.#ended(running.job);
   }
 
   async save(): Promise<void> {
@@ -247,10 +247,15 @@ export class Workspace {
     const result = await followJob(this.#wire, job, (progress, now) => {
       if (this.work?.job === job) this.work = { job, doing: now, progress };
     });
-    if (this.work?.job === job) this.work = null;
+    this.#ended(job);
     if (result.ok) return result.value;
     this.problem = result.problem;
     return null;
+  }
+
+  /** Another job may have taken the place meanwhile. */
+  #ended(job: string): void {
+    if (this.work?.job === job) this.work = null;
   }
 
   async #chooseHandle(): Promise<FileHandle | null> {
