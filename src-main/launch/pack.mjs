@@ -3,7 +3,7 @@ import { delimiter, join } from 'node:path';
 import { parseArgs } from 'node:util';
 import { build } from 'electron-builder';
 import { electronDist } from './electron-binary.mjs';
-import { ROOT, inRoot } from './folders.mjs';
+import { ROOT } from './folders.mjs';
 import { ensurePackages } from './packages.mjs';
 import { ensureBuild } from './programs.mjs';
 import { electronVersion, makeStubElectron } from './stub-electron.mjs';

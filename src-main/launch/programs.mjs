@@ -78,7 +78,7 @@ export const ensureBuild = async (say, { always = false } = {}) => {
     rmSync(STAMP, { force: true });
     const vite = inRoot('node_modules', 'vite', 'bin', 'vite.js');
     const stdio = ['ignore', process.stderr, process.stderr];
-    const { status } = spawnSync(process.execPath, [vite, 'build', '--logLevel', 'warn'], { cwd: ROOT, stdio });
+    const { status } = spawnSync(process.execPath, [vite, 'build', '--logLevel', 'error'], { cwd: ROOT, stdio });
     if (status !== 0) {
       say('The build failed (see above).');
       rmSync(LOCK, { recursive: true, force: true });

@@ -32,7 +32,8 @@ const readWords = () => {
     ];
     return { browser: values.browser === true || options.length > 0, options, file };
   } catch (problem) {
-    say(`${problem.message}\n${USAGE}`);
+    // The first sentence says what is wrong; Node adds advice about its own rules.
+    say(`${problem.message.split(/\.(?:\s|$)/)[0]}.\n${USAGE}`);
     return process.exit(2);
   }
 };
