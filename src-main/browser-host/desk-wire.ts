@@ -38,11 +38,10 @@ async function readBody(request: IncomingMessage): Promise<string | null> {
   if (Number(request.headers['content-length'] ?? 0) > MAX_BODY_BYTES) return null;
   const chunks: Buffer[] = [];
   let bytes = 0;
-  for await (const chunk of request) {
-    const buffer = Buffer.from(chunk);
-    bytes += buffer.length;
+  for await (const chunk of request as AsyncIterable<Buffer>) {
+    bytes += chunk.length;
     if (bytes > MAX_BODY_BYTES) return null;
-    chunks.push(buffer);
+    chunks.push(chunk);
   }
   return Buffer.concat(chunks).toString('utf8');
 }

@@ -10,8 +10,13 @@ const FILE_MANAGERS: Readonly<Partial<Record<NodeJS.Platform, string>>> = {
 export function showFolder(folder: string): Promise<void> {
   const command = FILE_MANAGERS[process.platform];
   return new Promise((resolve, reject) => {
-    const failed = (): void => reject(new Error(`the file manager could not be started; open the folder ${folder}`));
-    if (command === undefined) return failed();
+    const failed = (): void => {
+      reject(new Error(`the file manager could not be started; open the folder ${folder}`));
+    };
+    if (command === undefined) {
+      failed();
+      return;
+    }
     const child = spawn(command, [folder], { stdio: 'ignore', detached: true });
     child.once('error', failed);
     child.once('spawn', () => {

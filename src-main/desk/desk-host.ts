@@ -51,8 +51,9 @@ export interface DeskOptions {
   readonly openedWith: string | null;
 }
 
+type Answer<R extends DeskRequest> = Reply<DeskRequests[R]['answer']>;
 type Handlers = {
-  readonly [R in DeskRequest]: (ask: DeskRequests[R]['ask']) => Promise<Reply<DeskRequests[R]['answer']>>;
+  readonly [R in DeskRequest]: (ask: DeskRequests[R]['ask']) => Answer<R> | Promise<Answer<R>>;
 };
 
 /** Answers every request of the contract. No answer throws or rejects: what goes wrong comes back as a sentence. */
@@ -111,7 +112,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
   };
 
   const handlers: Handlers = {
-    about: async () => answered(about),
+    about: () => answered(about),
     'list-projects': async () => answered(await room.list()),
     'choose-file': async ({ kind }) => {
       if (dialogs === null) return refused('Drop the file on the page, or use its button to choose one.');
@@ -131,21 +132,21 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
       const file = handles.find(handle);
       return file === null ? refused(UNKNOWN_FILE) : work.lookAtCohort(file.path, file.name, reading);
     },
-    'tally-cohort': async ({ handle, reading }) => {
+    'tally-cohort': ({ handle, reading }) => {
       const file = handles.find(handle);
       if (file === null) return refused(UNKNOWN_FILE);
       return answered({ job: jobs.start((hooks, signal) => work.tally(file.path, file.name, reading, hooks, signal)) });
     },
-    'draw-pages': async ({ project }) =>
+    'draw-pages': ({ project }) =>
       answered({ job: jobs.start((hooks, signal) => work.press({ kind: 'draw', project }, hooks, signal)) }),
-    press: async (ask) => answered({ job: jobs.start((hooks, signal) => press(ask, hooks, signal)) }),
-    'job-state': async ({ job }) => {
+    press: (ask) => answered({ job: jobs.start((hooks, signal) => press(ask, hooks, signal)) }),
+    'job-state': ({ job }) => {
       const state = jobs.collect(job);
       return state === null
         ? refused('This work has ended and its result was collected. Start it again.')
         : answered(state);
     },
-    'cancel-job': async ({ job }) => {
+    'cancel-job': ({ job }) => {
       jobs.cancel(job);
       return answered(null);
     },

@@ -56,7 +56,7 @@ export async function fingerprintAt(path: string): Promise<string | null> {
   }
   try {
     const hash = createHash('sha256');
-    for await (const chunk of file.createReadStream({ autoClose: false })) hash.update(chunk);
+    for await (const chunk of file.createReadStream({ autoClose: false }) as AsyncIterable<Buffer>) hash.update(chunk);
     return hash.digest('hex');
   } finally {
     await file.close();

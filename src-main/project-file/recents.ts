@@ -63,7 +63,7 @@ export class Recents {
 
   async #read(): Promise<readonly Entry[]> {
     const text = await readFile(this.#path, 'utf8').catch(() => '');
-    let value: unknown = null;
+    let value: unknown;
     try {
       value = JSON.parse(text);
     } catch {

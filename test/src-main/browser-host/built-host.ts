@@ -56,9 +56,9 @@ export async function runHost(
     env: { ...process.env, ...environment },
   });
   const ended = once(child, 'exit');
-  const [line] = await once(createInterface(child.stdout), 'line');
-  const address = /^Normloom is at (http:\/\/127\.0\.0\.1:\d+\/\?code=[\w-]+)$/.exec(String(line))?.[1];
-  if (address === undefined) throw new Error(`an address was expected, not ${String(line)}`);
+  const [line] = (await once(createInterface(child.stdout), 'line')) as [string];
+  const address = /^Normloom is at (http:\/\/127\.0\.0\.1:\d+\/\?code=[\w-]+)$/.exec(line)?.[1];
+  if (address === undefined) throw new Error(`an address was expected, not ${line}`);
   const url = new URL(address);
   const port = Number(url.port);
   let cookie = '';

@@ -22,12 +22,12 @@ export const READING: Reading = {
 
 /** Work that stands in for the reader and the press: it writes two small files that hold the project's title. */
 export const PLAIN_WORK: DeskWork = {
-  async lookAtCohort(_path, file, reading) {
+  lookAtCohort(_path, file, reading) {
     const preview = { file, bytes: 1, sheets: [], columns: ['score'], rows: [], remarks: [] };
-    return { ok: true, value: { ...preview, reading: reading ?? READING } };
+    return Promise.resolve({ ok: true, value: { ...preview, reading: reading ?? READING } });
   },
-  async tally(_path, file) {
-    return { ok: false, problem: `${file} holds no scores. Choose another file.` };
+  tally(_path, file) {
+    return Promise.resolve({ ok: false, problem: `${file} holds no scores. Choose another file.` });
   },
   async press(request, hooks) {
     hooks.onProgress(0.5, 'Drawing pages');

@@ -65,10 +65,8 @@ describe('jobs', () => {
     };
     hand = await deskAtHand({}, broken);
     const { job } = await hand.ask('draw-pages', { project: newProject('x') });
-    expect(await hand.endOf(job)).toMatchObject({
-      state: 'failed',
-      problem: expect.stringContaining('a cell is missing'),
-    });
+    const end = await hand.endOf(job);
+    expect(end.state === 'failed' && end.problem).toContain('a cell is missing');
     const handle = hand.desk.giveHandle(join(hand.folder, 'a.csv'));
     expect(await hand.problem('look-at-cohort', { handle, reading: null })).toMatch(/fault of its own \(no reader\)/);
     const pressed = await hand.ask('press', { project: newProject('x'), name: 'x' });
@@ -79,7 +77,7 @@ describe('jobs', () => {
   it('that nobody collects are dropped after a while', async () => {
     hand = await deskAtHand();
     const jobs = new Jobs(20);
-    const job = jobs.start(async () => ({ ok: false, problem: 'x' }));
+    const job = jobs.start(() => Promise.resolve({ ok: false, problem: 'x' }));
     await wait(60);
     expect(jobs.collect(job)).toBeNull();
   });
@@ -119,7 +117,12 @@ describe('pressed files', () => {
 
   it('are shown where the host can, else named', async () => {
     const shown: string[] = [];
-    hand = await deskAtHand({ showFolder: async (folder) => void shown.push(folder) });
+    hand = await deskAtHand({
+      showFolder: (folder) => {
+        shown.push(folder);
+        return Promise.resolve();
+      },
+    });
     const folder = await press(newProject('x'), 'x');
     expect(await hand.ask('show-pressed', {})).toBeNull();
     expect(shown).toEqual([folder]);

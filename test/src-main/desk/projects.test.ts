@@ -118,11 +118,11 @@ describe('projects on the desk', () => {
     const suggested: string[] = [];
     const window = hand.again({
       dialogs: {
-        chooseFile: async () => join(hand.folder, 'here.normloom'),
-        chooseFolder: async () => null,
-        chooseSave: async (path) => {
+        chooseFile: () => Promise.resolve(join(hand.folder, 'here.normloom')),
+        chooseFolder: () => Promise.resolve(null),
+        chooseSave: (path) => {
           suggested.push(path);
-          return chosen.shift() ?? null;
+          return Promise.resolve(chosen.shift() ?? null);
         },
       },
     });
