@@ -92,13 +92,22 @@ export type JobState =
   | { readonly state: 'failed'; readonly problem: string }
   | { readonly state: 'cancelled' };
 
+/** A file from outside the program: named when it was started, opened in the file manager, or dropped. */
+export interface GivenFile {
+  readonly kind: 'project' | 'cohort';
+  readonly handle: FileHandle;
+}
+
+/** What a desktop window's menu asks of the page; `open-file` comes with the file. */
+export type MenuCommand = 'new' | 'open' | 'open-file' | 'save' | 'undo' | 'redo';
+
 export interface About {
   readonly version: string;
   readonly host: 'electron' | 'browser';
   /** Folder in which new projects are saved, as it is called on this machine. */
   readonly folder: string;
   /** A project or cohort file the program was opened with. */
-  readonly openedWith: { readonly kind: 'project' | 'cohort'; readonly handle: FileHandle } | null;
+  readonly openedWith: GivenFile | null;
 }
 
 /** Every request: what is asked and what comes back. */

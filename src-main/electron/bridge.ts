@@ -1,4 +1,4 @@
-import type { FileHandle } from '../../shared-core/desk.ts';
+import type { FileHandle, GivenFile, MenuCommand } from '../../shared-core/desk.ts';
 
 /** The one channel on which the page asks and the desk answers. */
 export const DESK_CHANNEL = 'desk';
@@ -11,18 +11,10 @@ export type DeskMessage =
   | { readonly kind: 'ask'; readonly request: string; readonly ask: unknown }
   | { readonly kind: 'file'; readonly path: string };
 
-/** Menu entries that the page carries out. `open-file` comes with the file that was opened from outside the program. */
-export type MenuCommand = 'new' | 'open' | 'open-file' | 'save' | 'undo' | 'redo';
-
-export interface OpenedFile {
-  readonly kind: 'project' | 'cohort';
-  readonly handle: FileHandle;
-}
-
 /** What the page finds as `window.normloomDesk`. */
 export interface WindowDesk {
   ask(request: string, ask: unknown): Promise<unknown>;
   /** Handle of a file that the user dropped on the page; rejects with a sentence when it is not a file of this machine. */
   receiveFile(file: File): Promise<FileHandle>;
-  onMenu(listener: (command: MenuCommand, opened: OpenedFile | null) => void): void;
+  onMenu(listener: (command: MenuCommand, given: GivenFile | null) => void): void;
 }

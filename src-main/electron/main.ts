@@ -2,10 +2,10 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { app, Menu, session, shell } from 'electron';
 import type { BrowserWindow } from 'electron';
+import type { GivenFile, MenuCommand } from '../../shared-core/desk.ts';
 import { createDesk } from '../desk.ts';
 import type { DeskHost } from '../desk.ts';
 import { MENU_CHANNEL } from './bridge.ts';
-import type { MenuCommand, OpenedFile } from './bridge.ts';
 import { answerDesk } from './desk-channel.ts';
 import { nativeDialogs } from './dialogs.ts';
 import { buildMenu } from './menu.ts';
@@ -25,8 +25,8 @@ const remember = (path: string): void => {
   if (openedKind(path) === 'project') app.addRecentDocument(path);
 };
 
-const toPage = (command: MenuCommand, opened: OpenedFile | null = null): void => {
-  window?.webContents.send(MENU_CHANNEL, command, opened);
+const toPage = (command: MenuCommand, given: GivenFile | null = null): void => {
+  window?.webContents.send(MENU_CHANNEL, command, given);
 };
 
 /** A file opened from outside: by the file manager, the recent documents or a second start of the program. */

@@ -1,6 +1,6 @@
 import { Menu } from 'electron';
 import type { MenuItemConstructorOptions } from 'electron';
-import type { MenuCommand } from './bridge.ts';
+import type { MenuCommand } from '../../shared-core/desk.ts';
 
 /** The window's menu: what the page carries out goes to `send`, the rest is what the system itself does. */
 export const buildMenu = (send: (command: MenuCommand) => void, onMac: boolean, unpacked: boolean): Menu => {

@@ -1,7 +1,7 @@
 import { contextBridge, ipcRenderer, webUtils } from 'electron';
-import type { Reply } from '../../shared-core/desk.ts';
+import type { GivenFile, MenuCommand, Reply } from '../../shared-core/desk.ts';
 import { DESK_CHANNEL, MENU_CHANNEL } from './bridge.ts';
-import type { DeskMessage, MenuCommand, OpenedFile, WindowDesk } from './bridge.ts';
+import type { DeskMessage, WindowDesk } from './bridge.ts';
 
 const send = (message: DeskMessage): Promise<unknown> => ipcRenderer.invoke(DESK_CHANNEL, message);
 
@@ -15,8 +15,8 @@ const windowDesk: WindowDesk = {
     return reply.value;
   },
   onMenu(listener) {
-    ipcRenderer.on(MENU_CHANNEL, (_event, command: MenuCommand, opened: OpenedFile | null) => {
-      listener(command, opened);
+    ipcRenderer.on(MENU_CHANNEL, (_event, command: MenuCommand, given: GivenFile | null) => {
+      listener(command, given);
     });
   },
 };

@@ -1,21 +1,28 @@
-import type { Desk, DeskRequest, DeskRequests, FileHandle, Reply } from '../../shared-core/desk.ts';
+import type {
+  Desk,
+  DeskRequest,
+  DeskRequests,
+  FileHandle,
+  GivenFile,
+  MenuCommand,
+  Reply,
+} from '../../shared-core/desk.ts';
 
-/** What the menu of a desktop window can ask of the page. */
-export type MenuCommand = 'new' | 'open' | 'save' | 'undo' | 'redo';
+type MenuListener = (command: MenuCommand, given: GivenFile | null) => void;
 
 /** The desk as the page reaches it, and the way a dropped or chosen file gets there. */
 export interface DeskWire extends Desk {
   /** True where the host opens its own dialogs; elsewhere the page's file field serves. */
   readonly ownDialogs: boolean;
   receiveFile(file: File): Promise<Reply<FileHandle>>;
-  onMenu(listener: (command: MenuCommand) => void): void;
+  onMenu(listener: MenuListener): void;
 }
 
 /** Set by the preload script of a desktop window; absent in a browser. */
 interface WindowDesk {
   ask(request: string, ask: unknown): Promise<unknown>;
   receiveFile(file: File): Promise<string>;
-  onMenu(listener: (command: MenuCommand) => void): void;
+  onMenu(listener: MenuListener): void;
 }
 
 declare global {

@@ -99,9 +99,9 @@ export class Workspace {
     this.problem = null;
   }
 
-  /** Opens the host's dialog or takes what the page's file field gave. */
-  async takeCohort(file: File | null): Promise<void> {
-    const handle = file === null ? await this.#chooseHandle() : await this.#received(file);
+  /** Opens the host's dialog, or takes what the page's file field or the host gave. */
+  async takeCohort(file: File | FileHandle | null): Promise<void> {
+    const handle = await this.#handleOf(file);
     if (handle === null) return;
     this.cohort = handle;
     const seen = await this.#wire.ask('look-at-cohort', { handle, reading: null });
@@ -256,6 +256,11 @@ export class Workspace {
   /** Another job may have taken the place meanwhile. */
   #ended(job: string): void {
     if (this.work?.job === job) this.work = null;
+  }
+
+  async #handleOf(file: File | FileHandle | null): Promise<FileHandle | null> {
+    if (typeof file === 'string') return file;
+    return file === null ? this.#chooseHandle() : this.#received(file);
   }
 
   async #chooseHandle(): Promise<FileHandle | null> {
