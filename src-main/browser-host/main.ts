@@ -3,7 +3,7 @@ import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { createDesk } from '../desk.ts';
 import { findBrowser, hasDisplay, openAppWindow, type AppWindow } from './app-window.ts';
-import { dataFolder, projectsFolder } from './places.ts';
+import { dataFolder, projectsFolder } from '../places.ts';
 import { startBrowserHost } from './server.ts';
 import { showFolder } from './show-folder.ts';
 import { readStartWords, USAGE, type StartWords } from './start-words.ts';

@@ -1,10 +1,10 @@
-import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { app, Menu, session, shell } from 'electron';
 import type { BrowserWindow } from 'electron';
 import type { GivenFile, MenuCommand } from '../../shared-core/desk.ts';
 import { createDesk } from '../desk.ts';
 import type { DeskHost } from '../desk.ts';
+import { dataFolder, projectsFolder } from '../places.ts';
 import { MENU_CHANNEL } from './bridge.ts';
 import { answerDesk } from './desk-channel.ts';
 import { nativeDialogs } from './dialogs.ts';
@@ -58,8 +58,9 @@ const start = async (): Promise<void> => {
   desk = createDesk({
     version: app.getVersion(),
     host: 'electron',
-    dataFolder: app.getPath('userData'),
-    projectsFolder: join(app.getPath('documents'), 'Normloom'),
+    // The same as in the browser host, so that drafts and projects are found whichever host is used.
+    dataFolder: dataFolder(process.env, process.platform),
+    projectsFolder: projectsFolder(process.env),
     assetsFolder: here('../../assets/'),
     workers: {
       tally: new URL('./tally-worker.js', import.meta.url),

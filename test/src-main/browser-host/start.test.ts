@@ -1,7 +1,7 @@
 import { join, resolve } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { findBrowser, hasDisplay } from '../../../src-main/browser-host/app-window.ts';
-import { dataFolder, projectsFolder } from '../../../src-main/browser-host/places.ts';
+import { dataFolder, projectsFolder } from '../../../src-main/places.ts';
 import { readStartWords } from '../../../src-main/browser-host/start-words.ts';
 
 describe('words the browser host is started with', () => {

@@ -2,6 +2,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from 'vitest';
+import { dataFolder, projectsFolder } from '../../../src-main/places.ts';
 import type { DeskOptions } from '../../../src-main/desk.ts';
 
 const fake = vi.hoisted(() => ({
@@ -37,7 +38,6 @@ vi.mock('electron', async () => {
     requestSingleInstanceLock: () => true,
     whenReady: () => ready,
     getVersion: () => '1.2.3',
-    getPath: (name: string) => `/home-of-user/${name}`,
     enableSandbox: record('enableSandbox'),
     commandLine: { appendSwitch: (name: string, value = '') => void fake.calls.push(`${name} ${value}`.trim()) },
     exit: vi.fn(),
@@ -113,8 +113,8 @@ describe('the start of the program', () => {
     expect(fake.options[0]).toMatchObject({
       version: '1.2.3',
       host: 'electron',
-      dataFolder: '/home-of-user/userData',
-      projectsFolder: join('/home-of-user/documents', 'Normloom'),
+      dataFolder: dataFolder(process.env, process.platform),
+      projectsFolder: projectsFolder(process.env),
       openedWith: project,
     });
     expect(openEvent.preventDefault).toHaveBeenCalled();
