@@ -1,0 +1,102 @@
+import type { ColumnKey } from '../norms/column-keys.ts';
+import type { FontFace } from './text-width.ts';
+
+/**
+ * A booklet as placed pages. Lengths are in points (1/72 inch), x from the left edge of the paper, y from its top. Text
+ * is broken into lines here, so that whatever draws the pages only draws.
+ */
+export interface Booklet {
+  readonly title: string;
+  readonly paper: Paper;
+  readonly pages: readonly BookletPage[];
+  /** What had to be set otherwise than asked, as sentences that tell what to do. */
+  readonly remarks: readonly string[];
+}
+
+export interface Paper {
+  readonly width: number;
+  readonly height: number;
+  /** White space at the edges: head and foot lines stand inside it. */
+  readonly margin: number;
+}
+
+export interface BookletPage {
+  /** 1 for the first. */
+  readonly number: number;
+  /** Position of the group in the norm set. */
+  readonly group: number;
+  /** "Table 2 · Grade 5", where the sheet of a group begins; null on its further pages. */
+  readonly opens: string | null;
+  readonly blocks: readonly Block[];
+}
+
+export type Block = TextLine | Rule | Picture | TableColumnBlock;
+
+export interface TextRun {
+  readonly text: string;
+  readonly face: FontFace;
+}
+
+export type Colour = 'ink' | 'soft';
+
+/** One line of text. It never needs more than its width. */
+export interface TextLine {
+  readonly kind: 'text';
+  readonly x: number;
+  readonly baseline: number;
+  readonly width: number;
+  readonly align: 'left' | 'right';
+  readonly size: number;
+  readonly colour: Colour;
+  readonly runs: readonly TextRun[];
+}
+
+export interface Rule {
+  readonly kind: 'rule';
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+  readonly weight: number;
+}
+
+export interface Picture {
+  readonly kind: 'picture';
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+  readonly height: number;
+  readonly svg: string;
+  /** The picture in words. */
+  readonly alt: string;
+}
+
+/** One column of a conversion table: heads, rules, and a row for each score in it. */
+export interface TableColumnBlock {
+  readonly kind: 'table-column';
+  readonly x: number;
+  readonly width: number;
+  /** The rules above the heads, below them, and below the last line that any column of the table could hold. */
+  readonly top: number;
+  readonly headRule: number;
+  readonly bottom: number;
+  readonly size: number;
+  readonly heads: readonly TableHead[];
+  readonly rows: readonly PlacedRow[];
+}
+
+export interface TableHead {
+  readonly key: ColumnKey | 'score' | 'rank';
+  readonly lines: readonly string[];
+  /** Figures and heads end here. */
+  readonly right: number;
+  /** Room from the column before it. */
+  readonly width: number;
+}
+
+export interface PlacedRow {
+  /** Raw-score points. */
+  readonly score: number;
+  readonly baseline: number;
+  /** One text for each head. */
+  readonly texts: readonly string[];
+}

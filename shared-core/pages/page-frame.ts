@@ -1,0 +1,65 @@
+import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import type { Block, Paper } from './booklet.ts';
+import { firstLines } from './prose.ts';
+import { editionLine, surveyName, tableName } from './sheet-texts.ts';
+import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
+import { textWidth } from './text-width.ts';
+import { GUTTER, RUNNING, STRONG_RULE } from './type-sizes.ts';
+
+/** What stands at head and foot of every page of a group, and the room between them. */
+export interface PageFrame {
+  readonly left: number;
+  readonly width: number;
+  /** The body of the page stands between these. */
+  readonly top: number;
+  readonly bottom: number;
+  /** Head, foot and their rules for one page. */
+  readonly blocks: (page: number, pages: number) => readonly Block[];
+  /** True where the title of the survey or of the group was too long for the head. */
+  readonly shortened: boolean;
+}
+
+const MOST_HEAD_LINES = 3;
+/** The head stands this much above the margin, the foot this much below it. */
+const OUTSIDE = 6;
+const ROOM_AT_RULE = 4;
+const ROOM_TO_BODY = 13;
+/** Share of the width that the survey's name may take. */
+const LEFT_SHARE = 0.58;
+const WIDEST_PAGE_NUMBER = 'page 9999 of 9999';
+
+export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
+  const left = paper.margin;
+  const width = paper.width - 2 * paper.margin;
+  const survey = headLines(surveyName(normSet.project), (width - GUTTER) * LEFT_SHARE);
+  const table = headLines(tableName(index, norms), (width - GUTTER) * (1 - LEFT_SHARE));
+  const headTop = paper.margin - OUTSIDE - RUNNING.leading / 2;
+  const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
+  const numberWidth = textWidth(WIDEST_PAGE_NUMBER, 'sans', RUNNING.size);
+  const edition = linesOf(editionLine(normSet, norms), 'sans', RUNNING, width - numberWidth - GUTTER);
+  const footTop = paper.height - paper.margin + OUTSIDE + RUNNING.leading / 2 - heightOf(edition, RUNNING);
+  const footRule = footTop - ROOM_AT_RULE;
+  const rule = (y: number): Block => ({ kind: 'rule', x: left, y, width, weight: STRONG_RULE });
+  const running = (lines: readonly LooseLine[], top: number, align: 'left' | 'right'): readonly Block[] =>
+    placeLines(lines, RUNNING, { x: left, top, width, align, colour: 'soft' });
+  return {
+    left,
+    width,
+    top: headRule + ROOM_TO_BODY,
+    bottom: footRule - ROOM_TO_BODY,
+    blocks: (page, pages) => [
+      ...running(survey.lines, headTop, 'left'),
+      ...running(table.lines, headTop, 'right'),
+      rule(headRule),
+      rule(footRule),
+      ...running(edition, footTop, 'left'),
+      ...running(linesOf(`page ${page} of ${pages}`, 'sans', RUNNING, width), footTop, 'right'),
+    ],
+    shortened: survey.cut || table.cut,
+  };
+}
+
+function headLines(text: string, width: number): { readonly lines: readonly LooseLine[]; readonly cut: boolean } {
+  const first = firstLines([{ text, face: 'sans' }], RUNNING.size, width, MOST_HEAD_LINES);
+  return { lines: first.lines.map((runs) => ({ runs, before: 0 })), cut: first.cut };
+}

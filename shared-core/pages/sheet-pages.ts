@@ -1,0 +1,152 @@
+import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import { tableColumns } from '../norms/table-columns.ts';
+import type { Block, TextRun } from './booklet.ts';
+import { inverseStrip } from './inverse-strip.ts';
+import { ogivePicture } from './ogive-picture.ts';
+import type { PageFrame } from './page-frame.ts';
+import { firstLines } from './prose.ts';
+import { SheetFlow } from './sheet-flow.ts';
+import { figureCaption, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
+import { placeTable, rowMeasure, tableOverhead } from './table-blocks.ts';
+import type { TableMeasure } from './table-measure.ts';
+import { columnHeight, fillColumns, inFives, type Five } from './table-rows.ts';
+import { countThatFits, heightOf, linesOf, paragraphLines, placeLines, type LooseLine } from './text-lines.ts';
+import { CONTINUED, PROSE, SMALL_PROSE, SUBTITLE, TITLE, type TypeSize } from './type-sizes.ts';
+
+const MOST_TITLE_LINES = 6;
+const MOST_SUBTITLE_LINES = 3;
+/** Longer cautions are printed once and pointed to from the pages that follow. */
+const MOST_CAUTION_LINES = 6;
+const CAUTIONS_ELSEWHERE = 'Read with the cautions on the first page of this table.';
+const AROUND_INTRODUCTION = 10;
+const BELOW_TABLE = 22;
+/** A table begins on a page only where this many of its rows find room. */
+const LEAST_ROWS = 5;
+/** Height of the picture against its width. */
+const PICTURE_SHAPE = 0.47;
+const LEAST_NOTE_LINES = 6;
+
+export interface SheetPages {
+  readonly pages: readonly (readonly Block[])[];
+  /** True where the title had to be cut. */
+  readonly shortened: boolean;
+}
+
+/** One group's sheet: title, introduction, table, inverse table, picture and notes, over as many pages as they take. */
+export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, measure: TableMeasure): SheetPages {
+  const norms = normSet.groups[index];
+  if (norms === undefined) throw new RangeError('no such group');
+  const title = cutText(sheetTitle(normSet.project, norms), 'serif-bold', TITLE, frame.width, MOST_TITLE_LINES);
+  const flow = new SheetFlow(frame, (top) => furtherHead(normSet, norms, frame, top));
+  placeFull(flow, title.lines, TITLE);
+  const subtitle = cutText(sheetSubtitle(normSet.project), 'serif-italic', SUBTITLE, frame.width, MOST_SUBTITLE_LINES);
+  placeFull(flow, subtitle.lines, SUBTITLE);
+  introduce(flow, normSet);
+  layTable(flow, normSet, norms, measure);
+  layInverse(flow, normSet, norms);
+  layNotes(flow, normSet, index, norms);
+  return { pages: flow.pages, shortened: title.cut };
+}
+
+function cutText(text: string, face: TextRun['face'], type: TypeSize, width: number, most: number): CutLines {
+  const first = firstLines([{ text, face }], type.size, width, most);
+  return { lines: first.lines.map((runs) => ({ runs, before: 0 })), cut: first.cut };
+}
+
+interface CutLines {
+  readonly lines: readonly LooseLine[];
+  readonly cut: boolean;
+}
+
+function placeFull(flow: SheetFlow, lines: readonly LooseLine[], type: TypeSize): void {
+  flow.place(placeLines(lines, type, { x: flow.left, top: flow.y, width: flow.width }), heightOf(lines, type));
+}
+
+/** A page that is copied alone still says what its table is and how not to use it. */
+function furtherHead(
+  normSet: NormSet,
+  norms: GroupNorms,
+  { left, width }: PageFrame,
+  top: number,
+): { readonly blocks: readonly Block[]; readonly bottom: number } {
+  const { project } = normSet;
+  const cautions = linesOf(project.sheet.cautions, 'sans', SMALL_PROSE, width);
+  const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
+    [cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2).lines, CONTINUED],
+    [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2).lines, { ...PROSE, leading: PROSE.leading + 3 }],
+    [
+      cautions.length <= MOST_CAUTION_LINES ? cautions : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width),
+      SMALL_PROSE,
+    ],
+  ];
+  let bottom = top;
+  const blocks = parts.flatMap(([lines, type]) => {
+    const placed = placeLines(lines, type, { x: left, top: bottom, width });
+    bottom += heightOf(lines, type);
+    return placed;
+  });
+  return { blocks, bottom: bottom + AROUND_INTRODUCTION };
+}
+
+function introduce(flow: SheetFlow, { project }: NormSet): void {
+  const texts = [project.sheet.howToRead, project.sheet.cautions].filter((text) => text.trim() !== '');
+  const [left = [], right = []] = texts.map((text) => linesOf(text, 'sans', PROSE, flow.halfWidth));
+  flow.skip(AROUND_INTRODUCTION);
+  flow.sideBySide(left, right, PROSE);
+}
+
+function layTable(flow: SheetFlow, normSet: NormSet, norms: GroupNorms, measure: TableMeasure): void {
+  const heads = tableColumns(normSet.project);
+  const rows = rowMeasure(measure);
+  const overhead = tableOverhead(measure);
+  let rest: readonly Five[] = inFives(norms.rows, norms.group.table.scale);
+  flow.skip(AROUND_INTRODUCTION + 2);
+  while (rest.length > 0) {
+    const first = rest[0] ?? [];
+    flow.need(overhead + Math.max(columnHeight([first], rows), Math.min(LEAST_ROWS, norms.rows.length) * rows.pitch));
+    const page = fillColumns(rest, measure.columns, flow.room - overhead, rows);
+    const { blocks, height } = placeTable(page.columns, heads, measure, { x: flow.left, top: flow.y });
+    flow.place(blocks, height);
+    rest = page.rest;
+    if (rest.length > 0) flow.turn();
+  }
+}
+
+function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
+  if (!project.sheet.inverse) return;
+  const strip = inverseStrip(norms, flow.width);
+  flow.skip(BELOW_TABLE - 6);
+  flow.need(strip.height);
+  flow.place(strip.place(flow.left, flow.y), strip.height);
+}
+
+/** The picture and, beside it, the notes; notes that are longer than the page go on in two columns on the next. */
+function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: GroupNorms): void {
+  const lines = paragraphLines(notesOf(normSet, index, norms), PROSE, flow.halfWidth);
+  flow.skip(BELOW_TABLE);
+  if (!normSet.project.sheet.ogive) {
+    flow.need(Math.min(heightOf(lines, PROSE) / 2 + PROSE.leading, LEAST_NOTE_LINES * PROSE.leading));
+    flow.inTwoColumns(lines, PROSE);
+    return;
+  }
+  const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
+  const whole = heightOf(lines, PROSE);
+  flow.need(Math.max(picture.height, whole <= flow.freshRoom ? whole : LEAST_NOTE_LINES * PROSE.leading));
+  const beside = countThatFits(lines, PROSE, flow.room);
+  const height = Math.max(picture.height, heightOf(lines.slice(0, beside), PROSE));
+  flow.place(
+    [
+      {
+        kind: 'picture',
+        x: flow.left,
+        y: flow.y,
+        ...picture,
+        svg: ogivePicture(norms, picture),
+        alt: figureCaption(normSet.project),
+      },
+      ...placeLines(lines.slice(0, beside), PROSE, { x: flow.rightHalf, top: flow.y, width: flow.halfWidth }),
+    ],
+    height,
+  );
+  flow.inTwoColumns(lines.slice(beside), PROSE);
+}

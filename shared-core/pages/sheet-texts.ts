@@ -1,0 +1,132 @@
+import { definitionInWords, definitionName } from '../norms/definitions.ts';
+import type { ConversionRow } from '../norms/conversion-table.ts';
+import { columnInWords, countedPeople, groupNoun, standingTitle } from '../norms/norm-groups.ts';
+import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import type { NormProject } from '../norms/norm-project.ts';
+import { methodText } from '../norms/statements.ts';
+import type { TableColumn } from '../norms/table-columns.ts';
+import { decimalOf } from '../scale/decimal.ts';
+import { scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
+import { printCount, printNumber, printScore } from '../scores/printed-number.ts';
+import { weighsEqually } from '../tally/frequency-table.ts';
+
+/** "Raw score to percentile rank, grade 5". */
+export function sheetTitle(project: NormProject, { group }: GroupNorms): string {
+  const { by } = project.groups;
+  const given = group.title !== standingTitle(by, group.values, project.people);
+  const standing =
+    by.length === 0
+      ? inSentence(group.title)
+      : by
+          .map((column, index) => `${inSentence(columnInWords(column))} ${group.values[index] || '(blank)'}`)
+          .join(', ');
+  const title = project.sheet.title.trim();
+  return title === '' ? group.title : `${title}, ${given ? group.title : standing}`;
+}
+
+/** "Grade" as it stands inside a sentence; abbreviations stay as they are. */
+function inSentence(words: string): string {
+  return /^\p{Lu}\p{Ll}/u.test(words) ? words.charAt(0).toLowerCase() + words.slice(1) : words;
+}
+
+/** "Table 2 · Grade 5". */
+export function tableName(index: number, { group }: GroupNorms): string {
+  return `Table ${index + 1} · ${group.title}`;
+}
+
+/** What the definition counts, under the title. */
+export function sheetSubtitle(project: NormProject): string {
+  const direction = project.tally?.scale.direction ?? 'high-is-good';
+  const noun = groupNoun(project.groups.documentation);
+  return `The share of the ${noun} scoring ${definitionInWords(project.curve.definition, direction)}`;
+}
+
+/** Left side of the running head: what the booklet is about. */
+export function surveyName({ title, subtitle }: NormProject): string {
+  return [title.trim(), subtitle.trim()].filter((part) => part !== '').join(' · ');
+}
+
+/** Left side of the foot: which edition this is and what its numbers are. */
+export function editionLine({ project, check }: NormSet, { summary }: GroupNorms): string {
+  const { edition, date } = project.release;
+  return [
+    ...(edition.trim() === '' ? [] : [`Edition ${edition.trim()}`]),
+    ...(date === '' ? [] : [date]),
+    `check ${check}`,
+    `definition: ${definitionName(project.curve.definition)}`,
+    countedPeople(printCount(summary.n), project.people),
+  ].join(' · ');
+}
+
+/** A paragraph with its bold lead. */
+export interface Paragraph {
+  readonly lead: string;
+  readonly text: string;
+}
+
+/** The paragraphs beside the picture, in order; those without text are left out. */
+export function notesOf(normSet: NormSet, index: number, norms: GroupNorms): readonly Paragraph[] {
+  const { project } = normSet;
+  const noun = groupNoun(project.groups.documentation) === 'norm group' ? 'Norm group.' : 'Sample.';
+  return [
+    ...(project.sheet.ogive ? [{ lead: `Figure ${index + 1}.`, text: figureCaption(project) }] : []),
+    { lead: noun, text: [sampleFacts(project, norms), ...documentationSentences(project)].join(' ') },
+    { lead: 'Method.', text: methodText(project) },
+    ...(project.sheet.notes.trim() === '' ? [] : [{ lead: 'Notes.', text: project.sheet.notes.trim() }]),
+  ];
+}
+
+export function figureCaption(project: NormProject): string {
+  const side = project.tally?.scale.direction === 'low-is-good' ? 'above' : 'below';
+  return `Cumulative per cent by raw score: observed steps (at or ${side} the score) and the percentile rank at each score.`;
+}
+
+/** n, mean, SD and five numbers in a sentence or two. */
+export function sampleFacts(project: NormProject, { summary, group }: GroupNorms): string {
+  const { scale } = group.table;
+  const people = countedPeople(printCount(summary.n), project.people);
+  const weighted = group.table.weighted
+    ? `, weighted, with an effective n of ${printNumber(summary.effectiveN, 1)}`
+    : '';
+  const spread = summary.sd === null ? '' : `, SD ${printNumber(summary.sd, 1)}`;
+  const [lowest, lower, median, upper, highest] = summary.fiveNumbers.map((score) => printFiveNumber(scale, score));
+  const quarter = weighsEqually(group.table) ? 'hinge' : 'quartile';
+  return (
+    `${people}${weighted}. Mean ${printNumber(summary.mean, 1)}${spread}. ` +
+    `Lowest score ${lowest}, lower ${quarter} ${lower}, median ${median}, upper ${quarter} ${upper}, highest score ${highest}.`
+  );
+}
+
+/** A score of the scale, or the middle between two of them, which takes one decimal more. */
+function printFiveNumber(scale: ScoreScale, score: number): string {
+  const { decimals } = scaleGrid(scale);
+  return decimalOf(score).decimals <= decimals ? printScore(scale, score) : printNumber(score, decimals + 1);
+}
+
+function documentationSentences(project: NormProject): readonly string[] {
+  const { population, sampling, participation, testDates, weighting } = project.groups.documentation;
+  const given: readonly (readonly [string, string])[] = [
+    ['Population', population],
+    ['Sampling', sampling],
+    ['Participation', participation],
+    ['Tested', testDates],
+    ['Weighting', weighting],
+  ];
+  return given.filter(([, text]) => text.trim() !== '').map(([head, text]) => `${head}: ${closed(text.trim())}`);
+}
+
+function closed(sentence: string): string {
+  return /[.!?…]$/.test(sentence) ? sentence : `${sentence}.`;
+}
+
+/** Printed text of one column in a row. */
+export function cellText(row: ConversionRow, { key }: TableColumn): string {
+  switch (key) {
+    case 'score':
+      return row.scoreText;
+    case 'rank':
+      return row.printed;
+    default:
+      return row.texts[key];
+  }
+}

@@ -1,0 +1,109 @@
+import type { TableColumn } from '../norms/table-columns.ts';
+import type { Rule, TableColumnBlock, TextLine } from './booklet.ts';
+import { cellText } from './sheet-texts.ts';
+import type { TableMeasure } from './table-measure.ts';
+import { columnHeight, type RowColumn, type RowMeasure } from './table-rows.ts';
+import { FINE_RULE, GUTTER, ROW, STRONG_RULE, TABLE_HEAD } from './type-sizes.ts';
+
+/** Extra room between two fives. */
+const FIVE_GAP = 5;
+const HEAD_PADDING = 4;
+const ABOVE_ROWS = 3;
+const BELOW_ROWS = 4;
+/** Share of a line of rows above its baseline. */
+const ABOVE_BASELINE = 0.72;
+
+export function rowMeasure({ typeScale }: TableMeasure): RowMeasure {
+  return { pitch: ROW.leading * typeScale, gap: FIVE_GAP * typeScale };
+}
+
+/** Height of heads, rules and the room around the rows, in points. */
+export function tableOverhead({ heads, typeScale }: TableMeasure): number {
+  return (
+    headHeight(
+      heads.map(({ lines }) => lines.length),
+      typeScale,
+    ) +
+    ABOVE_ROWS +
+    BELOW_ROWS
+  );
+}
+
+function headHeight(lineCounts: readonly number[], typeScale: number): number {
+  return Math.max(...lineCounts) * TABLE_HEAD.leading * typeScale + 2 * HEAD_PADDING;
+}
+
+/** Columns of rows side by side, all between the same lines. */
+export function placeTable(
+  columns: readonly RowColumn[],
+  tableColumns: readonly TableColumn[],
+  measure: TableMeasure,
+  place: { readonly x: number; readonly top: number },
+): { readonly blocks: readonly TableColumnBlock[]; readonly height: number } {
+  const rows = rowMeasure(measure);
+  const { typeScale } = measure;
+  const headRule =
+    place.top +
+    headHeight(
+      measure.heads.map(({ lines }) => lines.length),
+      typeScale,
+    );
+  const deepest = Math.max(...columns.map((column) => columnHeight(column, rows)));
+  const bottom = headRule + ABOVE_ROWS + deepest + BELOW_ROWS;
+  const blocks = columns.map((column, index): TableColumnBlock => {
+    let y = headRule + ABOVE_ROWS;
+    return {
+      kind: 'table-column',
+      x: place.x + index * (measure.width + GUTTER),
+      width: measure.width,
+      top: place.top,
+      headRule,
+      bottom,
+      size: ROW.size * typeScale,
+      heads: measure.heads,
+      rows: column.flatMap((five, block) => {
+        if (block > 0) y += rows.gap;
+        return five.map((row) => {
+          const baseline = y + rows.pitch * ABOVE_BASELINE;
+          y += rows.pitch;
+          return { score: row.score, baseline, texts: tableColumns.map((head) => cellText(row, head)) };
+        });
+      }),
+    };
+  });
+  return { blocks, height: bottom - place.top };
+}
+
+/** A column of rows as lines of text and rules: what is drawn of it. */
+export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[] {
+  const typeScale = block.size / ROW.size;
+  const rule = (y: number, weight: number): Rule => ({ kind: 'rule', x: block.x, y, width: block.width, weight });
+  const figure = (index: number, text: string, baseline: number, size: number, bold: boolean): TextLine => {
+    const head = block.heads[index];
+    if (head === undefined) throw new RangeError('a cell without a head');
+    return {
+      kind: 'text',
+      x: block.x + head.right - head.width,
+      baseline,
+      width: head.width,
+      align: 'right',
+      size,
+      colour: 'ink',
+      runs: [{ text, face: bold ? 'sans-bold' : 'sans' }],
+    };
+  };
+  return [
+    rule(block.top, STRONG_RULE),
+    rule(block.headRule, FINE_RULE),
+    rule(block.bottom, STRONG_RULE),
+    ...block.heads.flatMap(({ lines }, index) =>
+      lines.map((line, place) => {
+        const up = (lines.length - 1 - place) * TABLE_HEAD.leading * typeScale;
+        return figure(index, line, block.headRule - HEAD_PADDING - 1.5 - up, TABLE_HEAD.size * typeScale, true);
+      }),
+    ),
+    ...block.rows.flatMap(({ baseline, texts }) =>
+      texts.map((text, index) => figure(index, text, baseline, block.size, index === 0)),
+    ),
+  ];
+}
