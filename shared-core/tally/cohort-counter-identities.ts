@@ -9,23 +9,25 @@ export interface Identities {
   leavesOut(id: string): boolean;
 }
 
+/** Bits looked at for one text lie within one block, so that a text costs one access to far memory. */
+const BLOCK_WORDS = 16;
+
 /**
  * A set of fixed size that never forgets a text but now and then claims one it has not met (Bloom 1970, Communications
- * of the ACM 13(7)); four bits a text, taken from two hashes (Kirsch & Mitzenmacher 2006). With 2^28 bits and
- * 10,000,000 texts about one claim in 3,000 is false; what is claimed is counted exactly in another pass.
+ * of the ACM 13(7), with the bits of a text kept in one block: Putze, Sanders & Singler 2009). With 2^28 bits and
+ * 10,000,000 texts fewer than one new text in 10,000 is claimed; what is claimed is counted exactly in another pass.
  */
 export class SeenFilter {
   private readonly words: Uint32Array;
-  private readonly mask: number;
+  private readonly blockMask: number;
 
-  /** Size as a power of two, 5 to 31 (32 bits to 256 MB). */
+  /** Size as a power of two, 9 to 31 (one block to 256 MB). */
   constructor(bitsExponent: number) {
-    if (!Number.isInteger(bitsExponent) || bitsExponent < 5 || bitsExponent > 31) {
-      throw new RangeError('the filter holds 2^5 to 2^31 bits');
+    if (!Number.isInteger(bitsExponent) || bitsExponent < 9 || bitsExponent > 31) {
+      throw new RangeError('the filter holds 2^9 to 2^31 bits');
     }
-    const bits = 2 ** bitsExponent;
-    this.words = new Uint32Array(bits / 32);
-    this.mask = bits - 1;
+    this.words = new Uint32Array(2 ** bitsExponent / 32);
+    this.blockMask = this.words.length / BLOCK_WORDS - 1;
   }
 
   /** Adds the text; false means that it was surely not there before. */
@@ -35,19 +37,26 @@ export class SeenFilter {
     for (let index = 0; index < text.length; index += 1) {
       const code = text.charCodeAt(index);
       first = Math.imul(first ^ code, 0x01000193);
-      second = Math.imul(second + code, 0x85ebca6b);
+      second = Math.imul(second ^ code, 0x85ebca6b);
       second ^= second >>> 13;
     }
-    first = spread(first);
-    second = spread(second) | 1;
+    const place = spread(first);
+    const block = (place & this.blockMask) * BLOCK_WORDS;
+    const early = this.mark(block, spread(second));
+    const late = this.mark(block, spread(place ^ second));
+    return early && late;
+  }
+
+  /** Sets three bits of the block, chosen by nine bits of the hash each; true when all of them were set before. */
+  private mark(block: number, hash: number): boolean {
     let met = true;
-    for (let probe = 0; probe < 4; probe += 1) {
-      const bit = ((first + Math.imul(probe, second)) & this.mask) >>> 0;
-      const word = this.words[bit >>> 5] ?? 0;
-      const flag = 1 << (bit & 31);
+    for (let bits = hash, probe = 0; probe < 3; probe += 1, bits >>>= 9) {
+      const at = block + ((bits >>> 5) & (BLOCK_WORDS - 1));
+      const word = this.words[at] ?? 0;
+      const flag = 1 << (bits & 31);
       if ((word & flag) === 0) {
         met = false;
-        this.words[bit >>> 5] = word | flag;
+        this.words[at] = word | flag;
       }
     }
     return met;

@@ -23,6 +23,7 @@ const COMMA = /\s*,\s*/;
 
 interface TypedLine {
   readonly line: number;
+  readonly content: string;
   readonly cells: readonly string[];
 }
 
@@ -82,7 +83,7 @@ function typedLines(text: string): { readonly lines: readonly TypedLine[]; reado
   const body = headed ? contents.slice(1) : contents;
   const pairs = SEPARATORS.map((candidate) => body.filter(({ content }) => isPair(content.split(candidate))).length);
   const separator = SEPARATORS[pairs.indexOf(Math.max(...pairs))] ?? COMMA;
-  const lines = body.map(({ line, content }) => ({ line, cells: content.split(separator) }));
+  const lines = body.map(({ line, content }) => ({ line, content, cells: content.split(separator) }));
   const pointed = separator === COMMA || lines.some(({ cells }) => cells.some((cell) => /^-?\d*\.\d+$/.test(cell)));
   return { lines, mark: pointed ? '.' : ',' };
 }
@@ -91,12 +92,15 @@ function isPair(cells: readonly string[]): boolean {
   return cells.length === 2 && cells.every((cell) => !/\s/.test(cell));
 }
 
-function readLine({ line, cells }: TypedLine, mark: DecimalMark): ScoreLine | string {
+const RANGE = /\d(?:-|–|\.\.)\d|\d\s+(?:-|–|to)\s+\d/;
+
+function readLine({ line, content, cells }: TypedLine, mark: DecimalMark): ScoreLine | string {
   const [scoreText = '', countText = ''] = cells;
-  if (cells.some((cell) => /^-?[\d.,]+\s*(-|–|\.\.|to|bis)\s*-?[\d.,]+$/.test(cell)) || cells.includes('-')) {
+  if (RANGE.test(content)) {
     return 'A range of scores cannot be read. Give one line for each score.';
   }
-  if (cells.length !== 2) return `A line holds a score and a count; this one holds ${cells.length} entries.`;
+  if (cells.length !== 2)
+    return `A line holds a score and a count; this one holds ${cells.length} ${cells.length === 1 ? 'entry' : 'entries'}.`;
   const score = parseDecimal(scoreText, mark);
   if (score === null) return `"${scoreText}" is not a score. Write a number.`;
   const count = /^\d{1,15}$/.test(countText) ? Number(countText) : null;

@@ -15,12 +15,12 @@ export interface TallyJobHooks {
  * back as a problem, a cancelled job as the problem CANCELLED.
  */
 export function startTallyJob(
+  workerFile: URL,
   path: string,
   file: string,
   reading: Reading,
   { onProgress }: TallyJobHooks,
   signal: AbortSignal,
-  workerFile: URL,
 ): Promise<Reply<TalliedCohort>> {
   if (signal.aborted) return Promise.resolve({ ok: false, problem: CANCELLED });
   const request: TallyRequest = { path, file, reading };
