@@ -135,7 +135,8 @@ export interface DeskRequests {
   };
   /**
    * Saves to the handle's file, or, without one, to a new file of that name in the projects folder (Electron asks
-   * where). Never overwrites a file it was not given. Null when the user closed the dialog.
+   * where). Never overwrites a file it was not given, nor one that another program changed in between: then the project
+   * goes into a new file beside it, and `remark` says so. Null when the user closed the dialog.
    */
   'save-project': {
     ask: {
@@ -144,7 +145,13 @@ export interface DeskRequests {
       readonly name: string;
       readonly project: NormProject;
     };
-    answer: { readonly handle: FileHandle; readonly file: string; readonly at: number } | null;
+    answer: {
+      readonly handle: FileHandle;
+      readonly file: string;
+      readonly at: number;
+      /** A sentence for the user, or null when there is nothing to tell. */
+      readonly remark: string | null;
+    } | null;
   };
   /** Null reading: guess everything. */
   'look-at-cohort': { ask: { readonly handle: FileHandle; readonly reading: Reading | null }; answer: CohortPreview };

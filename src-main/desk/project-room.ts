@@ -1,31 +1,19 @@
 import { randomUUID } from 'node:crypto';
 import { stat } from 'node:fs/promises';
-import { basename, dirname, extname, join } from 'node:path';
+import { basename, dirname, join } from 'node:path';
 import type { DeskRequests, FileHandle, OpenedProject, Reply } from '../../shared-core/desk.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import type { Dialogs } from '../dialogs.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
 import type { Drafts } from '../project-file/drafts.ts';
-import { cleanFileName } from '../project-file/file-name.ts';
-import type { ProjectSaver } from '../project-file/project-saver.ts';
-import {
-  fingerprintAt,
-  fingerprintOf,
-  PROJECT_EXTENSION,
-  projectText,
-  readProject,
-} from '../project-file/project-store.ts';
+import { projectText, readProject } from '../project-file/project-store.ts';
 import type { Recents } from '../project-file/recents.ts';
-import { UNKNOWN_FILE, type FileHandles, type KnownFile } from './file-handles.ts';
+import { UNKNOWN_FILE, type KnownFile } from './file-handles.ts';
+import { writeAgain, writeNew, type WritingParts } from './project-writing.ts';
 import { answered, refused } from './reply.ts';
 
-export interface ProjectRoomParts {
-  readonly handles: FileHandles;
+export interface ProjectRoomParts extends WritingParts {
   readonly drafts: Drafts;
   readonly recents: Recents;
-  readonly saver: ProjectSaver;
-  readonly dialogs: Dialogs | null;
-  readonly projectsFolder: string;
   /** The project of the sample cohort. */
   readonly sample: string;
   /** Milliseconds since 1970. */
@@ -118,58 +106,14 @@ export class ProjectRoom {
     });
     const saved =
       own === null || ask.handle === null
-        ? await this.#saveNew(ask.name, text.text)
-        : await this.#saveAgain(ask.handle, own, text.text);
-    if (!saved.ok || saved.value === null) return saved.ok ? { ok: true, value: null } : saved;
-    const { handle, path } = saved.value;
-    this.#parts.handles.noteFingerprint(handle, fingerprintOf(text.text));
+        ? await writeNew(this.#parts, ask.name, text.text)
+        : await writeAgain(this.#parts, ask.handle, own, text.text);
+    if (!saved.ok || saved.value === null) return saved.ok ? answered(null) : saved;
+    const { handle, path, remark } = saved.value;
     // The project is safe by now. A list that cannot be written must not make it look unsaved.
     await this.#parts.recents.add(path, ask.project.title).catch(() => undefined);
-    if (kept.ok) await this.#parts.drafts.forget(ask.draft).catch(() => undefined);
-    return answered({ handle, file: basename(path), at: this.#parts.now() });
-  }
-
-  async #saveAgain(
-    handle: FileHandle,
-    file: KnownFile,
-    text: string,
-  ): Promise<Reply<{ readonly handle: FileHandle; readonly path: string }>> {
-    try {
-      const there = await fingerprintAt(file.path);
-      if (there !== null && there !== file.fingerprint && there !== fingerprintOf(text)) {
-        return refused(
-          `${file.name} was changed by another program since it was opened here, and was not overwritten. Save the project as a new file, or open the file again.`,
-        );
-      }
-      await this.#parts.saver.replace(file.path, text);
-    } catch (error) {
-      return refused(diskTrouble(file.name, 'saved', error));
-    }
-    return answered({ handle, path: file.path });
-  }
-
-  async #saveNew(
-    name: string,
-    text: string,
-  ): Promise<Reply<{ readonly handle: FileHandle; readonly path: string } | null>> {
-    const { dialogs, projectsFolder, saver, handles } = this.#parts;
-    const ending = name.toLowerCase().endsWith(PROJECT_EXTENSION) ? PROJECT_EXTENSION.length : 0;
-    const clean = cleanFileName(name.slice(0, name.length - ending), 'Norm project');
-    try {
-      if (dialogs === null) {
-        const path = await saver.createBeside(projectsFolder, clean, PROJECT_EXTENSION, text);
-        return answered({ handle: handles.give(path), path });
-      }
-      const chosen = await dialogs.chooseSave(join(projectsFolder, `${clean}${PROJECT_EXTENSION}`));
-      if (chosen === null) return answered(null);
-      let path = chosen;
-      if (extname(chosen).toLowerCase() === PROJECT_EXTENSION) await saver.replace(chosen, text);
-      // The dialog asked about another name than this one, so nothing of this name may be replaced.
-      else path = await saver.createBeside(dirname(chosen), basename(chosen), PROJECT_EXTENSION, text);
-      return answered({ handle: handles.give(path), path });
-    } catch (error) {
-      return refused(diskTrouble('The project', 'saved', error));
-    }
+    if (kept.ok) await this.#parts.drafts.forgetSaved(ask.draft, text.text).catch(() => undefined);
+    return answered({ handle, file: basename(path), at: this.#parts.now(), remark });
   }
 
   async #openFile(file: KnownFile): Promise<Reply<OpenedProject>> {

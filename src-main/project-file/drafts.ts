@@ -75,6 +75,15 @@ export class Drafts {
     await this.#inTurn(draft, () => rm(this.#pathOf(draft), { force: true }));
   }
 
+  /** Forgets the draft once its project was saved as this text; a later draft, kept while it was saved, stays. */
+  async forgetSaved(draft: string, text: string): Promise<void> {
+    await this.#inTurn(draft, async () => {
+      const kept = await readFile(this.#pathOf(draft), 'utf8').catch(() => '');
+      const read = draftFromText(draft, kept);
+      if (read.ok && projectToText(read.draft.project) === text) await rm(this.#pathOf(draft), { force: true });
+    });
+  }
+
   /** The draft of that name, or a sentence. */
   async read(draft: string): Promise<DraftRead> {
     return this.#inTurn(draft, async () => {

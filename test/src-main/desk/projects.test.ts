@@ -3,6 +3,7 @@ import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { projectFromText, projectToText } from '../../../shared-core/norms/project-text.ts';
+import { Drafts } from '../../../src-main/project-file/drafts.ts';
 import { projectWithTally } from '../project-file/sample-projects.ts';
 import { deskAtHand, type DeskAtHand } from './desk-at-hand.ts';
 
@@ -55,13 +56,19 @@ describe('projects on the desk', () => {
     const saved = await hand.ask('save-project', { draft, handle: null, name: 'a', project: newProject('one') });
     const handle = saved?.handle ?? null;
     await writeFile(projects('a.normloom'), projectToText(newProject('by another')));
-    const ask = { draft, handle, name: 'a', project: newProject('two') };
-    expect(await hand.problem('save-project', ask)).toMatch(/changed by another program.*not overwritten/);
+    const ask = { draft, name: 'a', project: newProject('two') };
+    const beside = await hand.ask('save-project', { ...ask, handle });
+    expect(beside).toMatchObject({
+      file: 'a (2).normloom',
+      remark: expect.stringMatching(/^a\.normloom was changed/) as string,
+    });
     expect(await readFile(projects('a.normloom'), 'utf8')).toBe(projectToText(newProject('by another')));
-    expect((await hand.ask('list-projects', {})).drafts.map(({ title }) => title)).toEqual(['two']);
+    expect(await readFile(projects('a (2).normloom'), 'utf8')).toBe(projectToText(newProject('two')));
+    const next = { ...ask, handle: beside?.handle ?? null, project: newProject('three') };
+    expect(await hand.ask('save-project', next)).toMatchObject({ file: 'a (2).normloom', remark: null });
     // A file that was taken away is simply made again.
-    await rm(projects('a.normloom'));
-    expect((await hand.ask('save-project', ask))?.file).toBe('a.normloom');
+    await rm(projects('a (2).normloom'));
+    expect((await hand.ask('save-project', next))?.file).toBe('a (2).normloom');
   });
 
   it('of a newer program or damaged are refused with a sentence and left alone', async () => {
@@ -158,6 +165,15 @@ describe('work that was not saved', () => {
     await later.ask('forget-draft', { draft: 'never-saved' });
     expect((await later.ask('list-projects', {})).drafts).toEqual([]);
     expect(await readFile(projects('a.normloom'), 'utf8')).toBe(projectToText(newProject('two')));
+  });
+
+  it('and was kept while an older state was being saved stays', async () => {
+    const drafts = new Drafts(join(hand.folder, 'data'));
+    await drafts.keep({ draft, file: null, at: 1, project: newProject('newer') });
+    await drafts.forgetSaved(draft, projectToText(newProject('older')));
+    expect((await hand.ask('list-projects', {})).drafts.map(({ title }) => title)).toEqual(['newer']);
+    await drafts.forgetSaved(draft, projectToText(newProject('newer')));
+    expect((await hand.ask('list-projects', {})).drafts).toEqual([]);
   });
 
   it('is kept when saving fails', async () => {
