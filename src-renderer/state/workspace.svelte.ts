@@ -8,6 +8,7 @@ import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { ProjectHistory } from './history.svelte.ts';
 import { followJob } from './run-job.ts';
+import { nounFrom, titleFrom } from './names-from-file.ts';
 import { withTally } from './with-tally.ts';
 
 export interface RunningWork {
@@ -114,6 +115,7 @@ export class Workspace {
     this.#history.push({
       ...project,
       title: project.title === '' ? titleFrom(seen.value.file) : project.title,
+      people: project.people === 'people' ? nounFrom(seen.value.columns) : project.people,
       reading: seen.value.reading,
       source: null,
       tally: null,
@@ -299,11 +301,4 @@ function layoutChanged(before: Reading, after: Reading): boolean {
   return (['separator', 'decimalMark', 'encoding', 'header', 'sheet'] as const).some(
     (key) => before[key] !== after[key],
   );
-}
-
-function titleFrom(file: string): string {
-  return file
-    .replace(/\.[^.]+$/, '')
-    .replaceAll(/[_-]+/g, ' ')
-    .trim();
 }
