@@ -35,7 +35,8 @@ export function curveChart(norms: GroupNorms, inks: ChartInks): ChartConfigurati
     data: norms.rows.map((row) => ({ x: row.score, y: row.percentileRank })),
     showLine: false,
     pointRadius: norms.rows.length > 80 ? 1.6 : 2.6,
-    pointBackgroundColor: inks.curve,
+    // A score that nobody obtained is hollow.
+    pointBackgroundColor: norms.rows.map((row) => (row.count > 0 ? inks.curve : inks.paper)),
     pointBorderColor: inks.curve,
     pointHitRadius: 8,
   };
@@ -73,6 +74,7 @@ export function curveChart(norms: GroupNorms, inks: ChartInks): ChartConfigurati
           border: { display: false },
           grid: { color: inks.rule, drawTicks: false },
           ticks: { stepSize: 25, color: inks.soft, font: FONT, padding: 6 },
+          afterFit: alignLeft,
         },
       },
     },
@@ -108,13 +110,18 @@ export function frequencyChart(norms: GroupNorms, inks: ChartInks): ChartConfigu
           border: { display: false },
           grid: { color: inks.rule, drawTicks: false },
           ticks: { maxTicksLimit: 3, color: inks.soft, font: FONT, padding: 6, precision: 0 },
-          afterFit: (axis) => {
-            axis.width = Math.max(axis.width, 34);
-          },
+          afterFit: alignLeft,
         },
       },
     },
   };
+}
+
+/** Room for the figures at the left, in CSS pixels, so that one score stands at one place in every picture. */
+const LEFT_ROOM = 40;
+
+function alignLeft(axis: { width: number }): void {
+  axis.width = LEFT_ROOM;
 }
 
 function scoreAxis(norms: GroupNorms, inks: ChartInks) {

@@ -37,7 +37,8 @@ export class Program {
       env: { ...process.env, NORMLOOM_DATA: join(this.#home, 'data'), NORMLOOM_FOLDER: this.projects },
     });
     this.#child = child;
-    const [line] = (await once(createInterface(child.stdout), 'line')) as readonly [string];
+    const said: readonly unknown[] = await once(createInterface(child.stdout), 'line');
+    const line = String(said[0]);
     const address = /http:\/\/\S+/.exec(line)?.[0];
     if (address === undefined) throw new Error(`the host said: ${line}`);
     return address;

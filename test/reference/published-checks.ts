@@ -31,13 +31,6 @@ const PUBLISHED = v.object({
   gravetter_wallnau: v.object({
     ungrouped: v.object({ scores: numbers, f: numbers, pr_at_7: v.number() }),
     grouped: v.object({ ...grouped, p40: v.number(), pr_at_9: v.number() }),
-    grouped2_inputs_read_answers_computed: v.object({
-      ...grouped,
-      p30: v.number(),
-      p88: v.number(),
-      pr_at_77: v.number(),
-      pr_at_90: v.number(),
-    }),
   }),
   pr_mid_ten_scores: v.object({ pr_at_4: v.number(), pr_at_7: v.number() }),
   stanine: v.object({ pct: numbers, cum: numbers, z_bounds: numbers }),
