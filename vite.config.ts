@@ -44,6 +44,8 @@ export default defineConfig({
         assetsInlineLimit: 0,
         modulePreload: { polyfill: false },
         chunkSizeWarningLimit: 2000,
+        // The notices of the packages that become part of the page.
+        license: { fileName: 'licences.txt' },
       },
     },
     // Packages stay in node_modules: several of them find their own files there when they run.
