@@ -31,6 +31,7 @@ const MOST_DOTS = 61;
 const PER_CENT_TICKS = [0, 25, 50, 75, 100] as const;
 /** Percent at which the curve's label gives way to it. */
 const LABEL_LEVEL = 60;
+const LABEL_LEADING = 9;
 
 /**
  * Observed steps (cumulative per cent, by weight where people are weighted) and the percentile rank at each score, as an
@@ -116,12 +117,12 @@ function labels(
   const above = roomAbove > size.width * 0.4;
   const leftOfCurve = rising === above;
   const anchor = leftOfCurve ? 'end' : 'start';
-  const levels = above ? [88, 76] : [22, 10];
+  const first = y(above ? 88 : 22);
   const at = above ? upper : crossing(100 - LABEL_LEVEL);
   const place = at + (leftOfCurve ? -9 : 9);
   return [
-    words('percentile rank', { x: place, y: y(levels[0] ?? 0) }, anchor, colours.curve),
-    words('observed', { x: place, y: y(levels[1] ?? 0) }, anchor, colours.ink),
+    words('percentile rank', { x: place, y: first }, anchor, colours.curve),
+    words('observed', { x: place, y: first + LABEL_LEADING }, anchor, colours.ink),
   ];
 }
 

@@ -19,6 +19,7 @@ const MOST_SUBTITLE_LINES = 3;
 const MOST_CAUTION_LINES = 6;
 const CAUTIONS_ELSEWHERE = 'Read with the cautions on the first page of this table.';
 const AROUND_INTRODUCTION = 10;
+const BETWEEN_HEAD_LINES = 2;
 const BELOW_TABLE = 22;
 /** A table begins on a page only where this many of its rows find room. */
 const LEAST_ROWS = 5;
@@ -73,7 +74,7 @@ function furtherHead(
   const cautions = linesOf(project.sheet.cautions, 'sans', SMALL_PROSE, width);
   const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
     [cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2).lines, CONTINUED],
-    [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2).lines, { ...PROSE, leading: PROSE.leading + 3 }],
+    [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2).lines, PROSE],
     [
       cautions.length <= MOST_CAUTION_LINES ? cautions : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width),
       SMALL_PROSE,
@@ -82,7 +83,7 @@ function furtherHead(
   let bottom = top;
   const blocks = parts.flatMap(([lines, type]) => {
     const placed = placeLines(lines, type, { x: left, top: bottom, width });
-    bottom += heightOf(lines, type);
+    bottom += heightOf(lines, type) + BETWEEN_HEAD_LINES;
     return placed;
   });
   return { blocks, bottom: bottom + AROUND_INTRODUCTION };

@@ -15,7 +15,10 @@ export interface DrawnBooklet {
 }
 
 /** The booklet of a set as a PDF of version 1.7. The same set gives the same bytes. */
-export async function bookletPdf(normSet: NormSet, onProgress: (share: number) => void = () => {}): Promise<DrawnBooklet> {
+export async function bookletPdf(
+  normSet: NormSet,
+  onProgress: (share: number) => void = () => {},
+): Promise<DrawnBooklet> {
   const booklet = composeBooklet(normSet);
   const files = new Set(Object.values(fontFiles()).flatMap((family) => Object.values(family)));
   pdfmake.setFonts(fontFiles());

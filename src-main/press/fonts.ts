@@ -1,5 +1,4 @@
 import { createRequire } from 'node:module';
-import type { TFontDictionary } from 'pdfmake/interfaces.js';
 import type { FontFace } from '../../shared-core/pages/text-width.ts';
 
 // Resolved when the program runs, so that the files are found from the source, the built program and a packed one.
@@ -7,8 +6,11 @@ const { resolve } = createRequire(import.meta.url);
 const sans = '@expo-google-fonts/source-sans-3';
 const serif = '@expo-google-fonts/source-serif-4';
 
+/** Paths of the styles of a family that are printed. */
+type FontFamilyFiles = Partial<Record<'normal' | 'bold' | 'italics', string>>;
+
 /** The files of the printed typefaces, under the names that pictures use for them. */
-export function fontFiles(): TFontDictionary {
+export function fontFiles(): Record<string, FontFamilyFiles> {
   return {
     'Source Sans 3': {
       normal: resolve(`${sans}/400Regular/SourceSans3_400Regular.ttf`),

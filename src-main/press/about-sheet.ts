@@ -1,0 +1,70 @@
+import type { Worksheet } from 'exceljs';
+import type { NormSet } from '../../shared-core/norms/norm-set.ts';
+import { LEFT_OUT_WORDS } from '../../shared-core/norms/reading.ts';
+import { methodText } from '../../shared-core/norms/statements.ts';
+import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
+import { asProse, asTitle, ruleBelow, setUpPages } from './workbook-look.ts';
+
+export const ABOUT = 'About';
+const WIDTHS = [24, 90] as const;
+const ROW_NUMBERS_SHOWN = 20;
+
+/** Where the numbers come from: method, cautions, the source file with its fingerprint, and every row left out. */
+export function fillAboutSheet(sheet: Worksheet, normSet: NormSet): void {
+  sheet.columns = WIDTHS.map((width) => ({ width }));
+  sheet.getCell(1, 1).value = 'About these tables';
+  asTitle(sheet.getCell(1, 1));
+  aboutLines(normSet).forEach(([name, value], index) => {
+    const [left, right] = [sheet.getCell(index + 3, 1), sheet.getCell(index + 3, 2)];
+    left.value = name;
+    right.value = value;
+    left.font = { bold: true };
+    asProse(left);
+    asProse(right);
+    if (typeof value === 'number') right.alignment = { horizontal: 'left', vertical: 'top' };
+    sheet.getRow(index + 3).height = 15 * Math.max(1, Math.ceil((String(value).length * 1.1) / WIDTHS[1]));
+    for (const cell of [left, right]) ruleBelow(cell, 'fine');
+  });
+  setUpPages(sheet, normSet.project.sheet, `Edition ${normSet.project.release.edition} · check ${normSet.check}`);
+}
+
+function aboutLines({ project, check }: NormSet): readonly (readonly [string, string | number])[] {
+  const { source, tally, release, groups } = project;
+  const { population, sampling, participation, testDates, weighting } = groups.documentation;
+  const lines: readonly (readonly [string, string | number])[] = [
+    ['Survey', project.title],
+    ['Subtitle', project.subtitle],
+    ['Edition', release.edition],
+    ['Date', release.date],
+    ['Check', check],
+    ['Scale', tally === null ? '' : scaleInWords(tally.scale)],
+    ['Method', methodText(project)],
+    ['How to read', project.sheet.howToRead],
+    ['Cautions', project.sheet.cautions],
+    ['Notes', project.sheet.notes],
+    ['Population', population],
+    ['Sampling', sampling],
+    ['Participation', participation],
+    ['Tested', testDates],
+    ['Weighting', weighting],
+    ...(source === null
+      ? []
+      : ([
+          ['Source', source.kind === 'typed' ? 'counts typed in' : source.file],
+          ['SHA-256 of the source', source.sha256],
+          ['Rows read', source.rowsRead],
+          ['Rows kept', source.rowsKept],
+          ...source.leftOut.map(({ rule, count, rows }): readonly [string, string] => [
+            'Left out',
+            `${count} for ${LEFT_OUT_WORDS[rule]}${rowNumbers(rows, count)}`,
+          ]),
+        ] as const)),
+  ];
+  return lines.filter(([, value]) => String(value).trim() !== '');
+}
+
+function rowNumbers(rows: readonly number[], count: number): string {
+  if (rows.length === 0) return '';
+  const shown = rows.slice(0, ROW_NUMBERS_SHOWN);
+  return `: ${shown.length === 1 ? 'row' : 'rows'} ${shown.join(', ')}${count > shown.length ? ' …' : ''}`;
+}

@@ -1,0 +1,16 @@
+import type { JobResult, Reply } from '../../shared-core/desk.ts';
+import type { NormProject } from '../../shared-core/norms/norm-project.ts';
+
+/** What a press worker is started with; plain JSON. */
+export type PressRequest =
+  | { readonly kind: 'draw'; readonly project: NormProject }
+  | { readonly kind: 'press'; readonly project: NormProject; readonly folder: string };
+
+/** What a press worker reports; plain JSON. */
+export type PressReport =
+  | { readonly kind: 'progress'; readonly progress: number; readonly doing: string }
+  | { readonly kind: 'result'; readonly reply: Reply<JobResult> };
+
+export function isPressRequest(value: unknown): value is PressRequest {
+  return typeof value === 'object' && value !== null && 'kind' in value && 'project' in value;
+}

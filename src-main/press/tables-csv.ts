@@ -1,0 +1,49 @@
+import { definitionKey } from '../../shared-core/norms/definitions.ts';
+import type { NormSet } from '../../shared-core/norms/norm-set.ts';
+import { safeForCsv } from './safe-text.ts';
+
+/**
+ * All tables as one csv file by RFC 4180: UTF-8 with a byte-order mark (spreadsheets guess the encoding without it),
+ * comma, CRLF, decimal point. Numbers are unrounded; `printed` and the columns `printed-…` hold the texts of the booklet.
+ */
+export function tablesCsv(normSet: NormSet): Uint8Array {
+  const { project, groups, check } = normSet;
+  const { columns } = project.table;
+  const { by } = project.groups;
+  const heads = [
+    ...by.map(safeForCsv),
+    'group-title',
+    'raw-score',
+    'n',
+    'count',
+    'cumulative',
+    'percentile-rank',
+    'printed',
+    ...columns.map((key) => `printed-${key}`),
+    'edition',
+    'definition',
+    'check',
+  ];
+  const records = groups.flatMap(({ group, summary, rows }) =>
+    rows.map((row) => [
+      ...by.map((_, index) => safeForCsv(group.values[index] ?? '')),
+      safeForCsv(group.title),
+      String(row.score),
+      String(summary.n),
+      String(row.count),
+      String(row.cumulative),
+      String(row.percentileRank),
+      row.printed,
+      ...columns.map((key) => row.texts[key]),
+      safeForCsv(project.release.edition),
+      definitionKey(project.curve.definition),
+      check,
+    ]),
+  );
+  const text = [heads, ...records].map((record) => `${record.map(quoted).join(',')}\r\n`).join('');
+  return new TextEncoder().encode(`\uFEFF${text}`);
+}
+
+function quoted(cell: string): string {
+  return /[",\r\n]|^\s|\s$/.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;
+}

@@ -1,0 +1,57 @@
+import type { Cell, Worksheet } from 'exceljs';
+import type { SheetChoices } from '../../shared-core/norms/norm-project.ts';
+import type { TypedCell } from './typed-cell.ts';
+
+/** Numbers by which workbooks name paper (Office Open XML, part 1, 18.3.1.63). */
+const PAPER_SIZES: Readonly<Record<SheetChoices['paper'], number>> = { letter: 1, a4: 9, a5: 11 };
+
+const INK = { argb: 'FF1E2326' };
+const FINE = { style: 'thin', color: { argb: 'FFD8D3C7' } } as const;
+const STRONG = { style: 'thin', color: INK } as const;
+
+export function fillCell(cell: Cell, typed: TypedCell): void {
+  cell.value = typed.value;
+  if (typed.kind === 'number') cell.numFmt = typed.format;
+  cell.alignment = { horizontal: 'right' };
+}
+
+export function asTitle(cell: Cell): void {
+  cell.font = { name: 'Source Serif 4', size: 15, bold: true, color: INK };
+}
+
+export function asProse(cell: Cell): void {
+  cell.alignment = { wrapText: true, vertical: 'top' };
+}
+
+/** A head of two rules; the row below it starts the table. */
+export function asHead(cell: Cell): void {
+  cell.font = { bold: true, size: 9, color: INK };
+  cell.alignment = { horizontal: 'right', vertical: 'bottom', wrapText: true };
+  cell.border = { top: STRONG, bottom: STRONG };
+}
+
+export function ruleBelow(cell: Cell, weight: 'fine' | 'strong'): void {
+  cell.border = { bottom: weight === 'fine' ? FINE : STRONG };
+}
+
+/** Prose over several columns, as high as its lines; widths are in characters of the usual type. */
+export function proseRow(sheet: Worksheet, row: number, text: string, columns: number, width: number): void {
+  if (columns > 1) sheet.mergeCells(row, 1, row, columns);
+  const cell = sheet.getCell(row, 1);
+  cell.value = text;
+  asProse(cell);
+  const lines = text.split('\n').reduce((sum, line) => sum + Math.max(1, Math.ceil((line.length * 1.1) / width)), 0);
+  sheet.getRow(row).height = 15 * lines;
+}
+
+/** Paper, orientation and foot as in the booklet. */
+export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string): void {
+  Object.assign(sheet.pageSetup, {
+    paperSize: PAPER_SIZES[choices.paper],
+    orientation: choices.orientation,
+    fitToPage: true,
+    fitToWidth: 1,
+    fitToHeight: 0,
+  });
+  sheet.headerFooter.oddFooter = `&L${foot.replaceAll('&', '&&')}&RPage &P of &N`;
+}
