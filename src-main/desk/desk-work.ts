@@ -1,11 +1,7 @@
 import type { CohortPreview, JobResult, Reply } from '../../shared-core/desk.ts';
-import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';
+import type { PressRequest } from '../press/press-message.ts';
 import type { JobHooks } from './jobs.ts';
-
-export type PressRequest =
-  | { readonly kind: 'draw'; readonly project: NormProject }
-  | { readonly kind: 'press'; readonly project: NormProject; readonly folder: string };
 
 /** The work behind the desk that is not about project files: reading cohorts and pressing. */
 export interface DeskWork {

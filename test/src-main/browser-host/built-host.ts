@@ -24,6 +24,7 @@ export async function buildHost(): Promise<string> {
         input: {
           'browser-host': here('../../../src-main/browser-host/main.ts'),
           'tally-worker': here('../../../src-main/cohort-file/tally-worker.ts'),
+          'press-worker': here('../../../src-main/press/press-worker.ts'),
         },
         output: { entryFileNames: '[name].js' },
       },

@@ -6,6 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { JobState } from '../../../shared-core/desk.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { projectToText } from '../../../shared-core/norms/project-text.ts';
+import { fingerprintOf } from '../../../src-main/project-file/project-store.ts';
 import { projectWithTally } from '../project-file/sample-projects.ts';
 import { buildHost, runHost, type Environment, type RunningHost } from './built-host.ts';
 
@@ -83,6 +84,41 @@ describe('a kill of the whole program in the midst of reading a cohort', () => {
     again.child.kill('SIGTERM');
     expect(await again.ended).toEqual([0, null]);
     expect(await readdir(join(folder, 'data', 'uploads'))).toEqual([]);
+  });
+});
+
+describe('pressing the sample', () => {
+  const name = 'Ostrey Vale';
+
+  it('leaves nothing half-pressed after a kill, and the next press writes every file whole', async () => {
+    const projects = join(folder, 'pressed');
+    const host = await start(['--no-window', '--folder', projects]);
+    await host.enter();
+    const { project } = await host.ask('open-sample', {});
+    const { job } = await host.ask('press', { project, name });
+    await stateOf(host, job, (state) => state.state !== 'running' || state.progress > 0.05);
+    host.child.kill('SIGKILL');
+    await host.ended;
+    const left = await readdir(projects);
+    expect(left).toHaveLength(1);
+    expect(left[0]).toMatch(/^\.normloom-press-/);
+
+    const again = await start(['--no-window', '--folder', projects]);
+    await again.enter();
+    await again.ask('list-projects', {});
+    expect(await readdir(projects)).toEqual([]);
+    const press = await again.ask('press', { project, name });
+    const end = await stateOf(again, press.job, (state) => state.state !== 'running');
+    if (end.state !== 'done' || end.result.kind !== 'pressed') throw new Error(JSON.stringify(end));
+    const { pressed } = end.result;
+    expect(await readdir(projects)).toEqual(['Ostrey Vale – edition 1.0']);
+    expect(pressed.folder).toBe(join(projects, 'Ostrey Vale – edition 1.0'));
+    expect(pressed.files.map(({ file }) => file).sort()).toEqual((await readdir(pressed.folder)).sort());
+    for (const { file, sha256 } of pressed.files) {
+      expect(fingerprintOf(await readFile(join(pressed.folder, file))), file).toBe(sha256);
+    }
+    again.child.kill('SIGTERM');
+    await again.ended;
   });
 });
 
