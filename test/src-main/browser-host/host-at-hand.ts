@@ -58,15 +58,18 @@ export function sendTo(
   { method = 'GET', headers = {}, body }: Asked = {},
 ): Promise<Answer> {
   return new Promise((resolve, reject) => {
-    const request = httpRequest({ host: '127.0.0.1', port, path, method, headers, agent: false }, (response) => {
-      const chunks: Buffer[] = [];
-      response.on('data', (chunk: Buffer) => chunks.push(chunk));
-      response.on('end', () => {
-        const text = Buffer.concat(chunks).toString('utf8');
-        resolve({ status: response.statusCode ?? 0, headers: response.headers, text });
-      });
-      response.on('error', reject);
-    });
+    const request = httpRequest(
+      { host: '127.0.0.1', port, path, method, headers: { connection: 'close', ...headers } },
+      (response) => {
+        const chunks: Buffer[] = [];
+        response.on('data', (chunk: Buffer) => chunks.push(chunk));
+        response.on('end', () => {
+          const text = Buffer.concat(chunks).toString('utf8');
+          resolve({ status: response.statusCode ?? 0, headers: response.headers, text });
+        });
+        response.on('error', reject);
+      },
+    );
     request.on('error', reject);
     request.end(body);
   });
