@@ -58,13 +58,18 @@ export function guessReading(records: readonly (readonly string[])[], split: Spl
         : 'The first row is taken as data, because it holds numbers like the rows below.',
       ...(decimalMark === ',' ? ['The decimal mark is taken to be a comma, because cells such as 12,5 occur.'] : []),
       ...remarks,
-      ...(missing.length === 0
-        ? []
-        : [
-            `${missing.join(', ')} ${missing.length === 1 ? 'is' : 'are'} taken as a code for a missing score, well outside the other scores.`,
-          ]),
+      ...missingRemark(missing),
     ],
   };
+}
+
+function missingRemark(missing: readonly string[]): readonly string[] {
+  if (missing.length === 0) return [];
+  const taken =
+    missing.length === 1 ? 'is taken as a code for a missing score' : 'are taken as codes for missing scores';
+  return [
+    `${missing.join(', ')} ${taken}, because nothing else in the column is like ${missing.length === 1 ? 'it' : 'them'}.`,
+  ];
 }
 
 /** A given reading fitted to the columns that the file has now: their roles are kept, new columns are left unused. */

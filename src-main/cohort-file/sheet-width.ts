@@ -2,7 +2,7 @@ import type { RowTaker } from './row-taker.ts';
 
 /**
  * Rows of a sheet end at their last cell that holds something; this fills them up to the width of the heading, so that
- * only rows with cells beyond it differ from it. Blank rows stay as they are.
+ * only rows with cells beyond it differ from it.
  */
 export function evenWidth(taker: RowTaker): RowTaker {
   let width = 0;

@@ -37,7 +37,7 @@ export async function readWholeWorkbook(
   const sheet = name === null ? undefined : book.Sheets[name];
   if (sheet === undefined) return { ok: false, problem: noSuchSheet(known.file, name) };
   const facts = { mark: reading.decimalMark, from1904: book.Workbook?.WBProps?.date1904 === true };
-  const records = withoutEnd(((sheet['!data'] ?? []) as SheetCells).map((cells) => recordOf(cells, facts)));
+  const records = withoutEnd(Array.from((sheet['!data'] ?? []) as SheetCells, (cells) => recordOf(cells, facts)));
   const numbering = new RowNumbering(reading, evenWidth(taker));
   for (let start = 0; start < records.length; start += ROWS_AT_ONCE) {
     if (signal.aborted) return { ok: false, problem: CANCELLED };
@@ -63,7 +63,7 @@ async function openWhole(known: KnownFile, only: { readonly bookSheets?: boolean
       ? { ok: false, problem: damagedWorkbook(known.file) }
       : { ok: true, value: { book, bytes } };
   } catch (error) {
-    const locked = error instanceof Error && /password|encrypt/i.test(error.message);
+    const locked = error instanceof Error && /password|ODS Encryption|Encryption scheme/i.test(error.message);
     return { ok: false, problem: locked ? lockedWorkbook(known.file) : damagedWorkbook(known.file) };
   }
 }

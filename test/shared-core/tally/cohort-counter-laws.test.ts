@@ -53,15 +53,19 @@ describe('exact sums', () => {
 
   it('do not depend on the order of the rows, to the byte', () => {
     fc.assert(
-      fc.property(rows, fc.infiniteStream(fc.double({ min: 0, max: 1, noNaN: true })), (some, keys) => {
-        const shuffled = some
-          .map((one) => ({ one, key: keys.next().value ?? 0 }))
-          .sort((left, right) => left.key - right.key)
-          .map(({ one }) => one);
-        const text = (all: readonly (readonly string[])[]): string =>
-          JSON.stringify(countRows(reading, COLUMNS, all).tally);
-        expect(text(shuffled)).toBe(text(some));
-      }),
+      fc.property(
+        rows,
+        fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 62, maxLength: 62 }),
+        (some, keys) => {
+          const shuffled = some
+            .map((one, index) => ({ one, key: keys[index] ?? 0 }))
+            .sort((left, right) => left.key - right.key)
+            .map(({ one }) => one);
+          const text = (all: readonly (readonly string[])[]): string =>
+            JSON.stringify(countRows(reading, COLUMNS, all).tally);
+          expect(text(shuffled)).toBe(text(some));
+        },
+      ),
     );
   });
 

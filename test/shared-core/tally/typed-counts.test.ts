@@ -61,7 +61,7 @@ describe('counts typed in', () => {
       '8: A range of scores cannot be read. Give one line for each score.',
       '9: "-1" is not a count. Write a whole number of 0 or more.',
     ]);
-    expect(read('10 – 14 3\n15 – 19 4')[0]).toMatch(/^1: A range/);
+    expect(readTypedCounts('10 – 14 3\n15 – 19 4', null).problems[0]?.problem).toMatch(/^A range/);
   });
 
   it('are refused as a whole where nothing can be tallied', () => {
