@@ -24,15 +24,18 @@ const host = (packages: readonly string[], folders: readonly string[]): Rule => 
 /** The first folder that a file lies in decides; the rooms of src-main stand before src-main itself. */
 const RULES: readonly (readonly [string, Rule])[] = [
   ['shared-core', CORE],
-  ['src-main/cohort-file', host(['papaparse', 'exceljs', '@e965/xlsx', 'jszip', 'valibot', '@noble/hashes'], [])],
+  ['src-main/cohort-file', host(['papaparse', '@e965/xlsx', 'jszip'], [])],
   [
     'src-main/press',
-    host(['pdfmake', 'exceljs', 'jszip', 'papaparse', 'valibot', '@noble/hashes', '@expo-google-fonts/*'], []),
+    host(
+      ['pdfmake', 'exceljs', 'jszip', 'papaparse', 'write-file-atomic', '@expo-google-fonts/*'],
+      ['src-main/project-file'],
+    ),
   ],
-  ['src-main/project-file', host(['write-file-atomic', 'valibot', '@noble/hashes'], [])],
+  ['src-main/project-file', host(['write-file-atomic', 'valibot'], [])],
   ['src-main/electron', host(['electron'], ['src-main'])],
   ['src-main/browser-host', host(['valibot'], ['src-main'])],
-  ['src-main/command-line', host(['valibot'], ['src-main'])],
+  ['src-main/command-line', host(['papaparse'], ['src-main'])],
   ['src-main', host(['valibot'], ['src-main'])],
   ['src-renderer', PAGE],
 ];
