@@ -4,8 +4,6 @@ import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
 import type { Direction, ScoreScale } from '../../../shared-core/scale/score-scale.ts';
 
-export const MIDPOINT = { kind: 'midpoint' } as const;
-
 /** A whole-number scale from 0. */
 export function scaleTo(max: number, direction: Direction = 'high-is-good'): ScoreScale {
   return { min: 0, max, step: 1, direction };

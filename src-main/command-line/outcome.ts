@@ -1,0 +1,19 @@
+/** How a command ended: its result for stdout, or why there is none; remarks are for stderr either way. */
+export type Outcome =
+  | { readonly kind: 'done'; readonly result: string | Uint8Array; readonly remarks: readonly string[] }
+  | { readonly kind: 'wrong-usage'; readonly problem: string }
+  | { readonly kind: 'refused'; readonly problem: string; readonly remarks: readonly string[] };
+
+export function wrongUsage(problem: string): Outcome {
+  return { kind: 'wrong-usage', problem };
+}
+
+export function refused(problem: string, remarks: readonly string[] = []): Outcome {
+  return { kind: 'refused', problem, remarks };
+}
+
+/** Exit codes that scripts rely on. */
+export const EXIT_CODES = { done: 0, 'wrong-usage': 2, refused: 3 } as const satisfies Record<Outcome['kind'], number>;
+
+/** What a shell reports for a program that was interrupted from the keyboard. */
+export const EXIT_INTERRUPTED = 130;
