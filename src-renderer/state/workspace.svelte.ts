@@ -194,6 +194,7 @@ export class Workspace {
       this.#handle = answer.value.handle;
       this.file = answer.value.file;
       this.saved = { kind: 'saved', at: answer.value.at };
+      this.problem = answer.value.remark;
     }
   }
 

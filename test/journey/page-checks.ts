@@ -4,7 +4,9 @@ import { expect, type Page } from 'playwright/test';
 /** Nothing that the accessibility checker finds, by the rules of WCAG 2.1 A and AA and its best practices. */
 export async function expectAccessible(page: Page): Promise<void> {
   const { violations } = await new AxeBuilder({ page }).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html.slice(0, 120)).join(' | ')}`)).toEqual([]);
+  expect(
+    violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html.slice(0, 120)).join(' | ')}`),
+  ).toEqual([]);
 }
 
 /** The page as a whole never scrolls sideways. */
@@ -24,6 +26,9 @@ export function complaintsOf(page: Page): readonly string[] {
 }
 
 export async function goTo(page: Page, station: string): Promise<void> {
-  await page.getByRole('navigation', { name: 'Stations' }).getByRole('button', { name: new RegExp(`^${station}`) }).click();
+  await page
+    .getByRole('navigation', { name: 'Stations' })
+    .getByRole('button', { name: new RegExp(`^${station}`) })
+    .click();
   await expect(page.getByRole('main', { name: station })).toBeVisible();
 }
