@@ -15,10 +15,10 @@ const BLOCK_WORDS = 16;
 /**
  * A set of fixed size that never forgets a text but now and then claims one it has not met (Bloom 1970, Communications
  * of the ACM 13(7), with the bits of a text kept in one block: Putze, Sanders & Singler 2009). With 2^28 bits and
- * 10,000,000 texts fewer than one new text in 10,000 is claimed; what is claimed is counted exactly in another pass.
+ * 10,000,000 texts fewer than one new text in 20,000 is claimed; what is claimed is counted exactly in another pass.
  */
 export class SeenFilter {
-  private readonly words: Uint32Array;
+  private readonly words: Int32Array;
   private readonly blockMask: number;
 
   /** Size as a power of two, 9 to 31 (one block to 256 MB). */
@@ -26,7 +26,7 @@ export class SeenFilter {
     if (!Number.isInteger(bitsExponent) || bitsExponent < 9 || bitsExponent > 31) {
       throw new RangeError('the filter holds 2^9 to 2^31 bits');
     }
-    this.words = new Uint32Array(2 ** bitsExponent / 32);
+    this.words = new Int32Array(2 ** bitsExponent / 32);
     this.blockMask = this.words.length / BLOCK_WORDS - 1;
   }
 
@@ -42,9 +42,10 @@ export class SeenFilter {
     }
     const place = spread(first);
     const block = (place & this.blockMask) * BLOCK_WORDS;
-    const early = this.mark(block, spread(second));
-    const late = this.mark(block, spread(place ^ second));
-    return early && late;
+    const some = this.mark(block, spread(second));
+    const more = this.mark(block, spread(place ^ second));
+    const rest = this.mark(block, spread((place + Math.imul(second, 0x9e3779b1)) | 0));
+    return some && more && rest;
   }
 
   /** Sets three bits of the block, chosen by nine bits of the hash each; true when all of them were set before. */

@@ -3,18 +3,24 @@ import type { Reading } from '../../shared-core/norms/reading.ts';
 import { readDelimited } from './delimited-rows.ts';
 import type { KnownFile } from './file-kind.ts';
 import type { PassEnd, ReadHooks, RowTaker } from './row-taker.ts';
-import { readWholeWorkbook, wholeWorkbookSheets } from './whole-workbook-rows.ts';
-import { readXlsx, xlsxSheets } from './workbook-rows.ts';
 
-/** One pass over a cohort file of any kind, from its first row until the taker stops or the file ends. */
-export function readRows(known: KnownFile, reading: Reading, taker: RowTaker, hooks: ReadHooks): Promise<PassEnd> {
+/**
+ * One pass over a cohort file of any kind, from its first row until the taker stops or the file ends. What reads
+ * workbooks is loaded when the first workbook comes.
+ */
+export async function readRows(
+  known: KnownFile,
+  reading: Reading,
+  taker: RowTaker,
+  hooks: ReadHooks,
+): Promise<PassEnd> {
   switch (known.kind) {
     case 'text':
       return readDelimited(known, reading, taker, hooks);
     case 'xlsx':
-      return readXlsx(known, reading, taker, hooks);
+      return (await import('./workbook-rows.ts')).readXlsx(known, reading, taker, hooks);
     case 'whole-workbook':
-      return readWholeWorkbook(known, reading, taker, hooks);
+      return (await import('./whole-workbook-rows.ts')).readWholeWorkbook(known, reading, taker, hooks);
   }
 }
 
@@ -24,8 +30,8 @@ export async function sheetsOf(known: KnownFile): Promise<Reply<readonly string[
     case 'text':
       return { ok: true, value: [] };
     case 'xlsx':
-      return xlsxSheets(known);
+      return (await import('./workbook-rows.ts')).xlsxSheets(known);
     case 'whole-workbook':
-      return wholeWorkbookSheets(known);
+      return (await import('./whole-workbook-rows.ts')).wholeWorkbookSheets(known);
   }
 }

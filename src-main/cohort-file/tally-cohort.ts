@@ -121,8 +121,8 @@ function changed(file: string): string {
   return `${file} was changed while it was read. Read it again when nobody writes to it.`;
 }
 
-/** 128 bits for each row that a file of that size may hold, so that the filter hardly ever suspects without ground. */
+/** About 60 bits for each row of usual length, so that the filter hardly ever suspects without ground. */
 function filterBitsFor({ bytes, kind }: KnownFile): number {
-  const rows = bytes / (kind === 'text' ? 12 : 2);
-  return Math.min(LARGEST_FILTER, Math.max(SMALLEST_FILTER, Math.ceil(Math.log2(rows * 128))));
+  const bits = Math.ceil(Math.log2(bytes * (kind === 'text' ? 2 : 16)));
+  return Math.min(LARGEST_FILTER, Math.max(SMALLEST_FILTER, bits));
 }
