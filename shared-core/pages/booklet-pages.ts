@@ -39,9 +39,7 @@ export function composeBooklet(normSet: NormSet): Booklet {
       ...remarks,
       ...sheets
         .filter(({ shortened, frame }) => shortened || frame.shortened)
-        .map(
-          ({ norms }) => `The titles of ${norms.group.title} are too long for the page and end in “…”. Shorten them.`,
-        ),
+        .map(({ group }) => `The titles on table ${group + 1} are too long for the page and end in “…”. Shorten them.`),
       ...missingRemark(pages.flatMap(({ blocks }) => blocks)),
     ],
   };

@@ -19,7 +19,7 @@ export interface PageFrame {
   readonly shortened: boolean;
 }
 
-const MOST_HEAD_LINES = 3;
+const MOST_HEAD_LINES = 4;
 /** The head stands this much above the margin, the foot this much below it. */
 const OUTSIDE = 6;
 const ROOM_AT_RULE = 4;

@@ -3,7 +3,7 @@ import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { LEFT_OUT_WORDS } from '../../shared-core/norms/reading.ts';
 import { methodText } from '../../shared-core/norms/statements.ts';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
-import { asProse, asTitle, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asProse, asTitle, ruleBelow, setUpPages } from './workbook-look.ts';
 
 export const ABOUT = 'About';
 const WIDTHS = [24, 90] as const;
@@ -18,7 +18,7 @@ export function fillAboutSheet(sheet: Worksheet, normSet: NormSet): void {
     const [left, right] = [sheet.getCell(index + 3, 1), sheet.getCell(index + 3, 2)];
     left.value = name;
     right.value = value;
-    left.font = { bold: true };
+    asBold(left);
     asProse(left);
     asProse(right);
     if (typeof value === 'number') right.alignment = { horizontal: 'left', vertical: 'top' };

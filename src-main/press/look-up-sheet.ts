@@ -5,7 +5,7 @@ import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import { cellText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { printCount } from '../../shared-core/scores/printed-number.ts';
 import { distinctTitles } from './sheet-names.ts';
-import { asHead, asTitle, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asHead, asLabel, asTitle, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
 
 export const LOOK_UP = 'Look-up';
 export const LOOK_UP_ROWS = 'Look-up rows';
@@ -59,21 +59,21 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   score.value = exampleRow.score;
   for (const cell of [group, score]) {
     cell.fill = CHOICE_FILL;
-    cell.font = { bold: true };
+    asBold(cell);
     cell.alignment = { horizontal: 'right' };
     ruleBelow(cell, 'strong');
   }
   columns.forEach((column, index) => {
     const row = FIRST_RESULT_ROW + index;
     const name = sheet.getCell(row, 1);
-    name.value = `${column.name.charAt(0).toUpperCase()}${column.name.slice(1)}`;
+    name.value = asLabel(column.name);
     const cell = sheet.getCell(row, 2);
     const letter = list.getColumn(3 + index).letter;
     const found = `INDEX(${range(letter, 2, 1 + groups.length * perGroup)},${onList(places.position)})`;
     const otherwise = index === 0 ? textInFormula(notFound(normSet)) : '""';
     cell.value = { formula: `IFERROR(${found},${otherwise})`, result: cellText(exampleRow, column) };
     cell.alignment = { horizontal: 'right', wrapText: true };
-    if (index === 0) for (const part of [name, cell]) part.font = { bold: true };
+    if (index === 0) for (const part of [name, cell]) asBold(part);
     for (const part of [name, cell]) ruleBelow(part, index === columns.length - 1 ? 'strong' : 'fine');
   });
   const people = FIRST_RESULT_ROW + columns.length;
@@ -153,8 +153,8 @@ function onList(cell: string): string {
 }
 
 function notFound({ project }: NormSet): string {
-  const scale = project.tally === null ? '' : ` Scores run from ${scaleInWords(project.tally.scale)}.`;
-  return `This score is not in the table.${scale}`;
+  const scores = project.tally === null ? '' : ` from ${scaleInWords(project.tally.scale)}`;
+  return `Not in the table. Choose a group from the list and type a raw score${scores}.`;
 }
 
 function textInFormula(text: string): string {

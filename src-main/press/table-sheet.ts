@@ -9,12 +9,12 @@ import {
   sheetTitle,
   surveyName,
 } from '../../shared-core/pages/sheet-texts.ts';
+import { inFives } from '../../shared-core/pages/table-rows.ts';
 import { typedCell } from './typed-cell.ts';
-import { asHead, asTitle, fillCell, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asHead, asTitle, fillCell, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
 
 const COLUMN_WIDTH = 11;
 const UNROUNDED_FORMAT = '0.000000';
-const ROWS_IN_BLOCK = 5;
 
 /** One group's table: what it is, its cautions, and a row of typed cells for each attainable score. */
 export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupNorms): void {
@@ -41,16 +41,17 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
     asHead(cell);
   });
   sheet.getRow(headRow).height = 28;
+  const endsFive = new Set(inFives(norms.rows, norms.group.table.scale).map((five) => five.at(-1)?.score));
   norms.rows.forEach((row, index) => {
     const at = headRow + 1 + index;
     columns.forEach((column, place) => {
       const cell = sheet.getCell(at, place + 1);
       fillCell(cell, typedCell(cellText(row, column)));
-      if (place === 0) cell.font = { bold: true };
+      if (place === 0) asBold(cell);
     });
     fillCell(sheet.getCell(at, width), { kind: 'number', value: row.percentileRank, format: UNROUNDED_FORMAT });
     const last = index === norms.rows.length - 1;
-    if (!last && (index + 1) % ROWS_IN_BLOCK !== 0) return;
+    if (!endsFive.has(row.score)) return;
     for (let place = 1; place <= width; place += 1) ruleBelow(sheet.getCell(at, place), last ? 'strong' : 'fine');
   });
   const lastRow = headRow + norms.rows.length;

@@ -9,6 +9,17 @@ const INK = { argb: 'FF1E2326' };
 const FINE = { style: 'thin', color: { argb: 'FFD8D3C7' } } as const;
 const STRONG = { style: 'thin', color: INK } as const;
 
+const BODY = { name: 'Calibri', family: 2, size: 11, color: INK } as const;
+
+export function asBold(cell: Cell): void {
+  cell.font = { ...BODY, bold: true };
+}
+
+/** The name of a column as it begins a line; letters that stand for quantities stay as they are. */
+export function asLabel(name: string): string {
+  return /^\p{Ll}{2}/u.test(name) ? `${name.charAt(0).toUpperCase()}${name.slice(1)}` : name;
+}
+
 export function fillCell(cell: Cell, typed: TypedCell): void {
   cell.value = typed.value;
   if (typed.kind === 'number') cell.numFmt = typed.format;
@@ -16,7 +27,7 @@ export function fillCell(cell: Cell, typed: TypedCell): void {
 }
 
 export function asTitle(cell: Cell): void {
-  cell.font = { name: 'Source Serif 4', size: 15, bold: true, color: INK };
+  cell.font = { ...BODY, size: 15, bold: true };
 }
 
 export function asProse(cell: Cell): void {
@@ -25,7 +36,7 @@ export function asProse(cell: Cell): void {
 
 /** A head of two rules; the row below it starts the table. */
 export function asHead(cell: Cell): void {
-  cell.font = { bold: true, size: 9, color: INK };
+  cell.font = { ...BODY, size: 9, bold: true };
   cell.alignment = { horizontal: 'right', vertical: 'bottom', wrapText: true };
   cell.border = { top: STRONG, bottom: STRONG };
 }

@@ -11,7 +11,7 @@ import { fillTableSheet } from './table-sheet.ts';
 /** Zip archives cannot hold an earlier day. */
 const FIRST_ZIP_DAY = new Date('1980-01-01T00:00:00Z');
 
-/** A workbook (xlsx): a look-up sheet, one sheet for each group, the rows behind the look-up, and where it came from. */
+/** A workbook (xlsx): a look-up sheet, one sheet for each group, where they come from, and the rows behind the look-up. */
 export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   const day = releaseDay(normSet.project);
   const workbook = new ExcelJS.Workbook();
@@ -27,8 +27,8 @@ export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   normSet.groups.forEach((norms, index) => {
     fillTableSheet(workbook.addWorksheet(names[index] ?? ''), normSet, norms);
   });
-  fillLookUp(lookUp, workbook.addWorksheet(LOOK_UP_ROWS), normSet);
   fillAboutSheet(workbook.addWorksheet(ABOUT), normSet);
+  fillLookUp(lookUp, workbook.addWorksheet(LOOK_UP_ROWS), normSet);
   return withFixedDates(await workbook.xlsx.writeBuffer(), day < FIRST_ZIP_DAY ? FIRST_ZIP_DAY : day);
 }
 

@@ -1,0 +1,67 @@
+import { mkdtemp, rm } from 'node:fs/promises';
+import { join } from 'node:path';
+import { fileURLToPath, pathToFileURL } from 'node:url';
+import { build } from 'vite';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { startPressJob } from '../../../src-main/press/press-job.ts';
+import { sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+
+const root = fileURLToPath(new URL('../../../', import.meta.url));
+const project = sampleProject({ scale: WHOLE_SCALE });
+const quiet = { onProgress: (): void => {} };
+const never = (): AbortSignal => new AbortController().signal;
+const script = (code: string): URL => new URL(`data:text/javascript,${encodeURIComponent(code)}`);
+
+let folder: string;
+let worker: URL;
+
+beforeAll(async () => {
+  // Beside the packages, which the built worker looks for when it runs.
+  folder = await mkdtemp(join(root, 'node_modules', '.press-worker-'));
+  await build({
+    configFile: false,
+    root,
+    logLevel: 'silent',
+    build: { ssr: join(root, 'src-main/press/press-worker.ts'), outDir: folder, emptyOutDir: false, minify: false },
+  });
+  worker = pathToFileURL(join(folder, 'press-worker.js'));
+});
+
+afterAll(async () => {
+  await rm(folder, { recursive: true, force: true });
+});
+
+describe('startPressJob', () => {
+  it('draws the pages in a thread and tells how far it is', async () => {
+    const told: string[] = [];
+    const hooks = { onProgress: (progress: number, doing: string) => told.push(`${doing} ${progress}`) };
+    const reply = await startPressJob({ kind: 'draw', project }, hooks, never(), worker);
+    if (!reply.ok || reply.value.kind !== 'drawn') throw new Error('not drawn');
+    expect(reply.value.drawn.pages).toBe(2);
+    expect(Buffer.from(reply.value.drawn.pdf, 'base64').toString('latin1', 0, 8)).toBe('%PDF-1.7');
+    expect(told.at(-1)).toBe('Drawing the pages 1');
+  });
+
+  it('presses into a folder', async () => {
+    const into = join(folder, 'pressed');
+    const reply = await startPressJob({ kind: 'press', project, folder: into }, quiet, never(), worker);
+    if (!reply.ok || reply.value.kind !== 'pressed') throw new Error('not pressed');
+    expect(reply.value.pressed.folder).toBe(into);
+    expect(reply.value.pressed.files).toHaveLength(4);
+  });
+
+  it('ends the thread when it is cancelled', async () => {
+    const cancel = new AbortController();
+    const job = startPressJob({ kind: 'draw', project }, quiet, cancel.signal, script('setInterval(() => {}, 1000)'));
+    cancel.abort();
+    expect(await job).toMatchObject({ ok: false, problem: expect.stringContaining('stopped') });
+    expect(await startPressJob({ kind: 'draw', project }, quiet, cancel.signal, worker)).toMatchObject({ ok: false });
+  });
+
+  it('turns a fault of the thread into a sentence', async () => {
+    const faulty = startPressJob({ kind: 'draw', project }, quiet, never(), script('throw new Error("no ink")'));
+    expect(await faulty).toMatchObject({ ok: false, problem: expect.stringContaining('no ink') });
+    const early = startPressJob({ kind: 'draw', project }, quiet, never(), script(''));
+    expect(await early).toMatchObject({ ok: false, problem: expect.stringContaining('ended early') });
+  });
+});
