@@ -47,6 +47,7 @@ export function curveChart(norms: GroupNorms, inks: ChartInks): ChartConfigurati
       animation: false,
       responsive: true,
       maintainAspectRatio: false,
+      layout: { autoPadding: false, padding: { right: 8, top: 4 } },
       interaction: { mode: 'nearest', axis: 'x', intersect: false },
       plugins: {
         tooltip: {
@@ -100,6 +101,7 @@ export function frequencyChart(norms: GroupNorms, inks: ChartInks): ChartConfigu
       animation: false,
       responsive: true,
       maintainAspectRatio: false,
+      layout: { autoPadding: false, padding: { right: 8, top: 4 } },
       parsing: false,
       normalized: true,
       plugins: { tooltip: { enabled: false } },
