@@ -1,6 +1,7 @@
 import type { GroupNorms } from '../norms/norm-set.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
+import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';
 
 export interface OgiveColours {
@@ -55,7 +56,7 @@ export function ogivePicture(norms: GroupNorms, size: PictureSize, colours: Ogiv
       horizontal(y(tick), EDGE.left, size.width - EDGE.right, tick === 0 ? colours.soft : colours.grid),
     ),
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
-    ...scoreTicks(scale.min, scale.max, size.width).flatMap((tick) => [
+    ...scoreTicks(scale, size.width).flatMap((tick) => [
       `<path d="M${fixed(x(tick))} ${fixed(y(0))}v2.5" fill="none" stroke="${colours.soft}" stroke-width="0.5"/>`,
       words(printNumber(tick, decimalOf(tick).decimals), { x: x(tick), y: y(0) + 9.5 }, 'middle', colours.soft),
     ]),
@@ -89,12 +90,12 @@ function steps(norms: GroupNorms, x: (score: number) => number, y: (percent: num
   return corners;
 }
 
-/** Round scores about 28 points apart or more: 0, 5, 10 … */
-function scoreTicks(min: number, max: number, width: number): readonly number[] {
+/** Round scores about 28 points apart or more, never closer than the scale's step: 0, 5, 10 … */
+function scoreTicks({ min, max, step: scaleStep }: ScoreScale, width: number): readonly number[] {
   const least = (max - min) / Math.max(2, Math.floor((width - EDGE.left - EDGE.right) / 28));
   const power = 10 ** Math.floor(Math.log10(least));
-  const step =
-    [1, 2, 5, 10].map((factor) => factor * power).find((candidate) => candidate >= least * 0.999) ?? 10 * power;
+  const round = [1, 2, 5].map((factor) => factor * power).find((candidate) => candidate >= least * 0.999) ?? 10 * power;
+  const step = Math.max(round, scaleStep);
   const first = Math.ceil(min / step - 1e-9);
   const last = Math.floor(max / step + 1e-9);
   return Array.from({ length: last - first + 1 }, (_, index) => Number(((first + index) * step).toPrecision(12)));

@@ -31,6 +31,7 @@ async function open(bytes: Uint8Array): Promise<ExcelJS.Workbook> {
   return workbook;
 }
 
+const OFFICE = 'soffice';
 let bytes: Uint8Array;
 let folder: string;
 
@@ -132,7 +133,7 @@ describe('tablesWorkbook', () => {
     );
     const profile = `-env:UserInstallation=${pathToFileURL(join(folder, 'profile')).href}`;
     const filter = 'csv:Text - txt - csv (StarCalc):44,34,76,1';
-    execFileSync('soffice', ['--headless', profile, '--convert-to', filter, '--outdir', folder, ...files], {
+    execFileSync(OFFICE, ['--headless', profile, '--convert-to', filter, '--outdir', folder, ...files], {
       stdio: 'ignore',
     });
     const results = await Promise.all(files.map((file) => lookedUp(file.replace(/xlsx$/, 'csv'))));
