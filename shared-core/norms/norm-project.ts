@@ -11,7 +11,7 @@ import { LEFT_OUT_RULES } from './reading.ts';
 const shortText = v.pipe(v.string(), v.maxLength(400));
 const longText = v.pipe(v.string(), v.maxLength(8000));
 const wholeNumber = v.pipe(v.number(), v.safeInteger(), v.minValue(0));
-const unitText = v.pipe(v.string(), v.regex(/^\d{1,160}$/));
+const unitText = v.pipe(v.string(), v.regex(/^\d{1,200}$/));
 
 const scoreScale = v.pipe(
   v.object({

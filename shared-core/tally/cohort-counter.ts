@@ -165,7 +165,11 @@ function tallyCell(cell: GroupCell, placed: PlacedSlots, length: number): TallyC
 function nothingKept({ rowsRead, leftOut }: RowFlow, reading: Reading): string {
   const [most] = leftOut.toSorted((left, right) => right.count - left.count);
   if (most === undefined) return 'The file has no rows below the heading.';
-  const why = `None of the ${rowsRead} rows can be counted; ${most.count} of them have ${LEFT_OUT_WORDS[most.rule]}.`;
+  const words = LEFT_OUT_WORDS[most.rule];
+  const why =
+    rowsRead === 1
+      ? `The only row cannot be counted: it has ${words}.`
+      : `None of the ${rowsRead} rows can be counted; ${most.count} of them have ${words}.`;
   return `${why} ${whatToDo(most.rule, reading)}`;
 }
 

@@ -5,7 +5,7 @@ import { guessSeparator } from '../../shared-core/tally/guess-separator.ts';
 import { knowFile, unreadable, type KnownFile } from './file-kind.ts';
 import { guessReading, plainReading, refitReading } from './guess-reading.ts';
 import { readRows, sheetsOf } from './read-rows.ts';
-import { guessEncoding, textBlocks } from './text-encoding.ts';
+import { guessEncoding, textStart } from './text-encoding.ts';
 
 const PREVIEW_ROWS = 200;
 /** Rows that guesses are made from. */
@@ -79,7 +79,7 @@ async function guessSplit(known: KnownFile): Promise<Reply<Pick<Reading, 'encodi
     return { ok: false, problem: unreadable(error, known.file) };
   }
   const encoding = guessEncoding(sample, sample.length === known.bytes);
-  const text = textBlocks(encoding).decode(sample.subarray(0, 256 * 1024));
+  const text = textStart(encoding, sample.subarray(0, 256 * 1024));
   return { ok: true, value: { encoding, separator: guessSeparator(text), sheet: null } };
 }
 
@@ -118,6 +118,11 @@ function oddities(columns: readonly string[], rows: readonly (readonly string[])
   const renamed = columns.filter((column) => /^(column \d+|.* \(\d+\))$/.test(column));
   return [
     ...(columns.length === 1 ? ['Only one column was found. If there should be more, change the separator.'] : []),
+    ...(ragged > rows.length / 2
+      ? [
+          'Most rows differ from the heading in their number of cells. Take out what stands above it, or change the separator.',
+        ]
+      : []),
     ...(ragged > 0 ? [`${ragged} of the first ${rows.length} rows have more or fewer cells than the heading.`] : []),
     ...(renamed.length > 0 ? [`Columns without a name of their own are called ${renamed.join(', ')}.`] : []),
   ];

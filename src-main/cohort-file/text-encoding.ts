@@ -21,6 +21,11 @@ export function textBlocks(encoding: Encoding): TextBlocks {
   return { decode: (block) => decoder.decode(block, { stream: true }), end: () => decoder.decode() };
 }
 
+/** The start of a text as it looks in an encoding, with signs in place of bytes that the encoding does not have. */
+export function textStart(encoding: Encoding, start: Uint8Array): string {
+  return encoding === 'windows-1252' ? windowsText(start) : new TextDecoder(encoding).decode(start, { stream: true });
+}
+
 /** Written out, because some releases of Node decode Windows-1252 as Latin-1. */
 function windowsText(block: Uint8Array): string {
   return Buffer.from(block.buffer, block.byteOffset, block.byteLength)

@@ -261,6 +261,9 @@ describe('readings that do not fit', () => {
   it('name why no row can be kept', () => {
     const commas = tryRows(readingWith(SCORE), ['score'], [['1,5'], ['2,5'], ['']]);
     expect(commas).toMatch(/None of the 3 rows.*2 of them have a score that is not a number.*decimal mark/);
+    expect(tryRows(readingWith(SCORE), ['score'], [['x']])).toMatch(
+      /^The only row cannot be counted: it has a score that/,
+    );
     expect(tryRows(readingWith(SCORE), ['score'], [])).toMatch(/no rows below the heading/);
   });
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { cohortFolder, look } from './cohorts-at-hand.ts';
+import { cohortFolder, look, lookProblem } from './cohorts-at-hand.ts';
 
 const folder = cohortFolder();
 
@@ -93,5 +93,12 @@ describe('a first look at a cohort file', () => {
     expect(single.remarks.join(' ')).toMatch(/Only one column was found/);
     const ragged = await look(await folder.write('ragged.csv', 'id,score\n1,5\n2,6,7\n3\n\n4,5\n'));
     expect(ragged.remarks).toContain('2 of the first 5 rows have more or fewer cells than the heading.');
+  });
+
+  it('tells of lines above the heading, and of bytes that do not fit the mark at the start', async () => {
+    const titled = await look(await folder.write('titled.csv', 'Survey of Ostrey Vale\n\nid,score\n1,5\n2,6\n3,7\n'));
+    expect(titled.remarks.join(' ')).toMatch(/Take out what stands above it/);
+    const bytes = Buffer.concat([Buffer.from('\uFEFFid,score\n'), Buffer.from('René,5\n', 'latin1')]);
+    expect(await lookProblem(await folder.write('marked.csv', bytes))).toMatch(/not UTF-8/);
   });
 });
