@@ -57,6 +57,10 @@ function readOptions(values: Values): TableOptions {
   if (pointDefinition !== null && points === null) {
     throw new WrongOption('--point-definition needs --points, such as --points 0.25,0.5,0.75.');
   }
+  const format = oneOf('format', FORMATS, given('format') ?? 'text');
+  if (points !== null && format === 'csv') {
+    throw new WrongOption('csv has no place for percentile points. Use --format text or json, or leave --points out.');
+  }
   return {
     named: namedColumns(given),
     scale: given('scale') === null ? null : readScale(given('scale') ?? '', direction),
@@ -68,7 +72,7 @@ function readOptions(values: Values): TableOptions {
       oneOf('point-definition', POINT_DEFINITIONS, name),
     ),
     columns: given('columns') === null ? null : readColumns(given('columns') ?? ''),
-    format: oneOf('format', FORMATS, given('format') ?? 'text'),
+    format,
   };
 }
 

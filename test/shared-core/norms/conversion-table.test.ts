@@ -89,6 +89,10 @@ describe('ends and halves', () => {
     expect(texts(rows, 't')[0]).toBe('34');
     expect(rows[0]?.printedZ).toBeCloseTo(-1.6448536269514722, 12);
     expect(rows[0]?.provenance.derived).toBe('half-person');
+    const atOrBelow = { ...projectOf(TEN_COUNTS), curve: { definition: { kind: 'at-or-below' } as const } };
+    const best = rowsWith(atOrBelow, { zEnds: 'half-person' })[4];
+    expect(best?.printedZ).toBeCloseTo(1.6448536269514722, 12);
+    expect([best?.texts.t, best?.provenance.derived]).toEqual(['66', 'half-person']);
     expect(texts(rowsWith(thousand, { zEnds: 'half-person' }), 'nce')[3]).toBe('119');
     const limits = rowsWith(below, { zEnds: 'limits' });
     expect(texts(limits, 't')[0]).toBe('20');

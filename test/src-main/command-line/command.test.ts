@@ -124,6 +124,7 @@ describe('the words of the command line', () => {
     [['table', 'a', '--score', 's', '--points', '0', '--point-definition', 'type-10'], '--point-definition knows'],
     [['table', 'a', '--score', 's', '--columns', 'iq'], '--columns knows count'],
     [['table', 'a', '--score', 's', '--columns', 't,t'], '--columns names a column twice'],
+    [['table', 'a', '--score', 's', '--points', '0.5', '--format', 'csv'], 'csv has no place for percentile points'],
     [['table', 'a', '--score', 's', '--format', 'xml'], '--format knows text, csv, json'],
     [['table', 'a', '--score', 's', '--low-is-good=yes'], "'--low-is-good' does not take an argument"],
     [['press', 'p.normloom'], '--into FOLDER'],
