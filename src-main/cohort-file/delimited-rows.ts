@@ -8,7 +8,7 @@ import { NOTHING_IN_FILE, RowNumbering } from './row-numbering.ts';
 import { CANCELLED, throwMistake, type PassEnd, type ReadHooks, type RowTaker } from './row-taker.ts';
 import { ENCODING_WORDS, textBlocks } from './text-encoding.ts';
 
-const BLOCK_BYTES = 256 * 1024;
+const BLOCK_BYTES = 128 * 1024;
 /** A row longer than this is taken for a quotation mark that was never closed. */
 const LONGEST_ROW = 1_000_000;
 

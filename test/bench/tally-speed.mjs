@@ -18,7 +18,7 @@ const SELF = fileURLToPath(import.meta.url);
 const WORKER = new URL('../../dist/main/tally-worker.js', import.meta.url);
 const COMMAND_LINE = fileURLToPath(new URL('../../dist/main/command-line.js', import.meta.url));
 const MOST_TIMES = 3;
-const RUNS = 3;
+const ROUNDS = 3;
 
 /** Small generator with a fixed start, so that every run reads the same file (Marsaglia 2003, xorshift). */
 function generator(seed) {
@@ -95,24 +95,33 @@ function tallyPass(path, roles) {
 }
 
 const PASSES = {
-  plain: (path) => plainPass(path),
+  'plain papaparse': (path) => plainPass(path),
   tally: (path) => tallyPass(path, ROLES),
-  'tally-with-id': (path) => tallyPass(path, [...ROLES, { column: 'id', role: 'id' }]),
+  'tally with ids': (path) => tallyPass(path, [...ROLES, { column: 'id', role: 'id' }]),
 };
 
-/** One pass in a process of its own: the least milliseconds, by the clock and of the processor, and peak memory in MB. */
+/** One pass in a process of its own: milliseconds by the clock and of the processor, and peak memory in MB. */
 function measured(name, path, rows) {
-  const runs = Array.from({ length: RUNS }, () => {
-    const child = spawnSync(process.execPath, [SELF, '--pass', name, path], { encoding: 'utf8' });
-    if (child.status !== 0) throw new Error(child.stderr);
-    return JSON.parse(child.stdout);
+  const child = spawnSync(process.execPath, [SELF, '--pass', name, path], { encoding: 'utf8' });
+  if (child.status !== 0) throw new Error(child.stderr);
+  const run = JSON.parse(child.stdout);
+  if (run.rows !== rows) throw new Error(`${name} read ${run.rows} rows of ${rows}`);
+  return run;
+}
+
+/** Least times and largest memory of some rounds; in each round all passes run, so that a busy minute strikes all. */
+function rounds(path, rows) {
+  const names = Object.keys(PASSES);
+  const all = Array.from({ length: ROUNDS }, () => names.map((name) => measured(name, path, rows)));
+  return names.map((name, index) => {
+    const runs = all.map((round) => round[index]);
+    return {
+      name,
+      ms: Math.min(...runs.map((run) => run.ms)),
+      cpu: Math.min(...runs.map((run) => run.cpu)),
+      peak: Math.max(...runs.map((run) => run.peak)),
+    };
   });
-  if (runs.some((run) => run.rows !== rows)) throw new Error(`${name} read ${runs[0].rows} rows of ${rows}`);
-  return {
-    ms: Math.min(...runs.map((run) => run.ms)),
-    cpu: Math.min(...runs.map((run) => run.cpu)),
-    peak: Math.max(...runs.map((run) => run.peak)),
-  };
 }
 
 function commandLine(path) {
@@ -123,7 +132,7 @@ function commandLine(path) {
   return performance.now() - started;
 }
 
-function line(name, { ms, cpu, peak }, plain) {
+function line({ name, ms, cpu, peak }, plain) {
   const ratio = plain === null ? '' : `${(ms / plain.ms).toFixed(2)} times plain`;
   const times = `${String(Math.round(ms)).padStart(7)} ms  processor ${String(Math.round(cpu)).padStart(6)} ms`;
   console.log(`  ${name.padEnd(24)} ${times}  peak ${String(peak).padStart(4)} MB  ${ratio}`);
@@ -133,10 +142,9 @@ async function compare(folder, rows) {
   const path = join(folder, `cohort-${rows}.csv`);
   await writeCohort(path, rows);
   console.log(`${rows} rows of 6 columns`);
-  const plain = measured('plain', path, rows);
-  line('plain papaparse', plain, null);
-  const tallies = ['tally', 'tally-with-id'].map((name) => ({ name, ...measured(name, path, rows) }));
-  for (const tally of tallies) line(tally.name, tally, plain);
+  const [plain, ...tallies] = rounds(path, rows);
+  line(plain, null);
+  for (const tally of tallies) line(tally, plain);
   if (existsSync(COMMAND_LINE))
     console.log(`  command line as a whole  ${String(Math.round(commandLine(path))).padStart(7)} ms`);
   rmSync(path);
