@@ -79,6 +79,8 @@ export interface DrawnPages {
   /** The PDF itself, base64. */
   readonly pdf: string;
   readonly pages: number;
+  /** What the composer had to change to fit the page, in sentences. */
+  readonly remarks: readonly string[];
 }
 
 export type JobResult =

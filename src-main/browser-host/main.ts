@@ -1,9 +1,10 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { createDesk } from '../desk.ts';
 import { findBrowser, hasDisplay, openAppWindow, type AppWindow } from './app-window.ts';
 import { dataFolder, projectsFolder } from '../places.ts';
+import { programVersion } from '../program-version.ts';
 import { startBrowserHost } from './server.ts';
 import { showFolder } from './show-folder.ts';
 import { readStartWords, USAGE, type StartWords } from './start-words.ts';
@@ -15,7 +16,7 @@ async function run(words: StartWords): Promise<void> {
   const data = dataFolder(process.env, process.platform);
   const display = hasDisplay(process.env, process.platform);
   const desk = createDesk({
-    version: ownVersion(),
+    version: programVersion(),
     host: 'browser',
     dataFolder: data,
     projectsFolder: words.folder ?? projectsFolder(process.env),
@@ -49,13 +50,6 @@ async function run(words: StartWords): Promise<void> {
 
 function builtFile(name: string): URL {
   return new URL(name, import.meta.url);
-}
-
-function ownVersion(): string {
-  const about: unknown = JSON.parse(readFileSync(join(ROOT, 'package.json'), 'utf8'));
-  const named = typeof about === 'object' && about !== null && 'version' in about ? about.version : null;
-  if (typeof named !== 'string') throw new Error('package.json names no version');
-  return named;
 }
 
 const read = readStartWords(process.argv.slice(2), process.cwd());

@@ -2,7 +2,7 @@ import { readCommand, type Command } from './command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
-import { programVersion } from './program-version.ts';
+import { programVersion } from '../program-version.ts';
 import { tableCommand } from './table-command.ts';
 
 /** The same work as the other hosts', without a window: the result goes to stdout, everything else to stderr. */

@@ -12,6 +12,7 @@ import { releaseDay } from './release-day.ts';
 export interface DrawnBooklet {
   readonly pdf: Uint8Array;
   readonly pages: number;
+  readonly remarks: readonly string[];
 }
 
 /** The booklet of a set as a PDF of version 1.7. The same set gives the same bytes. */
@@ -31,7 +32,7 @@ export async function bookletPdf(
   if (drawn !== booklet.pages.length) {
     throw new Error(`the booklet has ${booklet.pages.length} pages, but ${drawn} were drawn`);
   }
-  return { pdf: new Uint8Array(await document.getBuffer()), pages: drawn };
+  return { pdf: new Uint8Array(await document.getBuffer()), pages: drawn, remarks: booklet.remarks };
 }
 
 function definition(booklet: Booklet, day: Date): TDocumentDefinitions {

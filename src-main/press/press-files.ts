@@ -80,6 +80,6 @@ export async function pressInto(
 export async function drawPages(project: NormProject, onProgress: PressProgress = silent): Promise<Reply<DrawnPages>> {
   const built = buildNormSet(project);
   if (!built.ok) return built;
-  const { pdf, pages } = await bookletPdf(built.normSet, (share) => onProgress(share, 'Drawing the pages'));
-  return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), pages } };
+  const { pdf, pages, remarks } = await bookletPdf(built.normSet, (share) => onProgress(share, 'Drawing the pages'));
+  return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), pages, remarks } };
 }
