@@ -32,6 +32,7 @@ export function rankColumn(): TableColumn {
 /** The column of a key in the words of this project. */
 export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
   const people = project.people.charAt(0).toUpperCase() + project.people.slice(1);
+  const weighted = project.tally !== null && project.tally.weightDecimals !== null;
   const good = project.tally?.scale.direction !== 'low-is-good';
   switch (key) {
     case 'count':
@@ -41,15 +42,17 @@ export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
         name: `number of ${project.people}`,
         explanation: 'How many obtained the score.',
       };
-    case 'cumulative':
+    case 'cumulative': {
+      const side = good ? 'below' : 'above';
       return {
         key,
-        heading: good ? ['At or', 'below'] : ['At or', 'above'],
-        name: good ? 'number at or below' : 'number at or above',
-        explanation: good
-          ? 'How many obtained the score or a lower one.'
-          : 'How many obtained the score or a higher one, which here is the poorer side.',
+        heading: weighted ? ['Weight at', `or ${side}`] : ['At or', side],
+        name: `${weighted ? 'weight' : 'number'} at or ${side}`,
+        explanation: `${weighted ? 'The weight of those who' : 'How many'} obtained the score or a ${
+          good ? 'lower one' : 'higher one, which here is the poorer side'
+        }.`,
       };
+    }
     case 'exact-rank':
       return {
         key,

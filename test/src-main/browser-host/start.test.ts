@@ -12,7 +12,7 @@ describe('words the browser host is started with', () => {
     });
     expect(readStartWords(['a.csv', '--no-window', '--port', '4100', '--folder', 'out'], '/work')).toEqual({
       ok: true,
-      words: { file: resolve('/work/a.csv'), window: false, port: 4100, folder: resolve('/work/out') },
+      words: { file: resolve('/surveys/a.csv'), window: false, port: 4100, folder: resolve('/surveys/out') },
     });
   });
 

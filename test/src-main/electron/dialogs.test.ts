@@ -33,34 +33,34 @@ describe('native dialogs', () => {
     expect(options?.filters?.[0]?.extensions).toEqual(['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls']);
     expect(chosen).not.toHaveBeenCalled();
 
-    electron.dialog.showOpenDialog.mockResolvedValueOnce({ canceled: false, filePaths: ['/work/grade-4.normloom'] });
-    expect(await dialogs.chooseFile('project')).toBe('/work/grade-4.normloom');
+    electron.dialog.showOpenDialog.mockResolvedValueOnce({ canceled: false, filePaths: ['/surveys/grade-4.normloom'] });
+    expect(await dialogs.chooseFile('project')).toBe('/surveys/grade-4.normloom');
     expect(electron.dialog.showOpenDialog.mock.calls[1]?.[1].filters?.[0]?.extensions).toEqual(['normloom']);
-    expect(chosen.mock.calls).toEqual([['/work/grade-4.normloom']]);
+    expect(chosen.mock.calls).toEqual([['/surveys/grade-4.normloom']]);
   });
 
   it('answer null when closed, and when there is no window to hold them', async () => {
     electron.dialog.showOpenDialog.mockResolvedValue({ canceled: true, filePaths: [] });
     electron.dialog.showSaveDialog.mockResolvedValue({ canceled: true, filePath: '' });
     expect(await dialogs.chooseFile('project')).toBeNull();
-    expect(await dialogs.chooseSave('/work/grade-4.normloom')).toBeNull();
+    expect(await dialogs.chooseSave('/surveys/grade-4.normloom')).toBeNull();
     expect(await dialogs.chooseFolder()).toBeNull();
     expect(chosen).not.toHaveBeenCalled();
     const without = nativeDialogs(() => null, chosen);
     vi.clearAllMocks();
     expect(await without.chooseFile('cohort')).toBeNull();
-    expect(await without.chooseSave('/work/grade-4.normloom')).toBeNull();
+    expect(await without.chooseSave('/surveys/grade-4.normloom')).toBeNull();
     expect(electron.dialog.showOpenDialog).not.toHaveBeenCalled();
     expect(electron.dialog.showSaveDialog).not.toHaveBeenCalled();
   });
 
   it('save under the suggested name and give a name without ending its ending', async () => {
-    electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: '/work/grade-5' });
-    expect(await dialogs.chooseSave('/work/grade-4.normloom')).toBe('/work/grade-5.normloom');
+    electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: '/surveys/grade-5' });
+    expect(await dialogs.chooseSave('/surveys/grade-4.normloom')).toBe('/surveys/grade-5.normloom');
     const options = electron.dialog.showSaveDialog.mock.calls[0]?.[1];
-    expect(options?.defaultPath).toBe('/work/grade-4.normloom');
+    expect(options?.defaultPath).toBe('/surveys/grade-4.normloom');
     expect(options?.properties).toContain('showOverwriteConfirmation');
-    expect(chosen.mock.calls).toEqual([['/work/grade-5.normloom']]);
+    expect(chosen.mock.calls).toEqual([['/surveys/grade-5.normloom']]);
   });
 
   it('ask again where the full name is taken, so that nothing is written over unasked', async () => {

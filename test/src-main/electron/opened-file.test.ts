@@ -30,8 +30,8 @@ describe('the file to open', () => {
   });
 
   it('is a project by its ending and a cohort otherwise', () => {
-    expect(openedKind('/work/Grade 4.NORMLOOM')).toBe('project');
-    expect(openedKind('/work/scores.csv')).toBe('cohort');
-    expect(openedKind('/work/normloom')).toBe('cohort');
+    expect(openedKind('/surveys/Grade 4.NORMLOOM')).toBe('project');
+    expect(openedKind('/surveys/scores.csv')).toBe('cohort');
+    expect(openedKind('/surveys/normloom')).toBe('cohort');
   });
 });
