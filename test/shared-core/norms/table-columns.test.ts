@@ -21,7 +21,10 @@ describe('columns of a table', () => {
     expect(columnOf('count', settledProject()).heading).toEqual(['Pupils']);
     const seconds = projectOf(TEN_COUNTS, scaleTo(4, 'low-is-good'));
     expect(columnOf('cumulative', seconds).heading).toEqual(['At or', 'above']);
-    expect(columnOf('cumulative', projectOf(TEN_COUNTS)).heading).toEqual(['At or', 'below']);
+    const project = projectOf(TEN_COUNTS);
+    expect(columnOf('cumulative', project).heading).toEqual(['At or', 'below']);
+    const tally = project.tally === null ? null : { ...project.tally, weightDecimals: 2 };
+    expect(columnOf('cumulative', { ...project, tally }).heading).toEqual(['Weight at', 'or below']);
   });
 
   it('explain stanines by ranks or by z, as they are made', () => {

@@ -6,11 +6,11 @@ import { readStartWords } from '../../../src-main/browser-host/start-words.ts';
 
 describe('words the browser host is started with', () => {
   it('name a file, a port, a folder, and whether to open a window', () => {
-    expect(readStartWords([], '/work')).toEqual({
+    expect(readStartWords([], '/surveys')).toEqual({
       ok: true,
       words: { file: null, window: true, port: 0, folder: null },
     });
-    expect(readStartWords(['a.csv', '--no-window', '--port', '4100', '--folder', 'out'], '/work')).toEqual({
+    expect(readStartWords(['a.csv', '--no-window', '--port', '4100', '--folder', 'out'], '/surveys')).toEqual({
       ok: true,
       words: { file: resolve('/surveys/a.csv'), window: false, port: 4100, folder: resolve('/surveys/out') },
     });
@@ -19,7 +19,7 @@ describe('words the browser host is started with', () => {
   it.each([[['--port', '70000']], [['--port', 'x']], [['--windows']], [['a', 'b']], [['--folder']]])(
     'are refused with a sentence: %j',
     (words) => {
-      const read = readStartWords(words, '/work');
+      const read = readStartWords(words, '/surveys');
       expect(read.ok).toBe(false);
     },
   );
