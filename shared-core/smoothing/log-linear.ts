@@ -7,7 +7,8 @@ import { addMultiple, orthonormalBasis } from './orthonormal-basis.ts';
  * coefficients add up to at most 1.
  */
 const SCORE_EQUATION = 2e-11;
-const MOST_STEPS = 200;
+/** Mostly 5 to 15 are needed; hundreds where a far end of the scale, without people, holds an even degree down. */
+const MOST_STEPS = 2000;
 const MOST_HALVINGS = 60;
 /** Share of the gain that the slope promises which a step must bring. */
 const LEAST_GAIN = 1e-4;

@@ -4,12 +4,13 @@ import { betaBinomial, type BetaBinomialTrouble } from './beta-binomial.ts';
 import { cumulativeOnGrid } from './cumulative.ts';
 import type { EffectiveFrequencies } from './effective-frequencies.ts';
 import { fitStatistics, freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
-import type { SmoothingChoice, SmoothingResult } from './smoothing.ts';
+import { workingOffer } from './smooth-log-linear.ts';
+import type { SmoothingResult } from './smoothing.ts';
 
 /** Two moments and the total are taken from the data. */
 const PARAMETERS = 3;
 
-const LOG_LINEAR: SmoothingChoice = { kind: 'log-linear', degree: 'bic', keptScores: [], comb: null };
+const LOG_LINEAR = { kind: 'log-linear', degree: 'bic', keptScores: [], comb: null } as const;
 
 const TROUBLES: Readonly<Record<BetaBinomialTrouble, string>> = {
   'not-above-binomial':
@@ -20,13 +21,17 @@ const TROUBLES: Readonly<Record<BetaBinomialTrouble, string>> = {
 /** Beta-binomial smoothing by moments, for number-right scores in whole marks from 0. */
 export function smoothBetaBinomial(scale: ScoreScale, frequencies: EffectiveFrequencies): SmoothingResult {
   if (scale.min !== 0 || scale.step !== 1 || scale.max < 2) {
-    return refusal('Beta-binomial smoothing is for the number of right answers: whole marks from 0 to 2 or more.');
+    return refusal(
+      scale,
+      frequencies,
+      'Beta-binomial smoothing is for the number of right answers: whole marks from 0 to 2 or more.',
+    );
   }
   const scores = attainableScores(scale);
   const observed = frequencies.at.map((frequency) => frequency / frequencies.total);
   const { mean, m2 } = centralMoments(scores, observed);
   const curve = betaBinomial(scale.max, mean, m2);
-  if (!curve.ok) return refusal(TROUBLES[curve.trouble]);
+  if (!curve.ok) return refusal(scale, frequencies, TROUBLES[curve.trouble]);
   const { a, b, probabilities } = curve;
   const fitted = probabilities.map((probability) => probability * frequencies.total);
   return {
@@ -54,7 +59,8 @@ export function smoothBetaBinomial(scale: ScoreScale, frequencies: EffectiveFreq
   };
 }
 
-function refusal(why: string): SmoothingResult {
-  const problem = `${why} Log-linear smoothing works without this.`;
-  return { ok: false, problem, instead: LOG_LINEAR, degrees: [] };
+function refusal(scale: ScoreScale, frequencies: EffectiveFrequencies, why: string): SmoothingResult {
+  const instead = workingOffer(scale, frequencies, LOG_LINEAR);
+  const advice = instead.kind === 'none' ? 'Leave the group unsmoothed.' : 'Log-linear smoothing works here.';
+  return { ok: false, problem: `${why} ${advice}`, instead, degrees: [] };
 }

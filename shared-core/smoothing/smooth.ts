@@ -34,18 +34,12 @@ export function smooth(
       if (choice.after === null) return smoothKernel(table.scale, frequencies, choice, null);
       const first = smoothLogLinear(table.scale, frequencies, { kind: 'log-linear', ...choice.after }, extent);
       if (first.ok) return smoothKernel(table.scale, frequencies, choice, first.smoothed);
-      const { instead } = first;
-      return { ...first, instead: { ...choice, after: instead.kind === 'log-linear' ? logLinearOf(instead) : null } };
+      if (first.instead.kind === 'log-linear') {
+        const { degree, keptScores, comb } = first.instead;
+        return { ...first, instead: { ...choice, after: { degree, keptScores, comb } } };
+      }
+      const problem = 'The log-linear curve that is to come first cannot be fitted. The kernel alone works here.';
+      return { ...first, problem, instead: { ...choice, after: null } };
     }
   }
-}
-
-function logLinearOf({
-  degree,
-  keptScores,
-  comb,
-}: Extract<SmoothingChoice, { readonly kind: 'log-linear' }>): NonNullable<
-  Extract<SmoothingChoice, { readonly kind: 'kernel' }>['after']
-> {
-  return { degree, keptScores, comb };
 }

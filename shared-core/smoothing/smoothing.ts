@@ -26,18 +26,20 @@ export type SmoothingChoice =
 /** One line of the table of degrees. */
 export interface DegreeLine {
   readonly degree: number;
+  /** False where the score equations could not be met; the figures are then those of the last step. */
   readonly converged: boolean;
   /** Likelihood-ratio and Pearson statistics against the saturated model, in people (or effective people). */
   readonly g2: number;
   readonly x2: number;
   readonly df: number;
-  /** G² + 2(C + 1) and G² + ln N (C + 1), people counted. */
+  /** G² + 2(C + 1) and G² + ln N (C + 1), people counted; kept scores and a comb count as parameters like the C + 1. */
   readonly aic: number;
   readonly bic: number;
   /** p-value 0–1 of this degree against the next lower one; null for the lowest. */
   readonly p: number | null;
 }
 
+/** Dividing by N, so that observed and fitted ones can be compared; sd in raw-score points. */
 export interface Moments {
   readonly mean: number;
   readonly sd: number;
@@ -56,7 +58,12 @@ export interface Smoothed {
    */
   cumulative(position: number, shift: -0.5 | 0 | 0.5): number;
   readonly degree: number | null;
+  /** In raw-score points. */
   readonly bandwidth: number | null;
+  /**
+   * Of the log-linear model, also where a kernel follows it; of a beta-binomial fit G², X² and df alone, which is not of
+   * maximum likelihood; null for a kernel of the observed shares.
+   */
   readonly g2: number | null;
   readonly x2: number | null;
   readonly df: number | null;
