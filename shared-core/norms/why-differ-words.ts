@@ -1,7 +1,7 @@
 import type { Direction } from '../scale/score-scale.ts';
 import type { Explanation, WhyDiffer } from './why-differ.ts';
 import { conventionInWords } from './why-differ-conventions.ts';
-import { endsInWords, roundingInWords } from './why-differ-rules.ts';
+import { endRules, endsInWords, ROUNDING_RULES, roundingInWords } from './why-differ-rules.ts';
 
 /** "whole numbers", "numbers of 1 decimal" */
 function decimalsInWords(decimals: number): string {
@@ -10,16 +10,20 @@ function decimalsInWords(decimals: number): string {
 }
 
 function either(texts: readonly string[]): string {
-  const different = [...new Set(texts)];
-  if (different.length < 2) return different[0] ?? '';
-  return `${different.slice(0, -1).join(', ')} or ${different.at(-1) ?? ''}`;
+  if (texts.length < 2) return texts[0] ?? '';
+  return `${texts.slice(0, -1).join(', ')} or ${texts.at(-1) ?? ''}`;
 }
 
-/** One explanation: "people below the score, divided by N − 1 …; whole numbers, halves rounded up; held between 1 and 99". */
+/**
+ * One explanation: "scoring below, plus half of those at the same score; whole numbers, halves rounded up; held between 1
+ * and 99". What the rows cannot tell is not guessed at.
+ */
 export function explanationInWords({ applied, ways }: Explanation, direction: Direction, decimals: number): string {
-  const roundings = either(ways.map(({ rounding }) => roundingInWords(rounding)));
-  const ends = either(ways.map((way) => endsInWords(way.ends, decimals)));
-  return `${conventionInWords(applied, direction)}; ${decimalsInWords(decimals)}, ${roundings}; ${ends}`;
+  const roundings = [...new Set(ways.map(({ rounding }) => roundingInWords(rounding)))];
+  const ends = [...new Set(ways.map((way) => endsInWords(way.ends, decimals)))];
+  const rounded = roundings.length === ROUNDING_RULES.length ? 'the same however rounded' : either(roundings);
+  const ended = ends.length === endRules(decimals).length ? 'no rank so near an end that its rule shows' : either(ends);
+  return `${conventionInWords(applied, direction)}; ${decimalsInWords(decimals)}, ${rounded}; ${ended}`;
 }
 
 /** The finding in one or two sentences, for screen and terminal. */
@@ -30,7 +34,8 @@ export function findingInWords(found: WhyDiffer, direction: Direction, decimals:
     if (first === undefined) throw new RangeError('reproduced by nothing');
     const more = others.length === 1 ? 'One other convention gives' : `${others.length} other conventions give`;
     const also = others.length === 0 ? '' : ` ${more} the same ${ranks}.`;
-    return `All ${ranks} are reproduced by: ${explanationInWords(first, direction, decimals)}.${also}`;
+    const all = found.compared === 1 ? 'The one rank is' : `All ${ranks} are`;
+    return `${all} reproduced by: ${explanationInWords(first, direction, decimals)}.${also}`;
   }
   const missed = found.disagreeing.length;
   const nearest = explanationInWords(found.explanation, direction, decimals);
