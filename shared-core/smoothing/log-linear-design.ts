@@ -34,12 +34,16 @@ export function logLinearDesign(
   const kept = scores.map((score) => choice.keptScores.includes(score));
   const comb = choice.comb === null ? null : teeth(choice.comb, kept);
   const free = kept.filter((isKept) => !isKept).length;
-  const teethSet = comb?.reduce((sum, tooth) => sum + tooth, 0) ?? null;
-  if (teethSet === 0 || teethSet === free) {
-    return {
-      ok: false,
-      problem: 'The comb takes in none or all of the scores that the curve runs through. Choose another comb.',
-    };
+  const freeTotal = sumWhere(frequencies.at, (position) => kept[position] === false);
+  if (comb !== null) {
+    const cells = comb.reduce((sum, tooth) => sum + tooth, 0);
+    const people = sumWhere(frequencies.at, (position) => comb[position] === 1);
+    if (cells === 0 || cells === free || people === 0 || people === freeTotal) {
+      return {
+        ok: false,
+        problem: 'The comb takes in none or all of the scores or people that the curve is for. Choose another comb.',
+      };
+    }
   }
   const last = scores.length - 1;
   const design: LogLinearDesign = {
@@ -48,10 +52,14 @@ export function logLinearDesign(
     kept,
     comb,
     total: frequencies.total,
-    freeTotal: frequencies.at.reduce((sum, frequency, position) => sum + (kept[position] === true ? 0 : frequency), 0),
+    freeTotal,
     indicators: scores.length - free + (comb === null ? 0 : 1),
   };
   return { ok: true, design };
+}
+
+function sumWhere(frequencies: readonly number[], counted: (position: number) => boolean): number {
+  return frequencies.reduce((sum, frequency, position) => sum + (counted(position) ? frequency : 0), 0);
 }
 
 function teeth(comb: NonNullable<LogLinearChoice['comb']>, kept: readonly boolean[]): Float64Array {
