@@ -47,8 +47,9 @@ export type BootstrapResult =
 export const MOST_REPLICATES = 20_000;
 const MOST_CELLS = 30_000_000;
 const FEWEST_FITTED = 2;
-/** Progress is told after so many samples: small enough to cancel at once, large enough to cost nothing. */
-const CHUNK = 10;
+/** Progress is told after so many samples, on long scales after fewer, so that a caller can stop at once. */
+const LARGEST_CHUNK = 10;
+const CELLS_PER_CHUNK = 1500;
 
 /** Samples that an interval of a level needs, so that each end lies on or within the outermost one. */
 export function replicatesNeeded(level: number): number {
@@ -90,6 +91,7 @@ export function* bootstrapRanks(
   const ranks = new ReplicateRanks(table.counts.length, plan.replicates);
   const failures = new Map<string, number>();
   const degrees = new Map<number, number>();
+  const chunk = Math.max(1, Math.min(LARGEST_CHUNK, Math.floor(CELLS_PER_CHUNK / table.counts.length)));
   let failed = 0;
   for (let done = 1; done <= plan.replicates; done += 1) {
     const again = ranksOf(tableFromCounts(table.scale, draw(people, next)), plan);
@@ -101,7 +103,7 @@ export function* bootstrapRanks(
       failed += 1;
       failures.set(again.problem, (failures.get(again.problem) ?? 0) + 1);
     }
-    if (done % CHUNK === 0 || done === plan.replicates) yield { done, of: plan.replicates, failed };
+    if (done % chunk === 0 || done === plan.replicates) yield { done, of: plan.replicates, failed };
   }
   if (ranks.added < FEWEST_FITTED) {
     const why = [...failures.keys()][0] ?? '';

@@ -62,6 +62,8 @@ function upperBeta(tail: number, a: number, b: number): number {
   return 1 - betaQuantile(tail, b, a);
 }
 
+const NOT_COUNTED = 'Intervals need a rank that counts people. Define the rank as midpoint, at or below, or below.';
+
 /** Why a table's ranks can have no interval of a kind, in a sentence that tells what to do, or null. */
 export function intervalProblem(
   table: FrequencyTable,
@@ -72,15 +74,13 @@ export function intervalProblem(
   const wrong = levelProblem(level);
   if (wrong !== null) return wrong;
   const counted = countedRank(definition);
-  if (counted === null) {
-    return 'Intervals need a rank that counts people. Define the rank as midpoint, at or below, or below.';
-  }
+  if (counted === null) return NOT_COUNTED;
   if (method !== 'clopper-pearson') return null;
   if (counted === 'midpoint') {
     return 'Clopper–Pearson intervals need whole counts, and the midpoint rank counts halves. Take Wilson or Jeffreys, or define the rank as at or below.';
   }
   if (!weighsEqually(table) || effectiveN !== peopleIn(table)) {
-    return 'Clopper–Pearson intervals need whole counts, and a weighted group has none. Take Wilson or Jeffreys.';
+    return 'Clopper–Pearson intervals need whole counts, and weights or an effective n leave none. Take Wilson or Jeffreys.';
   }
   return null;
 }
@@ -97,7 +97,7 @@ export function rankIntervals(
 ): RankIntervals {
   const problem = intervalProblem(table, effectiveN, definition, choice);
   const counted = countedRank(definition);
-  if (problem !== null || counted === null) return { ok: false, problem: problem ?? '' };
+  if (problem !== null || counted === null) return { ok: false, problem: problem ?? NOT_COUNTED };
   return { ok: true, intervals: intervalsOf(rankCounts(table, counted, effectiveN), effectiveN, choice) };
 }
 

@@ -26,7 +26,7 @@ const SLACK = 1 - 1e-12;
 
 /**
  * People needed so that percentile ranks meet a wish: the binomial standard error 100 √(p(1 − p)/n), or the width of an
- * interval at a count of pn. That is the rank without ties; half of those at a score makes a midpoint rank a little surer.
+ * interval at a count of pn, fractions and all. That is the rank without ties; half of those at a score makes a midpoint rank a little surer.
  * `designEffect` (1 for people sampled one by one; Kish 1965) divides n into the effective n.
  */
 export function planSize(ranks: readonly number[], wish: Wish, designEffect: number): SizePlan {

@@ -184,7 +184,7 @@ describe('the intervals of a table', () => {
     const exact = { method: 'clopper-pearson', level: 95 } as const;
     const says = (result: ReturnType<typeof rankIntervals>): string => (result.ok ? '' : result.problem);
     expect(says(rankIntervals(table, 10, { kind: 'midpoint' }, exact))).toContain('halves');
-    expect(says(rankIntervals(table, 8, { kind: 'below' }, exact))).toContain('weighted');
+    expect(says(rankIntervals(table, 8, { kind: 'below' }, exact))).toContain('weights');
     expect(says(rankIntervals(table, 10, { kind: 'grouped', width: 2 }, exact))).toContain('counts people');
     expect(says(rankIntervals(table, 10, { kind: 'below' }, { method: 'wilson', level: 20 }))).toContain('between 50');
     expect(rankIntervals(table, 10, { kind: 'below' }, exact).ok).toBe(true);
@@ -192,7 +192,7 @@ describe('the intervals of a table', () => {
       fc.property(weightedTables(), (some) => {
         const { effectiveN, n } = summarise(some);
         fc.pre(Math.abs(effectiveN - n) > 1e-6);
-        expect(says(rankIntervals(some, effectiveN, { kind: 'below' }, exact))).toContain('weighted');
+        expect(says(rankIntervals(some, effectiveN, { kind: 'below' }, exact))).toContain('weights');
       }),
     );
   });
