@@ -30,6 +30,23 @@ export function compareToWhole(value: ExactRatio, whole: bigint): number {
   return difference < 0n ? -1 : difference > 0n ? 1 : 0;
 }
 
+/** Below 0, 0 or above 0 as the left ratio lies below, on or above the right one. */
+export function compareRatios(left: ExactRatio, right: ExactRatio): number {
+  const difference = left.numerator * right.denominator - right.numerator * left.denominator;
+  return difference < 0n ? -1 : difference > 0n ? 1 : 0;
+}
+
+const NEAR_DECIMALS = 9;
+
+/**
+ * A computed double as a ratio, rounded half up to 10^-9: smoothed ranks are doubles, and 23.5 must print like 23.5 even
+ * where the last bits of a computation say 23.499999999999996. Sizes up to 10^6; throws beyond, and on NaN.
+ */
+export function ratioNear(value: number): ExactRatio {
+  if (!(Math.abs(value) <= 1e6)) throw new RangeError(`not a number of a usual size: ${value}`);
+  return ratio(BigInt(Math.round(value * 10 ** NEAR_DECIMALS)), 10n ** BigInt(NEAR_DECIMALS));
+}
+
 export type Rounding = 'half-up' | 'half-even';
 
 /**

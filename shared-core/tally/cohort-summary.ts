@@ -1,6 +1,7 @@
 import { percentilePoint } from '../percentile/percentile-point.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { attainableScores } from '../scale/score-scale.ts';
+import { centralMoments } from './central-moments.ts';
 import { peopleIn, squaredUnitsIn, weighsEqually, weightUnitsIn, type FrequencyTable } from './frequency-table.ts';
 
 /** Minimum, lower hinge, median, upper hinge, maximum, in raw-score points. */
@@ -43,11 +44,7 @@ export function summarise(table: FrequencyTable): CohortSummary {
   const weightSum = weightUnitsIn(table);
   const effectiveN = ratioToNumber(ratio(weightSum * weightSum, squaredUnitsIn(table)));
   const shares = table.weights.map((weight) => ratioToNumber(ratio(weight, weightSum)));
-  const origin = scores[0] ?? 0;
-  const mean = origin + sumOver(scores, shares, (score) => score - origin);
-  const m2 = sumOver(scores, shares, (score) => (score - mean) ** 2);
-  const m3 = sumOver(scores, shares, (score) => (score - mean) ** 3);
-  const m4 = sumOver(scores, shares, (score) => (score - mean) ** 4);
+  const { mean, m2, m3, m4 } = centralMoments(scores, shares);
   const varies = table.weights.filter((weight) => weight > 0n).length > 1;
   return {
     n,
@@ -62,10 +59,6 @@ export function summarise(table: FrequencyTable): CohortSummary {
     shareAtHighest: shares.at(-1) ?? 0,
     unobserved: scores.filter((_, position) => table.counts[position] === 0),
   };
-}
-
-function sumOver(scores: readonly number[], shares: readonly number[], term: (score: number) => number): number {
-  return scores.reduce((sum, score, position) => sum + (shares[position] ?? 0) * term(score), 0);
 }
 
 function fiveNumbers(table: FrequencyTable, scores: readonly number[]): FiveNumbers {

@@ -73,7 +73,7 @@ export function readTypedCounts(text: string, scale: ScoreScale | null): TypedCo
 const SEPARATORS = [/\s*\t\s*/, /\s*;\s*/, COMMA, /\s+/] as const;
 
 /** All lines have one separator: the one that cuts the most of them into two entries. */
-function typedLines(text: string): { readonly lines: readonly TypedLine[]; readonly mark: DecimalMark } {
+export function typedLines(text: string): { readonly lines: readonly TypedLine[]; readonly mark: DecimalMark } {
   const contents = text
     .replace(/^\uFEFF/, '')
     .split(/\r\n|\n|\r/)

@@ -1,0 +1,71 @@
+import { attainableScores, type ScoreScale } from '../scale/score-scale.ts';
+import { TEST_LEVEL, type DegreeFit } from './choose-degree.ts';
+import { cumulativeOnGrid } from './cumulative.ts';
+import { freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
+import { logLinearVariance } from './log-linear-covariance.ts';
+import type { LogLinearDesign } from './log-linear-design.ts';
+import type { DegreeRule, LogLinearChoice, Smoothed } from './smoothing.ts';
+
+/** A converged fit as the distribution that the program shows, with the degrees it was compared with. */
+export function logLinearResult(
+  scale: ScoreScale,
+  design: LogLinearDesign,
+  choice: { readonly kind: 'log-linear' } & LogLinearChoice,
+  { line, probabilities }: DegreeFit,
+  fits: readonly DegreeFit[],
+): Smoothed {
+  const scores = attainableScores(scale);
+  const observed = [...design.frequencies];
+  return {
+    choice,
+    probabilities,
+    cumulative: cumulativeOnGrid(probabilities),
+    degree: line.degree,
+    bandwidth: null,
+    g2: line.g2,
+    x2: line.x2,
+    df: line.df,
+    aic: line.aic,
+    bic: line.bic,
+    degrees: fits.map((fit) => fit.line),
+    momentsObserved: momentsOf(
+      scores,
+      observed.map((frequency) => frequency / design.total),
+    ),
+    momentsFitted: momentsOf(scores, probabilities),
+    residuals: freemanTukeyResiduals(
+      observed,
+      probabilities.map((probability) => probability * design.total),
+    ),
+    varianceOf: logLinearVariance(design, line.degree, probabilities),
+    statement: statementOf(choice, line.degree, fits),
+  };
+}
+
+const RULES: Readonly<Record<DegreeRule, string>> = {
+  bic: 'the lowest BIC (people counted)',
+  aic: 'the lowest AIC',
+  'likelihood-ratio': `successive likelihood-ratio tests at the ${TEST_LEVEL} level from the highest degree down`,
+};
+
+function statementOf(choice: LogLinearChoice, degree: number, fits: readonly DegreeFit[]): string {
+  const highest = fits.length;
+  const among = highest > 1 ? `degrees 1 to ${highest}` : 'degree 1 alone';
+  const failed = fits.filter(({ fit }) => !fit.converged).map(({ line }) => line.degree);
+  const left = failed.length === 0 ? '' : `, without ${failed.join(', ')}, where no fit was found`;
+  const how = typeof choice.degree === 'number' ? '' : `, chosen by ${RULES[choice.degree]} among ${among}${left}`;
+  const kept = choice.keptScores.length === 0 ? '' : `; the frequency at ${choice.keptScores.join(', ')} is kept`;
+  const { comb } = choice;
+  const teeth =
+    comb === null
+      ? ''
+      : `; the share of every ${ordinal(comb.every)} score, counted from position ${comb.offset + 1}, is kept`;
+  const moments = degree === 1 ? 'the mean' : `the first ${degree} moments`;
+  return `Log-linear smoothing of degree ${degree}${how}${kept}${teeth}; ${moments} of the observed scores are kept.`;
+}
+
+function ordinal(number: number): string {
+  const tens = number % 100;
+  const ending = tens > 10 && tens < 14 ? 'th' : (['th', 'st', 'nd', 'rd'][number % 10] ?? 'th');
+  return `${number}${ending}`;
+}
