@@ -2,6 +2,13 @@ import type { NormProject } from './norm-project.ts';
 import { definitionInWords, definitionKey } from './definitions.ts';
 import type { RankDefinition } from '../percentile/percentile-rank.ts';
 import { decimalOf } from '../scale/decimal.ts';
+import {
+  degreeAlternatives,
+  intervalAlternatives,
+  levelAlternatives,
+  smoothingAlternatives,
+  type SmoothingScope,
+} from './smoothing-alternatives.ts';
 import type { ChoiceKey } from './statements.ts';
 
 /** One way a choice can be made: what it is, what it changes, and the project with it made. */
@@ -13,10 +20,17 @@ export interface Alternative {
 }
 
 /** Choices that are made from a short list; the others need a number, a text or several ticks. */
-export type ListedChoice = Exclude<ChoiceKey, 'scale' | 'missing' | 'grouping' | 'columns' | 'edition' | 'date'>;
+export type ListedChoice = Exclude<
+  ChoiceKey,
+  'scale' | 'missing' | 'grouping' | 'columns' | 'edition' | 'date' | 'kept' | 'bandwidth' | 'reliability'
+>;
 
-/** All alternatives of a choice for a project, the present one marked. */
-export function alternatives(project: NormProject, choice: ListedChoice): readonly Alternative[] {
+/** All alternatives of a choice for a project, the present one marked; smoothing is chosen for a scope. */
+export function alternatives(
+  project: NormProject,
+  choice: ListedChoice,
+  scope: SmoothingScope = null,
+): readonly Alternative[] {
   switch (choice) {
     case 'people':
       return (['pupils', 'students', 'candidates', 'people'] as const).map((people) => ({
@@ -63,6 +77,14 @@ export function alternatives(project: NormProject, choice: ListedChoice): readon
       ];
     case 'definition':
       return definitionAlternatives(project);
+    case 'smoothing':
+      return smoothingAlternatives(project, scope);
+    case 'degree':
+      return degreeAlternatives(project, scope);
+    case 'interval':
+      return intervalAlternatives(project);
+    case 'level':
+      return levelAlternatives(project);
     case 'decimals':
       return [
         tableAlternative(
@@ -260,7 +282,7 @@ function definitionAlternatives(project: NormProject): readonly Alternative[] {
     label: definitionInWords(definition, direction),
     explanation,
     chosen: definitionKey(definition) === now,
-    project: { ...project, curve: { definition } },
+    project: { ...project, curve: { ...project.curve, definition } },
   }));
 }
 

@@ -1,7 +1,6 @@
 import { ratioToNumber } from '../percentile/exact-ratio.ts';
 import { printNumber } from '../scores/printed-number.ts';
-import type { GroupNorms } from './norm-set.ts';
-import { conversionRows } from './conversion-table.ts';
+import { normsOfGroup, type GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
 
 /** What another choice would do to a group's table: printed ranks that change, and the largest move of a rank. */
@@ -12,9 +11,9 @@ export interface ChoiceEffect {
   readonly largestMove: number;
 }
 
-/** Compares a group's table with the one that another project's definition and printing rules would give. */
+/** Compares a group's table with the one that another project's definition and printing rules would give; smoothing stays. */
 export function choiceEffect(norms: GroupNorms, other: NormProject): ChoiceEffect {
-  const rows = conversionRows(norms.group.table, norms.summary, other.curve.definition, other.table);
+  const { rows } = normsOfGroup(other, norms.group, norms.smoothing);
   const moves = rows.map((row, position) => {
     const before = norms.rows[position];
     return before === undefined ? 0 : Math.abs(ratioToNumber(row.rank) - ratioToNumber(before.rank));

@@ -1,5 +1,6 @@
 import { compareToWhole, ratio, ratioToNumber, type ExactRatio } from '../percentile/exact-ratio.ts';
 import { percentileRanks, rankParts, type RankDefinition, type RankParts } from '../percentile/percentile-rank.ts';
+import type { PercentInterval } from '../precision/percent-interval.ts';
 import { attainableScores } from '../scale/score-scale.ts';
 import {
   derivedScores,
@@ -22,7 +23,11 @@ import {
 import type { CohortSummary } from '../tally/cohort-summary.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
 import type { ColumnKey } from './column-keys.ts';
+import type { SmoothedCurve } from './group-smoothing.ts';
 import type { TableChoices } from './norm-project.ts';
+import type { PrintRange } from './print-range.ts';
+import { printedRange, printInterval, type GroupPrecision } from './row-precision.ts';
+import { ranksOfCurve } from './smoothed-rank.ts';
 
 /** Where a printed derived score comes from. */
 export type DerivedFrom = 'rank' | 'linear' | 'held-at-limit' | 'half-person' | 'none';
@@ -38,7 +43,8 @@ export interface RowProvenance {
     readonly at: number;
     readonly all: number;
   };
-  readonly printed: { readonly end: EndTaken };
+  /** Which rank was printed, and which end rule, if any, took the place of the rounded number. */
+  readonly printed: { readonly from: 'observed' | 'smoothed'; readonly end: EndTaken };
   readonly derived: DerivedFrom;
 }
 
@@ -52,10 +58,28 @@ export interface ConversionRow {
   /** Sum of weights at the score, and at it or on its poor side; people without weights. */
   readonly weight: number;
   readonly cumulative: number;
-  /** Exact percentile rank, 0–100. */
+  /** The percentile rank that is printed, 0–100: the exact observed one, or the smoothed one where smoothing is on. */
   readonly rank: ExactRatio;
   /** The same as the nearest double. */
   readonly percentileRank: number;
+  /** The exact observed rank, whether or not smoothing is on. */
+  readonly observed: { readonly rank: ExactRatio; readonly percentileRank: number };
+  /** Null without smoothing; the error is in percentile-rank points, null where the method has none. */
+  readonly smoothed: {
+    readonly proportion: number;
+    readonly percentileRank: number;
+    readonly standardError: number | null;
+  } | null;
+  /** Sampling interval of the observed rank, 0–100; null where the definition has none. */
+  readonly interval: PercentInterval | null;
+  /** Standard error of the printed rank, percentile-rank points; null where there is none. */
+  readonly standardError: number | null;
+  /** Standard error of the observed midpoint rank, whatever the definition. */
+  readonly midpointError: number;
+  /** What the error of measurement leaves open, 0–100; null without a reliability. */
+  readonly band: PercentInterval | null;
+  /** What else could have been printed; null where it was not asked for. */
+  readonly range: PrintRange | null;
   /** As printed everywhere. */
   readonly printed: string;
   /** Unrounded; null where no finite value exists. */
@@ -83,33 +107,49 @@ export const PRINTED_SCALES = {
  * One row for each attainable score, lowest first. The only place where a group's numbers become printed texts. Throws
  * on a group without people.
  */
-export function conversionRows(
-  table: FrequencyTable,
-  summary: CohortSummary,
-  definition: RankDefinition,
-  choices: TableChoices,
-): readonly ConversionRow[] {
-  const ranks = percentileRanks(table, definition);
+export function conversionRows(basis: RowBasis): readonly ConversionRow[] {
+  const { table, definition, curve } = basis;
+  const observed = percentileRanks(table, definition);
+  const printed = curve === null ? observed : ranksOfCurve(curve, table, definition);
   const parts = rankParts(table);
   return attainableScores(table.scale).map((score, position) => {
-    const rank = ranks[position];
+    const exact = observed[position];
+    const rank = printed[position];
     const part = parts[position];
-    if (rank === undefined || part === undefined) throw new RangeError('a score without a rank');
-    return rowOf({ table, summary, choices, score, rank, part, count: table.counts[position] ?? 0 });
+    if (exact === undefined || rank === undefined || part === undefined) throw new RangeError('a score without a rank');
+    return rowOf(basis, { position, score, observed: exact, rank, part });
   });
 }
 
-interface RowParts {
+/** What all rows of a group are made from. */
+export interface RowBasis {
   readonly table: FrequencyTable;
   readonly summary: CohortSummary;
+  readonly definition: RankDefinition;
   readonly choices: TableChoices;
-  readonly score: number;
-  readonly rank: ExactRatio;
-  readonly part: RankParts;
-  readonly count: number;
+  /** Null: ranks are printed as observed. */
+  readonly curve: SmoothedCurve | null;
+  readonly precision: GroupPrecision;
+  /** Null where they were not asked for. */
+  readonly ranges: readonly PrintRange[] | null;
 }
 
-function rowOf({ table, summary, choices, score, rank, part, count }: RowParts): ConversionRow {
+interface RowParts {
+  readonly position: number;
+  readonly score: number;
+  readonly observed: ExactRatio;
+  readonly rank: ExactRatio;
+  readonly part: RankParts;
+}
+
+function rowOf(basis: RowBasis, { position, score, observed, rank, part }: RowParts): ConversionRow {
+  const { table, summary, choices, curve, precision } = basis;
+  const count = table.counts[position] ?? 0;
+  const interval = precision.intervals?.[position] ?? null;
+  const band = precision.bands?.[position]?.ranks ?? null;
+  const range = basis.ranges?.[position] ?? null;
+  const smoothedError = curve?.standardErrors?.[position] ?? null;
+  const standardError = curve === null ? (precision.standardErrors?.[position] ?? null) : smoothedError;
   const linear = choices.zSource === 'linear';
   const normal = derivedScores(rank, linear ? linearZ(table, summary, score) : normalisedZ(rank));
   const derived =
@@ -131,6 +171,20 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
     cumulative: asNumber(part.below + part.at),
     rank,
     percentileRank: ratioToNumber(rank),
+    observed: { rank: observed, percentileRank: ratioToNumber(observed) },
+    smoothed:
+      curve === null
+        ? null
+        : {
+            proportion: curve.probabilities[position] ?? NaN,
+            percentileRank: ratioToNumber(rank),
+            standardError: smoothedError,
+          },
+    interval,
+    standardError,
+    midpointError: precision.midpointErrors[position] ?? NaN,
+    band,
+    range,
     printed: printed.text,
     derived,
     printedZ: behindPrint.z,
@@ -138,6 +192,11 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
       count: printCount(count),
       cumulative: printWeight(part.below + part.at, table.weightUnit),
       'exact-rank': printRatio(rank, 2),
+      'observed-rank': printRatio(observed, 2),
+      interval: interval === null ? NO_VALUE : printInterval(interval, choices),
+      'standard-error': standardError === null ? NO_VALUE : printNumber(standardError, 1),
+      'measurement-band': band === null ? NO_VALUE : printInterval(band, choices),
+      'print-range': range === null ? NO_VALUE : printedRange(range.low, range.high),
       z: fromZ('z'),
       t: fromZ('t'),
       nce: fromZ('nce'),
@@ -153,7 +212,7 @@ function rowOf({ table, summary, choices, score, rank, part, count }: RowParts):
         at: asNumber(part.at),
         all: asNumber(part.all),
       },
-      printed: { end: printed.end },
+      printed: { from: curve === null ? 'observed' : 'smoothed', end: printed.end },
       derived: behindPrint.from,
     },
   };

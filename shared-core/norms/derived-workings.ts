@@ -4,9 +4,9 @@ import type { ColumnKey } from './column-keys.ts';
 import { PRINTED_SCALES, type ConversionRow } from './conversion-table.ts';
 import { inBrackets } from './grouped-class.ts';
 import type { NormProject } from './norm-project.ts';
-import type { GroupNorms } from './norm-set.ts';
+import type { GroupNorms } from './group-norms.ts';
 
-export type DerivedColumn = Exclude<ColumnKey, 'count' | 'cumulative' | 'exact-rank'>;
+export type DerivedColumn = Extract<ColumnKey, 'z' | 't' | 'nce' | 'deviation' | 'sten' | 'stanine'>;
 
 /** The steps from a percentile rank, or from mean and standard deviation, to a printed derived score. */
 export function derivedWorkings(

@@ -26,7 +26,8 @@ export function newProject(title: string): NormProject {
       choices: [],
       documentation: { population: '', sampling: '', participation: '', testDates: '', weighting: '' },
     },
-    curve: { definition: { kind: 'midpoint' } },
+    curve: { definition: { kind: 'midpoint' }, smoothing: { kind: 'none' }, exceptions: [] },
+    precision: { interval: 'wilson', level: 95, reliability: null, bootstrap: { replicates: 1000, seed: 1 } },
     table: {
       columns: ['stanine', 't'],
       decimals: 0,

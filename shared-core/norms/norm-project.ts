@@ -2,6 +2,7 @@ import * as v from 'valibot';
 import { scaleProblems } from '../scale/score-scale.ts';
 import { COLUMN_KEYS } from './column-keys.ts';
 import { LEFT_OUT_RULES } from './reading.ts';
+import { precisionSchema, smoothingSchema } from './smoothing-schema.ts';
 
 /**
  * Everything the user chose, with the tally: plain readonly data, one JSON file (`*.normloom`). It holds no person's
@@ -148,6 +149,19 @@ const definition = v.pipe(
   v.readonly(),
 );
 
+const curve = v.pipe(
+  v.object({
+    definition,
+    /** How all groups are smoothed, and the groups that are smoothed in a way of their own. */
+    smoothing: smoothingSchema,
+    exceptions: v.pipe(
+      v.array(v.pipe(v.object({ values: texts, smoothing: smoothingSchema }), v.readonly())),
+      v.readonly(),
+    ),
+  }),
+  v.readonly(),
+);
+
 const table = v.pipe(
   v.object({
     /** Columns beside raw score and percentile rank, in print order. */
@@ -191,7 +205,7 @@ const release = v.pipe(
 );
 
 export const PROJECT_FORMAT = 'normloom-project';
-export const PROJECT_VERSION = 1;
+export const PROJECT_VERSION = 2;
 
 export const normProjectSchema = v.pipe(
   v.object({
@@ -206,7 +220,8 @@ export const normProjectSchema = v.pipe(
     reading: v.nullable(reading),
     tally: v.nullable(tally),
     groups,
-    curve: v.pipe(v.object({ definition }), v.readonly()),
+    curve,
+    precision: precisionSchema,
     table,
     sheet,
     release,
@@ -220,6 +235,7 @@ export type CohortSource = NonNullable<NormProject['source']>;
 export type LeftOut = CohortSource['leftOut'][number];
 export type Documentation = NormProject['groups']['documentation'];
 export type TableChoices = NormProject['table'];
+export type PrecisionChoices = NormProject['precision'];
 export type SheetChoices = NormProject['sheet'];
 export type PeopleNoun = NormProject['people'];
 

@@ -1,7 +1,10 @@
 import type { PercentilePoint } from '../percentile/percentile-point.ts';
 import { definitionKey } from './definitions.ts';
 import { toFileKeys } from './file-keys.ts';
-import type { GroupNorms, NormSet } from './norm-set.ts';
+import type { GroupSmoothing } from './group-smoothing.ts';
+import { printRanges, type GroupNorms } from './group-norms.ts';
+import type { PrintRange } from './print-range.ts';
+import type { NormSet } from './norm-set.ts';
 
 /** A group's percentile points, where some were asked for. */
 export type PointsOf = (norms: GroupNorms) => readonly PercentilePoint[];
@@ -31,7 +34,9 @@ export function normSetForFile(normSet: NormSet, pointsOf: PointsOf): Readonly<R
 }
 
 function groupForFile(normSet: NormSet, norms: GroupNorms, points: readonly PercentilePoint[]): unknown {
-  const { summary, group, rows } = norms;
+  const { summary, group, rows, smoothing } = norms;
+  const curve = smoothing.state === 'smoothed' ? smoothing.curve : null;
+  const ranges = printRanges(normSet.project, group.table, curve);
   return {
     group: Object.fromEntries(normSet.project.groups.by.map((column, index) => [column, group.values[index] ?? ''])),
     n: summary.n,
@@ -43,15 +48,43 @@ function groupForFile(normSet: NormSet, norms: GroupNorms, points: readonly Perc
     'excess-kurtosis': summary.excessKurtosis,
     'five-number': summary.fiveNumbers,
     points: points.map(({ proportion, definition, score }) => ({ proportion, definition, score })),
-    rows: rows.map((row) => ({
+    smoothing: smoothingForFile(norms.smoothing),
+    rows: rows.map((row, position) => ({
       score: row.score,
       count: row.count,
       weight: row.weight,
       cumulative: row.cumulative,
-      'percentile-rank': row.percentileRank,
+      'percentile-rank': row.observed.percentileRank,
       printed: row.printed,
       derived: row.derived,
+      interval: row.interval === null ? null : { low: row.interval.low, high: row.interval.high },
+      'standard-error': row.midpointError,
+      smoothed: toFileKeys(row.smoothed),
+      alternatives: rangeForFile(ranges[position] ?? null),
+      band: row.band === null ? null : { low: row.band.low, high: row.band.high },
       provenance: toFileKeys(row.provenance),
     })),
+  };
+}
+
+function rangeForFile(range: PrintRange | null): unknown {
+  return range === null ? null : { low: range.low, high: range.high };
+}
+
+function smoothingForFile(smoothing: GroupSmoothing): unknown {
+  if (smoothing.state !== 'smoothed') return null;
+  const { choice, degree, bandwidth, g2, x2, df, aic, bic, momentsObserved, momentsFitted } = smoothing.curve;
+  return {
+    method: choice.kind,
+    degree,
+    bandwidth,
+    g2,
+    x2,
+    df,
+    aic,
+    bic,
+    converged: true,
+    'moments-observed': toFileKeys(momentsObserved),
+    'moments-fitted': toFileKeys(momentsFitted),
   };
 }

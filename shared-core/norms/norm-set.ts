@@ -2,24 +2,14 @@ import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import { definitionProblem } from '../percentile/percentile-rank.ts';
 import { printNumber } from '../scores/printed-number.ts';
-import { summarise, type CohortSummary } from '../tally/cohort-summary.ts';
+import type { CohortSummary } from '../tally/cohort-summary.ts';
 import { peopleIn } from '../tally/frequency-table.ts';
-import { conversionRows, type ConversionRow } from './conversion-table.ts';
 import { definitionKey } from './definitions.ts';
-import { inverseTable, type InverseRow } from './inverse-table.ts';
-import { normGroups, type NormGroup } from './norm-groups.ts';
+import { normsOfGroup, type GroupNorms } from './group-norms.ts';
+import { normGroups } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
 import { queriesOf, type Query } from './queries.ts';
 import { methodText } from './statements.ts';
-
-/** One group with its numbers: everything that is printed of it. */
-export interface GroupNorms {
-  readonly group: NormGroup;
-  readonly summary: CohortSummary;
-  /** One row for each attainable score, lowest first. */
-  readonly rows: readonly ConversionRow[];
-  readonly inverse: readonly InverseRow[];
-}
 
 /** Every number that screen, PDF, workbook and csv print, from one project. */
 export interface NormSet {
@@ -49,16 +39,21 @@ export function buildNormSet(project: NormProject): NormSetBuilt {
   if (printed.length === 0) {
     return { ok: false, problem: 'No group gets a table. At the Groups station, let at least one be printed.' };
   }
-  const { direction } = project.tally.scale;
-  const groups = printed.map((group) => {
-    const summary = summarise(group.table);
-    const rows = conversionRows(group.table, summary, definition, project.table);
-    return { group, summary, rows, inverse: inverseTable(rows, direction) };
-  });
+  const groups = printed.map((group) => normsOfGroup(project, group));
   return {
     ok: true,
     normSet: { project, groups, queries: queriesOf(project, groups), check: checkCode(project, groups) },
   };
+}
+
+/**
+ * Why a set cannot be pressed or handed out, in a sentence that tells what to do, or null: a group whose smoothing was
+ * refused would be printed as something it is not.
+ */
+export function pressProblem({ groups }: NormSet): string | null {
+  const refused = groups.find(({ smoothing }) => smoothing.state === 'refused');
+  if (refused?.smoothing.state !== 'refused') return null;
+  return `${refused.group.title} cannot be smoothed as chosen. ${refused.smoothing.problem}`;
 }
 
 /** Of everything that is printed, except the paper it is printed on. */
@@ -72,8 +67,9 @@ function checkCode(project: NormProject, groups: readonly GroupNorms[]): string 
     [documentation.testDates, documentation.weighting],
     source === null ? [] : [source.file, source.sha256, source.rowsRead, source.rowsKept],
     project.table.columns,
-    groups.map(({ group, summary, rows, inverse }) => [
+    groups.map(({ group, summary, smoothing, rows, inverse }) => [
       group.title,
+      smoothing.state === 'smoothed' ? smoothing.curve.statement : '',
       factsIn(summary),
       rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
       sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],

@@ -1,5 +1,6 @@
 import * as v from 'valibot';
 import { fileKey, fromFileKeys, toFileKeys } from './file-keys.ts';
+import { newProject } from './new-project.ts';
 import { normProjectSchema, PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
 
 /** Turns a project into the text of a `*.normloom` file: JSON, keys in lower-case-with-hyphens, one line at the end. */
@@ -28,10 +29,17 @@ export function projectFromText(text: string): ProjectRead {
       problem: `This project was saved by a newer Normloom (file version ${version}; this one reads up to ${PROJECT_VERSION}). Open it with the newer program; the file was not touched.`,
     };
   }
-  const parsed = v.safeParse(normProjectSchema, fromFileKeys(value));
+  const parsed = v.safeParse(normProjectSchema, fromFileKeys(broughtForward(value)));
   if (parsed.success) return { ok: true, project: parsed.output };
   const issue = parsed.issues[0];
   return damaged(`${fileKey(v.getDotPath(issue) ?? 'the whole')}: ${issue.message}`);
+}
+
+/** Projects of version 1 knew neither smoothing nor precision: they get the defaults. */
+function broughtForward(value: Readonly<Record<string, unknown>>): Readonly<Record<string, unknown>> {
+  if (value['version'] !== 1 || !isRecord(value['curve'])) return value;
+  const { curve, precision } = newProject('');
+  return { ...value, version: PROJECT_VERSION, curve: { ...curve, ...value['curve'] }, precision };
 }
 
 function damaged(why: string): ProjectRead {

@@ -1,8 +1,10 @@
 import { ratioToNumber } from '../percentile/exact-ratio.ts';
 import { printCount, printNumber, printShare } from '../scores/printed-number.ts';
 import { countedPeople, missingDocumentation } from './norm-groups.ts';
+import { listed } from './listed.ts';
 import type { NormProject } from './norm-project.ts';
-import type { GroupNorms } from './norm-set.ts';
+import { smoothingQueries } from './smoothing-queries.ts';
+import type { GroupNorms } from './group-norms.ts';
 
 export type Station = 'cohort' | 'groups' | 'curve' | 'table' | 'sheet' | 'release';
 
@@ -24,6 +26,9 @@ export interface Query {
 }
 
 type Asked = Omit<Query, 'answer'>;
+
+/** A query of one group, before it is told which; its id names the question alone. */
+export type AskedOfGroup = Omit<Asked, 'group'>;
 
 /** Below this many people a percentile rank can move by several points with other people drawn (common practice). */
 const SMALL_GROUP = 200;
@@ -139,11 +144,13 @@ function releaseQueries(project: NormProject): readonly Asked[] {
   return asked;
 }
 
-function groupQueries(project: NormProject, { group, summary, rows }: GroupNorms): readonly Asked[] {
+function groupQueries(project: NormProject, norms: GroupNorms): readonly Asked[] {
+  const { group, summary, rows } = norms;
   const asked: Asked[] = [];
-  const add = (id: string, query: Pick<Asked, 'station' | 'weight' | 'lead' | 'why' | 'whatToDo'>): void => {
-    asked.push({ id: `${id}:${group.key}`, group: group.key, ...query });
+  const add = (id: string, query: Omit<AskedOfGroup, 'id'>): void => {
+    asked.push({ ...query, id: `${id}:${group.key}`, group: group.key });
   };
+  for (const query of smoothingQueries(project, norms)) add(query.id, query);
   const people = countedPeople(printCount(summary.n), project.people);
   if (summary.n < SMALL_GROUP) {
     add('small-group', {
@@ -201,11 +208,4 @@ function groupQueries(project: NormProject, { group, summary, rows }: GroupNorms
     });
   }
   return asked;
-}
-
-/** "0, 1, 2 and 7", or the first few and a count. */
-function listed(texts: readonly string[]): string {
-  const shown = texts.slice(0, 6);
-  if (texts.length > shown.length) return `${shown.join(', ')} and ${texts.length - shown.length} more`;
-  return shown.length < 2 ? shown.join('') : `${shown.slice(0, -1).join(', ')} or ${shown.at(-1)}`;
 }

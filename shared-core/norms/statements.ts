@@ -1,7 +1,11 @@
 import { scaleInWords } from '../scale/score-scale.ts';
 import { columnInWords, onePerson } from './norm-groups.ts';
 import { definitionInWords } from './definitions.ts';
+import type { SmoothingChoice } from '../smoothing/smoothing.ts';
 import type { NormProject } from './norm-project.ts';
+import { smoothingInScope, type SmoothingScope } from './smoothing-alternatives.ts';
+import { logLinearIn } from './smoothing-choice.ts';
+import { bandwidthInWords, degreeInWords, intervalName, keptInWords, smoothingInWords } from './smoothing-words.ts';
 import { columnOf } from './table-columns.ts';
 
 /** Phrases of the statements that stand for a choice. */
@@ -13,6 +17,13 @@ export type ChoiceKey =
   | 'duplicates'
   | 'grouping'
   | 'definition'
+  | 'smoothing'
+  | 'degree'
+  | 'kept'
+  | 'bandwidth'
+  | 'level'
+  | 'interval'
+  | 'reliability'
   | 'decimals'
   | 'rounding'
   | 'ends'
@@ -103,12 +114,63 @@ export function groupsStatement(project: NormProject): readonly StatementPart[] 
   ];
 }
 
-export function curveStatement(project: NormProject): readonly StatementPart[] {
+/** The whole statement of the Curve station; smoothing as it is in the scope given. */
+export function curveStatement(project: NormProject, scope: SmoothingScope = null): readonly StatementPart[] {
+  return [
+    ...rankStatement(project),
+    words(' '),
+    ...smoothingStatement(smoothingInScope(project, scope)),
+    words(' '),
+    ...intervalStatement(project),
+    words(' '),
+    ...reliabilityStatement(project),
+  ];
+}
+
+function rankStatement(project: NormProject): readonly StatementPart[] {
   const direction = project.tally?.scale.direction ?? 'high-is-good';
   const one = onePerson(project.people);
   return [
     words(`A ${one}’s percentile rank is the share of the group scoring `),
     phrase('definition', definitionInWords(project.curve.definition, direction)),
+    words('.'),
+  ];
+}
+
+function smoothingStatement(smoothing: SmoothingChoice): readonly StatementPart[] {
+  const model = logLinearIn(smoothing);
+  return [
+    words('The distribution is '),
+    phrase('smoothing', smoothingInWords(smoothing)),
+    ...(model === null
+      ? []
+      : [
+          words(' whose degree is '),
+          phrase('degree', degreeInWords(model.degree)),
+          words(', keeping '),
+          phrase('kept', keptInWords(model)),
+        ]),
+    ...(smoothing.kind === 'kernel'
+      ? [words(', with a bandwidth '), phrase('bandwidth', bandwidthInWords(smoothing.bandwidth))]
+      : []),
+    words('.'),
+  ];
+}
+
+function intervalStatement({ precision }: NormProject): readonly StatementPart[] {
+  return [
+    words('The sampling error of a rank is told by its '),
+    phrase('level', `${precision.level} %`),
+    words(' '),
+    phrase('interval', `${intervalName(precision.interval)} interval`),
+    words('.'),
+  ];
+}
+
+function reliabilityStatement({ precision }: NormProject): readonly StatementPart[] {
+  return [
+    words('The reliability of the test is '),
+    phrase('reliability', precision.reliability === null ? 'not given' : String(precision.reliability)),
     words('.'),
   ];
 }
@@ -183,7 +245,16 @@ export function releaseStatement(project: NormProject): readonly StatementPart[]
   ];
 }
 
-/** The method as it is printed on a sheet: the statements of the Curve and Table stations. */
+/** The method as it is printed on a sheet: what was chosen for everything that the sheet prints. */
 export function methodText(project: NormProject): string {
-  return [curveStatement(project), tableStatement(project)].map(statementText).join(' ');
+  const { columns } = project.table;
+  return [
+    rankStatement(project),
+    ...(project.curve.smoothing.kind === 'none' ? [] : [smoothingStatement(project.curve.smoothing)]),
+    ...(columns.includes('interval') ? [intervalStatement(project)] : []),
+    ...(columns.includes('measurement-band') ? [reliabilityStatement(project)] : []),
+    tableStatement(project),
+  ]
+    .map(statementText)
+    .join(' ');
 }

@@ -3,6 +3,7 @@ import { definitionName } from './definitions.ts';
 import { columnInWords, normGroups } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
 import type { Station } from './queries.ts';
+import { smoothingInBrief } from './smoothing-words.ts';
 import { columnOf } from './table-columns.ts';
 
 /** What each station holds now, in a few words for the list of stations. */
@@ -15,7 +16,7 @@ export function stationContents(project: NormProject, openQueries: number): Read
   return {
     cohort: `${printCount(source.rowsKept)} kept, ${printCount(out)} left out`,
     groups: groupsInWords(project),
-    curve: definitionName(project.curve.definition),
+    curve: `${definitionName(project.curve.definition)}, ${smoothingInBrief(project.curve.smoothing)}`,
     table: ['rank', ...table.columns.map((key) => columnOf(key, project).name)].join(', '),
     sheet: `${{ a4: 'A4', letter: 'Letter', a5: 'A5' }[sheet.paper]}, ${{ 1: 'one column', 2: 'two columns', 3: 'three columns' }[sheet.tableColumns]}`,
     release:

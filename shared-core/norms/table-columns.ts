@@ -60,6 +60,41 @@ export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
         name: 'rank to two decimals',
         explanation: 'The percentile rank before it is rounded for print.',
       };
+    case 'observed-rank':
+      return {
+        key,
+        heading: ['Observed', 'rank'],
+        name: 'observed rank',
+        explanation: 'The percentile rank before smoothing and rounding.',
+      };
+    case 'interval':
+      return {
+        key,
+        heading: [`${project.precision.level} %`, 'interval'],
+        name: `${project.precision.level} % interval`,
+        explanation: 'Error of sampling: how far the rank could move had other people been drawn.',
+      };
+    case 'standard-error':
+      return {
+        key,
+        heading: ['Standard', 'error'],
+        name: 'standard error of the rank',
+        explanation: 'Error of sampling, in percentile-rank points, as if people were drawn one by one.',
+      };
+    case 'measurement-band':
+      return {
+        key,
+        heading: ['Measure-', 'ment band'],
+        name: 'measurement band',
+        explanation: 'Error of measurement: where the rank of one person’s true score may lie, by the reliability.',
+      };
+    case 'print-range':
+      return {
+        key,
+        heading: ['Could', 'be printed'],
+        name: 'range of defensible ranks',
+        explanation: 'Lowest and highest rank over the usual definitions, with and without smoothing.',
+      };
     case 'z':
       return { key, heading: ['z'], name: 'z score', explanation: 'Distance from the middle in standard deviations.' };
     case 't':

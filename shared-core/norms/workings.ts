@@ -1,5 +1,5 @@
 import { ratio, type ExactRatio } from '../percentile/exact-ratio.ts';
-import { printCount, printRatio } from '../scores/printed-number.ts';
+import { printCount, printNumber, printRatio } from '../scores/printed-number.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { ConversionRow } from './conversion-table.ts';
@@ -7,8 +7,9 @@ import { derivedWorkings } from './derived-workings.ts';
 import { definitionInWords } from './definitions.ts';
 import { groupedClass } from './grouped-class.ts';
 import { countedPeople } from './norm-groups.ts';
-import type { GroupNorms } from './norm-set.ts';
+import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
+import { precisionWorkings } from './precision-workings.ts';
 
 /** How a printed cell came about: a heading and the steps, down to the counts, each a line of text. */
 export interface Workings {
@@ -36,17 +37,36 @@ export function workingsOf(
     case 'cumulative':
       return { title, lines: [...counts, togetherLine(norms, row)], result: row.texts.cumulative };
     case 'exact-rank':
-      return { title, lines: [...counts, ...rankLines(project, norms, row)], result: row.texts['exact-rank'] };
+      return {
+        title,
+        lines: [...counts, ...rankLines(project, norms, row), ...smoothedLines(norms, row)],
+        result: row.texts['exact-rank'],
+      };
+    case 'observed-rank':
+      return { title, lines: [...counts, ...rankLines(project, norms, row)], result: row.texts['observed-rank'] };
+    case 'interval':
+    case 'standard-error':
+    case 'measurement-band':
+    case 'print-range':
+      return {
+        title,
+        lines: [...counts, ...precisionWorkings(project, norms, row, column)],
+        result: row.texts[column],
+      };
     case 'rank':
       return {
         title,
-        lines: [...counts, ...rankLines(project, norms, row), roundingLine(project, row)],
+        lines: [...counts, ...rankLines(project, norms, row), ...smoothedLines(norms, row), roundingLine(project, row)],
         result: row.printed,
       };
     default:
       return {
         title,
-        lines: [...rankLines(project, norms, row), ...derivedWorkings(project, norms, row, column)],
+        lines: [
+          ...rankLines(project, norms, row),
+          ...smoothedLines(norms, row),
+          ...derivedWorkings(project, norms, row, column),
+        ],
         result: row.texts[column],
       };
   }
@@ -80,7 +100,7 @@ function rankLines(project: NormProject, { group, summary }: GroupNorms, row: Co
   const below = exactWeight(table, row.parts.below);
   const at = exactWeight(table, row.parts.at);
   const all = exactWeight(table, row.parts.all);
-  const value = printRatio(row.rank, 4);
+  const value = printRatio(row.observed.rank, 4);
   const sentence = `Rank: the share scoring ${definitionInWords(definition, table.scale.direction)}.`;
   switch (definition.kind) {
     case 'midpoint':
@@ -103,6 +123,19 @@ function rankLines(project: NormProject, { group, summary }: GroupNorms, row: Co
       return [sentence, `100 × (${lower} + ${within} × (${into}) / ${definition.width}) / ${all} = ${value}`];
     }
   }
+}
+
+/** What smoothing made of the observed rank; nothing where the observed one is printed. */
+function smoothedLines({ smoothing }: GroupNorms, { smoothed }: ConversionRow): readonly string[] {
+  if (smoothed === null || smoothing.state !== 'smoothed') return [];
+  const { standardError } = smoothed;
+  const value = printNumber(smoothed.percentileRank, 4);
+  return [
+    smoothing.curve.statement,
+    standardError === null
+      ? `Smoothed: ${value}`
+      : `Smoothed: ${value}, with a standard error of ${printNumber(standardError, 2)}`,
+  ];
 }
 
 function meanRankOf({ parts }: ConversionRow, people: number): ExactRatio {

@@ -1,4 +1,4 @@
-import type { GroupNorms } from '../norms/norm-set.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
 import type { Block } from './booklet.ts';
 import { linesOf, placeLines } from './text-lines.ts';
 import { textWidth } from './text-width.ts';

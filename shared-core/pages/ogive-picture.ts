@@ -1,4 +1,4 @@
-import type { GroupNorms } from '../norms/norm-set.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';

@@ -1,4 +1,5 @@
-import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormSet } from '../norms/norm-set.ts';
 import type { Block, Paper } from './booklet.ts';
 import { firstLines } from './prose.ts';
 import { editionLine, surveyName, tableName } from './sheet-texts.ts';

@@ -1,4 +1,5 @@
-import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormSet } from '../norms/norm-set.ts';
 import { tableColumns } from '../norms/table-columns.ts';
 import type { Block, TextRun } from './booklet.ts';
 import { inverseStrip } from './inverse-strip.ts';

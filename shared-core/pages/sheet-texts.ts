@@ -1,7 +1,8 @@
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
 import { columnInWords, countedPeople, groupNoun, standingTitle } from '../norms/norm-groups.ts';
-import type { GroupNorms, NormSet } from '../norms/norm-set.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormSet } from '../norms/norm-set.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { methodText } from '../norms/statements.ts';
 import type { TableColumn } from '../norms/table-columns.ts';

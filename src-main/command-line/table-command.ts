@@ -1,7 +1,8 @@
 import { basename } from 'node:path';
 import type { TalliedCohort } from '../../shared-core/desk.ts';
 import { newProject } from '../../shared-core/norms/new-project.ts';
-import { buildNormSet, type GroupNorms, type NormSet } from '../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
+import { buildNormSet, type NormSet } from '../../shared-core/norms/norm-set.ts';
 import { normSetForFile } from '../../shared-core/norms/norm-set-file.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';

@@ -1,5 +1,6 @@
 import type { PointsOf } from '../../shared-core/norms/norm-set-file.ts';
-import type { GroupNorms, NormSet } from '../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
+import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns, type TableColumn } from '../../shared-core/norms/table-columns.ts';
 import { cellText, sampleFacts, sheetSubtitle } from '../../shared-core/pages/sheet-texts.ts';
 import { inFives } from '../../shared-core/pages/table-rows.ts';

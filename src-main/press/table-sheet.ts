@@ -1,5 +1,6 @@
 import type { Worksheet } from 'exceljs';
-import type { GroupNorms, NormSet } from '../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
+import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import {
   cellText,

@@ -1,5 +1,5 @@
 import type { ChartConfiguration, ChartDataset, Point } from 'chart.js';
-import type { GroupNorms } from '../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import { printNumber } from '../../shared-core/scores/printed-number.ts';
 import type { ChartInks } from './chart-inks.ts';
 

@@ -1,5 +1,6 @@
 import type { CohortPreview, DrawnPages, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
-import { buildNormSet, type GroupNorms, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
+import { buildNormSet, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import { openQueries, type Query, type Station } from '../../shared-core/norms/queries.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';

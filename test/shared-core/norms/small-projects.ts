@@ -1,5 +1,6 @@
 import { newProject } from '../../../shared-core/norms/new-project.ts';
-import { buildNormSet, type GroupNorms, type NormSet } from '../../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../../shared-core/norms/group-norms.ts';
+import { buildNormSet, type NormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
 import type { Direction, ScoreScale } from '../../../shared-core/scale/score-scale.ts';

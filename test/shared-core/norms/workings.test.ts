@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { COLUMN_KEYS, type ColumnKey } from '../../../shared-core/norms/column-keys.ts';
 import type { ConversionRow } from '../../../shared-core/norms/conversion-table.ts';
 import type { NormProject, TableChoices } from '../../../shared-core/norms/norm-project.ts';
-import type { GroupNorms } from '../../../shared-core/norms/norm-set.ts';
+import type { GroupNorms } from '../../../shared-core/norms/group-norms.ts';
 import { workingsOf } from '../../../shared-core/norms/workings.ts';
 import type { RankDefinition } from '../../../shared-core/percentile/percentile-rank.ts';
 import { normalisedZ } from '../../../shared-core/scores/derived-score.ts';
