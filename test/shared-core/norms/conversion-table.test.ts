@@ -4,7 +4,7 @@ import type { ConversionRow } from '../../../shared-core/norms/conversion-table.
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import type { NormProject, TableChoices } from '../../../shared-core/norms/norm-project.ts';
 import { COLUMN_KEYS, type ColumnKey } from '../../../shared-core/norms/column-keys.ts';
-import { firstNorms, projectOf, scaleTo, TEN_COUNTS, weightedProject } from './small-projects.ts';
+import { curveOf, firstNorms, projectOf, scaleTo, TEN_COUNTS, weightedProject } from './small-projects.ts';
 
 function rowsWith(project: NormProject, change: Partial<TableChoices>): readonly ConversionRow[] {
   return firstNorms({ ...project, table: { ...project.table, ...change } }).rows;
@@ -33,10 +33,10 @@ describe('rows of a table', () => {
   });
 
   it('tell what each cell was made of', () => {
-    const [, , , empty, top] = rowsWith({ ...ten, curve: { definition: { kind: 'at-or-below' } } }, {});
+    const [, , , empty, top] = rowsWith({ ...ten, curve: curveOf({ kind: 'at-or-below' }) }, {});
     expect(empty?.provenance).toEqual({
       percentileRank: { from: 'counts', observed: false, below: 6, at: 0, all: 10 },
-      printed: { end: null },
+      printed: { from: 'observed', end: null },
       derived: 'rank',
     });
     expect(top?.provenance.printed.end).toBe('high');
@@ -83,13 +83,13 @@ describe('ends and halves', () => {
   });
 
   it('let half a person stand in at 0 and 100, holding nothing', () => {
-    const below = { ...projectOf(TEN_COUNTS), curve: { definition: { kind: 'below' } as const } };
+    const below = { ...projectOf(TEN_COUNTS), curve: curveOf({ kind: 'below' }) };
     const rows = rowsWith(below, { zEnds: 'half-person' });
     // Half a person of ten is 5 per cent: Φ⁻¹(0.05) = −1.6449.
     expect(texts(rows, 't')[0]).toBe('34');
     expect(rows[0]?.printedZ).toBeCloseTo(-1.6448536269514722, 12);
     expect(rows[0]?.provenance.derived).toBe('half-person');
-    const atOrBelow = { ...projectOf(TEN_COUNTS), curve: { definition: { kind: 'at-or-below' } as const } };
+    const atOrBelow = { ...projectOf(TEN_COUNTS), curve: curveOf({ kind: 'at-or-below' }) };
     const best = rowsWith(atOrBelow, { zEnds: 'half-person' })[4];
     expect(best?.printedZ).toBeCloseTo(1.6448536269514722, 12);
     expect([best?.texts.t, best?.provenance.derived]).toEqual(['66', 'half-person']);
@@ -150,7 +150,7 @@ describe('laws of every table', () => {
     fc.assert(
       fc.property(drawn, ({ counts, definition, good, table }) => {
         const scale = scaleTo(counts.length - 1, good ? 'high-is-good' : 'low-is-good');
-        const project = { ...newProject(''), ...projectOf(counts, scale), curve: { definition }, table };
+        const project = { ...newProject(''), ...projectOf(counts, scale), curve: curveOf(definition), table };
         const { rows } = firstNorms(project);
         expect(rows.map((row) => row.score)).toEqual(counts.map((_, score) => score));
         expect(printed(rows).filter((text) => /^(0|100|0\.0|100\.0)$/.test(text))).toEqual([]);

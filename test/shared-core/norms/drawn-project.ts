@@ -3,6 +3,7 @@ import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { LEFT_OUT_RULES } from '../../../shared-core/norms/reading.ts';
 import type { ScoreScale } from '../../../shared-core/scale/score-scale.ts';
+import { drawnPrecision, drawnSmoothing } from './drawn-smoothing.ts';
 
 /** Any text, with the names of keys and the words of the language that make poor keys among it. */
 export const drawnText = fc.oneof(
@@ -110,7 +111,13 @@ export const drawnProject: fc.Arbitrary<NormProject> = fc
           fc.record({ kind: fc.constant('plotting-position' as const), offset: fc.constantFrom('0', '3/8', '0.44') }),
           fc.record({ kind: fc.constant('grouped' as const), width: fc.constant(2 * scale.step) }),
         ),
+        smoothing: drawnSmoothing(scale),
+        exceptions: fc.array(
+          fc.record({ values: fc.array(drawnText, { maxLength: 3 }), smoothing: drawnSmoothing(scale) }),
+          { maxLength: 2 },
+        ),
       }),
+      precision: drawnPrecision,
       table: fc.record({
         columns: fc.shuffledSubarray([...COLUMN_KEYS]),
         decimals: fc.constantFrom(0 as const, 1 as const),

@@ -1,11 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { INVERSE_PERCENTILES, inverseTable } from '../../../shared-core/norms/inverse-table.ts';
-import { firstNorms, projectOf, scaleTo, TEN_COUNTS } from './small-projects.ts';
+import { curveOf, firstNorms, projectOf, scaleTo, TEN_COUNTS } from './small-projects.ts';
 
 const DASH = '\u2013';
 
 function scoresAt(direction: 'high-is-good' | 'low-is-good', kind: 'midpoint' | 'at-or-below'): Map<number, string> {
-  const norms = firstNorms({ ...projectOf(TEN_COUNTS, scaleTo(4, direction)), curve: { definition: { kind } } });
+  const norms = firstNorms({ ...projectOf(TEN_COUNTS, scaleTo(4, direction)), curve: curveOf({ kind }) });
   return new Map(inverseTable(norms.rows, direction).map((row) => [row.percentile, row.scoreText]));
 }
 

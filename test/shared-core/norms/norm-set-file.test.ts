@@ -27,6 +27,7 @@ describe('a norm set as plain JSON', () => {
       'excess-kurtosis',
       'five-number',
       'points',
+      'smoothing',
       'rows',
     ]);
     expect(first.points).toEqual([{ proportion: 0.5, definition: 'type-7', score: 10 }]);
@@ -39,12 +40,17 @@ describe('a norm set as plain JSON', () => {
       'percentile-rank',
       'printed',
       'derived',
+      'interval',
+      'standard-error',
+      'smoothed',
+      'alternatives',
+      'band',
       'provenance',
     ]);
     expect(Object.keys(row.derived).toSorted()).toEqual(['deviation', 'nce', 'stanine', 'sten', 't', 'z']);
     expect(row.provenance).toEqual({
       'percentile-rank': { from: 'counts', observed: true, below: 0, at: 20, all: 420 },
-      printed: { end: null },
+      printed: { from: 'observed', end: null },
       derived: 'rank',
     });
   });

@@ -3,6 +3,7 @@ import { buildNormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { RankDefinition } from '../../../shared-core/percentile/percentile-rank.ts';
 import {
+  curveOf,
   builtSet,
   firstNorms,
   projectOf,
@@ -13,7 +14,7 @@ import {
 } from './small-projects.ts';
 
 function ranksBy(project: NormProject, definition: RankDefinition): readonly number[] {
-  return firstNorms({ ...project, curve: { definition } }).rows.map((row) => row.percentileRank);
+  return firstNorms({ ...project, curve: curveOf(definition) }).rows.map((row) => row.percentileRank);
 }
 
 function close(found: readonly number[], wanted: readonly number[]): void {
@@ -110,7 +111,7 @@ describe('the groups of a set', () => {
       { kind: 'plotting-position', offset: '1' },
       { kind: 'plotting-position', offset: 'x' },
     ] as const) {
-      expect(buildNormSet({ ...settledProject(), curve: { definition } }).ok).toBe(false);
+      expect(buildNormSet({ ...settledProject(), curve: curveOf(definition) }).ok).toBe(false);
     }
   });
 
@@ -151,7 +152,7 @@ describe('the check code', () => {
     ['people', { ...project, people: 'students' }],
     ['edition', { ...project, release: { ...project.release, edition: '1.1' } }],
     ['date', { ...project, release: { ...project.release, date: '2026-06-16' } }],
-    ['definition', { ...project, curve: { definition: { kind: 'below' } } }],
+    ['definition', { ...project, curve: curveOf({ kind: 'below' }) }],
     ['one person more', { ...project, tally: oneMore }],
     ['sheet title', withSheet({ title: 'Ranks' })],
     ['how to read', withSheet({ howToRead: 'Look.' })],

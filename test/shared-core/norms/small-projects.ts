@@ -3,7 +3,9 @@ import type { GroupNorms } from '../../../shared-core/norms/group-norms.ts';
 import { buildNormSet, type NormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
+import type { RankDefinition } from '../../../shared-core/percentile/percentile-rank.ts';
 import type { Direction, ScoreScale } from '../../../shared-core/scale/score-scale.ts';
+import type { LogLinearChoice, SmoothingChoice } from '../../../shared-core/smoothing/smoothing.ts';
 
 /** A whole-number scale from 0. */
 export function scaleTo(max: number, direction: Direction = 'high-is-good'): ScoreScale {
@@ -117,6 +119,24 @@ export function settledProject(): NormProject {
     sheet: { ...bare.sheet, notes: 'Read aloud.', inverse: true },
     release: { edition: '1.0', date: '2026-06-15', answers: [] },
   };
+}
+
+/** The choices of the Curve station with one smoothing for all groups, none unless it is given. */
+export function curveOf(
+  definition: RankDefinition,
+  smoothing: SmoothingChoice = { kind: 'none' },
+): NormProject['curve'] {
+  return { definition, smoothing, exceptions: [] };
+}
+
+/** The project with all groups smoothed so. */
+export function smoothedBy(project: NormProject, smoothing: SmoothingChoice): NormProject {
+  return { ...project, curve: { ...project.curve, smoothing } };
+}
+
+/** A log-linear model that keeps nothing apart. */
+export function logLinear(degree: LogLinearChoice['degree']): { readonly kind: 'log-linear' } & LogLinearChoice {
+  return { kind: 'log-linear', degree, keptScores: [], comb: null };
 }
 
 /** The set of a project that can be built; fails the test otherwise. */

@@ -16,7 +16,7 @@ import {
   type ChoiceKey,
   type StatementPart,
 } from '../../../shared-core/norms/statements.ts';
-import { builtSet, projectOf, scaleTo, settledProject, TEN_COUNTS } from './small-projects.ts';
+import { curveOf, builtSet, projectOf, scaleTo, settledProject, TEN_COUNTS } from './small-projects.ts';
 
 const LISTED = [
   'people',
@@ -98,7 +98,7 @@ describe('alternatives', () => {
 
   it('hold the present definition even where it is not a usual one', () => {
     const definition = { kind: 'plotting-position', offset: '0.44' } as const;
-    const listed = alternatives({ ...settled, curve: { definition } }, 'definition');
+    const listed = alternatives({ ...settled, curve: curveOf(definition) }, 'definition');
     expect(listed.filter(({ chosen }) => chosen).map(({ project }) => project.curve.definition)).toEqual([definition]);
   });
 

@@ -8,7 +8,7 @@ import type { RankDefinition } from '../../../shared-core/percentile/percentile-
 import { normalisedZ } from '../../../shared-core/scores/derived-score.ts';
 import { ratio } from '../../../shared-core/percentile/exact-ratio.ts';
 import { numberIn, workedOut } from './arithmetic.ts';
-import { firstNorms, projectOf, scaleTo, TEN_COUNTS, weightedProject } from './small-projects.ts';
+import { curveOf, firstNorms, projectOf, scaleTo, TEN_COUNTS, weightedProject } from './small-projects.ts';
 
 const DEFINITIONS: readonly RankDefinition[] = [
   { kind: 'midpoint' },
@@ -35,7 +35,7 @@ const PROJECTS: readonly (readonly [string, NormProject])[] = [
 ];
 
 function withChoices(project: NormProject, definition: RankDefinition, table: Partial<TableChoices>): NormProject {
-  return { ...project, curve: { definition }, table: { ...project.table, ...table } };
+  return { ...project, curve: curveOf(definition), table: { ...project.table, ...table } };
 }
 
 /** The equations among the lines: what stands left and right of the last sign of equality. */
