@@ -61,5 +61,5 @@ export function printRanges(
 ): readonly PrintRange[] {
   const usual = curve === null ? smooth(table, { kind: 'log-linear', ...USUAL_LOG_LINEAR }, 'fit-only') : null;
   const chosen = curve !== null ? smoothedFrom(curve) : usual?.ok === true ? usual.smoothed : null;
-  return printRange(table, project.table, defensibleSmoothings(table, chosen));
+  return printRange(table, project.curve.definition, project.table, defensibleSmoothings(table, chosen));
 }

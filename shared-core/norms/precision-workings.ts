@@ -59,7 +59,7 @@ function lines(
 
 /** "at or below, smoothed": one of the defensible ways to a rank. */
 export function alternativeInWords({ definition, smoothing }: RankAlternative): string {
-  const name = definitionName({ kind: definition });
+  const name = definitionName(definition);
   if (smoothing === null) return `${name}, not smoothed`;
   return smoothing === 0 ? `${name}, smoothed` : `${name}, smoothed with a neighbouring degree`;
 }

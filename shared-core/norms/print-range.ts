@@ -1,13 +1,14 @@
-import { compareRatios, ratioNear, type ExactRatio } from '../percentile/exact-ratio.ts';
-import { percentileRanks } from '../percentile/percentile-rank.ts';
-import { smoothedRanks, type CountedRank } from '../precision/counted-rank.ts';
+import { compareRatios, type ExactRatio } from '../percentile/exact-ratio.ts';
+import { percentileRanks, type RankDefinition } from '../percentile/percentile-rank.ts';
+import { countedRank } from '../precision/counted-rank.ts';
 import { printRank, type RankPrint } from '../scores/printed-number.ts';
 import type { Smoothed } from '../smoothing/smoothing.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
+import { ranksOfSmoothed } from './smoothed-rank.ts';
 
 /** One defensible way to a rank: the definition, and the smoothing, by its place in the list given, or none. */
 export interface RankAlternative {
-  readonly definition: CountedRank;
+  readonly definition: RankDefinition;
   readonly smoothing: number | null;
 }
 
@@ -19,7 +20,7 @@ export interface PrintRange {
   readonly highBy: RankAlternative;
 }
 
-const DEFINITIONS: readonly CountedRank[] = ['midpoint', 'at-or-below', 'below'];
+const DEFINITIONS: readonly RankDefinition[] = [{ kind: 'midpoint' }, { kind: 'at-or-below' }, { kind: 'below' }];
 
 interface Ranked {
   readonly by: RankAlternative;
@@ -28,12 +29,13 @@ interface Ranked {
 
 /**
  * What else could have been printed: for every attainable score, lowest first, the range of printed ranks over the
- * definitions midpoint, at or below, and below, each without smoothing and with every smoothing given. Where low and high
- * are the same text, the row hangs on no choice. Decimals, rounding and ends are those of the table. Throws on a table
- * without people and on a smoothing of another scale.
+ * definitions midpoint, at or below, and below, and the one chosen, each without smoothing and with every smoothing given.
+ * Where low and high are the same text, the row hangs on no choice. Decimals, rounding and ends are those of the table.
+ * Throws on a table without people and on a smoothing of another scale.
  */
 export function printRange(
   table: FrequencyTable,
+  chosen: RankDefinition,
   choices: RankPrint,
   smoothings: readonly Smoothed[],
 ): readonly PrintRange[] {
@@ -41,11 +43,12 @@ export function printRange(
   if (smoothings.some(({ probabilities }) => probabilities.length !== scores)) {
     throw new RangeError('a smoothing of another scale');
   }
-  const alternatives = DEFINITIONS.flatMap((definition): readonly Ranked[] => [
-    { by: { definition, smoothing: null }, ranks: percentileRanks(table, { kind: definition }) },
+  const definitions = countedRank(chosen) === null ? [...DEFINITIONS, chosen] : DEFINITIONS;
+  const alternatives = definitions.flatMap((definition): readonly Ranked[] => [
+    { by: { definition, smoothing: null }, ranks: percentileRanks(table, definition) },
     ...smoothings.map((smoothed, smoothing) => ({
       by: { definition, smoothing },
-      ranks: smoothedRanks(smoothed, table.scale.direction, definition).map(ratioNear),
+      ranks: ranksOfSmoothed(smoothed, table, definition),
     })),
   ]);
   return table.counts.map((_, position) => rangeAt(alternatives, position, choices));

@@ -37,9 +37,10 @@ export function projectFromText(text: string): ProjectRead {
 
 /** Projects of version 1 knew neither smoothing nor precision: they get the defaults. */
 function broughtForward(value: Readonly<Record<string, unknown>>): Readonly<Record<string, unknown>> {
-  if (value['version'] !== 1 || !isRecord(value['curve'])) return value;
-  const { curve, precision } = newProject('');
-  return { ...value, version: PROJECT_VERSION, curve: { ...curve, ...value['curve'] }, precision };
+  if (value['version'] !== 1) return value;
+  const { curve: now, precision } = newProject('');
+  const curve = isRecord(value['curve']) ? { ...now, ...value['curve'] } : value['curve'];
+  return { ...value, version: PROJECT_VERSION, curve, precision };
 }
 
 function damaged(why: string): ProjectRead {

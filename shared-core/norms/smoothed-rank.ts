@@ -1,6 +1,7 @@
 import { ratioNear, ratioToNumber, type ExactRatio } from '../percentile/exact-ratio.ts';
 import { parseOffset, scoresPerClass, type RankDefinition } from '../percentile/percentile-rank.ts';
 import { smoothedRanks } from '../precision/counted-rank.ts';
+import type { Smoothed } from '../smoothing/smoothing.ts';
 import { peopleIn, type FrequencyTable } from '../tally/frequency-table.ts';
 import { smoothedFrom, type SmoothedCurve } from './group-smoothing.ts';
 
@@ -14,11 +15,19 @@ export function ranksOfCurve(
   table: FrequencyTable,
   definition: RankDefinition,
 ): readonly ExactRatio[] {
-  return rankNumbers(curve, table, definition).map((rank) => ratioNear(Math.min(100, Math.max(0, rank))));
+  return ranksOfSmoothed(smoothedFrom(curve), table, definition);
 }
 
-function rankNumbers(curve: SmoothedCurve, table: FrequencyTable, definition: RankDefinition): readonly number[] {
-  const smoothed = smoothedFrom(curve);
+/** The same of a distribution as smoothing gives it. */
+export function ranksOfSmoothed(
+  smoothed: Smoothed,
+  table: FrequencyTable,
+  definition: RankDefinition,
+): readonly ExactRatio[] {
+  return rankNumbers(smoothed, table, definition).map((rank) => ratioNear(Math.min(100, Math.max(0, rank))));
+}
+
+function rankNumbers(smoothed: Smoothed, table: FrequencyTable, definition: RankDefinition): readonly number[] {
   const { direction } = table.scale;
   switch (definition.kind) {
     case 'midpoint':

@@ -18,6 +18,7 @@ export function smoothingInScope(project: NormProject, scope: SmoothingScope): S
 export function smoothingAlternatives(project: NormProject, scope: SmoothingScope): readonly Alternative[] {
   const now = smoothingInScope(project, scope);
   const model = logLinearIn(now) ?? USUAL_LOG_LINEAR;
+  const bandwidth = now.kind === 'kernel' ? now.bandwidth : 'auto';
   const ways: readonly (readonly [SmoothingChoice, string])[] = [
     [{ kind: 'none' }, 'Each rank is what the sample gives, with the accidents of its steps.'],
     [
@@ -25,11 +26,11 @@ export function smoothingAlternatives(project: NormProject, scope: SmoothingScop
       'Keeps the number of people and as many moments as its degree: mean, standard deviation, skewness … The usual choice.',
     ],
     [
-      { kind: 'kernel', bandwidth: 'auto', after: null },
+      { kind: 'kernel', bandwidth, after: null },
       'Spreads each score by a normal curve; keeps mean and standard deviation and follows the data closely.',
     ],
     [
-      { kind: 'kernel', bandwidth: 'auto', after: model },
+      { kind: 'kernel', bandwidth, after: model },
       'First the log-linear model, then a kernel that makes its steps continuous.',
     ],
     [

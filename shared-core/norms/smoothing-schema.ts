@@ -4,6 +4,9 @@ import { HIGHEST_LEVEL, LOWEST_LEVEL } from '../precision/confidence-level.ts';
 
 /** The file format of the choices of smoothing and precision; see the types of the same names. */
 
+/** Raw-score points; from there on a curve is the normal one whatever the bandwidth, and doubles lose its shape. */
+const WIDEST_BANDWIDTH = 1e6;
+
 const degree = v.union([
   v.pipe(v.number(), v.integer(), v.minValue(1), v.maxValue(10)),
   v.picklist(['bic', 'aic', 'likelihood-ratio']),
@@ -18,6 +21,7 @@ const logLinearParts = {
         every: v.pipe(v.number(), v.integer(), v.minValue(2), v.maxValue(100)),
         offset: v.pipe(v.number(), v.integer(), v.minValue(0), v.maxValue(99)),
       }),
+      v.check(({ every, offset }) => offset < every, 'a comb starts before its second tooth'),
       v.readonly(),
     ),
   ),
@@ -29,7 +33,7 @@ export const smoothingSchema = v.pipe(
     v.object({ kind: v.literal('log-linear'), ...logLinearParts }),
     v.object({
       kind: v.literal('kernel'),
-      bandwidth: v.union([v.pipe(v.number(), v.finite(), v.gtValue(0)), v.literal('auto')]),
+      bandwidth: v.union([v.pipe(v.number(), v.gtValue(0), v.maxValue(WIDEST_BANDWIDTH)), v.literal('auto')]),
       after: v.nullable(v.pipe(v.object(logLinearParts), v.readonly())),
     }),
     v.object({ kind: v.literal('beta-binomial') }),

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { printRange } from '../../../shared-core/norms/print-range.ts';
 import { defensibleSmoothings } from '../../../shared-core/norms/print-range-smoothings.ts';
+import { ranksOfSmoothed } from '../../../shared-core/norms/smoothed-rank.ts';
 import { compareRatios, ratio, ratioNear } from '../../../shared-core/percentile/exact-ratio.ts';
 import { percentileRanks } from '../../../shared-core/percentile/percentile-rank.ts';
 import { smoothedRanks } from '../../../shared-core/precision/counted-rank.ts';
@@ -12,6 +13,7 @@ import { tableFromCounts } from '../../../shared-core/tally/frequency-table.ts';
 import { anyTables, lowIsGood } from '../percentile/some-tables.ts';
 
 const print: RankPrint = { decimals: 0, rounding: 'half-up', ends: 'signs' };
+const midpoint = { kind: 'midpoint' } as const;
 const KINDS = ['below', 'midpoint', 'at-or-below'] as const;
 const scale = { min: 0, max: 10, step: 1, direction: 'high-is-good' as const };
 const table = tableFromCounts(scale, [3, 8, 14, 25, 31, 40, 33, 22, 13, 7, 4]);
@@ -30,7 +32,7 @@ describe('the range of printed ranks', () => {
       fc.property(anyTables(), fc.boolean(), (some, mirrored) => {
         const seen = mirrored ? lowIsGood(some) : some;
         const [below = [], , atOrBelow = []] = KINDS.map((kind) => percentileRanks(seen, { kind }));
-        printRange(seen, print, []).forEach(({ low, high }, position) => {
+        printRange(seen, midpoint, print, []).forEach(({ low, high }, position) => {
           const [first, last] = [below[position], atOrBelow[position]];
           if (first === undefined || last === undefined) throw new Error('a score without a rank');
           expect(low).toBe(printRank(first, print).text);
@@ -49,30 +51,32 @@ describe('the range of printed ranks', () => {
         ...smoothings.map((one) => smoothedRanks(one, direction, kind).map(ratioNear)),
       ]);
       expect(all.length).toBe(12);
-      printRange(seen, { ...print, decimals: 1 }, smoothings).forEach(({ low, high, lowBy, highBy }, position) => {
-        const ranks = all.map((one) => one[position] ?? ratio(-1n, 1n)).sort(compareRatios);
-        const texts = [ranks[0], ranks.at(-1)].map((rank) =>
-          printRank(rank ?? ratio(0n, 1n), { ...print, decimals: 1 }),
-        );
-        expect([low, high]).toEqual(texts.map(({ text }) => text));
-        for (const [text, by] of [
-          [low, lowBy],
-          [high, highBy],
-        ] as const) {
-          const smoothed = by.smoothing === null ? null : smoothings[by.smoothing];
-          const ranksBy =
-            smoothed === null || smoothed === undefined
-              ? percentileRanks(seen, { kind: by.definition })
-              : smoothedRanks(smoothed, direction, by.definition).map(ratioNear);
-          expect(printRank(ranksBy[position] ?? ratio(-1n, 1n), { ...print, decimals: 1 }).text).toBe(text);
-        }
-      });
+      printRange(seen, midpoint, { ...print, decimals: 1 }, smoothings).forEach(
+        ({ low, high, lowBy, highBy }, position) => {
+          const ranks = all.map((one) => one[position] ?? ratio(-1n, 1n)).sort(compareRatios);
+          const texts = [ranks[0], ranks.at(-1)].map((rank) =>
+            printRank(rank ?? ratio(0n, 1n), { ...print, decimals: 1 }),
+          );
+          expect([low, high]).toEqual(texts.map(({ text }) => text));
+          for (const [text, by] of [
+            [low, lowBy],
+            [high, highBy],
+          ] as const) {
+            const smoothed = by.smoothing === null ? null : smoothings[by.smoothing];
+            const ranksBy =
+              smoothed === null || smoothed === undefined
+                ? percentileRanks(seen, by.definition)
+                : ranksOfSmoothed(smoothed, seen, by.definition);
+            expect(printRank(ranksBy[position] ?? ratio(-1n, 1n), { ...print, decimals: 1 }).text).toBe(text);
+          }
+        },
+      );
     }
   });
 
   it('refuses a smoothing of another scale', () => {
     const short = tableFromCounts({ ...scale, max: 1 }, [1, 1]);
-    expect(() => printRange(short, print, [logLinear(2)])).toThrow(RangeError);
+    expect(() => printRange(short, midpoint, print, [logLinear(2)])).toThrow(RangeError);
   });
 });
 
