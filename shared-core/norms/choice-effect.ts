@@ -1,6 +1,7 @@
 import { ratioToNumber } from '../percentile/exact-ratio.ts';
 import { printNumber } from '../scores/printed-number.ts';
-import { normsOfGroup, type GroupNorms } from './group-norms.ts';
+import { conversionRows } from './conversion-table.ts';
+import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
 
 /** What another choice would do to a group's table: printed ranks that change, and the largest move of a rank. */
@@ -13,7 +14,16 @@ export interface ChoiceEffect {
 
 /** Compares a group's table with the one that another project's definition and printing rules would give; smoothing stays. */
 export function choiceEffect(norms: GroupNorms, other: NormProject): ChoiceEffect {
-  const { rows } = normsOfGroup(other, norms.group, norms.smoothing);
+  const { group, summary, smoothing, precision } = norms;
+  const rows = conversionRows({
+    table: group.table,
+    summary,
+    definition: other.curve.definition,
+    choices: other.table,
+    curve: smoothing.state === 'smoothed' ? smoothing.curve : null,
+    precision,
+    ranges: null,
+  });
   const moves = rows.map((row, position) => {
     const before = norms.rows[position];
     return before === undefined ? 0 : Math.abs(ratioToNumber(row.rank) - ratioToNumber(before.rank));

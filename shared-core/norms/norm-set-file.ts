@@ -1,39 +1,55 @@
 import type { PercentilePoint } from '../percentile/percentile-point.ts';
+import { bootstrapForFile, rowBootstrapForFile, type GroupBootstrap } from './bootstrap-file.ts';
 import { definitionKey } from './definitions.ts';
 import { toFileKeys } from './file-keys.ts';
 import type { GroupSmoothing } from './group-smoothing.ts';
 import { printRanges, type GroupNorms } from './group-norms.ts';
+import type { CohortSource } from './norm-project.ts';
 import type { PrintRange } from './print-range.ts';
 import type { NormSet } from './norm-set.ts';
 
 /** A group's percentile points, where some were asked for. */
 export type PointsOf = (norms: GroupNorms) => readonly PercentilePoint[];
 
+/** A group's bootstrap, or null where none was made. */
+export type BootstrapOf = (norms: GroupNorms) => GroupBootstrap | null;
+
 /**
  * The numbers of a set as plain JSON, unrounded beside the printed texts: what the command line prints and what
  * `norm-set.json` holds. Every key is lower-case-with-hyphens; only the `group` object has the file's own column names.
  */
-export function normSetForFile(normSet: NormSet, pointsOf: PointsOf): Readonly<Record<string, unknown>> {
+export function normSetForFile(
+  normSet: NormSet,
+  pointsOf: PointsOf,
+  bootstrapOf: BootstrapOf = () => null,
+): Readonly<Record<string, unknown>> {
   const { project, groups } = normSet;
   const { source, tally } = project;
   return {
-    source:
-      source === null
-        ? null
-        : {
-            file: source.file,
-            sha256: source.sha256,
-            'rows-read': source.rowsRead,
-            'rows-kept': source.rowsKept,
-            'left-out': source.leftOut.map(({ rule, count, rows }) => ({ rule, count, rows })),
-          },
+    source: source === null ? null : sourceForFile(source),
     scale: tally === null ? null : { min: tally.scale.min, max: tally.scale.max, step: tally.scale.step },
     definition: definitionKey(project.curve.definition),
-    groups: groups.map((norms) => groupForFile(normSet, norms, pointsOf(norms))),
+    groups: groups.map((norms) => groupForFile(normSet, norms, pointsOf(norms), bootstrapOf(norms))),
   };
 }
 
-function groupForFile(normSet: NormSet, norms: GroupNorms, points: readonly PercentilePoint[]): unknown {
+/** Where the people come from, and which rows were left out. */
+export function sourceForFile({ file, sha256, rowsRead, rowsKept, leftOut }: CohortSource): unknown {
+  return {
+    file,
+    sha256,
+    'rows-read': rowsRead,
+    'rows-kept': rowsKept,
+    'left-out': leftOut.map(({ rule, count, rows }) => ({ rule, count, rows })),
+  };
+}
+
+function groupForFile(
+  normSet: NormSet,
+  norms: GroupNorms,
+  points: readonly PercentilePoint[],
+  bootstrap: GroupBootstrap | null,
+): unknown {
   const { summary, group, rows, smoothing } = norms;
   const curve = smoothing.state === 'smoothed' ? smoothing.curve : null;
   const ranges = printRanges(normSet.project, group.table, curve);
@@ -49,6 +65,7 @@ function groupForFile(normSet: NormSet, norms: GroupNorms, points: readonly Perc
     'five-number': summary.fiveNumbers,
     points: points.map(({ proportion, definition, score }) => ({ proportion, definition, score })),
     smoothing: smoothingForFile(norms.smoothing),
+    ...(bootstrap === null ? {} : { bootstrap: bootstrapForFile(bootstrap) }),
     rows: rows.map((row, position) => ({
       score: row.score,
       count: row.count,
@@ -62,6 +79,7 @@ function groupForFile(normSet: NormSet, norms: GroupNorms, points: readonly Perc
       smoothed: toFileKeys(row.smoothed),
       alternatives: rangeForFile(ranges[position] ?? null),
       band: row.band === null ? null : { low: row.band.low, high: row.band.high },
+      ...(bootstrap === null ? {} : { bootstrap: rowBootstrapForFile(bootstrap, position) }),
       provenance: toFileKeys(row.provenance),
     })),
   };

@@ -91,6 +91,8 @@ export interface TableHead {
   readonly right: number;
   /** Room from the column before it. */
   readonly width: number;
+  /** Where the cells are ranges aligned on their dashes: room for the dash and for what stands behind it. */
+  readonly range: { readonly dash: number; readonly after: number } | null;
 }
 
 export interface PlacedRow {

@@ -1,8 +1,10 @@
 import type { TableColumn } from '../norms/table-columns.ts';
-import type { Rule, TableColumnBlock, TextLine } from './booklet.ts';
+import type { Rule, TableColumnBlock, TableHead, TextLine } from './booklet.ts';
+import { rangeSides } from './range-cell.ts';
 import { cellText } from './sheet-texts.ts';
 import type { TableMeasure } from './table-measure.ts';
 import { columnHeight, type RowColumn, type RowMeasure } from './table-rows.ts';
+import { textWidth } from './text-width.ts';
 import { FINE_RULE, GUTTER, ROW, STRONG_RULE, TABLE_HEAD } from './type-sizes.ts';
 
 /** Extra room between two fives. */
@@ -78,14 +80,18 @@ export function placeTable(
 export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[] {
   const typeScale = block.size / ROW.size;
   const rule = (y: number, weight: number): Rule => ({ kind: 'rule', x: block.x, y, width: block.width, weight });
-  const figure = (index: number, text: string, baseline: number, size: number, bold: boolean): TextLine => {
+  const headOf = (index: number): TableHead => {
     const head = block.heads[index];
     if (head === undefined) throw new RangeError('a cell without a head');
+    return head;
+  };
+  const figure = (index: number, text: string, baseline: number, size: number, bold: boolean, left = 0): TextLine => {
+    const head = headOf(index);
     return {
       kind: 'text',
       x: block.x + head.right - head.width,
       baseline,
-      width: head.width,
+      width: head.width - left,
       align: 'right',
       size,
       colour: 'ink',
@@ -103,7 +109,16 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
       }),
     ),
     ...block.rows.flatMap(({ baseline, texts }) =>
-      texts.map((text, index) => figure(index, text, baseline, block.size, index === 0)),
+      texts.map((text, index) =>
+        figure(index, text, baseline, block.size, index === 0, leftBehind(text, headOf(index), block.size)),
+      ),
     ),
   ];
+}
+
+/** Points between the end of a cell's text and the end of its column. */
+function leftBehind(text: string, { range }: TableHead, size: number): number {
+  if (range === null) return 0;
+  const { after } = rangeSides(text);
+  return after === null ? range.after + range.dash : range.after - textWidth(after, 'sans', size);
 }

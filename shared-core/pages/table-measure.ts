@@ -2,6 +2,7 @@ import type { NormSet } from '../norms/norm-set.ts';
 import type { SheetChoices } from '../norms/norm-project.ts';
 import { tableColumns } from '../norms/table-columns.ts';
 import type { TableHead } from './booklet.ts';
+import { isRangeColumn, RANGE_DASH, rangeSides } from './range-cell.ts';
 import { cellText } from './sheet-texts.ts';
 import { textWidth } from './text-width.ts';
 import { GUTTER, ROW, TABLE_HEAD } from './type-sizes.ts';
@@ -49,16 +50,28 @@ interface NaturalColumn {
   readonly key: TableHead['key'];
   readonly lines: readonly string[];
   readonly width: number;
+  readonly range: TableHead['range'];
 }
 
 function naturalColumns(normSet: NormSet): readonly NaturalColumn[] {
   return tableColumns(normSet.project).map((column) => {
     const face = column.key === 'score' ? 'sans-bold' : 'sans';
     const texts = new Set(normSet.groups.flatMap(({ rows }) => rows.map((row) => cellText(row, column))));
-    const figures = Math.max(...[...texts].map((text) => textWidth(text, face, ROW.size)));
+    const range = isRangeColumn(column.key) ? rangeRoom(texts) : null;
+    const figures = range?.width ?? Math.max(...[...texts].map((text) => textWidth(text, face, ROW.size)));
     const head = Math.max(...column.heading.map((line) => textWidth(line, 'sans-bold', TABLE_HEAD.size)));
-    return { key: column.key, lines: column.heading, width: Math.max(figures, head) };
+    return { key: column.key, lines: column.heading, width: Math.max(figures, head), range };
   });
+}
+
+/** Widths of ranges aligned on their dashes; without any dash they are figures like others. */
+function rangeRoom(texts: ReadonlySet<string>): (NonNullable<TableHead['range']> & { readonly width: number }) | null {
+  const sides = [...texts].map(rangeSides);
+  if (sides.every(({ after }) => after === null)) return null;
+  const dash = textWidth(RANGE_DASH, 'sans', ROW.size);
+  const before = sides.map(({ upToDash, after }) => textWidth(upToDash, 'sans', ROW.size) - (after === null ? 0 : dash));
+  const after = Math.max(...sides.map((side) => textWidth(side.after ?? '', 'sans', ROW.size)));
+  return { dash, after, width: Math.max(...before) + dash + after };
 }
 
 /** Shares the room left between the columns of figures, half a share before the first. */
@@ -75,7 +88,9 @@ function placed(
   const heads = natural.map((column, index) => {
     const before = index === 0 ? gap / 2 : gap;
     right += gap + column.width * typeScale;
-    return { key: column.key, lines: column.lines, right, width: column.width * typeScale + before };
+    const range =
+      column.range === null ? null : { dash: column.range.dash * typeScale, after: column.range.after * typeScale };
+    return { key: column.key, lines: column.lines, right, width: column.width * typeScale + before, range };
   });
   return { width: right, heads };
 }

@@ -56,16 +56,22 @@ export function replicatesNeeded(level: number): number {
   return Math.ceil((1 / tailOf(level)) * (1 - 1e-9)) - 1;
 }
 
+/** What is wrong with a number of replicates for an interval of a level, in a sentence, or null. */
+export function replicatesProblem(replicates: number, level: number): string | null {
+  const needed = replicatesNeeded(level);
+  return Number.isSafeInteger(replicates) && replicates >= needed && replicates <= MOST_REPLICATES
+    ? null
+    : `An interval of ${level} per cent needs from ${needed} to ${MOST_REPLICATES} replicates.`;
+}
+
 /** What is wrong with a plan for a table, in a sentence that tells what to do, or null. */
 export function bootstrapProblem(table: FrequencyTable, plan: BootstrapPlan): string | null {
   const { replicates, level, seed } = plan;
   const wrong = levelProblem(level) ?? seedProblem(seed);
   if (wrong !== null) return wrong;
   if (weightUnitsIn(table) === 0n) return 'A group without people cannot be drawn from.';
-  const needed = replicatesNeeded(level);
-  if (!Number.isSafeInteger(replicates) || replicates < needed || replicates > MOST_REPLICATES) {
-    return `An interval of ${level} per cent needs from ${needed} to ${MOST_REPLICATES} replicates.`;
-  }
+  const unfit = replicatesProblem(replicates, level);
+  if (unfit !== null) return unfit;
   const most = Math.floor(MOST_CELLS / table.counts.length);
   return replicates > most ? `A scale of ${table.counts.length} scores can have at most ${most} replicates.` : null;
 }

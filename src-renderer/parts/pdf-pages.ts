@@ -1,31 +1,9 @@
 import { getDocument, GlobalWorkerOptions, type PDFDocumentProxy } from 'pdfjs-dist';
 import workerUrl from 'pdfjs-dist/build/pdf.worker.min.mjs?url';
-
-/** Lets only scripts of the program's own origin become workers. */
-interface WorkerPolicy {
-  createScriptURL(url: string): string;
-}
-
-interface PolicyMaker {
-  createPolicy(name: string, rules: WorkerPolicy): WorkerPolicy;
-}
-
-function ownScript(url: string): string {
-  const resolved = new URL(url, window.location.href);
-  if (resolved.origin !== window.location.origin) throw new TypeError('a worker of another origin');
-  return resolved.href;
-}
-
-let ready = false;
+import { startWorker } from '../compute/own-worker.ts';
 
 function prepareWorker(): void {
-  if (ready) return;
-  const maker = (window as unknown as { readonly trustedTypes?: PolicyMaker }).trustedTypes;
-  const policy = maker?.createPolicy('normloom-worker', { createScriptURL: ownScript });
-  GlobalWorkerOptions.workerPort = new Worker(policy?.createScriptURL(workerUrl) ?? ownScript(workerUrl), {
-    type: 'module',
-  });
-  ready = true;
+  GlobalWorkerOptions.workerPort ??= startWorker(workerUrl);
 }
 
 /** Opens a PDF given as base64. */

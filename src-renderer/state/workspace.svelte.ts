@@ -1,11 +1,12 @@
 import type { CohortPreview, DrawnPages, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
-import { buildNormSet, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
+import type { NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import { openQueries, type Query, type Station } from '../../shared-core/norms/queries.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';
 import { readTypedCounts, type LineProblem } from '../../shared-core/tally/typed-counts.ts';
 import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
+import { compute } from '../compute/compute.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { ProjectHistory } from './history.svelte.ts';
 import { followJob } from './run-job.ts';
@@ -48,7 +49,10 @@ export class Workspace {
   #handle: FileHandle | null;
   #drawing: string | null = null;
 
-  readonly built: NormSetBuilt = $derived.by(() => buildNormSet(this.project));
+  /** The norm set of the project, or of the one before it while the new one is being worked out. */
+  built = $state.raw<NormSetBuilt>({ ok: false, problem: 'The tables are being worked out.' });
+  /** The project that `built` belongs to. */
+  builtFor = $state.raw<NormProject | null>(null);
   readonly groups: readonly GroupNorms[] = $derived(this.built.ok ? this.built.normSet.groups : []);
   readonly queries: readonly Query[] = $derived(this.built.ok ? this.built.normSet.queries : []);
   readonly open: readonly Query[] = $derived(openQueries(this.queries));
@@ -64,6 +68,7 @@ export class Workspace {
     this.file = opened.file;
     this.cohort = opened.cohort;
     if (opened.project.tally !== null) this.station = 'curve';
+    void this.#build();
     if (opened.cohort !== null) void this.lookAgain();
   }
 
@@ -281,7 +286,23 @@ export class Workspace {
     return null;
   }
 
+  /** Works the numbers out beside the page; an answer that came too late is dropped. */
+  async #build(): Promise<void> {
+    const { project } = this;
+    const built = await compute.ask({ kind: 'norm-set', project }).then(
+      (answer) => answer.built,
+      (fault: unknown): NormSetBuilt => ({
+        ok: false,
+        problem: `The tables could not be worked out (${fault instanceof Error ? fault.message : 'unknown fault'}). Undo the last choice.`,
+      }),
+    );
+    if (this.project !== project) return;
+    this.built = built;
+    this.builtFor = project;
+  }
+
   #changed(): void {
+    void this.#build();
     this.pressed = null;
     if (this.saved.kind === 'saved') this.saved = { kind: 'unsaved' };
     if (this.#autosave !== null) clearTimeout(this.#autosave);
