@@ -4,7 +4,10 @@ import type { LogLinearChoice } from './smoothing.ts';
 
 /** What a log-linear model is fitted to, apart from its degree. All lists run over the grid, lowest score first. */
 export interface LogLinearDesign {
+  readonly scores: readonly number[];
   readonly frequencies: Float64Array;
+  /** The same in a plain list. */
+  readonly observed: readonly number[];
   /** Positions of the grid from −1 to 1. */
   readonly points: Float64Array;
   /** True where the observed frequency is kept, so that the curve does not pass through the cell. */
@@ -47,7 +50,9 @@ export function logLinearDesign(
   }
   const last = scores.length - 1;
   const design: LogLinearDesign = {
+    scores,
     frequencies: Float64Array.from(frequencies.at),
+    observed: frequencies.at,
     points: Float64Array.from(scores, (_, position) => (2 * position - last) / last),
     kept,
     comb,
@@ -86,7 +91,7 @@ export function parametersOf(design: LogLinearDesign, degree: number): number {
  * here.) A comb adds one direction more, for which the fit itself watches.
  */
 export function highestDeterminedDegree(design: LogLinearDesign): number {
-  const observed = [...design.frequencies].filter((_, k) => design.kept[k] === false).map((frequency) => frequency > 0);
+  const observed = design.observed.filter((_, k) => design.kept[k] === false).map((frequency) => frequency > 0);
   const costs = [false, true].flatMap((low) =>
     [false, true].map((high) => {
       const inner = observed.slice(low ? 1 : 0, high ? -1 : undefined);
