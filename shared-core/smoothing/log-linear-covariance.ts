@@ -62,9 +62,9 @@ function runningSums(
   degree: number,
   probabilities: readonly number[],
 ): readonly Float64Array[] {
-  const masses = Float64Array.from(probabilities);
+  const masses = new Float64Array(probabilities);
   const indicators = design.kept.flatMap((isKept, place) =>
-    isKept && (masses[place] ?? 0) > 0 ? [Float64Array.from(masses, (_, k) => (k === place ? 1 : 0))] : [],
+    isKept && (masses[place] ?? 0) > 0 ? [masses.map((_, k) => (k === place ? 1 : 0))] : [],
   );
   const extras = design.comb === null ? indicators : [...indicators, design.comb];
   const basis = new OrthonormalBasis(design.points, degree, extras);

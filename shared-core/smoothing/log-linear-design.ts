@@ -34,7 +34,8 @@ export function logLinearDesign(
   const stranger = choice.keptScores.find((score) => !scores.includes(score));
   if (stranger !== undefined)
     return { ok: false, problem: `${stranger} is not a score of this scale, so it cannot be kept.` };
-  const kept = scores.map((score) => choice.keptScores.includes(score));
+  const keptScores = new Set(choice.keptScores);
+  const kept = scores.map((score) => keptScores.has(score));
   const comb = choice.comb === null ? null : teeth(choice.comb, kept);
   const free = kept.filter((isKept) => !isKept).length;
   const freeTotal = sumWhere(frequencies.at, (position) => kept[position] === false);
@@ -51,9 +52,9 @@ export function logLinearDesign(
   const last = scores.length - 1;
   const design: LogLinearDesign = {
     scores,
-    frequencies: Float64Array.from(frequencies.at),
+    frequencies: new Float64Array(frequencies.at),
     observed: frequencies.at,
-    points: Float64Array.from(scores, (_, position) => (2 * position - last) / last),
+    points: new Float64Array(scores.map((_, position) => (2 * position - last) / last)),
     kept,
     comb,
     total: frequencies.total,
@@ -74,7 +75,7 @@ function teeth(comb: NonNullable<LogLinearChoice['comb']>, kept: readonly boolea
       `a comb has a tooth every 2 or more steps and starts within the first ${every}, not at ${offset}`,
     );
   }
-  return Float64Array.from(kept, (isKept, position) => (!isKept && position % every === offset ? 1 : 0));
+  return new Float64Array(kept.map((isKept, position) => (!isKept && position % every === offset ? 1 : 0)));
 }
 
 /** Free parameters of the model of a degree, the constant counted. */

@@ -37,7 +37,8 @@ interface State {
  * maximum likelihood. Newton's method in the polynomials orthonormal under the present shares, in which the matrix of
  * second derivatives is N times the identity; a step is halved until the deviance falls as its slope promises. Starts
  * from the given logarithms of shares (a fit of a lower degree; without one, a normal curve of the observed mean and
- * spread) and, when that does not get there, once more from equal shares. Kept cells take no part: an indicator fits its own cell, and the rest is fitted by the rest.
+ * spread) and, when that does not get there, once more from equal shares. Kept cells take no part: an indicator fits its
+ * own cell, and the rest is fitted by the rest.
  */
 export function fitLogLinear(design: LogLinearDesign, degree: number, start: Float64Array | null): LogLinearFit {
   const warm = start ?? (degree >= 2 ? normalLogs(design) : null);
@@ -142,7 +143,7 @@ function standsStill(design: LogLinearDesign, move: Float64Array): boolean {
 /** Probabilities of the whole grid: kept cells at their observed shares, the others share the rest. */
 export function probabilitiesOf(design: LogLinearDesign, fit: LogLinearFit): readonly number[] {
   const free = design.freeTotal / design.total;
-  return Array.from(fit.shares, (share, k) =>
-    design.kept[k] === true ? (design.frequencies[k] ?? 0) / design.total : share * free,
+  return design.observed.map((frequency, k) =>
+    design.kept[k] === true ? frequency / design.total : (fit.shares[k] ?? 0) * free,
   );
 }

@@ -36,9 +36,12 @@ export class OrthonormalBasis {
     private readonly degree: number,
     private readonly extras: readonly Float64Array[],
   ) {
-    const room = (): Float64Array => new Float64Array(points.length);
-    this.columns = Array.from({ length: degree + 1 + extras.length }, room);
-    this.weighted = this.columns.map(room);
+    const { length } = points;
+    const count = degree + 1 + extras.length;
+    const room = new Float64Array(2 * count * length);
+    const place = (at: number): Float64Array => room.subarray(at * length, (at + 1) * length);
+    this.columns = Array.from({ length: count }, (_, c) => place(c));
+    this.weighted = Array.from({ length: count }, (_, c) => place(count + c));
   }
 
   /**
