@@ -36,16 +36,11 @@ export function smoothedStandardErrors(
   direction: Direction,
   counted: CountedRank,
 ): readonly number[] | null {
-  const { varianceOf, probabilities } = smoothed;
-  if (varianceOf === null || smoothed.choice.kind === 'kernel') return null;
+  const { rankVariancesOf, choice } = smoothed;
+  if (rankVariancesOf === null || choice.kind === 'kernel') return null;
   const tied = shareOfTied(counted);
-  return probabilities.map((_, position) => {
-    const weights = probabilities.map((_, other) => {
-      if (other === position) return tied;
-      return other < position === (direction === 'high-is-good') ? 1 : 0;
-    });
-    return 100 * Math.sqrt(Math.max(0, varianceOf(weights)));
-  });
+  // Where a low score is good the people above count, whose share is 1 less the others' and varies as theirs.
+  return rankVariancesOf(direction === 'high-is-good' ? tied : 1 - tied).map((variance) => 100 * Math.sqrt(variance));
 }
 
 /** Rank ± z standard errors, all in percentile-rank points, held within 0 and 100; level in per cent. */

@@ -46,7 +46,7 @@ export function fitDegree(
   const fit = fitLogLinear(design, degree, start);
   const probabilities = probabilitiesOf(design, fit);
   const fitted = probabilities.map((probability) => probability * design.total);
-  const { g2, x2 } = fitStatistics([...design.frequencies], fitted);
+  const { g2, x2 } = fitStatistics(design.observed, fitted);
   const parameters = parametersOf(design, degree);
   const line: DegreeLine = {
     degree,

@@ -1,5 +1,11 @@
 import type { LogLinearDesign } from './log-linear-design.ts';
-import { orthonormalBasis } from './orthonormal-basis.ts';
+import { OrthonormalBasis } from './orthonormal-basis.ts';
+
+/** Both are in squared proportions; see Smoothed. */
+export interface LogLinearVariances {
+  readonly varianceOf: (weights: readonly number[]) => number;
+  readonly rankVariancesOf: (tied: number) => readonly number[];
+}
 
 /**
  * Variance of Σ g_k p̂_k under Cov(p̂) = (V B)(Bᵀ V B)⁻¹(V B)ᵀ / N, V = diag(p) − ppᵀ (Holland & Thayer 1987), for any
@@ -8,39 +14,63 @@ import { orthonormalBasis } from './orthonormal-basis.ts';
  * comb are columns like the polynomials; a kept score that nobody has varies with nothing. The basis is built at the
  * first call.
  */
-export function logLinearVariance(
+export function logLinearVariances(
   design: LogLinearDesign,
   degree: number,
   probabilities: readonly number[],
-): (weights: readonly number[]) => number {
-  let columns: readonly Float64Array[] | null = null;
-  return (weights) => {
-    if (weights.length !== probabilities.length) {
-      throw new RangeError(`one weight for each of ${probabilities.length} scores, not ${weights.length}`);
-    }
-    columns ??= varyingColumns(design, degree, probabilities);
-    let sum = 0;
-    for (const column of columns) {
-      let part = 0;
-      for (let k = 0; k < weights.length; k += 1) part += (weights[k] ?? 0) * (column[k] ?? 0);
-      sum += part * part;
-    }
-    return sum / design.total;
+): LogLinearVariances {
+  let made: readonly Float64Array[] | null = null;
+  const running = (): readonly Float64Array[] => (made ??= runningSums(design, degree, probabilities));
+  return {
+    varianceOf: (weights) => {
+      if (weights.length !== probabilities.length) {
+        throw new RangeError(`one weight for each of ${probabilities.length} scores, not ${weights.length}`);
+      }
+      const total = running().reduce((sum, sums) => sum + weightedTotal(weights, sums) ** 2, 0);
+      return total / design.total;
+    },
+    rankVariancesOf: (tied) => {
+      const variances = probabilities.map(() => 0);
+      for (const sums of running()) {
+        let below = 0;
+        for (let k = 0; k < variances.length; k += 1) {
+          const at = sums[k] ?? 0;
+          const part = below + tied * (at - below);
+          variances[k] = (variances[k] ?? 0) + (part * part) / design.total;
+          below = at;
+        }
+      }
+      return variances;
+    },
   };
 }
 
-/** Columns p_k Q_c(x_k), without the constant's. */
-function varyingColumns(
+/** Σ g_k l_k from the running sums of l. */
+function weightedTotal(weights: readonly number[], sums: Float64Array): number {
+  let [total, below] = [0, 0];
+  for (let k = 0; k < sums.length; k += 1) {
+    const at = sums[k] ?? 0;
+    total += (weights[k] ?? 0) * (at - below);
+    below = at;
+  }
+  return total;
+}
+
+/** Running sums over the grid of the columns p_k Q_c(x_k), without the constant's. */
+function runningSums(
   design: LogLinearDesign,
   degree: number,
   probabilities: readonly number[],
 ): readonly Float64Array[] {
-  const masses = Float64Array.from(probabilities);
+  const masses = new Float64Array(probabilities);
   const indicators = design.kept.flatMap((isKept, place) =>
-    isKept && (masses[place] ?? 0) > 0 ? [Float64Array.from(masses, (_, k) => (k === place ? 1 : 0))] : [],
+    isKept && (masses[place] ?? 0) > 0 ? [masses.map((_, k) => (k === place ? 1 : 0))] : [],
   );
   const extras = design.comb === null ? indicators : [...indicators, design.comb];
-  const basis = orthonormalBasis(design.points, masses, degree, extras);
-  if (basis === null) throw new RangeError('a fit that has converged determines all of its columns');
-  return basis.slice(1).map((column) => column.map((value, k) => value * (masses[k] ?? 0)));
+  const basis = new OrthonormalBasis(design.points, degree, extras);
+  if (!basis.renew(masses)) throw new RangeError('a fit that has converged determines all of its columns');
+  return basis.weighted.slice(1).map((column) => {
+    let sum = 0;
+    return column.map((value) => (sum += value));
+  });
 }

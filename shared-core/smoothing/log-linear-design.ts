@@ -4,7 +4,10 @@ import type { LogLinearChoice } from './smoothing.ts';
 
 /** What a log-linear model is fitted to, apart from its degree. All lists run over the grid, lowest score first. */
 export interface LogLinearDesign {
+  readonly scores: readonly number[];
   readonly frequencies: Float64Array;
+  /** The same in a plain list. */
+  readonly observed: readonly number[];
   /** Positions of the grid from −1 to 1. */
   readonly points: Float64Array;
   /** True where the observed frequency is kept, so that the curve does not pass through the cell. */
@@ -31,7 +34,8 @@ export function logLinearDesign(
   const stranger = choice.keptScores.find((score) => !scores.includes(score));
   if (stranger !== undefined)
     return { ok: false, problem: `${stranger} is not a score of this scale, so it cannot be kept.` };
-  const kept = scores.map((score) => choice.keptScores.includes(score));
+  const keptScores = new Set(choice.keptScores);
+  const kept = scores.map((score) => keptScores.has(score));
   const comb = choice.comb === null ? null : teeth(choice.comb, kept);
   const free = kept.filter((isKept) => !isKept).length;
   const freeTotal = sumWhere(frequencies.at, (position) => kept[position] === false);
@@ -47,8 +51,10 @@ export function logLinearDesign(
   }
   const last = scores.length - 1;
   const design: LogLinearDesign = {
-    frequencies: Float64Array.from(frequencies.at),
-    points: Float64Array.from(scores, (_, position) => (2 * position - last) / last),
+    scores,
+    frequencies: new Float64Array(frequencies.at),
+    observed: frequencies.at,
+    points: new Float64Array(scores.map((_, position) => (2 * position - last) / last)),
     kept,
     comb,
     total: frequencies.total,
@@ -69,7 +75,7 @@ function teeth(comb: NonNullable<LogLinearChoice['comb']>, kept: readonly boolea
       `a comb has a tooth every 2 or more steps and starts within the first ${every}, not at ${offset}`,
     );
   }
-  return Float64Array.from(kept, (isKept, position) => (!isKept && position % every === offset ? 1 : 0));
+  return new Float64Array(kept.map((isKept, position) => (!isKept && position % every === offset ? 1 : 0)));
 }
 
 /** Free parameters of the model of a degree, the constant counted. */
@@ -86,7 +92,7 @@ export function parametersOf(design: LogLinearDesign, degree: number): number {
  * here.) A comb adds one direction more, for which the fit itself watches.
  */
 export function highestDeterminedDegree(design: LogLinearDesign): number {
-  const observed = [...design.frequencies].filter((_, k) => design.kept[k] === false).map((frequency) => frequency > 0);
+  const observed = design.observed.filter((_, k) => design.kept[k] === false).map((frequency) => frequency > 0);
   const costs = [false, true].flatMap((low) =>
     [false, true].map((high) => {
       const inner = observed.slice(low ? 1 : 0, high ? -1 : undefined);

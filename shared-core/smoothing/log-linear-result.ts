@@ -1,21 +1,18 @@
-import { attainableScores, type ScoreScale } from '../scale/score-scale.ts';
 import { TEST_LEVEL, type DegreeFit } from './choose-degree.ts';
 import { cumulativeOnGrid } from './cumulative.ts';
 import { freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
-import { logLinearVariance } from './log-linear-covariance.ts';
+import { logLinearVariances } from './log-linear-covariance.ts';
 import type { LogLinearDesign } from './log-linear-design.ts';
 import type { DegreeRule, LogLinearChoice, Smoothed } from './smoothing.ts';
 
 /** A converged fit as the distribution that the program shows, with the degrees it was compared with. */
 export function logLinearResult(
-  scale: ScoreScale,
   design: LogLinearDesign,
   choice: { readonly kind: 'log-linear' } & LogLinearChoice,
   { line, probabilities }: DegreeFit,
   fits: readonly DegreeFit[],
 ): Smoothed {
-  const scores = attainableScores(scale);
-  const observed = [...design.frequencies];
+  const { scores, observed } = design;
   return {
     choice,
     probabilities,
@@ -37,7 +34,7 @@ export function logLinearResult(
       observed,
       probabilities.map((probability) => probability * design.total),
     ),
-    varianceOf: logLinearVariance(design, line.degree, probabilities),
+    ...logLinearVariances(design, line.degree, probabilities),
     statement: statementOf(choice, line.degree, fits),
   };
 }

@@ -1,5 +1,5 @@
 import type { LogLinearDesign } from './log-linear-design.ts';
-import { addMultiple, orthonormalBasis } from './orthonormal-basis.ts';
+import { addMultiple, OrthonormalBasis, product } from './orthonormal-basis.ts';
 
 /**
  * Largest score equation allowed, as a share of N, in the basis orthonormal under the fit. In a basis P_c orthonormal on
@@ -36,27 +36,46 @@ interface State {
  * Log-linear model log q_k = β_0 + Σ β_c P_c(x_k) of a degree (Holland & Thayer 1987, 2000; Rosenbaum & Thayer 1987) by
  * maximum likelihood. Newton's method in the polynomials orthonormal under the present shares, in which the matrix of
  * second derivatives is N times the identity; a step is halved until the deviance falls as its slope promises. Starts
- * from the given logarithms of shares (a fit of a lower degree) and, when that does not get there, once more from equal
- * shares. Kept cells take no part: an indicator fits its own cell, and the rest is fitted by the rest.
+ * from the given logarithms of shares (a fit of a lower degree; without one, a normal curve of the observed mean and
+ * spread) and, when that does not get there, once more from equal shares. Kept cells take no part: an indicator fits its
+ * own cell, and the rest is fitted by the rest.
  */
 export function fitLogLinear(design: LogLinearDesign, degree: number, start: Float64Array | null): LogLinearFit {
-  if (start !== null) {
-    const warm = climb(design, degree, start);
-    if (warm.converged) return warm;
+  const warm = start ?? (degree >= 2 ? normalLogs(design) : null);
+  if (warm !== null) {
+    const fit = climb(design, degree, warm);
+    if (fit.converged) return fit;
   }
   return climb(design, degree, new Float64Array(design.points.length));
 }
 
+/** Logarithms of a normal curve with the mean and spread of the people who are not in kept cells. */
+function normalLogs({ points, frequencies, kept, freeTotal }: LogLinearDesign): Float64Array {
+  let [mean, square] = [0, 0];
+  points.forEach((point, k) => {
+    const share = kept[k] === true ? 0 : (frequencies[k] ?? 0) / freeTotal;
+    mean += share * point;
+    square += share * point * point;
+  });
+  // A spread of at least a step, so that people on one score alone do not make a needle of it.
+  const variance = Math.max(square - mean * mean, 4 / points.length ** 2);
+  return points.map((point) => (-0.5 * (point - mean) ** 2) / variance);
+}
+
 function climb(design: LogLinearDesign, degree: number, start: Float64Array): LogLinearFit {
   const extras = design.comb === null ? [] : [design.comb];
-  let state = stateOf(design, start);
+  const basis = new OrthonormalBasis(design.points, degree, extras);
+  const move = new Float64Array(design.points.length);
+  const gaps = new Float64Array(design.points.length);
+  let state = stateOf(design, start.slice());
   for (let steps = 1; steps <= MOST_STEPS; steps += 1) {
-    const basis = orthonormalBasis(design.points, state.shares, degree, extras);
-    if (basis === null) return { ...state, converged: false, steps };
-    const equations = scoreEquations(design, state.shares, basis);
-    const move = new Float64Array(design.points.length);
+    if (!basis.renew(state.shares)) return { ...state, converged: false, steps };
+    fillGaps(gaps, design, state.shares);
+    // Σ Q_c(x_k)(f_k − m_k) / N; the constant's holds by itself.
+    const equations = basis.columns.map((column, c) => (c === 0 ? 0 : product(column, gaps)));
+    move.fill(0);
     equations.forEach((equation, c) => {
-      const column = basis[c];
+      const column = basis.columns[c];
       if (column !== undefined) addMultiple(move, equation, column);
     });
     const next = stepFrom(design, state, move, design.freeTotal * equations.reduce((sum, e) => sum + e * e, 0));
@@ -69,17 +88,11 @@ function climb(design: LogLinearDesign, degree: number, start: Float64Array): Lo
   return { ...state, converged: false, steps: MOST_STEPS };
 }
 
-/** Σ Q_c(x_k)(f_k − m_k) / N for each column; the constant's holds by itself and stands as 0. */
-function scoreEquations(design: LogLinearDesign, shares: Float64Array, basis: readonly Float64Array[]): number[] {
-  return basis.map((column, c) => {
-    if (c === 0) return 0;
-    let sum = 0;
-    for (let k = 0; k < column.length; k += 1) {
-      if (design.kept[k] === true) continue;
-      sum += (column[k] ?? 0) * ((design.frequencies[k] ?? 0) / design.freeTotal - (shares[k] ?? 0));
-    }
-    return sum;
-  });
+/** (f_k − m_k) / N, 0 in kept cells. */
+function fillGaps(gaps: Float64Array, { frequencies, kept, freeTotal }: LogLinearDesign, shares: Float64Array): void {
+  for (let k = 0; k < gaps.length; k += 1) {
+    gaps[k] = kept[k] === true ? 0 : (frequencies[k] ?? 0) / freeTotal - (shares[k] ?? 0);
+  }
 }
 
 function stepFrom(design: LogLinearDesign, state: State, move: Float64Array, slope: number): State | null {
@@ -95,6 +108,7 @@ function stepFrom(design: LogLinearDesign, state: State, move: Float64Array, slo
   return null;
 }
 
+/** The state of unscaled logarithms, which are scaled in place. */
 function stateOf(design: LogLinearDesign, logs: Float64Array): State {
   const { frequencies, kept } = design;
   let highest = -Infinity;
@@ -108,16 +122,15 @@ function stateOf(design: LogLinearDesign, logs: Float64Array): State {
     sum += share;
   }
   const shift = highest + Math.log(sum);
-  const scaled = new Float64Array(logs.length);
   let loss = 0;
   for (let k = 0; k < logs.length; k += 1) {
     const log = (logs[k] ?? 0) - shift;
-    scaled[k] = log;
+    logs[k] = log;
     shares[k] = (shares[k] ?? 0) / sum;
     const frequency = frequencies[k] ?? 0;
     if (frequency > 0 && kept[k] === false) loss -= frequency * log;
   }
-  return { logs: scaled, shares, loss };
+  return { logs, shares, loss };
 }
 
 /** False when a last step still moves the curve within the range of the observed scores: there is no maximum. */
@@ -130,7 +143,7 @@ function standsStill(design: LogLinearDesign, move: Float64Array): boolean {
 /** Probabilities of the whole grid: kept cells at their observed shares, the others share the rest. */
 export function probabilitiesOf(design: LogLinearDesign, fit: LogLinearFit): readonly number[] {
   const free = design.freeTotal / design.total;
-  return Array.from(fit.shares, (share, k) =>
-    design.kept[k] === true ? (design.frequencies[k] ?? 0) / design.total : share * free,
+  return design.observed.map((frequency, k) =>
+    design.kept[k] === true ? frequency / design.total : (fit.shares[k] ?? 0) * free,
   );
 }

@@ -52,6 +52,7 @@ export function smoothBetaBinomial(scale: ScoreScale, frequencies: EffectiveFreq
       momentsFitted: momentsOf(scores, probabilities),
       residuals: freemanTukeyResiduals(frequencies.at, fitted),
       varianceOf: null,
+      rankVariancesOf: null,
       statement:
         `Beta-binomial smoothing by moments with a = ${a.toFixed(4)} and b = ${b.toFixed(4)}; ` +
         'mean and variance of the observed scores are kept.',

@@ -54,6 +54,7 @@ export function smoothKernel(
       probabilities.map((probability) => probability * frequencies.total),
     ),
     varianceOf: null,
+    rankVariancesOf: null,
     statement: statementOf(choice, bandwidth, after),
   };
   return { ok: true, smoothed: result };

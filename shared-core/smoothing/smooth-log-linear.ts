@@ -35,12 +35,12 @@ export function smoothLogLinear(
   }
   if (extent === 'fit-only' && typeof degree === 'number' && degree <= highest) {
     const alone = fitDegree(design, degree, null, null);
-    if (alone.fit.converged) return { ok: true, smoothed: logLinearResult(scale, design, choice, alone, []) };
+    if (alone.fit.converged) return { ok: true, smoothed: logLinearResult(design, choice, alone, []) };
   }
   const fits = fitDegrees(design, highest);
   const chosen = typeof degree === 'number' ? (fits[degree - 1] ?? null) : chooseDegree(fits, degree);
   if (chosen?.fit.converged === true) {
-    return { ok: true, smoothed: logLinearResult(scale, design, choice, chosen, fits) };
+    return { ok: true, smoothed: logLinearResult(design, choice, chosen, fits) };
   }
   return nearest(fits, choice);
 }

@@ -80,6 +80,11 @@ export interface Smoothed {
    * method has none.
    */
   readonly varianceOf: ((weights: readonly number[]) => number) | null;
+  /**
+   * From the same covariance the variance of Σ_{j<k} p̂_j + tied · p̂_k at every score k, which is that of its rank as a
+   * proportion: one pass for all scores, where varianceOf takes one pass a score. `tied` is the share of a score's own people counted, 0–1.
+   */
+  readonly rankVariancesOf: ((tied: number) => readonly number[]) | null;
   /** What was done, in one plain sentence. */
   readonly statement: string;
 }

@@ -9,9 +9,16 @@ export interface CentralMoments {
 /** Moments of shares (adding up to 1) at scores. */
 export function centralMoments(scores: readonly number[], shares: readonly number[]): CentralMoments {
   const origin = scores[0] ?? 0;
-  const sum = (term: (score: number) => number): number =>
-    scores.reduce((total, score, position) => total + (shares[position] ?? 0) * term(score), 0);
-  const mean = origin + sum((score) => score - origin);
-  const about = (order: number): number => sum((score) => (score - mean) ** order);
-  return { mean, m2: about(2), m3: about(3), m4: about(4) };
+  let mean = 0;
+  scores.forEach((score, position) => (mean += (shares[position] ?? 0) * (score - origin)));
+  mean += origin;
+  let [m2, m3, m4] = [0, 0, 0];
+  scores.forEach((score, position) => {
+    const gap = score - mean;
+    const square = (shares[position] ?? 0) * gap * gap;
+    m2 += square;
+    m3 += square * gap;
+    m4 += square * gap * gap;
+  });
+  return { mean, m2, m3, m4 };
 }

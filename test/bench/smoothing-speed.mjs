@@ -28,9 +28,6 @@ const SAME_SUM = 1e-6;
 
 const SCALE = { min: 0, max: SCORES - 1, step: 1, direction: 'high-is-good' };
 const choice = (degree) => ({ kind: 'log-linear', degree, keptScores: [], comb: null });
-const midpoints = Array.from({ length: SCORES }, (_, at) =>
-  Array.from({ length: SCORES }, (_cell, k) => (k < at ? 1 : k === at ? 0.5 : 0)),
-);
 
 /** Groups of 200 to 2,000 people with middles along the scale, as grades of a school have them. */
 function drawnGroups() {
@@ -54,8 +51,7 @@ function recompute(tables) {
   let sum = 0;
   for (const table of tables) {
     for (const degree of DEGREES) {
-      const { varianceOf } = fitted(table, degree, 'fit-only');
-      for (const weights of midpoints) sum += Math.sqrt(varianceOf(weights));
+      for (const variance of fitted(table, degree, 'fit-only').rankVariancesOf(0.5)) sum += Math.sqrt(variance);
     }
   }
   return sum;

@@ -3,8 +3,8 @@
  * populations, unsmoothed and smoothed, in cohorts drawn from them. Writes smoothing-gain.md beside itself; the draws
  * have a fixed start, so that a second run writes the same file.
  *
- *   node test/reference/coverage/smoothing-gain.mjs            400 cohorts of each kind
- *   node test/reference/coverage/smoothing-gain.mjs 2000       that many
+ *   node test/reference/coverage/smoothing-gain.mjs            1,000 cohorts of each kind
+ *   node test/reference/coverage/smoothing-gain.mjs 200        that many
  */
 import { writeFileSync } from 'node:fs';
 import { loadSource } from '../../run/load-source.mjs';
@@ -16,7 +16,7 @@ const { tableFromCounts } = await loadSource('shared-core/tally/frequency-table.
 
 const REPORT = new URL('smoothing-gain.md', import.meta.url);
 const SEED = 20_260;
-const COHORTS = Number(process.argv[2] ?? 400);
+const COHORTS = Number(process.argv[2] ?? 1000);
 const SIZES = [100, 250, 500];
 
 const normal = (middle, spread) => (x) => Math.exp(-0.5 * ((x - middle) / spread) ** 2);
@@ -126,12 +126,11 @@ const names = METHODS.map(({ name }) => name);
 const total = COHORTS * POPULATIONS.length * SIZES.length;
 const text = `# What smoothing gains
 
-Written by \`smoothing-gain.mjs\`: ${COHORTS} cohorts of each population and size, drawn with ${RANDOM_GENERATOR} and seed
-${SEED}. Mean squared error of
-midpoint percentile ranks against the true ones, in squared percentile-rank points, averaged over the people of the
-population and over cohorts; in brackets the ratio to the unsmoothed ranks of the same cohorts, below 1 where smoothing
-is nearer to the truth. The largest standard error of a ratio below 2 is ${widest.toFixed(3)}. A refused cohort counts with its
-unsmoothed ranks.
+Written by \`smoothing-gain.mjs\`: ${COHORTS} cohorts of each population and size, drawn with ${RANDOM_GENERATOR} and
+seed ${SEED}. Mean squared error of midpoint percentile ranks against the true ones, in squared percentile-rank points,
+averaged over the people of the population and over cohorts; in brackets the ratio to the unsmoothed ranks of the same
+cohorts, below 1 where smoothing is nearer to the truth. The largest standard error of a ratio below 2 is
+${widest.toFixed(3)}. A refused cohort counts with its unsmoothed ranks.
 
 ${tableOf([['population', 'N', 'unsmoothed', ...names], ...rows])}
 

@@ -53,4 +53,16 @@ describe('the covariance of a log-linear fit', () => {
     expectNear(varianceOf?.(scores.map(() => 3)) ?? null, 0, 1e-25, 'variance of a constant');
     expect(() => varianceOf?.([1])).toThrow('61 scores');
   });
+
+  it('is the same for all ranks in one pass', () => {
+    const table = cohortTable('c2_leftskew');
+    const { varianceOf, rankVariancesOf } = smoothed(table, { ...logLinear(5), keptScores: [30, 12] });
+    for (const tied of [0, 0.5, 1]) {
+      const weights = (position: number): readonly number[] =>
+        table.counts.map((_, k) => (k < position ? 1 : k === position ? tied : 0));
+      const ranks = rankVariancesOf?.(tied) ?? [];
+      expect(ranks.length).toBe(31);
+      ranks.forEach((variance, k) => expectNear(variance, varianceOf?.(weights(k)) ?? NaN, 1e-18, `at ${k}`));
+    }
+  });
 });
