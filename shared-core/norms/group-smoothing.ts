@@ -6,7 +6,7 @@ import type { DegreeLine, Smoothed, SmoothingChoice } from '../smoothing/smoothi
 import type { FrequencyTable } from '../tally/frequency-table.ts';
 
 /** A smoothed distribution as plain data: it can cross to another thread and be kept. Lists run from the lowest score. */
-export interface SmoothedCurve extends Omit<Smoothed, 'cumulative' | 'varianceOf'> {
+export interface SmoothedCurve extends Omit<Smoothed, 'cumulative' | 'varianceOf' | 'rankVariancesOf'> {
   /** Cumulative proportions 0–1 half a step below each score, at it, and half a step above. */
   readonly below: readonly number[];
   readonly middle: readonly number[];
@@ -37,9 +37,11 @@ export function smoothGroup(
     const { problem, instead, degrees } = result;
     return { state: 'refused', problem, instead, degrees };
   }
-  const { cumulative, varianceOf, ...facts } = result.smoothed;
+  const { cumulative: _c, varianceOf: _v, rankVariancesOf: _r, ...facts } = result.smoothed;
+  const { smoothed } = result;
   const counted = countedRank(definition);
-  const at = (shift: -0.5 | 0 | 0.5): readonly number[] => facts.probabilities.map((_, k) => cumulative(k, shift));
+  const at = (shift: -0.5 | 0 | 0.5): readonly number[] =>
+    facts.probabilities.map((_, k) => smoothed.cumulative(k, shift));
   const { direction } = table.scale;
   return {
     state: 'smoothed',
@@ -48,8 +50,7 @@ export function smoothGroup(
       below: at(-0.5),
       middle: at(0),
       atOrBelow: at(0.5),
-      standardErrors:
-        counted === null ? null : smoothedStandardErrors({ ...facts, cumulative, varianceOf }, direction, counted),
+      standardErrors: counted === null ? null : smoothedStandardErrors(smoothed, direction, counted),
     },
   };
 }
@@ -60,7 +61,8 @@ export function smoothedFrom({ below, middle, atOrBelow, standardErrors: _, ...f
   return {
     ...facts,
     varianceOf: null,
-    cumulative(position, shift) {
+    rankVariancesOf: null,
+    cumulative: (position, shift) => {
       const value = lists[`${shift}`][position];
       if (value === undefined) throw new RangeError(`no position ${position} on the grid`);
       return value;

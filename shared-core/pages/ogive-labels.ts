@@ -77,9 +77,28 @@ function sample({ sample: kind, fill }: OgiveLabel, { x, y }: Point): readonly s
       return [path(corners, fill, 0.6)];
     }
     case 'curve':
-      return [path([{ x, y }, { x: end, y }], fill, 1)];
+      return [
+        path(
+          [
+            { x, y },
+            { x: end, y },
+          ],
+          fill,
+          1,
+        ),
+      ];
     case 'dotted-curve':
-      return [path([{ x, y }, { x: end, y }], fill, 1), dot({ x: centre, y }, fill)];
+      return [
+        path(
+          [
+            { x, y },
+            { x: end, y },
+          ],
+          fill,
+          1,
+        ),
+        dot({ x: centre, y }, fill),
+      ];
     case 'band': {
       const [top, bottom] = [y - 2.4, y + 2.4];
       const corners = [

@@ -2,6 +2,9 @@ import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { tableColumns } from '../norms/table-columns.ts';
 import type { Block, TextRun } from './booklet.ts';
+import { fitNotesOf } from './fit-notes.ts';
+import { layFitNotes } from './fit-notes-blocks.ts';
+import { cautionsOf } from './group-method.ts';
 import { inverseStrip } from './inverse-strip.ts';
 import { ogivePicture } from './ogive-picture.ts';
 import type { PageFrame } from './page-frame.ts';
@@ -47,6 +50,7 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   layTable(flow, normSet, norms, measure);
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
+  layTechnicalNotes(flow, normSet, norms);
   return { pages: flow.pages, shortened: title.cut };
 }
 
@@ -72,7 +76,7 @@ function furtherHead(
   top: number,
 ): { readonly blocks: readonly Block[]; readonly bottom: number } {
   const { project } = normSet;
-  const cautions = linesOf(project.sheet.cautions, 'sans', SMALL_PROSE, width);
+  const cautions = linesOf(cautionsOf(project), 'sans', SMALL_PROSE, width);
   const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
     [cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2).lines, CONTINUED],
     [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2).lines, PROSE],
@@ -91,7 +95,7 @@ function furtherHead(
 }
 
 function introduce(flow: SheetFlow, { project }: NormSet): void {
-  const texts = [project.sheet.howToRead, project.sheet.cautions].filter((text) => text.trim() !== '');
+  const texts = [project.sheet.howToRead, cautionsOf(project)].filter((text) => text.trim() !== '');
   const [left = [], right = []] = texts.map((text) => linesOf(text, 'sans', PROSE, flow.halfWidth));
   flow.skip(AROUND_INTRODUCTION);
   flow.sideBySide(left, right, PROSE);
@@ -143,12 +147,19 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
         x: flow.left,
         y: flow.y,
         ...picture,
-        svg: ogivePicture(norms, picture),
-        alt: figureCaption(normSet.project),
+        svg: ogivePicture(norms, normSet.project.precision.level, picture),
+        alt: figureCaption(normSet.project, norms),
       },
       ...placeLines(lines.slice(0, beside), PROSE, { x: flow.rightHalf, top: flow.y, width: flow.halfWidth }),
     ],
     height,
   );
   flow.inTwoColumns(lines.slice(beside), PROSE);
+}
+
+function layTechnicalNotes(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
+  const notes = fitNotesOf(project, norms);
+  if (notes === null) return;
+  flow.skip(BELOW_TABLE);
+  layFitNotes(flow, notes);
 }

@@ -4,12 +4,14 @@ import { columnInWords, countedPeople, groupNoun, standingTitle } from '../norms
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { NormProject } from '../norms/norm-project.ts';
-import { methodText } from '../norms/statements.ts';
+import { intervalName } from '../norms/smoothing-words.ts';
 import type { TableColumn } from '../norms/table-columns.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import { scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
 import { printCount, printNumber, printScore } from '../scores/printed-number.ts';
 import { weighsEqually } from '../tally/frequency-table.ts';
+import { groupMethod } from './group-method.ts';
+import type { Paragraph } from './paragraph.ts';
 
 /** "Raw score to percentile rank, grade 5". */
 export function sheetTitle(project: NormProject, { group }: GroupNorms): string {
@@ -48,21 +50,15 @@ export function surveyName({ title, subtitle }: NormProject): string {
 }
 
 /** Left side of the foot: which edition this is and what its numbers are. */
-export function editionLine({ project, check }: NormSet, { summary }: GroupNorms): string {
+export function editionLine({ project, check }: NormSet, { summary, smoothing }: GroupNorms): string {
   const { edition, date } = project.release;
   return [
     ...(edition.trim() === '' ? [] : [`Edition ${edition.trim()}`]),
     ...(date === '' ? [] : [date]),
     `check ${check}`,
-    `definition: ${definitionName(project.curve.definition)}`,
+    `definition: ${definitionName(project.curve.definition)}${smoothing.state === 'smoothed' ? ', smoothed' : ''}`,
     countedPeople(printCount(summary.n), project.people),
   ].join(' · ');
-}
-
-/** A paragraph with its bold lead. */
-export interface Paragraph {
-  readonly lead: string;
-  readonly text: string;
 }
 
 /** The paragraphs beside the picture, in order; those without text are left out. */
@@ -70,16 +66,23 @@ export function notesOf(normSet: NormSet, index: number, norms: GroupNorms): rea
   const { project } = normSet;
   const noun = groupNoun(project.groups.documentation) === 'norm group' ? 'Norm group.' : 'Sample.';
   return [
-    ...(project.sheet.ogive ? [{ lead: `Figure ${index + 1}.`, text: figureCaption(project) }] : []),
+    ...(project.sheet.ogive ? [{ lead: `Figure ${index + 1}.`, text: figureCaption(project, norms) }] : []),
     { lead: noun, text: [sampleFacts(project, norms), ...documentationSentences(project)].join(' ') },
-    { lead: 'Method.', text: methodText(project) },
+    { lead: 'Method.', text: groupMethod(project, norms) },
     ...(project.sheet.notes.trim() === '' ? [] : [{ lead: 'Notes.', text: project.sheet.notes.trim() }]),
   ];
 }
 
-export function figureCaption(project: NormProject): string {
+/** The picture in words. */
+export function figureCaption(project: NormProject, { smoothing, precision }: GroupNorms): string {
   const side = project.tally?.scale.direction === 'low-is-good' ? 'above' : 'below';
-  return `Cumulative per cent by raw score: observed steps (at or ${side} the score) and the percentile rank at each score.`;
+  const curve =
+    smoothing.state === 'smoothed' ? 'the smoothed percentile ranks as a curve' : 'the percentile rank at each score';
+  const steps = `observed steps (at or ${side} the score)`;
+  if (precision.intervals === null) return `Cumulative per cent by raw score: ${steps} and ${curve}.`;
+  const { level, interval } = project.precision;
+  const band = `as a light band, the ${level} % ${intervalName(interval)} interval of the observed rank`;
+  return `Cumulative per cent by raw score: ${steps}, ${curve} and, ${band} (error of sampling).`;
 }
 
 /** n, mean, SD and five numbers in a sentence or two. */

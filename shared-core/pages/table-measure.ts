@@ -69,7 +69,9 @@ function rangeRoom(texts: ReadonlySet<string>): (NonNullable<TableHead['range']>
   const sides = [...texts].map(rangeSides);
   if (sides.every(({ after }) => after === null)) return null;
   const dash = textWidth(RANGE_DASH, 'sans', ROW.size);
-  const before = sides.map(({ upToDash, after }) => textWidth(upToDash, 'sans', ROW.size) - (after === null ? 0 : dash));
+  const before = sides.map(
+    ({ upToDash, after }) => textWidth(upToDash, 'sans', ROW.size) - (after === null ? 0 : dash),
+  );
   const after = Math.max(...sides.map((side) => textWidth(side.after ?? '', 'sans', ROW.size)));
   return { dash, after, width: Math.max(...before) + dash + after };
 }

@@ -1,6 +1,6 @@
 import type { Colour, TextLine, TextRun } from './booklet.ts';
 import { breakLines, type ProseLine } from './prose.ts';
-import type { Paragraph } from './sheet-texts.ts';
+import type { Paragraph } from './paragraph.ts';
 import type { FontFace } from './text-width.ts';
 import { PARAGRAPH_GAP, type TypeSize } from './type-sizes.ts';
 

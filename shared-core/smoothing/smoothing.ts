@@ -56,7 +56,7 @@ export interface Smoothed {
    * Cumulative proportion 0–1 at score + shift steps, shift −0.5, 0 or 0.5: for methods on the grid B, B + p/2, B + p;
    * for the kernel its continuous F.
    */
-  cumulative(position: number, shift: -0.5 | 0 | 0.5): number;
+  readonly cumulative: (position: number, shift: -0.5 | 0 | 0.5) => number;
   readonly degree: number | null;
   /** In raw-score points. */
   readonly bandwidth: number | null;

@@ -1,0 +1,124 @@
+import { listed } from '../norms/listed.ts';
+import type { FitEvidence } from '../norms/fit-evidence.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
+import type { SmoothedCurve } from '../norms/group-smoothing.ts';
+import type { NormProject } from '../norms/norm-project.ts';
+import { printNumber } from '../scores/printed-number.ts';
+import type { DegreeLine } from '../smoothing/smoothing.ts';
+import type { NoteTable } from './note-table.ts';
+import type { Paragraph } from './paragraph.ts';
+
+/** What a smoothed group's technical notes say, before it is placed. */
+export interface FitNotes {
+  /** The degrees that were compared; null where the method compares none. */
+  readonly degrees: NoteTable | null;
+  readonly aboutDegrees: readonly Paragraph[];
+  readonly moments: NoteTable;
+  readonly facts: readonly Paragraph[];
+}
+
+const NO_VALUE = '\u2013';
+/** Figures of misfit from here on are as good as without bound. */
+const BEYOND = 99_999;
+const LEAST_P = 0.001;
+
+/** The technical notes of a group, or null where it is not smoothed. */
+export function fitNotesOf({ people }: NormProject, { smoothing, evidence, group }: GroupNorms): FitNotes | null {
+  if (smoothing.state !== 'smoothed' || evidence === null) return null;
+  const { curve } = smoothing;
+  const compared = curve.degrees.length > 0;
+  return {
+    degrees: compared ? degreeTable(curve) : null,
+    aboutDegrees: compared ? [{ lead: 'Degrees.', text: aboutDegrees(curve, evidence) }] : [],
+    moments: momentTable(curve),
+    facts: [
+      {
+        lead: 'Moments.',
+        text: `Of the observed scores and of the smoothed ones; the SD divides by ${group.table.weighted ? 'the sum of weights' : 'n'}.`,
+      },
+      { lead: 'Fit.', text: [...fitSentences(curve), ...moveSentences(evidence)].join(' ') },
+      ...warnings(evidence, people).map((text) => ({ lead: 'Beware.', text })),
+    ],
+  };
+}
+
+function degreeTable({ degrees, degree }: SmoothedCurve): NoteTable {
+  return {
+    heads: ['Degree', 'G²', 'X²', 'df', 'AIC', 'BIC', 'p'],
+    firstColumn: 'figures',
+    rows: degrees.map((line) => ({ cells: degreeCells(line), marked: line.degree === degree })),
+  };
+}
+
+function degreeCells({ degree, converged, g2, x2, df, aic, bic, p }: DegreeLine): readonly string[] {
+  if (!converged) return [String(degree), ...Array.from({ length: 6 }, () => NO_VALUE)];
+  return [String(degree), misfit(g2), misfit(x2), String(df), misfit(aic), misfit(bic), printP(p)];
+}
+
+function misfit(value: number): string {
+  return value > BEYOND ? `>${BEYOND}` : printNumber(value, 1);
+}
+
+function printP(p: number | null): string {
+  if (p === null) return NO_VALUE;
+  return p < LEAST_P ? `<${LEAST_P}` : printNumber(p, 3);
+}
+
+function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence): string {
+  return [
+    'G² and X² tell how far the fitted frequencies lie from the observed ones. AIC and BIC add a charge for each ' +
+      'parameter; less is better. p tests a degree against the one below it. The degree taken is in bold, with a rule ' +
+      'under it.',
+    ...(degrees.every(({ converged }) => converged) ? [] : ['Where dashes stand, no fit was found.']),
+    ...(nearlyAsGood.length === 0
+      ? []
+      : [`Nearly as good, with a BIC within 2 of it: degree ${listed(nearlyAsGood.map(String))}.`]),
+  ].join(' ');
+}
+
+function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve): NoteTable {
+  const row = (name: string, key: keyof typeof momentsObserved, decimals: number): NoteTable['rows'][number] => ({
+    cells: [name, printNumber(momentsObserved[key], decimals), printNumber(momentsFitted[key], decimals)],
+    marked: false,
+  });
+  return {
+    heads: ['Moment', 'Observed', 'Smoothed'],
+    firstColumn: 'words',
+    rows: [
+      row('Mean', 'mean', 3),
+      row('SD', 'sd', 3),
+      row('Skewness', 'skewness', 3),
+      row('Excess kurtosis', 'excessKurtosis', 3),
+    ],
+  };
+}
+
+/** Fit and bandwidth, where no table of degrees tells it. */
+export function fitSentences({ choice, degrees, g2, x2, df, bandwidth }: SmoothedCurve): readonly string[] {
+  const sentences: string[] = [];
+  if (degrees.length === 0 && g2 !== null && x2 !== null && df !== null) {
+    sentences.push(`G² is ${misfit(g2)} and X² ${misfit(x2)}, on ${df} degrees of freedom.`);
+  }
+  if (bandwidth !== null) {
+    const found = choice.kind === 'kernel' && choice.bandwidth === 'auto' ? ', found from the data' : '';
+    sentences.push(`The bandwidth of the kernel is ${printNumber(bandwidth, 3)} raw-score points${found}.`);
+  }
+  return sentences;
+}
+
+/** What smoothing did to the printed table. */
+export function moveSentences({ largestMove, changed, of }: FitEvidence): readonly string[] {
+  return [
+    `The largest move of a rank is ${printNumber(largestMove.points, 2)} percentile-rank points, at raw score ${largestMove.scoreText}.`,
+    `Smoothing changes ${changed} of ${of} printed ranks.`,
+  ];
+}
+
+function warnings({ filledGaps, inventedDips }: FitEvidence, people: NormProject['people']): readonly string[] {
+  return [
+    ...(filledGaps.length === 0
+      ? []
+      : [`The curve expects five ${people} or more at ${listed(filledGaps)}, where there are none.`]),
+    ...(inventedDips.length === 0 ? [] : [`The curve dips at ${listed(inventedDips)}; the data do not.`]),
+  ];
+}

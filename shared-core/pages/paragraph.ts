@@ -1,0 +1,5 @@
+/** A paragraph with its bold lead. */
+export interface Paragraph {
+  readonly lead: string;
+  readonly text: string;
+}
