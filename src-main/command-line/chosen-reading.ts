@@ -3,7 +3,7 @@ import type { ColumnRole, Reading } from '../../shared-core/norms/reading.ts';
 import { SEPARATOR_WORDS } from '../../shared-core/tally/guess-separator.ts';
 import { lookAtCohort } from '../cohort-file/look-at-cohort.ts';
 import { ENCODING_WORDS } from '../cohort-file/text-encoding.ts';
-import type { NamedColumns, TableOptions } from './table-options.ts';
+import type { CohortOptions, NamedColumns } from './cohort-options.ts';
 
 export type ReadingChosen =
   | { readonly kind: 'chosen'; readonly reading: Reading; readonly remarks: readonly string[] }
@@ -12,10 +12,10 @@ export type ReadingChosen =
   | { readonly kind: 'unreadable'; readonly problem: string };
 
 /**
- * How a file is read for a table: encoding, separator, decimal mark, heading and sheet as guessed; roles, scale and
+ * How a cohort file is read: encoding, separator, decimal mark, heading and sheet as guessed; roles, scale and
  * missing codes by the options alone.
  */
-export async function chosenReading(path: string, file: string, options: TableOptions): Promise<ReadingChosen> {
+export async function chosenReading(path: string, file: string, options: CohortOptions): Promise<ReadingChosen> {
   const looked = await lookWithNames(path, file, options.named);
   if (!looked.ok) return { kind: 'unreadable', problem: looked.problem };
   const { columns, reading, sheets } = looked.value;
@@ -82,13 +82,13 @@ function splitRemarks(reading: Reading, sheets: readonly string[]): readonly str
 }
 
 /** A code that stands out from the scores is counted as a score unless the options say otherwise. */
-function codeRemarks({ missing, roles }: Reading, { named, missing: given }: TableOptions): readonly string[] {
+function codeRemarks({ missing, roles }: Reading, { named, missing: given }: CohortOptions): readonly string[] {
   const guessedFor = roles.find(({ role }) => role === 'score')?.column;
   const codes = guessedFor === named.score ? missing.filter((code) => !given.includes(code)) : [];
   return codes.map((code) => `"${code}" looks like a code for a missing score; if it is one, give --missing ${code}.`);
 }
 
-function countRemarks({ layout, roles }: Reading, { named }: TableOptions): readonly string[] {
+function countRemarks({ layout, roles }: Reading, { named }: CohortOptions): readonly string[] {
   const count = roles.find(({ role }) => role === 'count')?.column;
   if (layout !== 'counts' || named.count !== null || count === undefined) return [];
   return [`Each row is read as one person; if column "${count}" holds counts, give --count ${count}.`];

@@ -1,27 +1,49 @@
 import { COLUMN_KEYS } from '../../shared-core/norms/column-keys.ts';
 
+const COLUMN_NAMES = [COLUMN_KEYS.slice(0, 5), COLUMN_KEYS.slice(5, 8), COLUMN_KEYS.slice(8)]
+  .map((names) => names.join(', '))
+  .join(`,\n${' '.repeat(28)}`);
+
 export const HELP = `normloom table FILE --score COL [options]   conversion tables of a cohort file
-normloom press PROJECT --into FOLDER        booklet.pdf, tables.xlsx, tables.csv and norm-set.json of a project
+normloom differ FILE --score COL --ranks RANKFILE [options]
+                                            how somebody's ranks were made from the same people
+normloom press PROJECT --into FOLDER        booklet.pdf, tables.xlsx, tables.csv and norm-set.json
 normloom --help | --version
 
-Options of table:
+Options of table and differ:
   --score COL               column that holds the raw scores
   --count COL               column that tells how many people stand in a row
   --weight COL              column of weights above 0
   --id COL                  column that names a person; of repeated ones the first row is kept
-  --by COL,COL              columns whose values make a table each
+  --by COL,COL              columns whose values make the groups, with a table each
   --scale MIN:MAX[:STEP]    attainable scores, such as 0:40 or -5:5:0.5; without it, those met in the file
   --low-is-good             low scores are the good ones: seconds, errors
   --missing A,B             texts that stand for a missing score
+
+Options of table:
   --definition NAME         midpoint (default), at-or-below, below, plotting-position:A such as
                             plotting-position:3/8, or grouped:WIDTH
+  --smooth METHOD           none (default), log-linear:C, kernel:H, log-linear:C+kernel:H or beta-binomial;
+                            C is a degree from 1 to 10, auto (lowest BIC), aic or likelihood-ratio;
+                            H is a bandwidth in raw-score points above 0, or auto
+  --interval NAME           wilson (default), clopper-pearson or jeffreys: error of sampling
+  --level PERCENT           confidence of intervals and bands, 50 to 99.9; default 95
+  --reliability R           reliability of the test, 0 to 1, for the measurement band
+  --bootstrap R             refits R drawn samples, method and degree, for intervals and standard errors
+  --seed S                  whole number that the samples of the bootstrap start from; default 1
   --points P,P              percentile points of these proportions, from 0 to 1
   --point-definition NAME   type-1 to type-9, nearest-rank, grouped or inverse (default); several with commas
-  --columns NAME,NAME       columns beside the rank: ${COLUMN_KEYS.slice(0, 5).join(', ')},
-                            ${COLUMN_KEYS.slice(5).join(', ')}; default stanine,t
+  --columns NAME,NAME       columns beside the rank: ${COLUMN_NAMES};
+                            default stanine,t
   --format NAME             text (default), csv or json
 
-Columns are named as in the heading of the file; a name with a comma in it stands in double quotes within the list.
+Options of differ:
+  --ranks RANKFILE          text file with one raw score and somebody's percentile rank a line
+  --group VALUE,VALUE       the group that the ranks are of: one value for each column of --by
+  --format NAME             text (default) or json
+
+Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
+quotes.
 stdout carries only the result, stderr what there is to say about it.
-Exit codes: 0 done, 2 wrong usage, 3 the data were refused.
+Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method.
 `;

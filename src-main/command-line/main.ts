@@ -1,4 +1,5 @@
 import { readCommand, type Command } from './command.ts';
+import { differCommand } from './differ-command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
@@ -14,6 +15,8 @@ async function run(command: Command): Promise<Outcome> {
       return { kind: 'done', result: `${programVersion()}\n`, remarks: [] };
     case 'table':
       return tableCommand(command.path, command.options);
+    case 'differ':
+      return differCommand(command.path, command.options);
     case 'press':
       return pressCommand(command.path, command.into);
   }

@@ -1,6 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { basename } from 'node:path';
-import { buildNormSet } from '../../shared-core/norms/norm-set.ts';
+import { buildNormSet, pressProblem } from '../../shared-core/norms/norm-set.ts';
 import { projectFromText } from '../../shared-core/norms/project-text.ts';
 import { openQueries, type Query } from '../../shared-core/norms/queries.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
@@ -18,6 +18,8 @@ export async function pressCommand(path: string, into: string): Promise<Outcome>
   if (!read.ok) return refused(`${basename(path)}: ${read.problem}`);
   const built = buildNormSet(read.project);
   if (!built.ok) return refused(`${basename(path)}: ${built.problem}`);
+  const unfit = pressProblem(built.normSet);
+  if (unfit !== null) return refused(`${basename(path)}: ${unfit}`);
   const remarks = openQueries(built.normSet.queries)
     .filter(({ weight }) => weight === 'must')
     .map(queryLine);

@@ -1,29 +1,22 @@
 import type { Reply } from '../../shared-core/desk.ts';
 import { COLUMN_KEYS, type ColumnKey } from '../../shared-core/norms/column-keys.ts';
 import { definitionFromKey } from '../../shared-core/norms/definitions.ts';
+import { newProject } from '../../shared-core/norms/new-project.ts';
 import { POINT_DEFINITIONS, type PointDefinition } from '../../shared-core/percentile/percentile-point.ts';
 import type { RankDefinition } from '../../shared-core/percentile/percentile-rank.ts';
-import { parseDecimal } from '../../shared-core/scale/decimal.ts';
-import { scaleProblems, type Direction, type ScoreScale } from '../../shared-core/scale/score-scale.ts';
+import { countedRank } from '../../shared-core/precision/counted-rank.ts';
+import type { SmoothingChoice } from '../../shared-core/smoothing/smoothing.ts';
+import { cohortOptions, type CohortOptions } from './cohort-options.ts';
+import { listOf, numberIn, oneOf, readOrSay, textGiven, WrongOption, type OptionValues } from './option-values.ts';
+import { precisionOptions, type PrecisionOptions } from './precision-options.ts';
+import { smoothingFromOption } from './smooth-option.ts';
 
 const FORMATS = ['text', 'csv', 'json'] as const;
 
-/** Columns of the file by the work they do; null where there is none. */
-export interface NamedColumns {
-  readonly score: string;
-  readonly count: string | null;
-  readonly weight: string | null;
-  readonly id: string | null;
-  readonly by: readonly string[];
-}
-
-export interface TableOptions {
-  readonly named: NamedColumns;
-  /** Null: taken from the scores. */
-  readonly scale: ScoreScale | null;
-  readonly direction: Direction;
-  readonly missing: readonly string[];
+export interface TableOptions extends CohortOptions {
   readonly definition: RankDefinition;
+  readonly smoothing: SmoothingChoice;
+  readonly precision: PrecisionOptions;
   /** Proportions, 0–1. */
   readonly points: readonly number[];
   readonly pointDefinitions: readonly PointDefinition[];
@@ -32,99 +25,53 @@ export interface TableOptions {
   readonly format: (typeof FORMATS)[number];
 }
 
-type Values = Readonly<Record<string, string | boolean | undefined>>;
-
 /** Turns the texts of the options into what they mean; the problem says which option to change and how. */
-export function tableOptions(values: Values): Reply<TableOptions> {
-  try {
-    return { ok: true, value: readOptions(values) };
-  } catch (error) {
-    if (error instanceof WrongOption) return { ok: false, problem: error.message };
-    throw error;
-  }
+export function tableOptions(values: OptionValues): Reply<TableOptions> {
+  return readOrSay(() => {
+    const options = readOptions(values);
+    const problem = clash(options);
+    if (problem !== null) throw new WrongOption(problem);
+    return options;
+  });
 }
 
-class WrongOption extends Error {}
-
-function readOptions(values: Values): TableOptions {
-  const given = (name: string): string | null => {
-    const value = values[name];
-    return typeof value === 'string' ? value : null;
-  };
-  const direction = values['low-is-good'] === true ? 'low-is-good' : 'high-is-good';
-  const points = given('points');
-  const pointDefinition = given('point-definition');
+function readOptions(values: OptionValues): TableOptions {
+  const { precision } = newProject('');
+  const points = textGiven(values, 'points');
+  const pointDefinition = textGiven(values, 'point-definition');
   if (pointDefinition !== null && points === null) {
     throw new WrongOption('--point-definition needs --points, such as --points 0.25,0.5,0.75.');
   }
-  const format = oneOf('format', FORMATS, given('format') ?? 'text');
-  if (points !== null && format === 'csv') {
-    throw new WrongOption('csv has no place for percentile points. Use --format text or json, or leave --points out.');
-  }
+  const columns = textGiven(values, 'columns');
   return {
-    named: namedColumns(given),
-    scale: given('scale') === null ? null : readScale(given('scale') ?? '', direction),
-    direction,
-    missing: listOf('missing', given('missing')).filter((text) => text !== ''),
-    definition: readDefinition(given('definition') ?? 'midpoint'),
+    ...cohortOptions(values),
+    definition: readDefinition(textGiven(values, 'definition') ?? 'midpoint'),
+    smoothing: smoothingFromOption(textGiven(values, 'smooth') ?? 'none'),
+    precision: precisionOptions(values, { level: precision.level, seed: precision.bootstrap.seed }),
     points: listOf('points', points).map(readProportion),
     pointDefinitions: listOf('point-definition', pointDefinition ?? 'inverse').map((name) =>
       oneOf('point-definition', POINT_DEFINITIONS, name),
     ),
-    columns: given('columns') === null ? null : readColumns(given('columns') ?? ''),
-    format,
+    columns: columns === null ? null : readColumns(columns),
+    format: oneOf('format', FORMATS, textGiven(values, 'format') ?? 'text'),
   };
 }
 
-function namedColumns(given: (name: string) => string | null): NamedColumns {
-  const score = given('score');
-  if (score === null) throw new WrongOption('Name the column of raw scores with --score COL.');
-  const named = {
-    score,
-    count: given('count'),
-    weight: given('weight'),
-    id: given('id'),
-    by: listOf('by', given('by')),
-  };
-  const all = [score, named.count, named.weight, named.id, ...named.by].filter((name) => name !== null);
-  const twice = all.find((name, index) => all.indexOf(name) !== index);
-  if (twice !== undefined) throw new WrongOption(`Column "${twice}" is given two kinds of work. Keep one of them.`);
-  return named;
-}
-
-/** One item of a list with commas, and the comma or the end behind it; in double quotes it may hold commas. */
-const LIST_ITEM = /\s*(?:"((?:[^"]|"")*)"|([^",]*))\s*(,|$)/y;
-
-/** Null and the empty text are empty lists. */
-function listOf(option: string, text: string | null): readonly string[] {
-  if (text === null || text.trim() === '') return [];
-  const items: string[] = [];
-  LIST_ITEM.lastIndex = 0;
-  for (;;) {
-    const found = LIST_ITEM.exec(text);
-    if (found === null)
-      throw new WrongOption(`--${option} is a list with commas; a double quote in it is out of place.`);
-    const [, quoted, plain = '', behind] = found;
-    items.push(quoted === undefined ? plain.trim() : quoted.replaceAll('""', '"'));
-    if (behind === '') return items;
+/** Options that do not go together, in a sentence, or null. */
+function clash({ definition, precision, points, columns, format }: TableOptions): string | null {
+  if (points.length > 0 && format === 'csv') {
+    return 'csv has no place for percentile points. Use --format text or json, or leave --points out.';
   }
-}
-
-function readScale(text: string, direction: Direction): ScoreScale {
-  const parts = text.split(':');
-  const [min = null, max = null, step] = parts.map(numberIn);
-  if (parts.length > 3 || min === null || max === null || step === null) {
-    throw new WrongOption(`--scale is MIN:MAX or MIN:MAX:STEP, such as 0:40 or 0:20:0.5, not "${text}".`);
+  if (precision.bootstrap !== null && format === 'csv') {
+    return 'csv has no place for a bootstrap. Use --format text or json, or leave --bootstrap out.';
   }
-  const scale = { min, max, step: step ?? 1, direction };
-  const problems = scaleProblems(scale);
-  if (problems.length > 0) throw new WrongOption(`--scale ${text}: ${problems.join(' ')}`);
-  return scale;
-}
-
-function numberIn(text: string): number | null {
-  const decimal = parseDecimal(text);
-  return decimal === null ? null : Number(decimal.units) / 10 ** decimal.decimals;
+  if (precision.bootstrap !== null && countedRank(definition) === null) {
+    return '--bootstrap needs a rank that counts people: --definition midpoint, at-or-below or below.';
+  }
+  if (precision.reliability === null && columns?.includes('measurement-band') === true) {
+    return '--columns measurement-band needs --reliability R, such as --reliability 0.88.';
+  }
+  return null;
 }
 
 function readDefinition(text: string): RankDefinition {
@@ -145,10 +92,4 @@ function readColumns(text: string): readonly ColumnKey[] {
   const columns = listOf('columns', text).map((name) => oneOf('columns', COLUMN_KEYS, name));
   if (new Set(columns).size < columns.length) throw new WrongOption('--columns names a column twice.');
   return columns;
-}
-
-function oneOf<T extends string>(option: string, known: readonly T[], text: string): T {
-  const found = known.find((each) => each === text);
-  if (found === undefined) throw new WrongOption(`--${option} knows ${known.join(', ')}; not "${text}".`);
-  return found;
 }

@@ -1,4 +1,4 @@
-import type { PointsOf } from '../../shared-core/norms/norm-set-file.ts';
+import type { BootstrapOf, PointsOf } from '../../shared-core/norms/norm-set-file.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns, type TableColumn } from '../../shared-core/norms/table-columns.ts';
@@ -6,11 +6,19 @@ import { cellText, sampleFacts, sheetSubtitle } from '../../shared-core/pages/sh
 import { inFives } from '../../shared-core/pages/table-rows.ts';
 import { POINT_DEFINITION_WORDS } from '../../shared-core/percentile/percentile-point.ts';
 import { printNumber } from '../../shared-core/scores/printed-number.ts';
+import { alignedLines } from './aligned-lines.ts';
+import { bootstrapLines, precisionLines, smoothingLines } from './text-evidence.ts';
 
 const GAP = '  ';
 
-/** The tables of a set as plain text: one after the other, each with its definition, its n and its cautions. */
-export function textTables(normSet: NormSet, pointsOf: PointsOf): string {
+/** What goes with a group's rows where it was asked for. */
+export interface BesideRows {
+  readonly pointsOf: PointsOf;
+  readonly bootstrapOf: BootstrapOf;
+}
+
+/** The tables of a set as plain text: one after the other, each with its definition, its n, its fit and its cautions. */
+export function textTables(normSet: NormSet, { pointsOf, bootstrapOf }: BesideRows): string {
   const { project } = normSet;
   return normSet.groups
     .map((norms) =>
@@ -18,6 +26,9 @@ export function textTables(normSet: NormSet, pointsOf: PointsOf): string {
         norms.group.title,
         `${sheetSubtitle(project)}.`,
         sampleFacts(project, norms),
+        ...smoothingLines(norms),
+        ...precisionLines(project, norms),
+        ...bootstrapLines(project, norms, bootstrapOf(norms)),
         '',
         ...tableLines(normSet, norms),
         '',
@@ -30,7 +41,7 @@ export function textTables(normSet: NormSet, pointsOf: PointsOf): string {
     .join('\n\n');
 }
 
-/** Heading and rows, aligned to the right, with an empty line between fives. */
+/** Heading and rows with an empty line between fives. */
 function tableLines({ project }: NormSet, { group, rows }: GroupNorms): readonly string[] {
   const columns = tableColumns(project);
   const deepest = Math.max(...columns.map(({ heading }) => heading.length));
@@ -38,15 +49,7 @@ function tableLines({ project }: NormSet, { group, rows }: GroupNorms): readonly
     columns.map((column) => column.heading[line - deepest + column.heading.length] ?? ''),
   );
   const fives = inFives(rows, group.table.scale).map((five) => five.map((row) => cells(row, columns)));
-  const widths = columns.map((_, index) =>
-    Math.max(...[...heading, ...fives.flat()].map((line) => (line[index] ?? '').length)),
-  );
-  const set = (line: readonly string[]): string =>
-    line
-      .map((text, index) => text.padStart(widths[index] ?? 0))
-      .join(GAP)
-      .trimEnd();
-  return [...heading.map(set), ...fives.flatMap((five) => ['', ...five.map(set)])];
+  return alignedLines([...heading, ...fives.flatMap((five) => [[], ...five])]);
 }
 
 function cells(row: GroupNorms['rows'][number], columns: readonly TableColumn[]): readonly string[] {
@@ -57,8 +60,9 @@ function cells(row: GroupNorms['rows'][number], columns: readonly TableColumn[])
 function pointLines(norms: GroupNorms, pointsOf: PointsOf): readonly string[] {
   const points = pointsOf(norms);
   const definitions = [...new Set(points.map(({ definition }) => definition))];
+  const of = norms.smoothing.state === 'smoothed' ? ' of the scores before smoothing' : '';
   const lines = definitions.flatMap((definition) => [
-    `Percentile points, ${POINT_DEFINITION_WORDS[definition]}:`,
+    `Percentile points${of}, ${POINT_DEFINITION_WORDS[definition]}:`,
     ...points
       .filter((point) => point.definition === definition)
       .map(

@@ -72,7 +72,7 @@ describe('press', () => {
     ],
     [
       'an unusable definition',
-      projectToText({ ...projectOf([1, 2]), curve: { definition: { kind: 'grouped', width: 0.3 } } }),
+      projectToText({ ...projectOf([1, 2]), curve: { ...newProject('').curve, definition: { kind: 'grouped', width: 0.3 } } }),
       'must be a multiple',
     ],
   ])('refuses %s', (_, text, problem) => {

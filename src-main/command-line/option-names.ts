@@ -1,0 +1,38 @@
+const text = { type: 'string' } as const;
+const flag = { type: 'boolean' } as const;
+
+/** Options by name, and whether a value follows them. */
+export type OptionNames = Readonly<Record<string, { readonly type: 'string' | 'boolean' }>>;
+
+export const GENERAL = { help: flag, version: flag } as const satisfies OptionNames;
+
+const COHORT = {
+  ...GENERAL,
+  score: text,
+  count: text,
+  weight: text,
+  id: text,
+  by: text,
+  scale: text,
+  'low-is-good': flag,
+  missing: text,
+} as const satisfies OptionNames;
+
+export const TABLE = {
+  ...COHORT,
+  definition: text,
+  smooth: text,
+  interval: text,
+  level: text,
+  reliability: text,
+  bootstrap: text,
+  seed: text,
+  points: text,
+  'point-definition': text,
+  columns: text,
+  format: text,
+} as const satisfies OptionNames;
+
+export const DIFFER = { ...COHORT, group: text, ranks: text, format: text } as const satisfies OptionNames;
+
+export const PRESS = { ...GENERAL, into: text } as const satisfies OptionNames;
