@@ -12,9 +12,9 @@ import type { Paragraph } from './paragraph.ts';
 export interface FitNotes {
   /** The degrees that were compared; null where the method compares none. */
   readonly degrees: NoteTable | null;
-  readonly aboutDegrees: readonly Paragraph[];
   readonly moments: NoteTable;
-  readonly facts: readonly Paragraph[];
+  /** What is to be said of the tables and of the fit. */
+  readonly paragraphs: readonly Paragraph[];
 }
 
 const NO_VALUE = '\u2013';
@@ -29,13 +29,10 @@ export function fitNotesOf({ people }: NormProject, { smoothing, evidence, group
   const compared = curve.degrees.length > 0;
   return {
     degrees: compared ? degreeTable(curve) : null,
-    aboutDegrees: compared ? [{ lead: 'Degrees.', text: aboutDegrees(curve, evidence) }] : [],
     moments: momentTable(curve),
-    facts: [
-      {
-        lead: 'Moments.',
-        text: `Of the observed scores and of the smoothed ones; the SD divides by ${group.table.weighted ? 'the sum of weights' : 'n'}.`,
-      },
+    paragraphs: [
+      ...(compared ? [{ lead: 'Degrees.', text: aboutDegrees(curve, evidence) }] : []),
+      { lead: 'Moments.', text: `The SD divides by ${group.table.weighted ? 'the sum of weights' : 'n'}.` },
       { lead: 'Fit.', text: [...fitSentences(curve), ...moveSentences(evidence)].join(' ') },
       ...warnings(evidence, people).map((text) => ({ lead: 'Beware.', text })),
     ],
@@ -93,21 +90,50 @@ function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve): NoteTab
   };
 }
 
+/** All the figures of a group's notes in sentences, the other degrees left out; empty where it is not smoothed. */
+export function fitFacts({ people }: NormProject, { smoothing, evidence }: GroupNorms): string {
+  if (smoothing.state !== 'smoothed' || evidence === null) return '';
+  const { curve } = smoothing;
+  const figures = [
+    ['G²', curve.g2],
+    ['X²', curve.x2],
+    ['df', curve.df],
+    ['AIC', curve.aic],
+    ['BIC', curve.bic],
+  ] as const;
+  const known = figures.flatMap(([name, value]) =>
+    value === null ? [] : [`${name} ${name === 'df' ? value : misfit(value)}`],
+  );
+  const moments = momentTable(curve).rows.map(({ cells: [name = '', observed = '', smoothed = ''] }) => {
+    return `${name} ${observed} observed, ${smoothed} smoothed`;
+  });
+  return [
+    ...(known.length === 0 ? [] : [`${known.join(', ')}.`]),
+    ...bandwidthSentence(curve),
+    `${moments.join('; ')}.`,
+    ...moveSentences(evidence),
+    ...warnings(evidence, people),
+  ].join(' ');
+}
+
 /** Fit and bandwidth, where no table of degrees tells it. */
-export function fitSentences({ choice, degrees, g2, x2, df, bandwidth }: SmoothedCurve): readonly string[] {
-  const sentences: string[] = [];
-  if (degrees.length === 0 && g2 !== null && x2 !== null && df !== null) {
-    sentences.push(`G² is ${misfit(g2)} and X² ${misfit(x2)}, on ${df} degrees of freedom.`);
-  }
-  if (bandwidth !== null) {
-    const found = choice.kind === 'kernel' && choice.bandwidth === 'auto' ? ', found from the data' : '';
-    sentences.push(`The bandwidth of the kernel is ${printNumber(bandwidth, 3)} raw-score points${found}.`);
-  }
-  return sentences;
+function fitSentences(curve: SmoothedCurve): readonly string[] {
+  const { degrees, g2, x2, df } = curve;
+  const told = degrees.length > 0 || g2 === null || x2 === null || df === null;
+  return [
+    ...(told ? [] : [`G² is ${misfit(g2)} and X² ${misfit(x2)}, on ${df} degrees of freedom.`]),
+    ...bandwidthSentence(curve),
+  ];
+}
+
+function bandwidthSentence({ choice, bandwidth }: SmoothedCurve): readonly string[] {
+  if (bandwidth === null) return [];
+  const found = choice.kind === 'kernel' && choice.bandwidth === 'auto' ? ', found from the data' : '';
+  return [`The bandwidth of the kernel is ${printNumber(bandwidth, 3)} raw-score points${found}.`];
 }
 
 /** What smoothing did to the printed table. */
-export function moveSentences({ largestMove, changed, of }: FitEvidence): readonly string[] {
+function moveSentences({ largestMove, changed, of }: FitEvidence): readonly string[] {
   return [
     `The largest move of a rank is ${printNumber(largestMove.points, 2)} percentile-rank points, at raw score ${largestMove.scoreText}.`,
     `Smoothing changes ${changed} of ${of} printed ranks.`,

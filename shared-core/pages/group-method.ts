@@ -37,9 +37,7 @@ function errorSentences(project: NormProject, { group, smoothing, precision }: G
   const asIf = `as if ${project.people} were drawn one by one${on}`;
   const sentences: string[] = [];
   if (columns.includes('interval') && precision.intervals !== null) {
-    sentences.push(
-      `The interval is error of sampling, ${asIf}${smoothed ? '; it is that of the observed rank, before smoothing' : ''}.`,
-    );
+    sentences.push(`The interval is that of the observed rank${smoothed ? ', before smoothing' : ''}, ${asIf}.`);
   }
   if (columns.includes('standard-error')) {
     const values = smoothed ? smoothing.curve.standardErrors : precision.standardErrors;
@@ -68,7 +66,8 @@ export function cautionsOf(project: NormProject): string {
   return [project.sheet.cautions, errorCaution(project)].filter((text) => text.trim() !== '').join('\n');
 }
 
-function errorCaution(project: NormProject): string {
+/** What the printed columns of errors tell, and that the two errors are different things; empty without such a column. */
+export function errorCaution(project: NormProject): string {
   const { columns } = project.table;
   const one = onePerson(project.people);
   const sampling = [

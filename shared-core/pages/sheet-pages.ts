@@ -4,7 +4,7 @@ import { tableColumns } from '../norms/table-columns.ts';
 import type { Block, TextRun } from './booklet.ts';
 import { fitNotesOf } from './fit-notes.ts';
 import { layFitNotes } from './fit-notes-blocks.ts';
-import { cautionsOf } from './group-method.ts';
+import { cautionsOf, errorCaution } from './group-method.ts';
 import { inverseStrip } from './inverse-strip.ts';
 import { ogivePicture } from './ogive-picture.ts';
 import type { PageFrame } from './page-frame.ts';
@@ -14,7 +14,15 @@ import { figureCaption, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts
 import { placeTable, rowMeasure, tableOverhead } from './table-blocks.ts';
 import type { TableMeasure } from './table-measure.ts';
 import { columnHeight, fillColumns, inFives, type Five } from './table-rows.ts';
-import { countThatFits, heightOf, linesOf, paragraphLines, placeLines, type LooseLine } from './text-lines.ts';
+import {
+  countThatFits,
+  heightOf,
+  linesOf,
+  paragraphLines,
+  placeLines,
+  plainParagraphs,
+  type LooseLine,
+} from './text-lines.ts';
 import { CONTINUED, PROSE, SMALL_PROSE, SUBTITLE, TITLE, type TypeSize } from './type-sizes.ts';
 
 const MOST_TITLE_LINES = 6;
@@ -29,6 +37,7 @@ const BELOW_TABLE = 22;
 const LEAST_ROWS = 5;
 /** Height of the picture against its width. */
 const PICTURE_SHAPE = 0.47;
+const BELOW_PICTURE = 5;
 const LEAST_NOTE_LINES = 6;
 
 export interface SheetPages {
@@ -94,9 +103,13 @@ function furtherHead(
   return { blocks, bottom: bottom + AROUND_INTRODUCTION };
 }
 
+/** How to read the table, and what its columns of errors tell, beside the cautions. */
 function introduce(flow: SheetFlow, { project }: NormSet): void {
-  const texts = [project.sheet.howToRead, cautionsOf(project)].filter((text) => text.trim() !== '');
-  const [left = [], right = []] = texts.map((text) => linesOf(text, 'sans', PROSE, flow.halfWidth));
+  const { howToRead, cautions } = project.sheet;
+  const sides = [[howToRead, errorCaution(project)], [cautions]].map((texts) =>
+    plainParagraphs(texts, 'sans', PROSE, flow.halfWidth),
+  );
+  const [left = [], right = []] = sides.filter((lines) => lines.length > 0);
   flow.skip(AROUND_INTRODUCTION);
   flow.sideBySide(left, right, PROSE);
 }
@@ -128,31 +141,40 @@ function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): v
 
 /** The picture and, beside it, the notes; notes that are longer than the page go on in two columns on the next. */
 function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: GroupNorms): void {
-  const lines = paragraphLines(notesOf(normSet, index, norms), PROSE, flow.halfWidth);
+  const { project } = normSet;
+  const lines = paragraphLines(notesOf(normSet, norms), PROSE, flow.halfWidth);
   flow.skip(BELOW_TABLE);
-  if (!normSet.project.sheet.ogive) {
+  if (!project.sheet.ogive) {
     flow.need(Math.min(heightOf(lines, PROSE) / 2 + PROSE.leading, LEAST_NOTE_LINES * PROSE.leading));
     flow.inTwoColumns(lines, PROSE);
     return;
   }
   const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
+  const alt = figureCaption(project, norms);
+  const caption = paragraphLines([{ lead: `Figure ${index + 1}.`, text: alt }], SMALL_PROSE, flow.halfWidth);
+  const figure = picture.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
   const whole = heightOf(lines, PROSE);
-  flow.need(Math.max(picture.height, whole <= flow.freshRoom ? whole : LEAST_NOTE_LINES * PROSE.leading));
+  flow.need(Math.max(figure, whole <= flow.freshRoom ? whole : LEAST_NOTE_LINES * PROSE.leading));
   const beside = countThatFits(lines, PROSE, flow.room);
-  const height = Math.max(picture.height, heightOf(lines.slice(0, beside), PROSE));
+  const top = flow.y;
   flow.place(
     [
       {
         kind: 'picture',
         x: flow.left,
-        y: flow.y,
+        y: top,
         ...picture,
-        svg: ogivePicture(norms, normSet.project.precision.level, picture),
-        alt: figureCaption(normSet.project, norms),
+        svg: ogivePicture(norms, project.precision.level, picture),
+        alt,
       },
-      ...placeLines(lines.slice(0, beside), PROSE, { x: flow.rightHalf, top: flow.y, width: flow.halfWidth }),
+      ...placeLines(caption, SMALL_PROSE, {
+        x: flow.left,
+        top: top + picture.height + BELOW_PICTURE,
+        width: flow.halfWidth,
+      }),
+      ...placeLines(lines.slice(0, beside), PROSE, { x: flow.rightHalf, top, width: flow.halfWidth }),
     ],
-    height,
+    Math.max(figure, heightOf(lines.slice(0, beside), PROSE)),
   );
   flow.inTwoColumns(lines.slice(beside), PROSE);
 }

@@ -62,11 +62,9 @@ export function editionLine({ project, check }: NormSet, { summary, smoothing }:
 }
 
 /** The paragraphs beside the picture, in order; those without text are left out. */
-export function notesOf(normSet: NormSet, index: number, norms: GroupNorms): readonly Paragraph[] {
-  const { project } = normSet;
+export function notesOf({ project }: NormSet, norms: GroupNorms): readonly Paragraph[] {
   const noun = groupNoun(project.groups.documentation) === 'norm group' ? 'Norm group.' : 'Sample.';
   return [
-    ...(project.sheet.ogive ? [{ lead: `Figure ${index + 1}.`, text: figureCaption(project, norms) }] : []),
     { lead: noun, text: [sampleFacts(project, norms), ...documentationSentences(project)].join(' ') },
     { lead: 'Method.', text: groupMethod(project, norms) },
     ...(project.sheet.notes.trim() === '' ? [] : [{ lead: 'Notes.', text: project.sheet.notes.trim() }]),

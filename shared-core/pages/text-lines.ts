@@ -16,6 +16,21 @@ export function linesOf(text: string, face: FontFace, { size }: TypeSize, width:
   return breakLines([{ text, face }], size, width).map((runs) => ({ runs, before: 0 }));
 }
 
+/** Paragraphs of one face, broken to a width; those without text are left out. */
+export function plainParagraphs(
+  texts: readonly string[],
+  face: FontFace,
+  type: TypeSize,
+  width: number,
+): readonly LooseLine[] {
+  return texts
+    .map((text) => linesOf(text, face, type, width))
+    .filter((lines) => lines.length > 0)
+    .flatMap((lines, index) =>
+      lines.map((line, place) => ({ ...line, before: place === 0 && index > 0 ? PARAGRAPH_GAP : 0 })),
+    );
+}
+
 /** Paragraphs with bold leads, broken to a width. */
 export function paragraphLines(paragraphs: readonly Paragraph[], type: TypeSize, width: number): readonly LooseLine[] {
   return paragraphs.flatMap(({ lead, text }, index) => {

@@ -2,8 +2,10 @@ import type { Worksheet } from 'exceljs';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { LEFT_OUT_WORDS } from '../../shared-core/norms/reading.ts';
 import { methodText } from '../../shared-core/norms/statements.ts';
+import { fitFacts } from '../../shared-core/pages/fit-notes.ts';
+import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
-import { asBold, asProse, asTitle, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asProse, asTitle, linesIn, ruleBelow, setUpPages } from './workbook-look.ts';
 
 export const ABOUT = 'About';
 const WIDTHS = [24, 90] as const;
@@ -22,13 +24,13 @@ export function fillAboutSheet(sheet: Worksheet, normSet: NormSet): void {
     asProse(left);
     asProse(right);
     if (typeof value === 'number') right.alignment = { horizontal: 'left', vertical: 'top' };
-    sheet.getRow(index + 3).height = 15 * Math.max(1, Math.ceil((String(value).length * 1.1) / WIDTHS[1]));
+    sheet.getRow(index + 3).height = 15 * Math.max(linesIn(name, WIDTHS[0]), linesIn(String(value), WIDTHS[1]));
     for (const cell of [left, right]) ruleBelow(cell, 'fine');
   });
   setUpPages(sheet, normSet.project.sheet, `Edition ${normSet.project.release.edition} · check ${normSet.check}`);
 }
 
-function aboutLines({ project, check }: NormSet): readonly (readonly [string, string | number])[] {
+function aboutLines({ project, check, groups: norms }: NormSet): readonly (readonly [string, string | number])[] {
   const { source, tally, release, groups } = project;
   const { population, sampling, participation, testDates, weighting } = groups.documentation;
   const lines: readonly (readonly [string, string | number])[] = [
@@ -39,8 +41,12 @@ function aboutLines({ project, check }: NormSet): readonly (readonly [string, st
     ['Check', check],
     ['Scale', tally === null ? '' : scaleInWords(tally.scale)],
     ['Method', methodText(project)],
+    ...norms.flatMap((group): readonly (readonly [string, string])[] => [
+      [`Smoothing: ${group.group.title}`, smoothingSentence(project, group)],
+      [`Fit: ${group.group.title}`, fitFacts(project, group)],
+    ]),
     ['How to read', project.sheet.howToRead],
-    ['Cautions', project.sheet.cautions],
+    ['Cautions', cautionsOf(project)],
     ['Notes', project.sheet.notes],
     ['Population', population],
     ['Sampling', sampling],

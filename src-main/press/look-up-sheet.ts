@@ -2,6 +2,7 @@ import type { Worksheet } from 'exceljs';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
+import { cautionsOf } from '../../shared-core/pages/group-method.ts';
 import { cellText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { printCount } from '../../shared-core/scores/printed-number.ts';
 import { distinctTitles } from './sheet-names.ts';
@@ -83,7 +84,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     result: printCount(example.summary.n),
   };
   sheet.getCell(people, 2).alignment = { horizontal: 'right' };
-  proseRow(sheet, people + 2, project.sheet.cautions, 2, WIDTHS[0] + WIDTHS[1]);
+  proseRow(sheet, people + 2, cautionsOf(project), 2, WIDTHS[0] + WIDTHS[1]);
   setUpPages(sheet, project.sheet, `Edition ${project.release.edition} · check ${normSet.check}`);
 }
 

@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import writeFileAtomic from 'write-file-atomic';
 import type { DrawnPages, Pressed, Reply } from '../../shared-core/desk.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import { buildNormSet } from '../../shared-core/norms/norm-set.ts';
+import { buildNormSet, pressProblem, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
 import { bookletPdf } from './booklet-pdf.ts';
 import { normSetJson } from './norm-set-json.ts';
@@ -30,7 +30,7 @@ export async function pressFiles(
   onProgress: PressProgress = silent,
 ): Promise<Reply<readonly FileToWrite[]>> {
   onProgress(0, 'Working out the tables');
-  const built = buildNormSet(project);
+  const built = printableNormSet(project);
   if (!built.ok) return built;
   const { normSet } = built;
   const { pdf } = await bookletPdf(normSet, (share) => onProgress(share * AFTER_BOOKLET, 'Drawing the booklet'));
@@ -76,9 +76,17 @@ export async function pressInto(
   return { ok: true, value: { folder, files } };
 }
 
+/** The set of a project, unless one of its groups would be printed as something it is not. */
+function printableNormSet(project: NormProject): NormSetBuilt {
+  const built = buildNormSet(project);
+  if (!built.ok) return built;
+  const problem = pressProblem(built.normSet);
+  return problem === null ? built : { ok: false, problem };
+}
+
 /** The booklet alone, for the pages on screen. */
 export async function drawPages(project: NormProject, onProgress: PressProgress = silent): Promise<Reply<DrawnPages>> {
-  const built = buildNormSet(project);
+  const built = printableNormSet(project);
   if (!built.ok) return built;
   const { pdf, pages, remarks } = await bookletPdf(built.normSet, (share) => onProgress(share, 'Drawing the pages'));
   return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), pages, remarks } };

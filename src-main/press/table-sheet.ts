@@ -2,6 +2,7 @@ import type { Worksheet } from 'exceljs';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
+import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
 import {
   cellText,
   editionLine,
@@ -12,36 +13,43 @@ import {
 } from '../../shared-core/pages/sheet-texts.ts';
 import { inFives } from '../../shared-core/pages/table-rows.ts';
 import { typedCell } from './typed-cell.ts';
+import { UNROUNDED_FORMAT, unroundedColumns } from './unrounded-columns.ts';
 import { asBold, asHead, asTitle, fillCell, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
 
 const COLUMN_WIDTH = 11;
-const UNROUNDED_FORMAT = '0.000000';
+const HEAD_LINES = 3;
 
 /** One group's table: what it is, its cautions, and a row of typed cells for each attainable score. */
 export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupNorms): void {
   const { project } = normSet;
   const columns = tableColumns(project);
-  const width = columns.length + 1;
+  const unrounded = unroundedColumns(project, norms);
+  const width = columns.length + unrounded.length;
   sheet.columns = Array.from({ length: width }, () => ({ width: COLUMN_WIDTH }));
   const prose = [
     surveyName(project),
     `${sheetSubtitle(project)}.`,
     sampleFacts(project, norms),
+    smoothingSentence(project, norms),
     `${editionLine(normSet, norms)}.`,
     project.sheet.howToRead,
-    project.sheet.cautions,
+    cautionsOf(project),
     project.sheet.notes,
   ].filter((text) => text.trim() !== '');
   sheet.getCell(1, 1).value = sheetTitle(project, norms);
   asTitle(sheet.getCell(1, 1));
   prose.forEach((text, index) => proseRow(sheet, index + 2, text, width, width * COLUMN_WIDTH));
   const headRow = prose.length + 3;
-  [...columns.map(({ heading }) => heading.join(' ').replace('- ', '')), 'Rank, unrounded'].forEach((head, index) => {
+  const heads = [
+    ...columns.map(({ heading }) => heading.join(' ').replace('- ', '')),
+    ...unrounded.map(({ head }) => head),
+  ];
+  heads.forEach((head, index) => {
     const cell = sheet.getCell(headRow, index + 1);
     cell.value = head;
     asHead(cell);
   });
-  sheet.getRow(headRow).height = 28;
+  sheet.getRow(headRow).height = 14 * HEAD_LINES;
   const endsFive = new Set(inFives(norms.rows, norms.group.table.scale).map((five) => five.at(-1)?.score));
   norms.rows.forEach((row, index) => {
     const at = headRow + 1 + index;
@@ -50,7 +58,11 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
       fillCell(cell, typedCell(cellText(row, column)));
       if (place === 0) asBold(cell);
     });
-    fillCell(sheet.getCell(at, width), { kind: 'number', value: row.percentileRank, format: UNROUNDED_FORMAT });
+    unrounded.forEach(({ valueOf }, place) => {
+      const value = valueOf(row);
+      if (value === null) return;
+      fillCell(sheet.getCell(at, columns.length + 1 + place), { kind: 'number', value, format: UNROUNDED_FORMAT });
+    });
     const last = index === norms.rows.length - 1;
     if (!endsFive.has(row.score)) return;
     for (let place = 1; place <= width; place += 1) ruleBelow(sheet.getCell(at, place), last ? 'strong' : 'fine');

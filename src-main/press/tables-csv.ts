@@ -5,6 +5,9 @@ import { safeForCsv } from './safe-text.ts';
 /**
  * All tables as one csv file by RFC 4180: UTF-8 with a byte-order mark (spreadsheets guess the encoding without it),
  * comma, CRLF, decimal point. Numbers are unrounded; `printed` and the columns `printed-…` hold the texts of the booklet.
+ * `percentile-rank` is the rank behind `printed`: the smoothed one where the group is smoothed, else the observed one.
+ * `interval-low` and `interval-high` (0–100) are of the observed rank, `standard-error` is of the printed one; both are
+ * error of sampling. Cells are empty where there is no such number.
  */
 export function tablesCsv(normSet: NormSet): Uint8Array {
   const { project, groups, check } = normSet;
@@ -18,6 +21,11 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
     'count',
     'cumulative',
     'percentile-rank',
+    'observed-percentile-rank',
+    'smoothed-percentile-rank',
+    'interval-low',
+    'interval-high',
+    'standard-error',
     'printed',
     ...columns.map((key) => `printed-${key}`),
     'edition',
@@ -33,6 +41,11 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
       String(row.count),
       String(row.cumulative),
       String(row.percentileRank),
+      String(row.observed.percentileRank),
+      numberOrNothing(row.smoothed?.percentileRank),
+      numberOrNothing(row.interval?.low),
+      numberOrNothing(row.interval?.high),
+      numberOrNothing(row.standardError),
       row.printed,
       ...columns.map((key) => row.texts[key]),
       safeForCsv(project.release.edition),
@@ -42,6 +55,10 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
   );
   const text = [heads, ...records].map((record) => `${record.map(quoted).join(',')}\r\n`).join('');
   return new TextEncoder().encode(`\uFEFF${text}`);
+}
+
+function numberOrNothing(value: number | null | undefined): string {
+  return value === null || value === undefined ? '' : String(value);
 }
 
 function quoted(cell: string): string {

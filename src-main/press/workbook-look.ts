@@ -51,8 +51,12 @@ export function proseRow(sheet: Worksheet, row: number, text: string, columns: n
   const cell = sheet.getCell(row, 1);
   cell.value = text;
   asProse(cell);
-  const lines = text.split('\n').reduce((sum, line) => sum + Math.max(1, Math.ceil((line.length * 1.1) / width)), 0);
-  sheet.getRow(row).height = 15 * lines;
+  sheet.getRow(row).height = 15 * linesIn(text, width);
+}
+
+/** About how many lines a wrapped text takes in so many characters of the usual type. */
+export function linesIn(text: string, width: number): number {
+  return text.split('\n').reduce((sum, line) => sum + Math.max(1, Math.ceil((line.length * 1.1) / width)), 0);
 }
 
 /** Paper, orientation and foot as in the booklet. */

@@ -1,0 +1,43 @@
+import type { ConversionRow } from '../../shared-core/norms/conversion-table.ts';
+import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
+import type { NormProject } from '../../shared-core/norms/norm-project.ts';
+
+/** A column of numbers behind the printed texts. */
+export interface UnroundedColumn {
+  readonly head: string;
+  /** Null leaves the cell empty. */
+  readonly valueOf: (row: ConversionRow) => number | null;
+}
+
+export const UNROUNDED_FORMAT = '0.000000';
+
+/**
+ * The unrounded numbers that stand beyond the printed columns: the rank, both the smoothed and the observed one where
+ * the group is smoothed, and the numbers behind each printed column of errors.
+ */
+export function unroundedColumns({ table }: NormProject, { smoothing }: GroupNorms): readonly UnroundedColumn[] {
+  const has = (key: NormProject['table']['columns'][number]): boolean => table.columns.includes(key);
+  return [
+    ...(smoothing.state === 'smoothed'
+      ? [
+          { head: 'Smoothed rank, unrounded', valueOf: (row: ConversionRow) => row.percentileRank },
+          { head: 'Observed rank, unrounded', valueOf: (row: ConversionRow) => row.observed.percentileRank },
+        ]
+      : [{ head: 'Rank, unrounded', valueOf: (row: ConversionRow) => row.percentileRank }]),
+    ...(has('interval')
+      ? [
+          { head: 'Interval, low, unrounded', valueOf: (row: ConversionRow) => row.interval?.low ?? null },
+          { head: 'Interval, high, unrounded', valueOf: (row: ConversionRow) => row.interval?.high ?? null },
+        ]
+      : []),
+    ...(has('standard-error')
+      ? [{ head: 'Standard error, unrounded', valueOf: (row: ConversionRow) => row.standardError }]
+      : []),
+    ...(has('measurement-band')
+      ? [
+          { head: 'Band, low, unrounded', valueOf: (row: ConversionRow) => row.band?.low ?? null },
+          { head: 'Band, high, unrounded', valueOf: (row: ConversionRow) => row.band?.high ?? null },
+        ]
+      : []),
+  ];
+}
