@@ -26,6 +26,10 @@ export default defineConfig({
   base: './',
   publicDir: false,
   plugins: [svelte({ configFile: false })],
+  // A package that evaluates text, which the page's policy forbids.
+  resolve: {
+    alias: { '@stdlib/assert-has-generator-support': here('src-renderer/compute/generator-support.cjs') },
+  },
   worker: { format: 'es' },
   builder: {
     sharedConfigBuild: true,
