@@ -1,8 +1,8 @@
-import { listed } from '../norms/listed.ts';
 import type { FitEvidence } from '../norms/fit-evidence.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { SmoothedCurve } from '../norms/group-smoothing.ts';
 import type { NormProject } from '../norms/norm-project.ts';
+import { joined } from '../norms/statements.ts';
 import { printNumber } from '../scores/printed-number.ts';
 import type { DegreeLine } from '../smoothing/smoothing.ts';
 import type { NoteTable } from './note-table.ts';
@@ -21,9 +21,11 @@ const NO_VALUE = '\u2013';
 /** Figures of misfit from here on are as good as without bound. */
 const BEYOND = 99_999;
 const LEAST_P = 0.001;
+/** Longer lists of scores are cut. */
+const MOST_NAMED = 10;
 
 /** The technical notes of a group, or null where it is not smoothed. */
-export function fitNotesOf({ people }: NormProject, { smoothing, evidence, group }: GroupNorms): FitNotes | null {
+export function fitNotesOf({ people }: NormProject, { smoothing, evidence }: GroupNorms): FitNotes | null {
   if (smoothing.state !== 'smoothed' || evidence === null) return null;
   const { curve } = smoothing;
   const compared = curve.degrees.length > 0;
@@ -32,7 +34,6 @@ export function fitNotesOf({ people }: NormProject, { smoothing, evidence, group
     moments: momentTable(curve),
     paragraphs: [
       ...(compared ? [{ lead: 'Degrees.', text: aboutDegrees(curve, evidence) }] : []),
-      { lead: 'Moments.', text: `The SD divides by ${group.table.weighted ? 'the sum of weights' : 'n'}.` },
       { lead: 'Fit.', text: [...fitSentences(curve), ...moveSentences(evidence)].join(' ') },
       ...warnings(evidence, people).map((text) => ({ lead: 'Beware.', text })),
     ],
@@ -64,12 +65,11 @@ function printP(p: number | null): string {
 function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence): string {
   return [
     'G² and X² tell how far the fitted frequencies lie from the observed ones. AIC and BIC add a charge for each ' +
-      'parameter; less is better. p tests a degree against the one below it. The degree taken is in bold, with a rule ' +
-      'under it.',
+      'parameter; less is better. p tests a degree against the one below it. The degree taken is in bold, above a rule.',
     ...(degrees.every(({ converged }) => converged) ? [] : ['Where dashes stand, no fit was found.']),
     ...(nearlyAsGood.length === 0
       ? []
-      : [`Nearly as good, with a BIC within 2 of it: degree ${listed(nearlyAsGood.map(String))}.`]),
+      : [`Nearly as good, with a BIC within 2 of it: degree ${joined(nearlyAsGood.map(String))}.`]),
   ].join(' ');
 }
 
@@ -83,7 +83,7 @@ function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve): NoteTab
     firstColumn: 'words',
     rows: [
       row('Mean', 'mean', 3),
-      row('SD', 'sd', 3),
+      row('SD, dividing by n', 'sd', 3),
       row('Skewness', 'skewness', 3),
       row('Excess kurtosis', 'excessKurtosis', 3),
     ],
@@ -128,8 +128,11 @@ function fitSentences(curve: SmoothedCurve): readonly string[] {
 
 function bandwidthSentence({ choice, bandwidth }: SmoothedCurve): readonly string[] {
   if (bandwidth === null) return [];
-  const found = choice.kind === 'kernel' && choice.bandwidth === 'auto' ? ', found from the data' : '';
-  return [`The bandwidth of the kernel is ${printNumber(bandwidth, 3)} raw-score points${found}.`];
+  const found = choice.kind === 'kernel' && choice.bandwidth === 'auto';
+  const points = found
+    ? `${printNumber(bandwidth, 4)} raw-score points, found from the data`
+    : `${bandwidth} raw-score points`;
+  return [`The bandwidth of the kernel is ${points}.`];
 }
 
 /** What smoothing did to the printed table. */
@@ -144,7 +147,13 @@ function warnings({ filledGaps, inventedDips }: FitEvidence, people: NormProject
   return [
     ...(filledGaps.length === 0
       ? []
-      : [`The curve expects five ${people} or more at ${listed(filledGaps)}, where there are none.`]),
-    ...(inventedDips.length === 0 ? [] : [`The curve dips at ${listed(inventedDips)}; the data do not.`]),
+      : [`The curve expects five ${people} or more at ${named(filledGaps)}, where there are none.`]),
+    ...(inventedDips.length === 0 ? [] : [`The curve dips at ${named(inventedDips)}; the data do not.`]),
   ];
+}
+
+/** "7, 9 and 12", or the first few and how many more there are. */
+function named(scores: readonly string[]): string {
+  const left = scores.length - MOST_NAMED;
+  return joined(left > 1 ? [...scores.slice(0, MOST_NAMED), `${left} more`] : scores);
 }

@@ -63,7 +63,10 @@ function errorSentences(project: NormProject, { group, smoothing, precision }: G
 
 /** The project's cautions and, where a column of errors is printed, that the two errors are different things. */
 export function cautionsOf(project: NormProject): string {
-  return [project.sheet.cautions, errorCaution(project)].filter((text) => text.trim() !== '').join('\n');
+  const own = project.sheet.cautions.trim();
+  const errors = errorCaution(project);
+  if (own === '' || errors === '') return `${own}${errors}`;
+  return `${own}${/[.!?…]$/.test(own) ? ' ' : '\n'}${errors}`;
 }
 
 /** What the printed columns of errors tell, and that the two errors are different things; empty without such a column. */

@@ -19,12 +19,19 @@ export interface LabelRoom {
   readonly rising: boolean;
 }
 
-/** Per cent that the lines must not pass on the side where the labels stand, counted from the labels' own end. */
-const CLEAR_LEVEL = 60;
+export interface PlacedLabels {
+  readonly marks: readonly string[];
+  /** The ground they stand on. */
+  readonly box: { readonly left: number; readonly right: number; readonly top: number; readonly bottom: number };
+}
+
+/** Baseline of the first label above the curve and of the last below it, per cent. */
 const FIRST_ABOVE = 88;
 const LAST_BELOW = 10;
 const LEADING = 9;
 const TO_CURVE = 9;
+/** Room between the labels and what is drawn above or below them. */
+const CLEAR = 4;
 /** Share of the width that the room above the curve must have for the labels to stand there. */
 const ROOM_ABOVE = 0.4;
 const SAMPLE_WIDTH = 10;
@@ -39,7 +46,7 @@ export function ogiveLabels(
   upper: readonly Point[],
   lower: readonly Point[],
   { left, right, y, rising }: LabelRoom,
-): readonly string[] {
+): PlacedLabels {
   const middle = (left + right) / 2;
   const passed = (points: readonly Point[], percent: number): number =>
     (rising ? points.find((point) => point.y <= y(percent)) : points.findLast((point) => point.y <= y(percent)))?.x ??
@@ -47,19 +54,22 @@ export function ogiveLabels(
   const kept = (points: readonly Point[], percent: number): number =>
     (rising ? points.findLast((point) => point.y >= y(percent)) : points.find((point) => point.y >= y(percent)))?.x ??
     middle;
-  const highest = passed(upper, CLEAR_LEVEL);
+  const perPoint = 1 / (y(0) - y(1));
+  const depth = (labels.length - 1) * LEADING;
+  const highest = passed(upper, FIRST_ABOVE - (depth + CLEAR) * perPoint);
   const above = (rising ? highest - left : right - highest) > (right - left) * ROOM_ABOVE;
-  const curveAt = above ? highest : kept(lower, 100 - CLEAR_LEVEL);
+  const curveAt = above ? highest : kept(lower, LAST_BELOW + (depth + LABEL_SIZE + CLEAR) * perPoint);
   const width = SAMPLE_WIDTH + SAMPLE_GAP + Math.max(...labels.map(({ text }) => textWidth(text, 'sans', LABEL_SIZE)));
   const x = rising === above ? Math.max(left, curveAt - TO_CURVE - width) : Math.min(right - width, curveAt + TO_CURVE);
-  const first = above ? y(FIRST_ABOVE) : y(LAST_BELOW) - (labels.length - 1) * LEADING;
-  return labels.flatMap((label, index) => {
+  const first = above ? y(FIRST_ABOVE) : y(LAST_BELOW) - depth;
+  const marks = labels.flatMap((label, index) => {
     const baseline = first + index * LEADING;
     return [
       ...sample(label, { x, y: baseline - LABEL_SIZE * 0.32 }),
       words(label.text, { x: x + SAMPLE_WIDTH + SAMPLE_GAP, y: baseline }, 'start', label.colour),
     ];
   });
+  return { marks, box: { left: x, right: x + width, top: first - LABEL_SIZE, bottom: first + depth + LABEL_SIZE / 3 } };
 }
 
 function sample({ sample: kind, fill }: OgiveLabel, { x, y }: Point): readonly string[] {

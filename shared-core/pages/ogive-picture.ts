@@ -3,7 +3,7 @@ import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';
-import { ogiveLabels, type OgiveLabel } from './ogive-labels.ts';
+import { ogiveLabels, type OgiveLabel, type PlacedLabels } from './ogive-labels.ts';
 import { area, dot, fixed, horizontal, path, words, type Point } from './svg-marks.ts';
 
 export interface OgiveColours {
@@ -30,6 +30,7 @@ export interface PictureSize {
 }
 
 const EDGE = { left: 19, right: 4, top: 4, bottom: 21 };
+const AROUND_LABELS = 3;
 /** Dots at the single scores are told apart up to about this many. */
 const MOST_DOTS = 61;
 const PER_CENT_TICKS = [0, 25, 50, 75, 100] as const;
@@ -89,11 +90,12 @@ export function ogivePicture(
     y,
     rising: scale.direction === 'high-is-good',
   };
+  const placed = ogiveLabels(labels, extreme(Math.min), extreme(Math.max), room);
   return [
     `<svg xmlns="http://www.w3.org/2000/svg" width="${fixed(size.width)}" height="${fixed(size.height)}" viewBox="0 0 ${fixed(size.width)} ${fixed(size.height)}">`,
     ...(band === null ? [] : [area([...band.upper, ...band.lower.toReversed()], colours.band)]),
-    ...PER_CENT_TICKS.map((tick) =>
-      horizontal(y(tick), EDGE.left, size.width - EDGE.right, tick === 0 ? colours.soft : colours.grid),
+    ...PER_CENT_TICKS.flatMap((tick) =>
+      gridLine(y(tick), size.width - EDGE.right, placed.box, tick === 0 ? colours.soft : colours.grid),
     ),
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
     ...scoreTicks(scale, size.width).flatMap((tick) => [
@@ -105,9 +107,18 @@ export function ogivePicture(
     path(steps(norms, { x, y }), colours.ink, 0.6),
     path(ranks, colours.curve, 1),
     ...(dotted ? ranks.map((point) => dot(point, colours.curve)) : []),
-    ...ogiveLabels(labels, extreme(Math.min), extreme(Math.max), room),
+    ...placed.marks,
     '</svg>',
   ].join('');
+}
+
+/** A line of the grid, which leaves the ground of the labels free. */
+function gridLine(y: number, right: number, box: PlacedLabels['box'], colour: string): readonly string[] {
+  if (y < box.top || y > box.bottom) return [horizontal(y, EDGE.left, right, colour)];
+  return [
+    horizontal(y, EDGE.left, Math.max(EDGE.left, box.left - AROUND_LABELS), colour),
+    horizontal(y, Math.min(right, box.right + AROUND_LABELS), right, colour),
+  ];
 }
 
 interface BandEdges {
