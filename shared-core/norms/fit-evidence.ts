@@ -95,12 +95,15 @@ function dipsAt(values: readonly number[], position: number): boolean {
   return here < (1 - DIP_SHARE) * Math.min(...rises);
 }
 
-/** The data dip too when fewer people stand about the dip than about the tops of the curve on either side. */
+/**
+ * The data dip too when fewer people a score stand about the dip than about the tops of the curve on either side; at an end
+ * of the scale there are fewer scores about a top.
+ */
 function dataDipAt(frequencies: readonly number[], curve: readonly number[], position: number): boolean {
-  const about = (centre: number): number =>
-    frequencies
-      .slice(Math.max(0, centre - DIP_WINDOW), centre + DIP_WINDOW + 1)
-      .reduce((sum, frequency) => sum + frequency, 0);
+  const about = (centre: number): number => {
+    const near = frequencies.slice(Math.max(0, centre - DIP_WINDOW), centre + DIP_WINDOW + 1);
+    return near.reduce((sum, frequency) => sum + frequency, 0) / near.length;
+  };
   const topOf = (from: number, to: number): number => {
     const part = curve.slice(from, to);
     return from + part.indexOf(Math.max(...part));
