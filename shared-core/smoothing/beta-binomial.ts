@@ -5,6 +5,9 @@ export type BetaBinomial =
   | { readonly ok: true; readonly a: number; readonly b: number; readonly probabilities: readonly number[] }
   | { readonly ok: false; readonly trouble: BetaBinomialTrouble };
 
+/** Below this a + b, which is 0 but for rounding, all people stand at the ends. */
+const SMALLEST_SIZE = 1e-9;
+
 /**
  * Beta-binomial (negative hypergeometric) distribution of the scores 0 … n (Keats & Lord 1962, Psychometrika 27, 59–72) with
  * a given mean and variance (divisor N): with π = mean/n and ρ = (variance/(nπ(1 − π)) − 1)/(n − 1), a = π(1/ρ − 1) and
@@ -15,7 +18,7 @@ export function betaBinomial(n: number, mean: number, variance: number): BetaBin
   const rho = (variance / (n * share * (1 - share)) - 1) / (n - 1);
   if (!(rho > 0)) return { ok: false, trouble: 'not-above-binomial' };
   const size = 1 / rho - 1;
-  if (!(size > 0)) return { ok: false, trouble: 'only-at-the-ends' };
+  if (!(size > SMALLEST_SIZE)) return { ok: false, trouble: 'only-at-the-ends' };
   const a = share * size;
   const b = (1 - share) * size;
   const logs = [0];

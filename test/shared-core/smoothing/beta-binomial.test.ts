@@ -53,6 +53,9 @@ describe('beta-binomial smoothing', () => {
   it('is refused where all people stand at the ends', () => {
     const result = smooth(tableFromCounts(wholeScale(0, 6), [5, 0, 0, 0, 0, 0, 5]), { kind: 'beta-binomial' });
     expect(!result.ok && result.problem).toContain('lowest or the highest score');
+    // Here ρ is 1 but for rounding.
+    const uneven = smooth(tableFromCounts(wholeScale(0, 3), [1, 0, 0, 2]), { kind: 'beta-binomial' });
+    expect(!uneven.ok && uneven.problem).toContain('lowest or the highest score');
   });
 
   it.each([

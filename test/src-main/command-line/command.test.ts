@@ -33,6 +33,8 @@ describe('the words of the command line', () => {
       direction: 'high-is-good',
       missing: [],
       definition: { kind: 'midpoint' },
+      smoothing: { kind: 'none' },
+      precision: { interval: null, level: null, reliability: null, bootstrap: null },
       points: [],
       pointDefinitions: ['inverse'],
       columns: null,
@@ -94,6 +96,43 @@ describe('the words of the command line', () => {
     expect(optionsOf('--columns', '').columns).toEqual([]);
   });
 
+  it('choose intervals, level, reliability and bootstrap', () => {
+    expect(optionsOf('--interval', 'jeffreys', '--level', '99.9', '--reliability', '.88').precision).toEqual({
+      interval: 'jeffreys',
+      level: 99.9,
+      reliability: 0.88,
+      bootstrap: null,
+    });
+    expect(optionsOf('--bootstrap', '500').precision.bootstrap).toEqual({ replicates: 500, seed: 1 });
+    expect(optionsOf('--bootstrap', '19', '--level', '90', '--seed', '0').precision.bootstrap).toEqual({
+      replicates: 19,
+      seed: 0,
+    });
+  });
+
+  it('ask why ranks differ', () => {
+    const differ = (...words: readonly string[]) =>
+      readCommand(['differ', 'a.csv', '--score', 's', '--ranks', 'r.txt', ...words]);
+    expect(differ('--by', 'g,h', '--group', '5,"a, b"', '--format', 'json', '--low-is-good')).toEqual({
+      ok: true,
+      value: {
+        kind: 'differ',
+        path: 'a.csv',
+        options: {
+          named: { score: 's', count: null, weight: null, id: null, by: ['g', 'h'] },
+          scale: null,
+          direction: 'low-is-good',
+          missing: [],
+          group: ['5', 'a, b'],
+          ranks: 'r.txt',
+          format: 'json',
+        },
+      },
+    });
+    expect(differ()).toMatchObject({ value: { options: { group: [], format: 'text' } } });
+    expect(differ('--help')).toEqual({ ok: true, value: { kind: 'help' } });
+  });
+
   it.each<[readonly string[], string]>([
     [[], 'Tell what to do'],
     [['tables'], 'There is no command "tables"'],
@@ -106,6 +145,7 @@ describe('the words of the command line', () => {
     [['table', 'a', '--score', 's', '--by', 's'], 'Column "s" is given two kinds of work'],
     [['table', 'a', '--score', 's', '--by', 'g,g'], 'Column "g" is given two kinds of work'],
     [['table', 'a', '--score', 's', '--by', '"g'], '--by is a list with commas'],
+    [['table', 'a', '--score', 's', '--smooth'], "'--smooth <value>' argument missing"],
     [['table', 'a', '--score', 's', '--into', 'f'], "Unknown option '--into'."],
     [['table', 'a', '--score', 's', '-s'], "Unknown option '-s'."],
     [['table', 'a', '--score', 's', '--scale', '40'], '--scale is MIN:MAX'],
@@ -127,6 +167,26 @@ describe('the words of the command line', () => {
     [['table', 'a', '--score', 's', '--points', '0.5', '--format', 'csv'], 'csv has no place for percentile points'],
     [['table', 'a', '--score', 's', '--format', 'xml'], '--format knows text, csv, json'],
     [['table', 'a', '--score', 's', '--low-is-good=yes'], "'--low-is-good' does not take an argument"],
+    [['table', 'a', '--score', 's', '--interval', 'wald'], '--interval knows wilson, clopper-pearson, jeffreys'],
+    [['table', 'a', '--score', 's', '--level', '49'], '--level 49: The level of an interval lies between 50'],
+    [['table', 'a', '--score', 's', '--level', 'high'], '--level high: The level'],
+    [['table', 'a', '--score', 's', '--reliability', '1.1'], '--reliability 1.1: A reliability is a number from 0'],
+    [['table', 'a', '--score', 's', '--bootstrap', '38'], 'needs from 39 to 20000 replicates'],
+    [['table', 'a', '--score', 's', '--bootstrap', '99.5'], 'needs from 39 to 20000 replicates'],
+    [['table', 'a', '--score', 's', '--bootstrap', '1000', '--level', '99.9'], 'needs from 1999'],
+    [['table', 'a', '--score', 's', '--bootstrap', '99', '--seed', '-1'], '--seed -1: A seed is a whole number'],
+    [['table', 'a', '--score', 's', '--seed', '3'], '--seed needs --bootstrap R'],
+    [['table', 'a', '--score', 's', '--bootstrap', '99', '--format', 'csv'], 'csv has no place for a bootstrap'],
+    [['table', 'a', '--score', 's', '--bootstrap', '99', '--definition', 'grouped:5'], 'a rank that counts people'],
+    [['table', 'a', '--score', 's', '--columns', 'measurement-band'], 'needs --reliability R'],
+    [['differ', 'a', '--score', 's'], '--ranks RANKFILE'],
+    [['differ', '--score', 's', '--ranks', 'r'], 'differ takes one file, not 0'],
+    [['differ', 'a', '--ranks', 'r'], '--score COL'],
+    [['differ', 'a', '--score', 's', '--ranks', 'r', '--by', 'g'], '--by needs --group VALUE'],
+    [['differ', 'a', '--score', 's', '--ranks', 'r', '--group', '5'], '--group needs --by COL'],
+    [['differ', 'a', '--score', 's', '--ranks', 'r', '--by', 'g,h', '--group', '5'], 'each column of --by: 2, not 1'],
+    [['differ', 'a', '--score', 's', '--ranks', 'r', '--format', 'csv'], '--format knows text, json'],
+    [['differ', 'a', '--score', 's', '--ranks', 'r', '--columns', 't'], "Unknown option '--columns'."],
     [['press', 'p.normloom'], '--into FOLDER'],
     [['press', 'p.normloom', '--into', ''], '--into FOLDER'],
     [['press', '--into', 'f'], 'press takes one project, not 0'],

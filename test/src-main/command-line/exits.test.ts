@@ -21,16 +21,26 @@ describe('what the command line leaves behind', () => {
       '--missing',
       '--definition',
       '--points',
+      '--smooth',
+      '--interval',
+      '--level',
+      '--reliability',
+      '--bootstrap',
+      '--seed',
+      '--ranks',
+      '--group',
     ]) {
       expect(help.stdout).toContain(`  ${option} `);
     }
+    expect(help.stdout.split('\n').filter((line) => line.length > 110)).toEqual([]);
     const { version } = JSON.parse(readFileSync(new URL('../../../package.json', import.meta.url), 'utf8'));
     expect(normloom(['--version'])).toEqual({ exit: 0, stdout: `${version}\n`, stderr: '' });
   });
 
   it.each<[string, readonly string[], string]>([
     ['no command', [], 'Tell what to do'],
-    ['an unknown option', [...JSON_WORDS, '--smooth'], "Unknown option '--smooth'."],
+    ['an unknown option', [...JSON_WORDS, '--smoothe'], "Unknown option '--smoothe'."],
+    ['an unknown smoothing', [...JSON_WORDS, '--smooth', 'loess'], '--smooth is none, log-linear:C'],
     ['a proportion above 1', [...JSON_WORDS, '--points', '50'], 'proportions from 0 to 1'],
     [
       'a column that is not there',

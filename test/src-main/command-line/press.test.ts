@@ -67,13 +67,25 @@ describe('press', () => {
     ['half a project', readFileSync(SAMPLE_PROJECT, 'utf8').slice(0, 4000), 'it is not complete JSON'],
     [
       'a newer project',
-      readFileSync(SAMPLE_PROJECT, 'utf8').replace('"version": 1', '"version": 9'),
+      readFileSync(SAMPLE_PROJECT, 'utf8').replace(/"version": \d+/, '"version": 9'),
       'saved by a newer Normloom',
     ],
     [
       'an unusable definition',
-      projectToText({ ...projectOf([1, 2]), curve: { ...newProject('').curve, definition: { kind: 'grouped', width: 0.3 } } }),
+      projectToText({
+        ...projectOf([1, 2]),
+        curve: { ...newProject('').curve, definition: { kind: 'grouped', width: 0.3 } },
+      }),
       'must be a multiple',
+    ],
+    [
+      'a smoothing that the data cannot carry',
+      projectToText({
+        ...projectOf([1, 0, 0, 2]),
+        curve: { ...newProject('').curve, smoothing: { kind: 'beta-binomial' } },
+        precision: newProject('').precision,
+      }),
+      'cannot be smoothed as chosen',
     ],
   ])('refuses %s', (_, text, problem) => {
     const folder = join(folderForTest(), 'out');

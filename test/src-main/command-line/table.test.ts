@@ -9,14 +9,7 @@ import {
   rowsOf,
 } from '../../reference/read-reference.ts';
 import { fileForTest, normloom, referenceCohort, SAMPLE_COHORT } from './run-normloom.ts';
-import { readTables, type TablesFile } from './tables-file.ts';
-
-/** Runs `table … --format json` and reads what it printed. */
-function tables(...words: readonly string[]): TablesFile {
-  const ran = normloom(['table', ...words, '--format', 'json']);
-  expect([ran.exit, ran.stderr.match(/normloom:.*/)?.[0]]).toEqual([0, undefined]);
-  return readTables(ran.stdout);
-}
+import { readTables, tables } from './tables-file.ts';
 
 const ALL_SCORES = ['--score', 'raw_score', '--scale', '0:40', '--missing', '99,abs', '--id', 'pupil_id'];
 
@@ -137,6 +130,7 @@ describe('table as json', () => {
         ['group', 'n', 'weight-sum', 'effective-n', 'mean', 'sd', 'skewness', 'excess-kurtosis'].concat([
           'five-number',
           'points',
+          'smoothing',
           'rows',
         ]),
       );
@@ -151,10 +145,20 @@ describe('table as json', () => {
           'percentile-rank',
           'printed',
           'derived',
+          'interval',
+          'standard-error',
+          'smoothed',
+          'alternatives',
+          'band',
           'provenance',
         ]);
         const derived = ['deviation', 'nce', 'stanine', 'sten', 't', 'z'];
         expect(Object.keys(row.derived).toSorted()).toEqual(derived);
+        expect([Object.keys(row.interval), Object.keys(row.alternatives)]).toEqual([
+          ['low', 'high'],
+          ['low', 'high'],
+        ]);
+        expect([row.smoothed, row.band]).toEqual([null, null]);
       }
     }
   });
@@ -262,10 +266,11 @@ describe('table as text and csv', () => {
     const ran = normloom(['table', referenceCohort('c1_tiny_cohort.csv'), '--score', 'score', '--scale', '0:20']);
     const lines = ran.stdout.split('\n');
     expect([ran.exit, ran.stderr]).toEqual([0, '']);
-    expect(lines.slice(0, 13)).toEqual([
+    expect(lines.slice(0, 14)).toEqual([
       'Everybody',
       'The share of the sample scoring below, plus half of those at the same score.',
       '37 people. Mean 10.1, SD 3.0. Lowest score 4, lower hinge 8, median 11, upper hinge 12, highest score 16.',
+      'The distribution is not smoothed.',
       '',
       '  Raw  Percentile  Sta-',
       'score        rank  nine   T',
