@@ -7,15 +7,34 @@ import type { Booklet, BookletPage, TableColumnBlock, TextLine } from '../../../
 import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
 import { tableMarks } from '../../../shared-core/pages/table-blocks.ts';
 import { textWidth } from '../../../shared-core/pages/text-width.ts';
-import { sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
+import { printNumber } from '../../../shared-core/scores/printed-number.ts';
+import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
 
 type Sheet = Partial<NormProject['sheet']>;
 
-function normSetWith(cohort: SampleCohort, sheet: Sheet, columns?: NormProject['table']['columns']): NormSet {
+interface Choices {
+  readonly columns?: NormProject['table']['columns'];
+  readonly decimals?: 0 | 1;
+  readonly smoothing?: NormProject['curve']['smoothing'];
+  readonly exceptions?: NormProject['curve']['exceptions'];
+  readonly reliability?: number | null;
+}
+
+function normSetWith(cohort: SampleCohort, sheet: Sheet, choices: Choices = {}): NormSet {
   return sampleNormSet(cohort, (project) => ({
     ...project,
     sheet: { ...project.sheet, ...sheet },
-    table: { ...project.table, columns: columns ?? project.table.columns },
+    curve: {
+      ...project.curve,
+      smoothing: choices.smoothing ?? project.curve.smoothing,
+      exceptions: choices.exceptions ?? [],
+    },
+    precision: { ...project.precision, reliability: choices.reliability ?? null },
+    table: {
+      ...project.table,
+      columns: choices.columns ?? project.table.columns,
+      decimals: choices.decimals ?? project.table.decimals,
+    },
   }));
 }
 
@@ -38,11 +57,12 @@ const widthOf = ({ runs, size }: TextLine): number =>
 /** What must hold for every booklet. */
 function check(normSet: NormSet, booklet: Booklet): void {
   const { width, height, margin } = booklet.paper;
+  const { columns } = normSet.project.table;
   const printed = booklet.pages.flatMap((page) =>
-    tablesOn(page).flatMap(({ rows }) => rows.map(({ score, texts }) => [page.group, score, texts[0], texts[1]])),
+    tablesOn(page).flatMap(({ rows }) => rows.map(({ score, texts }) => [page.group, score, ...texts])),
   );
   const expected = normSet.groups.flatMap(({ rows }, group) =>
-    rows.map((row) => [group, row.score, row.scoreText, row.printed]),
+    rows.map((row) => [group, row.score, row.scoreText, row.printed, ...columns.map((key) => row.texts[key])]),
   );
   expect(printed).toEqual(expected);
   for (const [index, page] of booklet.pages.entries()) {
@@ -57,6 +77,7 @@ function check(normSet: NormSet, booklet: Booklet): void {
       for (const row of table.rows) expect(row.baseline).toBeLessThan(table.bottom);
       expect(table.x + table.width).toBeLessThanOrEqual(width - margin + 0.01);
       expect(table.heads.at(-1)?.right).toBeCloseTo(table.width, 6);
+      checkCells(table);
     }
     for (const line of linesOn(page)) {
       expect(widthOf(line)).toBeLessThanOrEqual(line.width + 1e-6);
@@ -69,7 +90,18 @@ function check(normSet: NormSet, booklet: Booklet): void {
     for (const block of page.blocks) {
       if (block.kind === 'picture') expect(block.y + block.height).toBeLessThanOrEqual(body.bottom);
       if (block.kind === 'table-column') expect(block.bottom).toBeLessThanOrEqual(body.bottom);
+      if (block.kind === 'rule') expect(block.y).toBeLessThanOrEqual(body.bottom);
     }
+  }
+}
+
+/** Every text stands between the end of the column before it and the end of its own. */
+function checkCells(table: TableColumnBlock): void {
+  for (const mark of tableMarks(table)) {
+    if (mark.kind !== 'text') continue;
+    const end = mark.x + mark.width - table.x;
+    const at = table.heads.findIndex((head) => end <= head.right + 1e-6);
+    expect(end - widthOf(mark)).toBeGreaterThanOrEqual((table.heads[at - 1]?.right ?? 0) - 1e-6);
   }
 }
 
@@ -140,22 +172,121 @@ describe('composeBooklet', () => {
           direction: fc.constantFrom('high-is-good', 'low-is-good'),
           weighted: fc.boolean(),
         }),
-        fc.subarray([...COLUMN_KEYS]),
-        (sheet, { scores, min, step, direction, weighted }, columns) => {
+        fc.record({
+          columns: fc.subarray([...COLUMN_KEYS]),
+          decimals: fc.constantFrom(0, 1),
+          smoothing: fc.constantFrom({ kind: 'none' } as const, LOG_LINEAR, KERNEL, { ...KERNEL, after: LOG_LINEAR }),
+          reliability: fc.constantFrom(null, 0.9),
+        }),
+        (sheet, { scores, min, step, direction, weighted }, choices) => {
           const scale = { min, max: min + (scores - 1) * step, step };
-          const normSet = normSetWith({ scale, direction, weighted }, sheet, columns);
+          const normSet = normSetWith({ scale, direction, weighted }, sheet, choices);
           check(normSet, composeBooklet(normSet));
         },
       ),
-      { numRuns: 60, seed: 20260601 },
+      { numRuns: 40, seed: 20260601 },
     );
-  });
+  }, 60_000);
 
   it('says so when the figures are too wide for the columns asked for', () => {
-    const normSet = normSetWith({ scale: WHOLE_SCALE }, { paper: 'a5' }, COLUMN_KEYS);
+    const normSet = normSetWith(
+      { scale: WHOLE_SCALE },
+      { paper: 'a5' },
+      { columns: COLUMN_KEYS, smoothing: LOG_LINEAR },
+    );
     const booklet = composeBooklet(normSet);
     check(normSet, booklet);
     expect(booklet.remarks.some((remark) => remark.includes('in one column'))).toBe(true);
+  });
+
+  it('aligns ranges on their dashes, single texts where low ends stand', () => {
+    const normSet = normSetWith({ scale: WHOLE_SCALE, groups: ['4'] }, {}, { columns: ['interval', 't'] });
+    const dashes = new Set<string>();
+    for (const table of composeBooklet(normSet).pages.flatMap(tablesOn)) {
+      const head = table.heads[2];
+      const cells = tableMarks(table)
+        .filter((mark) => mark.kind === 'text')
+        .filter(
+          (mark) =>
+            /^[<>\d.]+(–[<>\d.]+)?$/.test(textOf(mark)) && mark.x === table.x + (head?.right ?? 0) - (head?.width ?? 0),
+        );
+      expect(cells).toHaveLength(table.rows.length);
+      for (const cell of cells) {
+        const [low = '', high = null] = textOf(cell).split('–');
+        const start = cell.x + cell.width - widthOf(cell) - table.x;
+        dashes.add((start + textWidth(low, 'sans', cell.size)).toFixed(6));
+        expect(high === null || high !== '').toBe(true);
+      }
+    }
+    expect(dashes.size).toBe(1);
+  });
+
+  it('tells of sampling and measurement as different things where a column of errors is printed', () => {
+    const textsWith = (columns: NormProject['table']['columns'], reliability: number | null = null): string =>
+      composeBooklet(normSetWith({ scale: WHOLE_SCALE, groups: ['4'] }, {}, { columns, reliability }))
+        .pages.flatMap(linesOn)
+        .map(textOf)
+        .join(' ');
+    expect(textsWith(['t'])).not.toMatch(/different thing|error of measurement/i);
+    expect(textsWith(['interval'])).toContain('Error of measurement in one pupil’s score is a different thing');
+    expect(textsWith(['interval'])).toContain('The interval is that of the observed rank, as if pupils were drawn');
+    expect(textsWith(['measurement-band'], 0.9)).toContain('leaves out error of sampling, which is a different thing');
+    expect(textsWith(['interval', 'measurement-band'], 0.9)).toContain('They are different things');
+  });
+
+  it('prints the technical notes of each smoothed group, and of no other', () => {
+    const normSet = normSetWith(
+      { scale: WHOLE_SCALE, groups: ['4', '5', '6'] },
+      {},
+      {
+        columns: ['interval', 'stanine', 't'],
+        smoothing: LOG_LINEAR,
+        exceptions: [
+          { values: ['5'], smoothing: { kind: 'none' } },
+          { values: ['6'], smoothing: KERNEL },
+        ],
+      },
+    );
+    const booklet = composeBooklet(normSet);
+    check(normSet, booklet);
+    expect(booklet.pages).toHaveLength(3);
+    const [four = '', five = '', six = ''] = booklet.pages.map((page) => linesOn(page).map(textOf).join(' '));
+    const TITLE = 'Technical notes on the smoothing';
+    expect([four, five, six].map((texts) => texts.includes(TITLE))).toEqual([true, false, true]);
+    expect(four).toContain('Log- linear smoothing of degree 2');
+    expect(four).toContain('definition: midpoint, smoothed');
+    expect(five).toContain('The distribution of this group is not smoothed.');
+    expect(five).not.toContain('smoothed ·');
+    expect(six).toContain('The bandwidth of the kernel is');
+    expect([four, six].map((texts) => texts.includes('Degree G² X² df AIC BIC p'))).toEqual([true, false]);
+    const { evidence } = normSet.groups[0] ?? {};
+    expect(four).toContain(`Smoothing changes ${evidence?.changed} of 41 printed ranks.`);
+  });
+
+  it('marks the degree taken by a rule under it', () => {
+    const normSet = normSetWith({ scale: WHOLE_SCALE, groups: ['4'] }, {}, { smoothing: { ...LOG_LINEAR, degree: 4 } });
+    const page = composeBooklet(normSet).pages.at(-1);
+    if (page === undefined) throw new Error('no page');
+    const head = page.blocks.findIndex((block) => block.kind === 'text' && textOf(block) === 'Degree');
+    const after = page.blocks.slice(head);
+    const numbers = after.filter(
+      (block): block is TextLine =>
+        block.kind === 'text' && /^\d+$/.test(textOf(block)) && block.x === page.blocks[head]?.x,
+    );
+    expect(numbers.map(textOf)).toEqual(['1', '2', '3', '4', '5', '6', '7', '8', '9', '10']);
+    const [taken, next] = [numbers[3], numbers[4]];
+    const between = after.filter(
+      (block) =>
+        block.kind === 'rule' &&
+        block.x === taken?.x &&
+        block.y > (taken?.baseline ?? 0) &&
+        block.y < (next?.baseline ?? 0),
+    );
+    expect(between).toHaveLength(1);
+    expect(taken?.runs[0]?.face).toBe('sans-bold');
+    const { smoothing } = normSet.groups[0] ?? {};
+    if (smoothing?.state !== 'smoothed') throw new Error('not smoothed');
+    expect(linesOn(page).map(textOf)).toContain(printNumber(smoothing.curve.bic ?? NaN, 1));
   });
 
   it('sets long titles in other alphabets, and says which signs are missing', () => {

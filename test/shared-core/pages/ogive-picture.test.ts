@@ -1,19 +1,31 @@
 import { describe, expect, it } from 'vitest';
 import { ogivePicture } from '../../../shared-core/pages/ogive-picture.ts';
-import { sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
+import { textWidth } from '../../../shared-core/pages/text-width.ts';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
+import { LOG_LINEAR, sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
 
 const size = { width: 240, height: 112 };
 
-function picture(cohort: SampleCohort): string {
-  const norms = sampleNormSet({ groups: ['4'], ...cohort }).groups[0];
+function picture(cohort: SampleCohort, curve: Partial<NormProject['curve']> = {}, within = size): string {
+  const set = sampleNormSet({ groups: ['4'], ...cohort }, (project) => ({
+    ...project,
+    curve: { ...project.curve, ...curve },
+  }));
+  const norms = set.groups[0];
   if (norms === undefined) throw new Error('no group');
-  return ogivePicture(norms, size);
+  return ogivePicture(norms, 95, within);
+}
+
+const BAND = /<path d="([^"]+)" fill="#d3e4e5"/;
+
+function corners(d: string): readonly (readonly [number, number])[] {
+  return [...d.matchAll(/[ML]([\d.-]+) ([\d.-]+)/g)].map((match) => [Number(match[1]), Number(match[2])] as const);
 }
 
 /** Corners of the step line: the thin path in ink. */
 function steps(svg: string): readonly (readonly [number, number])[] {
   const d = /<path d="([^"]+)" fill="none" stroke="#1e2326"/.exec(svg)?.[1] ?? '';
-  return [...d.matchAll(/[ML]([\d.-]+) ([\d.-]+)/g)].map((match) => [Number(match[1]), Number(match[2])] as const);
+  return corners(d);
 }
 
 describe('ogivePicture', () => {
@@ -55,6 +67,55 @@ describe('ogivePicture', () => {
       const ticks = [...svg.matchAll(/text-anchor="middle"/g)].length;
       expect(ticks).toBeGreaterThanOrEqual(2);
       expect(ticks).toBeLessThanOrEqual(10);
+    }
+  });
+
+  it('shows the interval as a band round the observed ranks, where the definition has one', () => {
+    const svg = picture({ scale: WHOLE_SCALE });
+    const band = corners(BAND.exec(svg)?.[1] ?? '');
+    const ranks = corners(/<path d="([^"]+)" fill="none" stroke="#0d5a66"/.exec(svg)?.[1] ?? '');
+    expect(band).toHaveLength(2 * 41);
+    ranks.forEach(([x, y], index) => {
+      const [high, low] = [band[index], band.at(-1 - index)];
+      expect([high?.[0], low?.[0]]).toEqual([x, x]);
+      expect(high?.[1]).toBeLessThanOrEqual(y);
+      expect(low?.[1]).toBeGreaterThanOrEqual(y);
+    });
+    expect(svg).toContain('95 % interval');
+    const grouped = picture({ scale: { min: 0, max: 39, step: 1 } }, { definition: { kind: 'grouped', width: 5 } });
+    expect(grouped).not.toMatch(BAND);
+    expect(grouped).not.toContain('interval');
+  });
+
+  it('says which curve is smoothed, and draws it without dots', () => {
+    const plain = picture({ scale: WHOLE_SCALE });
+    const smoothed = picture({ scale: WHOLE_SCALE }, { smoothing: LOG_LINEAR });
+    expect([plain.includes('>percentile rank<'), plain.includes('>smoothed<')]).toEqual([true, false]);
+    expect([smoothed.includes('>percentile rank<'), smoothed.includes('>smoothed<')]).toEqual([false, true]);
+    expect(plain.match(/<circle/g)).toHaveLength(42);
+    expect(smoothed).not.toContain('<circle');
+    expect(steps(smoothed)).toEqual(steps(plain));
+  });
+
+  it('keeps its labels clear of curve, steps and band', () => {
+    for (const within of [size, { width: 164, height: 77 }]) {
+      for (const direction of ['high-is-good', 'low-is-good'] as const) {
+        for (const smoothing of [{ kind: 'none' } as const, LOG_LINEAR]) {
+          const svg = picture({ scale: WHOLE_SCALE, direction }, { smoothing }, within);
+          const [band = '', ...lines] = [BAND.exec(svg)?.[1] ?? '', steps(svg)];
+          const texts = [...svg.matchAll(/<text x="([\d.]+)" y="([\d.]+)" text-anchor="start"[^>]*>([^<]+)</g)].filter(
+            ([, , , text]) => text !== 'Per cent',
+          );
+          expect(texts).toHaveLength(3);
+          for (const [, left, baseline, text = ''] of texts) {
+            const [x, y] = [Number(left), Number(baseline)];
+            const end = x + textWidth(text, 'sans', 6.6);
+            expect(end).toBeLessThanOrEqual(within.width);
+            const drawn = [...corners(band), ...lines.flat()].filter(([at]) => at >= x - 13 && at <= end);
+            for (const [, height] of drawn) expect(height < y - 5 || height > y).toBe(true);
+          }
+        }
+      }
     }
   });
 });

@@ -48,3 +48,6 @@ export function sampleNormSet(cohort: SampleCohort, change?: (project: NormProje
 }
 
 export const WHOLE_SCALE = { min: 0, max: 40, step: 1 } as const;
+
+export const LOG_LINEAR = { kind: 'log-linear', degree: 'bic', keptScores: [], comb: null } as const;
+export const KERNEL = { kind: 'kernel', bandwidth: 'auto', after: null } as const;

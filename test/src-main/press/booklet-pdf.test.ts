@@ -1,8 +1,21 @@
 import { afterEach, describe, expect, it } from 'vitest';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
+import { printNumber } from '../../../shared-core/scores/printed-number.ts';
 import { bookletPdf } from '../../../src-main/press/booklet-pdf.ts';
-import { sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 import { readPdf, type PlacedText } from './pdf-text.ts';
+
+/** Smoothed in two ways, with every kind of error printed. */
+const withErrors = (project: NormProject): NormProject => ({
+  ...project,
+  curve: { ...project.curve, smoothing: LOG_LINEAR, exceptions: [{ values: ['5'], smoothing: KERNEL }] },
+  precision: { ...project.precision, reliability: 0.9 },
+  table: {
+    ...project.table,
+    columns: ['observed-rank', 'interval', 'standard-error', 'measurement-band', 'print-range', 't'],
+  },
+});
 
 const zone = process.env['TZ'];
 
@@ -21,7 +34,7 @@ function lineAt(page: readonly PlacedText[], y: number, from: number, to: number
 
 describe('bookletPdf', () => {
   it('holds the printed row of each group and raw score exactly once, where it was placed', async () => {
-    const normSet = sampleNormSet({ scale: { min: -10, max: 110, step: 1 }, groups: ['4', '5', '6'] });
+    const normSet = sampleNormSet({ scale: { min: -10, max: 110, step: 1 }, groups: ['4', '5', '6'] }, withErrors);
     const booklet = composeBooklet(normSet);
     const read = await readPdf((await bookletPdf(normSet)).pdf);
     expect(read.pages.length).toBe(booklet.pages.length);
@@ -46,6 +59,22 @@ describe('bookletPdf', () => {
     expect(read.language).toBe('en');
   });
 
+  it('prints the fit of each smoothed group, as it was worked out', async () => {
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5'] }, withErrors);
+    const read = await readPdf((await bookletPdf(normSet)).pdf);
+    const texts = read.pages.flat().map(({ text }) => text);
+    const { smoothing } = normSet.groups[0] ?? {};
+    if (smoothing?.state !== 'smoothed') throw new Error('not smoothed');
+    for (const { g2, x2, aic, bic } of smoothing.curve.degrees) {
+      for (const figure of [g2, x2, aic, bic]) expect(texts).toContain(printNumber(figure, 1));
+    }
+    for (const moments of [smoothing.curve.momentsObserved, smoothing.curve.momentsFitted]) {
+      for (const moment of Object.values(moments)) expect(texts).toContain(printNumber(moment, 3));
+    }
+    expect(texts.filter((text) => text === 'Technical notes on the smoothing')).toHaveLength(2);
+    expect(texts.filter((text) => text === '95 % interval')).toHaveLength(2);
+  });
+
   it('prints no figure that stands in no table', async () => {
     const normSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] }, (project) => ({
       ...project,
@@ -58,7 +87,7 @@ describe('bookletPdf', () => {
   });
 
   it('is the same in every time zone and run, whatever was drawn before', async () => {
-    const normSet = sampleNormSet({ scale: WHOLE_SCALE, weighted: true });
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE, weighted: true }, withErrors);
     const first = await bookletPdf(normSet);
     process.env['TZ'] = 'Pacific/Auckland';
     await bookletPdf(sampleNormSet({ scale: { min: 0, max: 9, step: 1 } }));

@@ -5,11 +5,13 @@ import { join } from 'node:path';
 import Papa from 'papaparse';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
+import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { normSetJson } from '../../../src-main/press/norm-set-json.ts';
 import { drawPages, pressFiles, pressInto } from '../../../src-main/press/press-files.ts';
 import { safeForCsv } from '../../../src-main/press/safe-text.ts';
 import { tablesCsv } from '../../../src-main/press/tables-csv.ts';
-import { sampleNormSet, sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+import { LOG_LINEAR, sampleNormSet, sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 
 let folder: string;
 
@@ -55,6 +57,37 @@ describe('tablesCsv', () => {
     expect(new Set(data.map((row) => row['check']))).toEqual(new Set([normSet.check]));
   });
 
+  it('has observed and smoothed ranks, intervals and standard errors, empty where there are none', () => {
+    const read = (set: NormSet): readonly Record<string, string>[] => {
+      const csv = new TextDecoder().decode(tablesCsv(set));
+      return Papa.parse<Record<string, string>>(csv, { header: true, skipEmptyLines: true }).data;
+    };
+    const cell = (value: number | null | undefined): string =>
+      value === null || value === undefined ? '' : String(value);
+    const smoothing: NormProject['curve'] = {
+      definition: { kind: 'grouped', width: 5 },
+      smoothing: LOG_LINEAR,
+      exceptions: [{ values: ['5'], smoothing: { kind: 'none' } }],
+    };
+    const usual = { ...smoothing, definition: { kind: 'midpoint' } } as const;
+    for (const curve of [smoothing, usual]) {
+      const set = sampleNormSet({ scale: { min: 1, max: 40, step: 1 } }, (project) => ({ ...project, curve }));
+      const rows = set.groups.flatMap((group) => group.rows);
+      const data = read(set);
+      expect(data).toHaveLength(80);
+      data.forEach((record, index) => {
+        const row = rows[index];
+        expect(record['percentile-rank']).toBe(cell(row?.percentileRank));
+        expect(record['observed-percentile-rank']).toBe(cell(row?.observed.percentileRank));
+        expect(record['smoothed-percentile-rank']).toBe(index < 40 ? cell(row?.percentileRank) : '');
+        expect(record['interval-low']).toBe(cell(row?.interval?.low));
+        expect(record['interval-high']).toBe(cell(row?.interval?.high));
+        expect(record['standard-error']).toBe(cell(row?.standardError));
+      });
+      expect(data.every((record) => (record['interval-low'] === '') === (curve === smoothing))).toBe(true);
+    }
+  });
+
   it('starts no formula with a text of the user, and leaves negative numbers alone', () => {
     expect(['=1', '+1x', '-x', '@a', '\ta', '-1.5', 'a=1'].map(safeForCsv)).toEqual([
       "'=1",
@@ -98,6 +131,22 @@ describe('pressFiles', () => {
     const refused = await pressInto(project, join(folder, 'taken'));
     expect(refused).toMatchObject({ ok: false });
     expect(refused.ok ? '' : refused.problem).toMatch(/^The pressed files could not be written: /);
+  });
+
+  it('refuses a group that cannot be smoothed as chosen, on paper and on screen', async () => {
+    const refused = sampleProject({ scale: { min: 0, max: 4, step: 1 } }, (sample) => ({
+      ...sample,
+      curve: {
+        ...sample.curve,
+        exceptions: [{ values: ['5'], smoothing: { ...LOG_LINEAR, degree: 9 } }],
+      },
+    }));
+    const into = join(folder, 'refused');
+    const replies = [await pressFiles(refused), await pressInto(refused, into), await drawPages(refused)];
+    for (const reply of replies) {
+      expect(reply.ok ? '' : reply.problem).toMatch(/^Grade 5 cannot be smoothed as chosen\. Degree 9 asks for more/);
+    }
+    expect(await readdir(folder)).not.toContain('refused');
   });
 
   it('writes the norm set with its format, edition and check', () => {

@@ -1,10 +1,12 @@
+import { execFileSync } from 'node:child_process';
 import { mkdtemp, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { build } from 'vite';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { startPressJob } from '../../../src-main/press/press-job.ts';
-import { sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+import { LOG_LINEAR, sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 
 const root = fileURLToPath(new URL('../../../', import.meta.url));
 const project = sampleProject({ scale: WHOLE_SCALE });
@@ -49,6 +51,36 @@ describe('startPressJob', () => {
     expect(reply.value.pressed.folder).toBe(into);
     expect(reply.value.pressed.files).toHaveLength(4);
   });
+
+  it('presses the same bytes in every language and time zone', () => {
+    const smoothed: NormProject = {
+      ...project,
+      curve: { ...project.curve, smoothing: LOG_LINEAR },
+      table: { ...project.table, columns: ['interval', 'standard-error', 'print-range'] },
+    };
+    const code = `
+      import { Worker } from 'node:worker_threads';
+      const request = JSON.parse(process.env.REQUEST);
+      new Worker(new URL(process.env.WORKER), { workerData: request, execArgv: [] }).on('message', (report) => {
+        if (report.kind === 'result') console.log(JSON.stringify(report.reply.value.pressed.files));
+      });`;
+    const [english, turkish] = [
+      { LANG: 'en_US.UTF-8', LC_ALL: 'en_US.UTF-8', TZ: 'America/Los_Angeles' },
+      { LANG: 'tr_TR.UTF-8', LC_ALL: 'tr_TR.UTF-8', TZ: 'Pacific/Auckland' },
+    ].map((place, index) =>
+      execFileSync(process.execPath, ['--input-type=module', '-e', code], {
+        encoding: 'utf8',
+        env: {
+          ...process.env,
+          ...place,
+          WORKER: worker.href,
+          REQUEST: JSON.stringify({ kind: 'press', project: smoothed, folder: join(folder, `place-${index}`) }),
+        },
+      }),
+    );
+    expect(english).toContain('booklet.pdf');
+    expect(turkish).toBe(english);
+  }, 30_000);
 
   it('ends the thread when it is cancelled', async () => {
     const cancel = new AbortController();

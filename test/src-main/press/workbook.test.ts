@@ -7,11 +7,11 @@ import ExcelJS from 'exceljs';
 import Papa from 'papaparse';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
-import { printCount } from '../../../shared-core/scores/printed-number.ts';
+import { printCount, printNumber } from '../../../shared-core/scores/printed-number.ts';
 import { FIRST_RESULT_ROW, GROUP_CELL, LOOK_UP, SCORE_CELL } from '../../../src-main/press/look-up-sheet.ts';
 import { typedCell } from '../../../src-main/press/typed-cell.ts';
 import { tablesWorkbook } from '../../../src-main/press/workbook.ts';
-import { sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 
 const normSet = sampleNormSet({ scale: { min: -2, max: 20, step: 0.5 }, groups: ['4', '5'] }, (project) => ({
   ...project,
@@ -21,6 +21,20 @@ const normSet = sampleNormSet({ scale: { min: -2, max: 20, step: 0.5 }, groups: 
     ...project.groups,
     choices: [{ values: ['5'], title: '=A1* & "co"?', printed: true }],
   },
+}));
+
+const smoothedSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5', '6'] }, (project) => ({
+  ...project,
+  curve: {
+    ...project.curve,
+    smoothing: LOG_LINEAR,
+    exceptions: [
+      { values: ['5'], smoothing: { kind: 'none' } },
+      { values: ['6'], smoothing: KERNEL },
+    ],
+  },
+  precision: { ...project.precision, reliability: 0.9 },
+  table: { ...project.table, columns: ['interval', 'standard-error', 'measurement-band'] },
 }));
 
 async function open(bytes: Uint8Array): Promise<ExcelJS.Workbook> {
@@ -33,10 +47,12 @@ async function open(bytes: Uint8Array): Promise<ExcelJS.Workbook> {
 
 const OFFICE = 'soffice';
 let bytes: Uint8Array;
+let smoothedBytes: Uint8Array;
 let folder: string;
 
 beforeAll(async () => {
   bytes = await tablesWorkbook(normSet);
+  smoothedBytes = await tablesWorkbook(smoothedSet);
   folder = await mkdtemp(join(tmpdir(), 'normloom-workbook-'));
 });
 
@@ -100,6 +116,7 @@ describe('tablesWorkbook', () => {
   it('is the same each time', async () => {
     await new Promise((resolve) => setTimeout(resolve, 2100));
     expect(Buffer.from(await tablesWorkbook(normSet)).equals(Buffer.from(bytes))).toBe(true);
+    expect(Buffer.from(await tablesWorkbook(smoothedSet)).equals(Buffer.from(smoothedBytes))).toBe(true);
   });
 
   it('shows the right row for the example before anything is computed', async () => {
@@ -109,18 +126,21 @@ describe('tablesWorkbook', () => {
     expect(sheet?.getCell(FIRST_RESULT_ROW, 2).result).toBe(row?.printed);
   });
 
-  it('looks up every kind of score in LibreOffice', async () => {
+  it('looks up every kind of score in LibreOffice, smoothed or not', async () => {
     const cases = [
-      ['Grade 4', -2],
-      ['Grade 4', 7.5],
-      ['=A1* & "co"?', 20],
-      ['=A1* & "co"?', 11],
-      ['Grade 4', 7.3],
-      ['Grade 9', 7],
+      [normSet, 'Grade 4', -2],
+      [normSet, 'Grade 4', 7.5],
+      [normSet, '=A1* & "co"?', 20],
+      [normSet, '=A1* & "co"?', 11],
+      [normSet, 'Grade 4', 7.3],
+      [normSet, 'Grade 9', 7],
+      [smoothedSet, 'Grade 4', 16],
+      [smoothedSet, 'Grade 5', 16],
+      [smoothedSet, 'Grade 6', 40],
     ] as const;
     const files = await Promise.all(
-      cases.map(async ([group, score], index) => {
-        const workbook = await open(bytes);
+      cases.map(async ([set, group, score], index) => {
+        const workbook = await open(set === normSet ? bytes : smoothedBytes);
         const sheet = workbook.getWorksheet(LOOK_UP);
         if (sheet === undefined) throw new Error('no look-up sheet');
         sheet.getCell(GROUP_CELL).value = group;
@@ -141,14 +161,86 @@ describe('tablesWorkbook', () => {
       'Not in the table. Choose a group from the list and type a raw score from -2 to 20 in steps of 0.5.';
     expect(results).toEqual(
       cases.map(
-        ([group, score]) =>
-          expected(normSet, group, score) ?? [sentence, '', '', '', group === 'Grade 9' ? '' : people(group)],
+        ([set, group, score]) =>
+          expected(set, group, score) ?? [sentence, '', '', '', group === 'Grade 9' ? '' : people(set, group)],
       ),
     );
     expect(results[0]?.[0]).toBe('<1');
     expect(results[2]?.[0]).toBe('>99');
   }, 120_000);
 });
+
+describe('a workbook with smoothing', () => {
+  it('keeps printed ranges as texts and the unrounded numbers beyond them', async () => {
+    const workbook = await open(smoothedBytes);
+    smoothedSet.groups.forEach((norms, index) => {
+      const sheet = workbook.worksheets[index + 1];
+      if (sheet === undefined) throw new Error('no sheet');
+      const first = norms.rows[0];
+      const headRow = rowOfHeads(sheet);
+      const heads = valuesIn(sheet, headRow);
+      const smoothed = norms.smoothing.state === 'smoothed';
+      expect(heads).toEqual([
+        'Raw score',
+        'Percentile rank',
+        '95 % interval',
+        'Standard error',
+        'Measurement band',
+        ...(smoothed ? ['Smoothed rank, unrounded', 'Observed rank, unrounded'] : ['Rank, unrounded']),
+        'Interval, low, unrounded',
+        'Interval, high, unrounded',
+        'Standard error, unrounded',
+        'Band, low, unrounded',
+        'Band, high, unrounded',
+      ]);
+      norms.rows.forEach((row, place) => {
+        expect(valuesIn(sheet, headRow + 1 + place)).toEqual([
+          row.score,
+          typedCell(row.printed).value,
+          typedCell(row.texts.interval).value,
+          typedCell(row.texts['standard-error']).value,
+          typedCell(row.texts['measurement-band']).value,
+          row.percentileRank,
+          ...(smoothed ? [row.observed.percentileRank] : []),
+          row.interval?.low,
+          row.interval?.high,
+          row.standardError ?? undefined,
+          row.band?.low,
+          row.band?.high,
+        ]);
+      });
+      expect(first?.texts.interval).toMatch(/^<1(–\d+)?$/);
+    });
+  });
+
+  it('says of each group how it is smoothed and how well that fits', async () => {
+    const about = (await open(smoothedBytes)).getWorksheet('About');
+    const lines = new Map<unknown, unknown>();
+    about?.eachRow((row) => lines.set(row.getCell(1).value, row.getCell(2).value));
+    const [four, , six] = smoothedSet.groups;
+    if (four?.smoothing.state !== 'smoothed' || six?.smoothing.state !== 'smoothed') throw new Error('not smoothed');
+    expect(lines.get('Smoothing: Grade 4')).toBe(four.smoothing.curve.statement);
+    expect(lines.get('Smoothing: Grade 5')).toBe('The distribution of this group is not smoothed.');
+    expect(lines.get('Smoothing: Grade 6')).toBe(six.smoothing.curve.statement);
+    const { g2, bic } = four.smoothing.curve;
+    expect(lines.get('Fit: Grade 4')).toContain(`G² ${printNumber(g2 ?? NaN, 1)}, `);
+    expect(lines.get('Fit: Grade 4')).toContain(`BIC ${printNumber(bic ?? NaN, 1)}.`);
+    expect(lines.has('Fit: Grade 5')).toBe(false);
+    expect(lines.get('Fit: Grade 6')).toMatch(/^The bandwidth of the kernel is /);
+    expect(lines.get('Cautions')).toContain('They are different things');
+  });
+});
+
+function rowOfHeads(sheet: ExcelJS.Worksheet): number {
+  for (let row = 1; row <= sheet.rowCount; row += 1) {
+    if (sheet.getCell(row, 2).value === 'Percentile rank') return row;
+  }
+  throw new Error('no heads');
+}
+
+function valuesIn(sheet: ExcelJS.Worksheet, row: number): readonly unknown[] {
+  return Array.from({ length: sheet.columnCount }, (_, place) => sheet.getCell(row, place + 1).value ?? undefined);
+}
 
 /** Without written results a spreadsheet program has to compute. */
 function forgetResults(workbook: ExcelJS.Workbook): void {
@@ -166,19 +258,16 @@ async function lookedUp(file: string): Promise<readonly (string | undefined)[]> 
   return data.slice(FIRST_RESULT_ROW - 1, FIRST_RESULT_ROW + 4).map((row) => row[1]);
 }
 
-function normsOf(group: string) {
-  return normSet.groups.find((norms) => norms.group.title === group);
-}
-
-function people(group: string): string {
-  return printCount(normsOf(group)?.summary.n ?? 0);
+function people(set: NormSet, group: string): string {
+  return printCount(set.groups.find((norms) => norms.group.title === group)?.summary.n ?? 0);
 }
 
 function expected(set: NormSet, group: string, score: number): readonly string[] | null {
   const row = set.groups
     .find((norms) => norms.group.title === group)
     ?.rows.find((candidate) => candidate.score === score);
-  return row === undefined ? null : [row.printed, row.texts.count, row.texts.z, row.texts.stanine, people(group)];
+  if (row === undefined) return null;
+  return [row.printed, ...set.project.table.columns.map((key) => row.texts[key]), people(set, group)];
 }
 
 describe('a workbook of one group', () => {
