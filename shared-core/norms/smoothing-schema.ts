@@ -1,16 +1,19 @@
 import * as v from 'valibot';
 import { INTERVAL_METHODS } from '../precision/proportion-interval.ts';
+import { bandwidthProblem } from '../smoothing/bandwidth.ts';
 import { HIGHEST_LEVEL, LOWEST_LEVEL } from '../precision/confidence-level.ts';
 
 /** The file format of the choices of smoothing and precision; see the types of the same names. */
-
-/** Raw-score points; from there on a curve is the normal one whatever the bandwidth, and doubles lose its shape. */
-const WIDEST_BANDWIDTH = 1e6;
 
 const degree = v.union([
   v.pipe(v.number(), v.integer(), v.minValue(1), v.maxValue(10)),
   v.picklist(['bic', 'aic', 'likelihood-ratio']),
 ]);
+
+const bandwidth = v.pipe(
+  v.number(),
+  v.check((points) => bandwidthProblem(points) === null, 'the bandwidth cannot be used'),
+);
 
 const logLinearParts = {
   degree,
@@ -33,7 +36,7 @@ export const smoothingSchema = v.pipe(
     v.object({ kind: v.literal('log-linear'), ...logLinearParts }),
     v.object({
       kind: v.literal('kernel'),
-      bandwidth: v.union([v.pipe(v.number(), v.gtValue(0), v.maxValue(WIDEST_BANDWIDTH)), v.literal('auto')]),
+      bandwidth: v.union([bandwidth, v.literal('auto')]),
       after: v.nullable(v.pipe(v.object(logLinearParts), v.readonly())),
     }),
     v.object({ kind: v.literal('beta-binomial') }),

@@ -1,5 +1,16 @@
 import { kernelDensities, type GridDistribution } from './kernel.ts';
 
+/** Raw-score points that doubles can carry; far beyond either end the curve is that of the shares, or the normal one. */
+const LOWEST_BANDWIDTH = 1e-6;
+const HIGHEST_BANDWIDTH = 1e6;
+
+/** What is wrong with a bandwidth in raw-score points, in a sentence, or null. */
+export function bandwidthProblem(bandwidth: number): string | null {
+  return bandwidth >= LOWEST_BANDWIDTH && bandwidth <= HIGHEST_BANDWIDTH
+    ? null
+    : 'A bandwidth is a number of raw-score points above 0, such as 0.6.';
+}
+
 /** Trial bandwidths in steps of the grid. */
 const NARROWEST = 0.1;
 const WIDEST = 10;

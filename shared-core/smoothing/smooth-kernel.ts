@@ -1,6 +1,6 @@
 import { attainableScores, type ScoreScale } from '../scale/score-scale.ts';
 import { centralMoments } from '../tally/central-moments.ts';
-import { automaticBandwidth } from './bandwidth.ts';
+import { automaticBandwidth, bandwidthProblem } from './bandwidth.ts';
 import type { EffectiveFrequencies } from './effective-frequencies.ts';
 import { freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
 import { kernelCumulative, shrinkage, type GridDistribution } from './kernel.ts';
@@ -18,9 +18,8 @@ export function smoothKernel(
   choice: Choice,
   after: Smoothed | null,
 ): SmoothingResult {
-  if (choice.bandwidth !== 'auto' && !(choice.bandwidth > 0 && choice.bandwidth < Infinity)) {
-    throw new RangeError(`a bandwidth is a number above 0, not ${choice.bandwidth}`);
-  }
+  const problem = choice.bandwidth === 'auto' ? null : bandwidthProblem(choice.bandwidth);
+  if (problem !== null) throw new RangeError(problem);
   const scores = attainableScores(scale);
   const observed = frequencies.at.map((frequency) => frequency / frequencies.total);
   const discrete = distributionOf(after?.probabilities ?? observed);

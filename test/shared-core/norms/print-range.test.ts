@@ -74,6 +74,25 @@ describe('the range of printed ranks', () => {
     }
   });
 
+  it('takes in the definition that is chosen, where it is none of the three', () => {
+    for (const definition of [
+      { kind: 'grouped', width: 4 },
+      { kind: 'plotting-position', offset: '0.9' },
+    ] as const) {
+      const usual = printRange(table, midpoint, print, [logLinear(3)]);
+      const wider = printRange(table, definition, print, [logLinear(3)]);
+      const own = [percentileRanks(table, definition), ranksOfSmoothed(logLinear(3), table, definition)];
+      const size = (text: string): number => (text.startsWith('<') ? 0 : text.startsWith('>') ? 100 : Number(text));
+      wider.forEach(({ low, high }, position) => {
+        const texts = own.map((ranks) => printRank(ranks[position] ?? ratio(-1n, 1n), print).text);
+        const all = [...texts, usual[position]?.low ?? '', usual[position]?.high ?? ''].map(size);
+        expect([size(low), size(high)]).toEqual([Math.min(...all), Math.max(...all)]);
+      });
+      const grew = wider.filter(({ lowBy, highBy }) => [lowBy, highBy].some((by) => by.definition === definition));
+      if (definition.kind === 'grouped') expect(grew.length).toBeGreaterThan(0);
+    }
+  });
+
   it('refuses a smoothing of another scale', () => {
     const short = tableFromCounts({ ...scale, max: 1 }, [1, 1]);
     expect(() => printRange(short, midpoint, print, [logLinear(2)])).toThrow(RangeError);

@@ -3,7 +3,19 @@ import { projectToText } from '../../../shared-core/norms/project-text.ts';
 import { queriesOf } from '../../../shared-core/norms/queries.ts';
 import { methodText } from '../../../shared-core/norms/statements.ts';
 import { workingsOf } from '../../../shared-core/norms/workings.ts';
-import { builtSet, firstNorms, settledProject, weightedProject } from './small-projects.ts';
+import { builtSet, firstNorms, logLinear, settledProject, smoothedBy, weightedProject } from './small-projects.ts';
+
+/** Without and with smoothing, with columns that tell how sure a rank is. */
+function projects(): readonly ReturnType<typeof settledProject>[] {
+  const [settled, weighted] = [settledProject(), weightedProject()];
+  const columns = ['interval', 'standard-error', 'measurement-band', 'print-range', 't'] as const;
+  return [
+    settled,
+    weighted,
+    smoothedBy({ ...settled, precision: { ...settled.precision, reliability: 0.9 } }, logLinear('bic')),
+    smoothedBy(weighted, { kind: 'kernel', bandwidth: 'auto', after: logLinear(1) }),
+  ].map((project) => ({ ...project, table: { ...project.table, columns } }));
+}
 
 /** Everything a project leads to, as one text. */
 function everythingOf(project: ReturnType<typeof settledProject>): string {
@@ -19,7 +31,7 @@ function forbidden(): never {
 }
 
 describe('a project', () => {
-  const before = [settledProject(), weightedProject()].map(everythingOf);
+  const before = projects().map(everythingOf);
 
   beforeEach(() => {
     vi.spyOn(Number.prototype, 'toLocaleString').mockImplementation(forbidden);
@@ -38,7 +50,7 @@ describe('a project', () => {
   });
 
   it('leads to the same texts without locale, clock or chance', () => {
-    expect([settledProject(), weightedProject()].map(everythingOf)).toEqual(before);
+    expect(projects().map(everythingOf)).toEqual(before);
   });
 
   it('leads to the same numbers in whatever order its cells were added up', () => {

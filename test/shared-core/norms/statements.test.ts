@@ -16,13 +16,26 @@ import {
   type ChoiceKey,
   type StatementPart,
 } from '../../../shared-core/norms/statements.ts';
-import { curveOf, builtSet, projectOf, scaleTo, settledProject, TEN_COUNTS } from './small-projects.ts';
+import {
+  builtSet,
+  curveOf,
+  logLinear,
+  smoothedBy,
+  projectOf,
+  scaleTo,
+  settledProject,
+  TEN_COUNTS,
+} from './small-projects.ts';
 
 const LISTED = [
   'people',
   'direction',
   'duplicates',
   'definition',
+  'smoothing',
+  'degree',
+  'interval',
+  'level',
   'decimals',
   'rounding',
   'ends',
@@ -53,12 +66,13 @@ function choicesIn(project: NormProject): readonly (ChoiceKey | null)[] {
 const settled = settledProject();
 
 describe.each(LISTED)('the choice of %s', (choice) => {
-  const listed = alternatives(settled, choice);
+  const start = choice === 'degree' ? smoothedBy(settled, logLinear('bic')) : settled;
+  const listed = alternatives(start, choice);
 
   it('has exactly one alternative chosen, which is the project as it is', () => {
     const chosen = listed.filter((alternative) => alternative.chosen);
     expect(chosen).toHaveLength(1);
-    expect(chosen[0]?.project).toEqual(settled);
+    expect(chosen[0]?.project).toEqual(start);
   });
 
   it('makes projects that the schema accepts, in which that alternative is the chosen one', () => {
@@ -71,7 +85,7 @@ describe.each(LISTED)('the choice of %s', (choice) => {
   });
 
   it('has a phrase in the statements, which changes with every alternative', () => {
-    expect(choicesIn(settled)).toContain(choice);
+    expect(choicesIn(start)).toContain(choice);
     const phrases = listed.map(({ project }) => allParts(project).find((part) => part.choice === choice)?.text);
     const sentences = listed.map(({ project }) => statementText(allParts(project)));
     expect(phrases).not.toContain(undefined);

@@ -33,4 +33,15 @@ describe('columns of a table', () => {
     expect(columnOf('stanine', project).explanation).toContain('per cent');
     expect(columnOf('stanine', linear).explanation).toBe('Nine bands, half a standard deviation wide.');
   });
+
+  it('name the level of the interval, and keep the two errors apart', () => {
+    const project = settledProject();
+    const level = { ...project, precision: { ...project.precision, level: 90 } };
+    expect(columnOf('interval', level).heading).toEqual(['90 %', 'interval']);
+    expect(columnOf('interval', level).name).toBe('90 % interval');
+    for (const key of ['interval', 'standard-error'] as const) {
+      expect(columnOf(key, project).explanation).toMatch(/^Error of sampling/);
+    }
+    expect(columnOf('measurement-band', project).explanation).toMatch(/^Error of measurement/);
+  });
 });
