@@ -30,7 +30,7 @@ function groupGiven(values: OptionValues, by: readonly string[]): readonly strin
     return [];
   }
   if (text === null) throw new WrongOption('--by needs --group VALUE: ranks are compared with one group.');
-  const group = text.trim() === '' ? [''] : listOf('group', text);
+  const group = listOf('group', text);
   if (group.length === by.length) return group;
   throw new WrongOption(`--group holds one value for each column of --by: ${by.length}, not ${group.length}.`);
 }

@@ -149,11 +149,20 @@ describe('the bootstrap', () => {
   it('counts the samples that could not be smoothed', () => {
     const few = fileForTest('few.csv', 'score\n1\n1\n1\n2\n3\n5\n');
     const asked = [few, '--score', 'score', '--scale', '1:5', '--smooth', 'log-linear:3', '--bootstrap', '100'];
-    const { bootstrap, rows } = onlyTable(...asked);
-    const failed = bootstrap?.failures.reduce((sum, { count }) => sum + count, 0) ?? 0;
-    expect(failed).toBeGreaterThan(0);
-    expect((bootstrap?.fitted ?? 0) + failed).toBe(100);
-    if ((bootstrap?.fitted ?? 0) < 39) expect(rows.every((row) => row.bootstrap?.low === null)).toBe(true);
+    const drawnFrom = (seed: string) => {
+      const { bootstrap, rows } = onlyTable(...asked, '--seed', seed);
+      const failed = bootstrap?.failures.reduce((sum, { count }) => sum + count, 0) ?? NaN;
+      expect(failed).toBeGreaterThan(0);
+      expect((bootstrap?.fitted ?? NaN) + failed).toBe(100);
+      return { fitted: bootstrap?.fitted ?? NaN, lows: rows.map((row) => row.bootstrap?.low) };
+    };
+    // An interval of 95 % takes 39 samples that could be smoothed.
+    const tooFew = drawnFrom('1');
+    expect(tooFew.fitted).toBeLessThan(39);
+    expect(tooFew.lows).toEqual([null, null, null, null, null]);
+    const enough = drawnFrom('2');
+    expect(enough.fitted).toBeGreaterThanOrEqual(39);
+    expect(enough.lows.every((low) => typeof low === 'number')).toBe(true);
     expect(normloom(['table', ...asked]).stdout).toMatch(/^ {2}\d+ not smoothed: Degree 3 asks for more/m);
   });
 
