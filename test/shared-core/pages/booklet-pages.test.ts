@@ -275,15 +275,12 @@ describe('composeBooklet', () => {
     );
     expect(numbers.map(textOf)).toEqual(['1', '2', '3', '4', '5', '6', '7', '8', '9', '10']);
     const [taken, next] = [numbers[3], numbers[4]];
+    if (taken === undefined || next === undefined) throw new Error('no row');
     const between = after.filter(
-      (block) =>
-        block.kind === 'rule' &&
-        block.x === taken?.x &&
-        block.y > (taken?.baseline ?? 0) &&
-        block.y < (next?.baseline ?? 0),
+      (block) => block.kind === 'rule' && block.x === taken.x && block.y > taken.baseline && block.y < next.baseline,
     );
     expect(between).toHaveLength(1);
-    expect(taken?.runs[0]?.face).toBe('sans-bold');
+    expect(taken.runs[0]?.face).toBe('sans-bold');
     const { smoothing } = normSet.groups[0] ?? {};
     if (smoothing?.state !== 'smoothed') throw new Error('not smoothed');
     expect(linesOn(page).map(textOf)).toContain(printNumber(smoothing.curve.bic ?? NaN, 1));
