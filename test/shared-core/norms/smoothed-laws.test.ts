@@ -1,7 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
+import { buildNormSet } from '../../../shared-core/norms/norm-set.ts';
+import { normSetForFile } from '../../../shared-core/norms/norm-set-file.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
+import { workingsOf } from '../../../shared-core/norms/workings.ts';
 import type { RankDefinition } from '../../../shared-core/percentile/percentile-rank.ts';
+import { drawnProject } from './drawn-project.ts';
 import { drawnSmoothing } from './drawn-smoothing.ts';
 import { curveOf, firstNorms, logLinear, projectOf, scaleTo, weightedProject } from './small-projects.ts';
 import { SMOOTHED_COUNTS, SMOOTHING_METHODS } from './smoothing-methods.ts';
@@ -62,6 +67,33 @@ describe('laws of smoothed rows', () => {
         }
       }),
       { numRuns: 200 },
+    );
+  });
+
+  it('everything can be told of every project: file, workings of every cell and queries', () => {
+    fc.assert(
+      fc.property(drawnProject, (project) => {
+        const built = buildNormSet(project);
+        if (!built.ok) return;
+        const { normSet } = built;
+        const file = JSON.parse(JSON.stringify(normSetForFile(normSet, () => [])));
+        expect(file.groups).toHaveLength(normSet.groups.length);
+        const told = normSet.groups.flatMap((norms) =>
+          norms.rows.flatMap(({ scoreText }) =>
+            [...COLUMN_KEYS, 'rank' as const].flatMap((key) => workingsOf(project, norms, scoreText, key).lines),
+          ),
+        );
+        const asked = normSet.queries.flatMap(({ lead, why, whatToDo }) => [lead, why, whatToDo]);
+        expect([...told, ...asked].filter((text) => /NaN|undefined|Infinity|null/.test(text))).toEqual([]);
+        for (const { rows } of file.groups) {
+          for (const row of rows) {
+            expect(row['percentile-rank'] >= 0 && row['standard-error'] >= 0).toBe(true);
+            expect(row.interval === null || row.interval.low <= row.interval.high).toBe(true);
+            expect(row.smoothed === null || row.smoothed.proportion >= 0).toBe(true);
+          }
+        }
+      }),
+      { numRuns: 60 },
     );
   });
 
