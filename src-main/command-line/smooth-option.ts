@@ -1,3 +1,4 @@
+import { bandwidthProblem } from '../../shared-core/smoothing/bandwidth.ts';
 import type { LogLinearChoice, SmoothingChoice } from '../../shared-core/smoothing/smoothing.ts';
 import { numberIn, WrongOption } from './option-values.ts';
 
@@ -68,5 +69,5 @@ function bandwidthOf(text: string): number | 'auto' | null {
   const value = text.slice('kernel:'.length);
   if (value === 'auto') return value;
   const bandwidth = numberIn(value);
-  return bandwidth !== null && bandwidth > 0 ? bandwidth : null;
+  return bandwidth !== null && bandwidthProblem(bandwidth) === null ? bandwidth : null;
 }
