@@ -30,8 +30,11 @@ function linesOf(project: NormProject, norms: GroupNorms, row: ConversionRow, co
 
 /** The numbers in the first line that matches; each group of the pattern is one. */
 function numbersIn(lines: readonly string[], pattern: RegExp): readonly number[] {
-  const match = lines.map((line) => pattern.exec(line)).find((found) => found !== null);
-  if (match === undefined || match === null) throw new Error(`no line like ${pattern.source}: ${lines.join(' | ')}`);
+  const [match] = lines.flatMap((line) => {
+    const found = pattern.exec(line);
+    return found === null ? [] : [found];
+  });
+  if (match === undefined) throw new Error(`no line like ${pattern.source}: ${lines.join(' | ')}`);
   return match.slice(1).map((text) => numberIn(text));
 }
 
