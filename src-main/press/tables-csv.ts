@@ -5,9 +5,9 @@ import { safeForCsv } from './safe-text.ts';
 /**
  * All tables as one csv file by RFC 4180: UTF-8 with a byte-order mark (spreadsheets guess the encoding without it),
  * comma, CRLF, decimal point. Numbers are unrounded; `printed` and the columns `printed-…` hold the texts of the booklet.
- * `percentile-rank` is the rank behind `printed`: the smoothed one where the group is smoothed, else the observed one.
- * `interval-low` and `interval-high` (0–100) are of the observed rank, `standard-error` is of the printed one; both are
- * error of sampling. Cells are empty where there is no such number.
+ * The names mean what they mean in `norm-set.json`: `percentile-rank` is the observed one, `standard-error` that of the
+ * midpoint rank, `interval-low` and `interval-high` (0–100) are of the observed rank; where a group is smoothed, `printed`
+ * follows `smoothed-percentile-rank`. Cells are empty where there is no such number.
  */
 export function tablesCsv(normSet: NormSet): Uint8Array {
   const { project, groups, check } = normSet;
@@ -21,8 +21,8 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
     'count',
     'cumulative',
     'percentile-rank',
-    'observed-percentile-rank',
     'smoothed-percentile-rank',
+    'smoothed-standard-error',
     'interval-low',
     'interval-high',
     'standard-error',
@@ -40,12 +40,12 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
       String(summary.n),
       String(row.count),
       String(row.cumulative),
-      String(row.percentileRank),
       String(row.observed.percentileRank),
       numberOrNothing(row.smoothed?.percentileRank),
+      numberOrNothing(row.smoothed?.standardError),
       numberOrNothing(row.interval?.low),
       numberOrNothing(row.interval?.high),
-      numberOrNothing(row.standardError),
+      String(row.midpointError),
       row.printed,
       ...columns.map((key) => row.texts[key]),
       safeForCsv(project.release.edition),

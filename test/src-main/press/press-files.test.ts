@@ -77,12 +77,12 @@ describe('tablesCsv', () => {
       expect(data).toHaveLength(80);
       data.forEach((record, index) => {
         const row = rows[index];
-        expect(record['percentile-rank']).toBe(cell(row?.percentileRank));
-        expect(record['observed-percentile-rank']).toBe(cell(row?.observed.percentileRank));
+        expect(record['percentile-rank']).toBe(cell(row?.observed.percentileRank));
         expect(record['smoothed-percentile-rank']).toBe(index < 40 ? cell(row?.percentileRank) : '');
+        expect(record['smoothed-standard-error']).toBe(index < 40 ? cell(row?.standardError) : '');
         expect(record['interval-low']).toBe(cell(row?.interval?.low));
         expect(record['interval-high']).toBe(cell(row?.interval?.high));
-        expect(record['standard-error']).toBe(cell(row?.standardError));
+        expect(record['standard-error']).toBe(cell(row?.midpointError));
       });
       expect(data.every((record) => (record['interval-low'] === '') === (curve === smoothing))).toBe(true);
     }
