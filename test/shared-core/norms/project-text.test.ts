@@ -132,6 +132,9 @@ describe('a text that cannot be used', () => {
     const weighted = projectToText(weightedProject());
     expect(projectFromText(weighted).ok).toBe(true);
     expect(problemOf(weighted.replaceAll('"36"', '"0"'))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"36"', `"${'9'.repeat(200)}"`))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"50"', '"49"'))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"50"', '"101"'))).toContain('the tally does not fit');
     expect(problemOf(weighted.replace('"36"', '"-36"'))).toContain('tally.cells.0.weights.2');
     expect(problemOf(weighted.replace('"weight-decimals": 1', '"weight-decimals": null'))).toContain('does not fit');
   });
