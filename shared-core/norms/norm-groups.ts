@@ -39,12 +39,17 @@ export function normGroups(project: NormProject): readonly NormGroup[] {
 /** "Grade 5, Form A"; "All pupils" where there is no grouping. */
 export function standingTitle(by: readonly string[], values: readonly string[], people: PeopleNoun): string {
   if (by.length === 0) return people === 'people' ? 'Everybody' : `All ${people}`;
-  return by.map((column, index) => `${columnInWords(column)} ${inOneLine(values[index]) || '(blank)'}`).join(', ');
+  return by.map((column, index) => `${columnInWords(column)} ${valueInWords(values[index])}`).join(', ');
 }
 
 /** Cells of a file may hold line ends, which a title has no room for. */
 function inOneLine(text = ''): string {
   return text.replace(/\s+/g, ' ').trim();
+}
+
+/** A value of a grouping column as it is printed. */
+export function valueInWords(value = ''): string {
+  return inOneLine(value) || '(blank)';
 }
 
 /** "age_group" as it is printed: "Age group". */
