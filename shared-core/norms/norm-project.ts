@@ -185,7 +185,7 @@ const release = v.pipe(
     edition: v.pipe(v.string(), v.maxLength(40)),
     /** Date printed on every sheet, yyyy-mm-dd, or empty. */
     date: v.pipe(v.string(), v.regex(/^(\d{4}-\d{2}-\d{2})?$/)),
-    answers: v.pipe(v.array(v.pipe(v.object({ query: shortText, reason: longText }), v.readonly())), v.readonly()),
+    answers: v.pipe(v.array(v.pipe(v.object({ query: longText, reason: longText }), v.readonly())), v.readonly()),
   }),
   v.readonly(),
 );

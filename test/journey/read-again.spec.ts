@@ -1,4 +1,5 @@
 import { expect, test, type Page } from 'playwright/test';
+import { goTo } from './page-checks.ts';
 import { Program } from './program.ts';
 
 let program: Program;
@@ -97,4 +98,16 @@ test('a file of the same name is read as the one before it', async ({ page }) =>
   await bring(page, 'pupils.csv', `${PUPILS}60,5,30\n`);
   await expect(page.getByText('59 kept, 2 left out')).toBeVisible();
   await expect(page.locator('[data-choice="scale"]')).toHaveText(/0 to 30/);
+});
+
+test('an emptied title of a group gives way to its standing title, two alike are asked about', async ({ page }) => {
+  await startWithPupils(page);
+  await goTo(page, 'Groups');
+  const titles = page.getByRole('textbox', { name: /^Title of/ });
+  await titles.first().fill('   ');
+  await titles.first().press('Tab');
+  await expect(titles.first()).toHaveValue('Grade 4');
+  await titles.nth(1).fill('Grade 4');
+  await titles.nth(1).press('Tab');
+  await expect(page.getByText('More than one table is called Grade 4.')).toBeVisible();
 });

@@ -81,6 +81,14 @@ describe('the text of a project', () => {
     expect(projectFromText(evil)).toEqual({ ok: true, project: settled });
   });
 
+  it('keeps answers to questions about groups with the longest of names', () => {
+    const answers = [
+      { query: `small-group:${JSON.stringify(['x'.repeat(400), 'y'.repeat(400)])}`, reason: 'A pilot.' },
+    ];
+    const project = { ...settled, release: { ...settled.release, answers } };
+    expect(projectFromText(projectToText(project))).toEqual({ ok: true, project });
+  });
+
   it('is read behind a byte order mark', () => {
     expect(projectFromText(`\uFEFF${text}`).ok).toBe(true);
   });
