@@ -15,7 +15,7 @@ export interface FitEvidence {
   readonly filledGaps: readonly string[];
   /** Scores at which the curve dips between two rises though the data do not. */
   readonly inventedDips: readonly string[];
-  /** Degrees whose BIC lies within 2 of the degree taken, which is then nearly as good (common practice). */
+  /** Degrees whose BIC is lower than that of the degree taken, or at most 2 higher (common practice). */
   readonly nearlyAsGood: readonly number[];
 }
 
@@ -50,9 +50,7 @@ export function fitEvidence(
       taken === undefined
         ? []
         : curve.degrees
-            .filter(
-              (line) => line.converged && line.degree !== taken.degree && Math.abs(line.bic - taken.bic) < NEAR_BIC,
-            )
+            .filter((line) => line.converged && line.degree !== taken.degree && line.bic - taken.bic < NEAR_BIC)
             .map(({ degree }) => degree),
   };
 }
@@ -81,18 +79,19 @@ function inventedDips(
   { probabilities }: SmoothedCurve,
   table: FrequencyTable,
 ): readonly string[] {
-  const { at } = effectiveFrequencies(table);
+  const { at, total } = effectiveFrequencies(table);
   return rows
-    .filter((_, position) => dipsAt(probabilities, position) && !dataDipAt(at, probabilities, position))
+    .filter((_, position) => dipsAt(probabilities, position, total) && !dataDipAt(at, probabilities, position))
     .map(({ scoreText }) => scoreText);
 }
 
-/** A local minimum with a rise of at least the share on both sides. */
-function dipsAt(values: readonly number[], position: number): boolean {
+/** A local minimum with a rise of at least the share on both sides, to a score where at least one person is expected. */
+function dipsAt(values: readonly number[], position: number, people: number): boolean {
   const here = values[position] ?? 0;
   if (!(here < (values[position - 1] ?? 0) && here <= (values[position + 1] ?? 0))) return false;
   const rises = [Math.max(...values.slice(0, position)), Math.max(...values.slice(position + 1))];
-  return here < (1 - DIP_SHARE) * Math.min(...rises);
+  const lower = Math.min(...rises);
+  return here < (1 - DIP_SHARE) * lower && lower * people >= 1;
 }
 
 /**

@@ -25,7 +25,7 @@ export function normGroups(project: NormProject): readonly NormGroup[] {
   return tablesByGroup(project.tally, by).map(({ values, table }) => {
     const key = groupKey(values);
     const choice = choices.find((known) => groupKey(known.values) === key);
-    const given = choice?.title.trim() ?? '';
+    const given = inOneLine(choice?.title);
     return {
       key,
       values,
@@ -39,12 +39,22 @@ export function normGroups(project: NormProject): readonly NormGroup[] {
 /** "Grade 5, Form A"; "All pupils" where there is no grouping. */
 export function standingTitle(by: readonly string[], values: readonly string[], people: PeopleNoun): string {
   if (by.length === 0) return people === 'people' ? 'Everybody' : `All ${people}`;
-  return by.map((column, index) => `${columnInWords(column)} ${values[index] || '(blank)'}`).join(', ');
+  return by.map((column, index) => `${columnInWords(column)} ${valueInWords(values[index])}`).join(', ');
+}
+
+/** Cells of a file may hold line ends, which a title has no room for. */
+function inOneLine(text = ''): string {
+  return text.replace(/\s+/g, ' ').trim();
+}
+
+/** A value of a grouping column as it is printed. */
+export function valueInWords(value = ''): string {
+  return inOneLine(value) || '(blank)';
 }
 
 /** "age_group" as it is printed: "Age group". */
 export function columnInWords(column: string): string {
-  const words = column.replaceAll('_', ' ').trim();
+  const words = inOneLine(column.replaceAll('_', ' '));
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
 

@@ -199,7 +199,7 @@ const release = v.pipe(
     edition: v.pipe(v.string(), v.maxLength(40)),
     /** Date printed on every sheet, yyyy-mm-dd, or empty. */
     date: v.pipe(v.string(), v.regex(/^(\d{4}-\d{2}-\d{2})?$/)),
-    answers: v.pipe(v.array(v.pipe(v.object({ query: shortText, reason: longText }), v.readonly())), v.readonly()),
+    answers: v.pipe(v.array(v.pipe(v.object({ query: longText, reason: longText }), v.readonly())), v.readonly()),
   }),
   v.readonly(),
 );
@@ -255,7 +255,11 @@ function tallyFits({ tally, groups }: TallyBearing): boolean {
         cell.values.length === tally.groupColumns.length &&
         cell.counts.length === length &&
         (weighted
-          ? weighsWhereCounted(cell.counts, cell.weights) && weighsWhereCounted(cell.counts, cell.squares)
+          ? weighsWhereCounted(cell.counts, cell.weights) &&
+            weighsWhereCounted(cell.counts, cell.squares) &&
+            cell.counts.every((count, position) =>
+              squaresFit(count, cell.weights?.[position], cell.squares?.[position]),
+            )
           : cell.weights === null && cell.squares === null),
     )
   );
@@ -268,4 +272,12 @@ function weighsWhereCounted(counts: readonly number[], sums: readonly string[] |
     sums.length === counts.length &&
     counts.every((count, position) => count > 0 === /[1-9]/.test(sums[position] ?? ''))
   );
+}
+
+/** Squares of so many weights add up to at most the square of their sum, and to at least that square over the count. */
+function squaresFit(count: number, weight = '0', squares = '0'): boolean {
+  if (count === 0) return true;
+  const square = BigInt(weight) ** 2n;
+  const sum = BigInt(squares);
+  return sum <= square && sum * BigInt(count) >= square;
 }

@@ -45,6 +45,7 @@ export function queriesOf(project: NormProject, groups: readonly GroupNorms[]): 
   const asked = [
     ...cohortQueries(project),
     ...releaseQueries(project),
+    ...titleQueries(groups),
     ...groups.flatMap((one) => groupQueries(project, one)),
   ];
   const weights = { must: 0, should: 1, note: 2 } as const;
@@ -142,6 +143,19 @@ function releaseQueries(project: NormProject): readonly Asked[] {
     });
   }
   return asked;
+}
+
+function titleQueries(groups: readonly GroupNorms[]): readonly Asked[] {
+  const titles = groups.map(({ group }) => group.title);
+  return [...new Set(titles.filter((title, index) => titles.indexOf(title) !== index))].map((title) => ({
+    id: `same-title:${title}`,
+    station: 'groups',
+    weight: 'must',
+    group: null,
+    lead: `More than one table is called ${title}.`,
+    why: 'A reader cannot tell which of them a person belongs to.',
+    whatToDo: 'Give each a title of its own.',
+  }));
 }
 
 function groupQueries(project: NormProject, norms: GroupNorms): readonly Asked[] {

@@ -48,8 +48,8 @@ function fitQueries({ group, smoothing, evidence }: GroupNorms): readonly AskedO
       id: 'degree-nearly-as-good',
       station: 'curve',
       weight: 'note',
-      lead: `Degree ${listed(evidence.nearlyAsGood.map(String))} is nearly as good.`,
-      why: 'Its BIC lies within 2 of the one taken.',
+      lead: `Degree ${listed(evidence.nearlyAsGood.map(String))} does as well by BIC.`,
+      why: 'Its BIC is lower than that of the degree taken, or at most 2 higher.',
       whatToDo: 'Look at which printed ranks hang on it: the range of defensible ranks tells.',
     });
   }

@@ -1,4 +1,5 @@
 import type { IntervalMethod } from '../precision/proportion-interval.ts';
+import { ordinal } from '../smoothing/ordinal.ts';
 import type { DegreeRule, LogLinearChoice, SmoothingChoice } from '../smoothing/smoothing.ts';
 
 /** The rule for a degree after "whose degree is". */
@@ -25,7 +26,7 @@ export function smoothingInWords(choice: SmoothingChoice): string {
     case 'kernel':
       return choice.after === null
         ? 'smoothed by a normal kernel'
-        : 'smoothed by a log-linear model and a normal kernel';
+        : 'smoothed by a normal kernel after a log-linear model';
     case 'beta-binomial':
       return 'smoothed by a beta-binomial distribution';
   }
@@ -52,12 +53,6 @@ export function keptInWords({ keptScores, comb }: LogLinearChoice): string {
     ...(comb === null ? [] : [`the share of every ${ordinal(comb.every)} score from step ${comb.offset}`]),
   ];
   return parts.length === 0 ? 'no score apart' : parts.join(' and ');
-}
-
-function ordinal(value: number): string {
-  const last = value % 100;
-  const end = last >= 11 && last <= 13 ? 'th' : ({ 1: 'st', 2: 'nd', 3: 'rd' }[value % 10] ?? 'th');
-  return `${value}${end}`;
 }
 
 export function bandwidthInWords(bandwidth: number | 'auto'): string {

@@ -245,12 +245,11 @@ export function releaseStatement(project: NormProject): readonly StatementPart[]
   ];
 }
 
-/** The method as it is printed on a sheet: what was chosen for everything that the sheet prints. */
+/** What of the method holds for all tables, as it is printed. Each group's smoothing has a statement of its own. */
 export function methodText(project: NormProject): string {
   const { columns } = project.table;
   return [
     rankStatement(project),
-    ...(project.curve.smoothing.kind === 'none' ? [] : [smoothingStatement(project.curve.smoothing)]),
     ...(columns.includes('interval') ? [intervalStatement(project)] : []),
     ...(columns.includes('measurement-band') ? [reliabilityStatement(project)] : []),
     tableStatement(project),

@@ -69,7 +69,7 @@ function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence)
     ...(degrees.every(({ converged }) => converged) ? [] : ['Where dashes stand, no fit was found.']),
     ...(nearlyAsGood.length === 0
       ? []
-      : [`Nearly as good, with a BIC within 2 of it: degree ${joined(nearlyAsGood.map(String))}.`]),
+      : [`As good by BIC, lower or at most 2 higher: degree ${joined(nearlyAsGood.map(String))}.`]),
   ].join(' ');
 }
 

@@ -1,7 +1,7 @@
 import type { GroupNorms } from '../norms/group-norms.ts';
 import { onePerson } from '../norms/norm-groups.ts';
 import type { NormProject } from '../norms/norm-project.ts';
-import { smoothingOf, withSmoothing } from '../norms/smoothing-choice.ts';
+import { smoothingOf } from '../norms/smoothing-choice.ts';
 import { methodText } from '../norms/statements.ts';
 import { columnOf } from '../norms/table-columns.ts';
 import { printNumber } from '../scores/printed-number.ts';
@@ -11,8 +11,7 @@ import { printNumber } from '../scores/printed-number.ts';
  * own, and what each column of errors holds.
  */
 export function groupMethod(project: NormProject, norms: GroupNorms): string {
-  const common = methodText(withSmoothing(project, { kind: 'none' }, null));
-  return [common, smoothingSentence(project, norms), ...errorSentences(project, norms)]
+  return [methodText(project), smoothingSentence(project, norms), ...errorSentences(project, norms)]
     .filter((sentence) => sentence !== '')
     .join(' ');
 }

@@ -1,15 +1,14 @@
+import { namedFiveNumbers } from '../norms/five-numbers.ts';
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
-import { columnInWords, countedPeople, groupNoun, standingTitle } from '../norms/norm-groups.ts';
+import { columnInWords, countedPeople, groupNoun, standingTitle, valueInWords } from '../norms/norm-groups.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { intervalName } from '../norms/smoothing-words.ts';
 import type { TableColumn } from '../norms/table-columns.ts';
-import { decimalOf } from '../scale/decimal.ts';
-import { scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
-import { printCount, printNumber, printScore } from '../scores/printed-number.ts';
-import { weighsEqually } from '../tally/frequency-table.ts';
+import { scaleGrid } from '../scale/score-scale.ts';
+import { printCount, printNumber } from '../scores/printed-number.ts';
 import { groupMethod } from './group-method.ts';
 import type { Paragraph } from './paragraph.ts';
 
@@ -21,7 +20,7 @@ export function sheetTitle(project: NormProject, { group }: GroupNorms): string 
     by.length === 0
       ? inSentence(group.title)
       : by
-          .map((column, index) => `${inSentence(columnInWords(column))} ${group.values[index] || '(blank)'}`)
+          .map((column, index) => `${inSentence(columnInWords(column))} ${valueInWords(group.values[index])}`)
           .join(', ');
   const title = project.sheet.title.trim();
   return title === '' ? group.title : `${title}, ${given ? group.title : standing}`;
@@ -84,25 +83,22 @@ export function figureCaption(project: NormProject, { smoothing, precision }: Gr
 }
 
 /** n, mean, SD and five numbers in a sentence or two. */
-export function sampleFacts(project: NormProject, { summary, group }: GroupNorms): string {
-  const { scale } = group.table;
+export function sampleFacts(project: NormProject, norms: GroupNorms): string {
+  const { summary, group } = norms;
   const people = countedPeople(printCount(summary.n), project.people);
   const weighted = group.table.weighted
     ? `, weighted, with an effective n of ${printNumber(summary.effectiveN, 1)}`
     : '';
-  const spread = summary.sd === null ? '' : `, SD ${printNumber(summary.sd, 1)}`;
-  const [lowest, lower, median, upper, highest] = summary.fiveNumbers.map((score) => printFiveNumber(scale, score));
-  const quarter = weighsEqually(group.table) ? 'hinge' : 'quartile';
-  return (
-    `${people}${weighted}. Mean ${printNumber(summary.mean, 1)}${spread}. ` +
-    `Lowest score ${lowest}, lower ${quarter} ${lower}, median ${median}, upper ${quarter} ${upper}, highest score ${highest}.`
+  const decimals = scaleGrid(group.table.scale).decimals + 1;
+  const spread = summary.sd === null ? '' : `, SD ${printNumber(summary.sd, decimals)}`;
+  const five = namedFiveNumbers(norms).map(({ name, printed }) =>
+    name === 'lowest' || name === 'highest' ? `${name} score ${printed}` : `${name} ${printed}`,
   );
-}
-
-/** A score of the scale, or the middle between two of them, which takes one decimal more. */
-function printFiveNumber(scale: ScoreScale, score: number): string {
-  const { decimals } = scaleGrid(scale);
-  return decimalOf(score).decimals <= decimals ? printScore(scale, score) : printNumber(score, decimals + 1);
+  const sentence = five.join(', ');
+  return (
+    `${people}${weighted}. Mean ${printNumber(summary.mean, decimals)}${spread}. ` +
+    `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`
+  );
 }
 
 function documentationSentences(project: NormProject): readonly string[] {

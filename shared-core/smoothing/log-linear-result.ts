@@ -4,6 +4,7 @@ import { freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
 import { logLinearVariances } from './log-linear-covariance.ts';
 import type { LogLinearDesign } from './log-linear-design.ts';
 import type { DegreeRule, LogLinearChoice, Smoothed } from './smoothing.ts';
+import { ordinal } from './ordinal.ts';
 
 /** A converged fit as the distribution that the program shows, with the degrees it was compared with. */
 export function logLinearResult(
@@ -57,12 +58,6 @@ function statementOf(choice: LogLinearChoice, degree: number, fits: readonly Deg
     comb === null
       ? ''
       : `; the share of every ${ordinal(comb.every)} score, counted from position ${comb.offset + 1}, is kept`;
-  const moments = degree === 1 ? 'the mean' : `the first ${degree} moments`;
-  return `Log-linear smoothing of degree ${degree}${how}${kept}${teeth}; ${moments} of the observed scores are kept.`;
-}
-
-function ordinal(number: number): string {
-  const tens = number % 100;
-  const ending = tens > 10 && tens < 14 ? 'th' : (['th', 'st', 'nd', 'rd'][number % 10] ?? 'th');
-  return `${number}${ending}`;
+  const moments = degree === 1 ? 'their mean is' : `their first ${degree} moments are`;
+  return `Log-linear smoothing of degree ${degree} of the observed scores${how}${kept}${teeth}; ${moments} kept.`;
 }

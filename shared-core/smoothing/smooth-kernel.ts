@@ -81,8 +81,10 @@ function continuousMoments(scale: ScoreScale, discrete: GridDistribution, steps:
 }
 
 function statementOf(choice: Choice, bandwidth: number, after: Smoothed | null): string {
-  const how = choice.bandwidth === 'auto' ? `, chosen so that the curve misses the shares least,` : '';
+  const how = choice.bandwidth === 'auto' ? ', chosen so that the curve misses the shares least' : '';
   const points = choice.bandwidth === 'auto' ? bandwidth.toFixed(4) : String(bandwidth);
-  const first = after === null ? 'of the observed shares' : `after this: ${after.statement.slice(0, -1)}`;
-  return `Gaussian kernel smoothing with a bandwidth of ${points} raw-score points${how} ${first}; mean and variance are kept.`;
+  const kernel = `a Gaussian kernel with a bandwidth of ${points} raw-score points${how}; mean and variance are kept.`;
+  return after === null
+    ? `Smoothing of the observed shares by ${kernel}`
+    : `${after.statement} Then smoothing by ${kernel}`;
 }

@@ -15,7 +15,8 @@ export const SEPARATOR_WORDS: Readonly<Record<Separator, string>> = {
 /**
  * The separator that cuts the first lines of a text into the most even rows of two cells or more; a comma where none
  * does. Cells in quotation marks are not looked into. Where two do equally well, semicolon, tab and bar come before the
- * comma, which may be a decimal mark.
+ * comma, which may be a decimal mark. A comma that stands in decimals alone, below a heading without one, separates
+ * nothing: the text is one column, and a semicolon leaves its decimals whole.
  */
 export function guessSeparator(text: string): Separator {
   const lines = linesOutsideQuotes(text).slice(0, SAMPLE_LINES);
@@ -30,7 +31,12 @@ export function guessSeparator(text: string): Separator {
       bestShare = share;
     }
   }
-  return best;
+  return best === ',' && onlyDecimalCommas(lines) ? ';' : best;
+}
+
+function onlyDecimalCommas([heading = '', ...lines]: readonly string[]): boolean {
+  const cut = lines.filter((line) => line.includes(','));
+  return cut.length > 0 && !heading.includes(',') && cut.every((line) => /^\s*[-+]?\d*,\d+\s*$/.test(line));
 }
 
 /** Non-blank lines with everything between quotation marks taken out; the last line, perhaps cut off, is left out. */

@@ -116,6 +116,10 @@ function zipKind(head: string, contents: string, file: string): Reply<FileKind> 
     return refused(`${file} is a document or a presentation, not a workbook. ${SAVE_AS}`);
   }
   if (contents.includes('Index/Document.iwa')) return refused(`${file} is a Numbers or Pages document. ${SAVE_AS}`);
+  // The table of contents stands at the end of a zip.
+  if (!contents.includes('PK\u0005\u0006')) {
+    return refused(`${file} is not whole: its end is missing, as after a copy that broke off. Copy it once more.`);
+  }
   return refused(`${file} is a compressed folder. Unpack it and choose the file with the scores in it.`);
 }
 

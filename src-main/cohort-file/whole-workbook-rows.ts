@@ -58,13 +58,24 @@ async function openWhole(known: KnownFile, only: { readonly bookSheets?: boolean
     return { ok: false, problem: unreadable(error, known.file) };
   }
   try {
-    const book = read(bytes, { ...only, type: 'buffer', dense: true, cellNF: true, cellText: false, cellHTML: false });
+    const book = readQuietly(bytes, only);
     return book.SheetNames.length === 0
       ? { ok: false, problem: damagedWorkbook(known.file) }
       : { ok: true, value: { book, bytes } };
   } catch (error) {
     const locked = error instanceof Error && /password|ODS Encryption|Encryption scheme/i.test(error.message);
     return { ok: false, problem: locked ? lockedWorkbook(known.file) : damagedWorkbook(known.file) };
+  }
+}
+
+/** The package tells the console about number formats that it cannot show; the numbers themselves are whole. */
+function readQuietly(bytes: Buffer, only: { readonly bookSheets?: boolean }): WorkBook {
+  const { error } = console;
+  console.error = () => undefined;
+  try {
+    return read(bytes, { ...only, type: 'buffer', dense: true, cellNF: true, cellText: false, cellHTML: false });
+  } finally {
+    console.error = error;
   }
 }
 

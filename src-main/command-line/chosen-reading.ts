@@ -38,13 +38,20 @@ export async function chosenReading(path: string, file: string, options: CohortO
   };
 }
 
-/** Where the guess about the heading hides the columns named, the other guess may show them. */
+/** Where the guess about the heading or the sheet hides the columns named, another one may show them. */
 async function lookWithNames(path: string, file: string, named: NamedColumns): Promise<Reply<CohortPreview>> {
   const guessed = await lookAtCohort(path, file, null);
   if (!guessed.ok || hasAll(guessed.value, named)) return guessed;
-  const { reading } = guessed.value;
-  const other = await lookAtCohort(path, file, { ...reading, header: !reading.header });
-  return other.ok && hasAll(other.value, named) ? { ok: true, value: withGuesses(other.value, reading) } : guessed;
+  const { reading, sheets } = guessed.value;
+  const others = [
+    { ...reading, header: !reading.header },
+    ...sheets.slice(1).map((sheet) => ({ ...reading, sheet, header: true })),
+  ];
+  for (const asked of others) {
+    const other = await lookAtCohort(path, file, asked);
+    if (other.ok && hasAll(other.value, named)) return { ok: true, value: withGuesses(other.value, reading) };
+  }
+  return guessed;
 }
 
 /** The guess about missing codes was made for the score column of the first look. */

@@ -5,6 +5,7 @@ const SENTENCES: Readonly<Record<string, string>> = {
   EROFS: 'the disk can only be read. Use another folder',
   ENOSPC: 'the disk is full. Make room and try again',
   EDQUOT: 'the space allowed on this disk is used up. Make room and try again',
+  EEXIST: 'a file of that name is in the way. Use another folder',
   EISDIR: 'it is a folder. Choose a file',
   ENOTDIR: 'a folder on the way to it is a file. Use another folder',
   EBUSY: 'another program holds it. Close that program and try again',

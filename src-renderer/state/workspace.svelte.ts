@@ -9,6 +9,7 @@ import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
 import { compute } from '../compute/compute.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { ProjectHistory } from './history.svelte.ts';
+import { ReadStates } from './read-states.ts';
 import { followJob } from './run-job.ts';
 import { nounFrom, titleFrom } from './names-from-file.ts';
 import { withTally } from './with-tally.ts';
@@ -46,8 +47,13 @@ export class Workspace {
   cohort = $state<FileHandle | null>(null);
   /** The project that `drawn` shows. */
   drawnFor = $state.raw<NormProject | null>(null);
+  readonly #states = new ReadStates();
   #handle: FileHandle | null;
   #drawing: string | null = null;
+  /** Counts the readings of the cohort file; only the last one is taken. */
+  #readings = 0;
+  /** The tally that a reading without result put out of use: what was chosen with it serves the next one. */
+  #lastTally: NormProject['tally'] = null;
 
   /** The norm set of the project, or of the one before it while the new one is being worked out. */
   built = $state.raw<NormSetBuilt>({ ok: false, problem: 'The tables are being worked out.' });
@@ -67,6 +73,7 @@ export class Workspace {
     this.#handle = opened.handle;
     this.file = opened.file;
     this.cohort = opened.cohort;
+    this.#states.note(opened.project, opened.cohort, false);
     if (opened.project.tally !== null) this.station = 'curve';
     void this.#build();
     if (opened.cohort !== null) void this.lookAgain();
@@ -87,19 +94,21 @@ export class Workspace {
   /** Takes a choice: the next project, made from the present one. A changed reading reads the file again. */
   choose(project: NormProject): void {
     const before = this.project;
-    this.#history.push(project);
-    this.#changed();
-    if (project.reading !== null && project.reading !== before.reading) void this.tallyAgain(before.reading);
+    const reads = project.reading !== null && project.reading !== before.reading;
+    this.#push(project, reads || (project.reading !== null && this.#states.waits(before)));
+    if (reads) void this.tallyAgain(before.reading);
   }
 
   undo(): void {
+    const before = this.project;
     this.#history.undo();
-    this.#changed();
+    if (this.project !== before) void this.#comeBack(before);
   }
 
   redo(): void {
+    const before = this.project;
     this.#history.redo();
-    this.#changed();
+    if (this.project !== before) void this.#comeBack(before);
   }
 
   dismiss(): void {
@@ -110,62 +119,120 @@ export class Workspace {
   async takeCohort(file: File | FileHandle | null): Promise<void> {
     const handle = await this.#handleOf(file);
     if (handle === null) return;
-    this.cohort = handle;
     const seen = await this.#wire.ask('look-at-cohort', { handle, reading: null });
     if (!seen.ok) {
       this.problem = seen.problem;
       return;
     }
-    this.preview = seen.value;
+    const again = await this.#lookAsBefore(handle, seen.value.file);
     const { project } = this;
-    this.#history.push({
-      ...project,
-      title: project.title === '' ? titleFrom(seen.value.file) : project.title,
-      people: project.people === 'people' ? nounFrom(seen.value.columns) : project.people,
-      reading: seen.value.reading,
-      source: null,
-      tally: null,
-      groups: { ...project.groups, by: [], choices: [] },
-    });
-    this.#changed();
-    if (seen.value.reading.roles.some(({ role }) => role === 'score')) await this.tallyAgain(null);
+    this.cohort = handle;
+    this.preview = again ?? seen.value;
+    if (again !== null) {
+      this.#push({ ...project, reading: again.reading }, true);
+    } else {
+      this.#lastTally = null;
+      this.#push(
+        {
+          ...project,
+          title: project.title === '' ? titleFrom(seen.value.file) : project.title,
+          people: project.people === 'people' ? nounFrom(seen.value.columns) : project.people,
+          reading: seen.value.reading,
+          source: null,
+          tally: null,
+          groups: { ...project.groups, by: [], choices: [] },
+        },
+        true,
+      );
+    }
+    if (hasScore(this.preview.reading)) await this.tallyAgain(null);
+  }
+
+  /** A file of the same name that still has its score column is read as before; null for any other. */
+  async #lookAsBefore(handle: FileHandle, file: string): Promise<CohortPreview | null> {
+    const { reading, source } = this.project;
+    if (reading === null || source?.file !== file) return null;
+    const seen = await this.#wire.ask('look-at-cohort', { handle, reading });
+    return seen.ok && hasScore(seen.value.reading) ? seen.value : null;
   }
 
   /** Refreshes the first rows shown, as after opening a project beside its cohort file. */
   async lookAgain(): Promise<void> {
-    if (this.cohort === null) return;
-    const seen = await this.#wire.ask('look-at-cohort', { handle: this.cohort, reading: this.project.reading });
+    const { cohort, project } = this;
+    if (cohort === null) return;
+    const seen = await this.#wire.ask('look-at-cohort', { handle: cohort, reading: project.reading });
+    if (this.cohort !== cohort || this.project.reading !== project.reading) return;
     if (seen.ok) this.preview = seen.value;
     else this.problem = seen.problem;
   }
 
   /** Reads the cohort file with the present reading; completes the present step of the history. */
   async tallyAgain(before: Reading | null): Promise<void> {
-    const { reading } = this.project;
-    if (reading === null) return;
+    this.#readings += 1;
+    const round = this.#readings;
+    if (this.project.reading === null) return;
     if (this.cohort === null) {
       this.problem =
         'The cohort file is not at hand. Choose it again at the Cohort station, so that it can be read in the new way.';
       return;
     }
-    if (before === null || layoutChanged(before, reading)) await this.lookAgain();
-    if (!reading.roles.some(({ role }) => role === 'score')) {
-      this.#history.amend({ ...this.project, source: null, tally: null });
-      this.#changed();
+    if (before !== null && layoutChanged(before, this.project.reading)) {
+      await this.lookAgain();
+      if (this.#overtaken(round)) return;
+      this.#takeColumns();
+    }
+    const { reading } = this.project;
+    if (!hasScore(reading)) {
+      this.#withoutTally();
       return;
     }
     await this.cancel();
     const started = await this.#wire.ask('tally-cohort', { handle: this.cohort, reading });
+    if (this.#overtaken(round)) return;
     if (!started.ok) {
       this.problem = started.problem;
       return;
     }
     const result = await this.#follow(started.value.job, 'Reading');
-    if (this.project.reading !== reading) return;
+    if (this.#overtaken(round) || this.project.reading !== reading) return;
     if (result?.kind === 'tallied') {
-      this.#history.amend(withTally(this.project, result.tallied));
-      this.#changed();
+      this.#amend(withTally(this.project, result.tallied, this.project.tally ?? this.#lastTally), false);
+      this.#lastTally = null;
+    } else {
+      this.#withoutTally();
     }
+  }
+
+  #overtaken(round: number): boolean {
+    return this.#readings !== round;
+  }
+
+  /** A file cut in another way has other columns: their roles are those of the first rows shown. */
+  #takeColumns(): void {
+    const { project, preview } = this;
+    if (project.reading === null || preview === null) return;
+    const { roles } = preview.reading;
+    this.#amend({ ...project, reading: { ...project.reading, roles } }, true);
+  }
+
+  /** No number of an earlier reading stands beside one that gave none. */
+  #withoutTally(): void {
+    this.#lastTally = this.project.tally ?? this.#lastTally;
+    this.#amend({ ...this.project, source: null, tally: null }, true);
+  }
+
+  /** After undo and redo: the file, its first rows and its tally are those of the state that is present again. */
+  async #comeBack(before: NormProject): Promise<void> {
+    this.#changed();
+    this.#readings += 1;
+    this.problem = null;
+    const { project } = this;
+    const cohort = this.#states.cohortOf(project);
+    const other = cohort !== this.cohort;
+    this.cohort = cohort;
+    if (cohort === null) this.preview = null;
+    else if (other || columnsChanged(before.reading, project.reading)) await this.lookAgain();
+    if (this.project === project && this.#states.waits(project)) await this.tallyAgain(null);
   }
 
   /** Takes counts typed or pasted; returns the problems, one sentence a line, or nothing when they were taken. */
@@ -174,8 +241,9 @@ export class Workspace {
     if (counted === null) return problems;
     this.preview = null;
     this.cohort = null;
-    this.#history.push(withTally({ ...this.project, reading: null, tally: null }, counted));
-    this.#changed();
+    this.#readings += 1;
+    this.#lastTally = null;
+    this.#push(withTally({ ...this.project, reading: null }, counted, null), false);
     return [];
   }
 
@@ -301,6 +369,18 @@ export class Workspace {
     this.builtFor = project;
   }
 
+  #push(project: NormProject, waits: boolean): void {
+    this.#states.note(project, this.cohort, waits);
+    this.#history.push(project);
+    this.#changed();
+  }
+
+  #amend(project: NormProject, waits: boolean): void {
+    this.#states.note(project, this.cohort, waits);
+    this.#history.amend(project);
+    this.#changed();
+  }
+
   #changed(): void {
     void this.#build();
     this.pressed = null;
@@ -318,6 +398,14 @@ export class Workspace {
     if (!kept.ok) this.problem = kept.problem;
     else if (this.project === project && this.saved.kind !== 'saved') this.saved = { kind: 'kept', at: kept.value.at };
   }
+}
+
+function hasScore({ roles }: Reading): boolean {
+  return roles.some(({ role }) => role === 'score');
+}
+
+function columnsChanged(before: Reading | null, after: Reading | null): boolean {
+  return before === null || after === null ? before !== after : layoutChanged(before, after);
 }
 
 function layoutChanged(before: Reading, after: Reading): boolean {

@@ -15,6 +15,8 @@ describe('titles of groups', () => {
   it('are made of column and value', () => {
     expect(standingTitle(['grade', 'test_form'], ['5', 'A'], 'pupils')).toBe('Grade 5, Test form A');
     expect(standingTitle(['grade'], [''], 'pupils')).toBe('Grade (blank)');
+    expect(standingTitle(['test\nform'], ['A\r\n 1'], 'pupils')).toBe('Test form A 1');
+    expect(standingTitle(['grade'], [' \n'], 'pupils')).toBe('Grade (blank)');
     expect(standingTitle([], [], 'candidates')).toBe('All candidates');
     expect(standingTitle([], [], 'people')).toBe('Everybody');
     expect(columnInWords('age_group_')).toBe('Age group');

@@ -87,6 +87,14 @@ describe('the text of a project', () => {
     expect(projectFromText(evil)).toEqual({ ok: true, project: settled });
   });
 
+  it('keeps answers to questions about groups with the longest of names', () => {
+    const answers = [
+      { query: `small-group:${JSON.stringify(['x'.repeat(400), 'y'.repeat(400)])}`, reason: 'A pilot.' },
+    ];
+    const project = { ...settled, release: { ...settled.release, answers } };
+    expect(projectFromText(projectToText(project))).toEqual({ ok: true, project });
+  });
+
   it('is read behind a byte order mark', () => {
     expect(projectFromText(`\uFEFF${text}`).ok).toBe(true);
   });
@@ -138,6 +146,9 @@ describe('a text that cannot be used', () => {
     const weighted = projectToText(weightedProject());
     expect(projectFromText(weighted).ok).toBe(true);
     expect(problemOf(weighted.replaceAll('"36"', '"0"'))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"36"', `"${'9'.repeat(200)}"`))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"50"', '"49"'))).toContain('the tally does not fit');
+    expect(problemOf(weighted.replace('"50"', '"101"'))).toContain('the tally does not fit');
     expect(problemOf(weighted.replace('"36"', '"-36"'))).toContain('tally.cells.0.weights.2');
     expect(problemOf(weighted.replace('"weight-decimals": 1', '"weight-decimals": null'))).toContain('does not fit');
   });

@@ -56,6 +56,20 @@ describe('queries', () => {
     expect(idsOf(keepingAll('unused'))).toEqual([]);
   });
 
+  it('ask about tables of one title', () => {
+    const renamed = (titles: readonly string[]): NormProject => ({
+      ...settled,
+      groups: {
+        ...settled.groups,
+        choices: ['4', '10'].map((value, index) => ({ values: [value], title: titles[index] ?? '', printed: true })),
+      },
+    });
+    expect(idsOf(renamed(['Both', 'Others']))).toEqual([]);
+    expect(queriesOf(renamed(['Both', ' Both']))).toMatchObject([
+      { id: 'same-title:Both', station: 'groups', weight: 'must', lead: 'More than one table is called Both.' },
+    ]);
+  });
+
   it('name the documentation that is missing', () => {
     const documentation = { ...settled.groups.documentation, sampling: ' ', testDates: '' };
     const [query, ...others] = queriesOf({ ...settled, groups: { ...settled.groups, documentation } });

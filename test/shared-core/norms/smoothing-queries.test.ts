@@ -48,7 +48,7 @@ describe('queries of a smoothed group', () => {
   it('note degrees that are nearly as good', () => {
     const notes = asked(smoothedBy(twoModes, logLinear(8))).filter(({ weight }) => weight === 'note');
     expect(notes.map(({ id, lead }) => [id, lead])).toEqual([
-      ['degree-nearly-as-good:[]', 'Degree 4 or 5 is nearly as good.'],
+      ['degree-nearly-as-good:[]', 'Degree 4 or 5 does as well by BIC.'],
     ]);
     expect(openQueries(notes)).toEqual([]);
   });

@@ -12,6 +12,10 @@ describe('the separator', () => {
     ['|', 'id|name, first|score\n1|Ash, B|5\n2|Fell, C|6\n'],
     [',', 'id,name,score\n1,"Ash; B; C",5\n2,"Fell\n; D",6\n'],
     [',', 'score\n5\n6\n'],
+    [';', 'score\n5,5\n6\n7,5\n'],
+    [';', 'score\n5,5\n6,5\n\nabs\n'],
+    [',', 'score\n5,5,\n6\n'],
+    [',', 'Spring survey\nscore,count\n5,6\n6,7\n'],
   ] as const)('%j is seen in %j', (separator, text) => {
     expect(guessSeparator(text)).toBe(separator);
   });

@@ -3,7 +3,7 @@ import ExcelJS from 'exceljs';
 import JSZip from 'jszip';
 import { createHash } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
-import { beforeAll, describe, expect, it } from 'vitest';
+import { beforeAll, describe, expect, it, vi } from 'vitest';
 import { readingWith } from '../../shared-core/tally/readings.ts';
 import { cohortFolder, leftOut, look, lookProblem, tally } from './cohorts-at-hand.ts';
 
@@ -172,3 +172,21 @@ describe.each(['ods', 'biff8', 'xlsb'] as const satisfies readonly BookType[])(
     });
   },
 );
+
+describe('an ods workbook with number formats that the reader does not know', () => {
+  it('is read without a word on the console', async () => {
+    const book = { SheetNames: ['S'], Sheets: { S: utils.aoa_to_sheet([['score'], [5], [6]]) } };
+    const zip = await JSZip.loadAsync(write(book, { type: 'buffer', bookType: 'ods' }) as Buffer);
+    const styles = '<office:automatic-styles>';
+    const content = (await zip.file('content.xml')?.async('string')) ?? '';
+    const map = '<style:map style:condition="value()&lt;0" style:apply-style-name="N1"/>';
+    const format = `<number:number-style style:name="N9"><number:number/>${map}</number:number-style>`;
+    expect(content).toContain(styles);
+    zip.file('content.xml', content.replace(styles, `${styles}${format}`));
+    const path = await folder.write('formats.ods', await zip.generateAsync({ type: 'uint8array' }));
+    const console = vi.spyOn(globalThis.console, 'error').mockReturnValue();
+    expect((await look(path)).rows).toEqual([['5'], ['6']]);
+    expect(console).not.toHaveBeenCalled();
+    console.mockRestore();
+  });
+});

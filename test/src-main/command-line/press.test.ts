@@ -103,6 +103,6 @@ describe('press', () => {
     const small = fileForTest('small.normloom', projectToText(projectOf([1, 2, 3, 0, 4])));
     const taken = normloom(['press', small, '--into', fileForTest('taken', 'x')]);
     expect([taken.exit, taken.stdout]).toEqual([3, '']);
-    expect(taken.stderr).toMatch(/^normloom: .*could not be written.*\.\n$/m);
+    expect(taken.stderr).toMatch(/^normloom: .*could not be written: a file of that name is in the way\. .*\.\n$/m);
   });
 });

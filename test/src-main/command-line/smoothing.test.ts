@@ -168,7 +168,7 @@ describe('smoothing as text and csv', () => {
   it('states what was done, the fit, and what it does to the ranks', () => {
     const { stdout } = normloom([...words, '--smooth', 'log-linear:auto', '--points', '0.5']);
     expect(stdout.split('\n').slice(3, 7)).toEqual([
-      'Log-linear smoothing of degree 2, chosen by the lowest BIC (people counted) among degrees 1 to 10; the first 2 moments of the observed scores are kept.',
+      'Log-linear smoothing of degree 2 of the observed scores, chosen by the lowest BIC (people counted) among degrees 1 to 10; their first 2 moments are kept.',
       'Fit: G² 6.91, X² 6.00, df 18, AIC 12.91, BIC 17.75.',
       'Smoothing moves a rank by at most 6.0 points, at 11, and changes 13 of 21 printed ranks.',
       '',

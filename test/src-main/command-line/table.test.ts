@@ -1,3 +1,4 @@
+import { utils, write, type BookType } from '@e965/xlsx';
 import { describe, expect, it } from 'vitest';
 import { POINT_DEFINITIONS } from '../../../shared-core/percentile/percentile-point.ts';
 import { EXACT, expectAllNear, expectNear, NORMAL } from '../../reference/near.ts';
@@ -248,6 +249,23 @@ describe('table as json', () => {
   it('takes a file without a heading, its columns by number', () => {
     const bare = fileForTest('bare.csv', '7,1\n8,2\n8,3\n');
     expect(tables(bare, '--score', 'column 1').groups[0]?.n).toBe(3);
+  });
+
+  it('takes decimal commas in a file of one column', () => {
+    const halves = fileForTest('halves.csv', 'mark\n1,5\n2\n2,5\n');
+    const file = tables(halves, '--score', 'mark', '--scale', '0:3:0.5');
+    expect(file.groups[0]?.rows.map(({ count }) => count)).toEqual([0, 0, 0, 1, 1, 1, 0]);
+    expect(file.source['left-out']).toEqual([]);
+  });
+
+  it.each<BookType>(['xlsx', 'ods', 'biff8'])('finds the sheet that has the columns in a workbook (%s)', (bookType) => {
+    const book = utils.book_new();
+    utils.book_append_sheet(book, utils.aoa_to_sheet([['Read the second sheet.']]), 'About');
+    utils.book_append_sheet(book, utils.aoa_to_sheet([['mark'], [1], [2], [2]]), 'Marks');
+    const path = fileForTest('marks.book', new Uint8Array(write(book, { type: 'buffer', bookType }) as Buffer));
+    const ran = normloom(['table', path, '--score', 'mark', '--scale', '0:3', '--format', 'json']);
+    expect([ran.exit, ran.stderr]).toEqual([0, 'Read with sheet "Marks" of 2.\n']);
+    expect(readTables(ran.stdout).groups[0]?.n).toBe(3);
   });
 
   it('takes names with commas, keys of objects, and a heading that looks like data', () => {
