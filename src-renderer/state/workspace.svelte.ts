@@ -1,13 +1,12 @@
 import type { CohortPreview, DrawnPages, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
-import type { NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import { openQueries, type Query, type Station } from '../../shared-core/norms/queries.ts';
+import type { Station } from '../../shared-core/norms/queries.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';
 import { readTypedCounts, type LineProblem } from '../../shared-core/tally/typed-counts.ts';
 import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
-import { compute } from '../compute/compute.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
+import { BuiltNorms } from './built-norms.svelte.ts';
 import { ProjectHistory } from './history.svelte.ts';
 import { ReadStates } from './read-states.ts';
 import { followJob } from './run-job.ts';
@@ -55,15 +54,10 @@ export class Workspace {
   /** The tally that a reading without result put out of use: what was chosen with it serves the next one. */
   #lastTally: NormProject['tally'] = null;
 
-  /** The norm set of the project, or of the one before it while the new one is being worked out. */
-  built = $state.raw<NormSetBuilt>({ ok: false, problem: 'The tables are being worked out.' });
-  /** The project that `built` belongs to. */
-  builtFor = $state.raw<NormProject | null>(null);
-  readonly groups: readonly GroupNorms[] = $derived(this.built.ok ? this.built.normSet.groups : []);
-  readonly queries: readonly Query[] = $derived(this.built.ok ? this.built.normSet.queries : []);
-  readonly open: readonly Query[] = $derived(openQueries(this.queries));
+  /** The numbers of the project, or of the one before it while the new ones are being worked out. */
+  readonly norms = new BuiltNorms();
   readonly group: GroupNorms | null = $derived(
-    this.groups.find(({ group }) => group.key === this.groupKey) ?? this.groups[0] ?? null,
+    this.norms.groups.find(({ group }) => group.key === this.groupKey) ?? this.norms.groups[0] ?? null,
   );
 
   constructor(wire: DeskWire, opened: OpenedProject) {
@@ -75,7 +69,7 @@ export class Workspace {
     this.cohort = opened.cohort;
     this.#states.note(opened.project, opened.cohort, false);
     if (opened.project.tally !== null) this.station = 'curve';
-    void this.#build();
+    void this.norms.build(this.project);
     if (opened.cohort !== null) void this.lookAgain();
   }
 
@@ -354,21 +348,6 @@ export class Workspace {
     return null;
   }
 
-  /** Works the numbers out beside the page; an answer that came too late is dropped. */
-  async #build(): Promise<void> {
-    const { project } = this;
-    const built = await compute.ask({ kind: 'norm-set', project }).then(
-      (answer) => answer.built,
-      (fault: unknown): NormSetBuilt => ({
-        ok: false,
-        problem: `The tables could not be worked out (${fault instanceof Error ? fault.message : 'unknown fault'}). Undo the last choice.`,
-      }),
-    );
-    if (this.project !== project) return;
-    this.built = built;
-    this.builtFor = project;
-  }
-
   #push(project: NormProject, waits: boolean): void {
     this.#states.note(project, this.cohort, waits);
     this.#history.push(project);
@@ -382,7 +361,7 @@ export class Workspace {
   }
 
   #changed(): void {
-    void this.#build();
+    void this.norms.build(this.project);
     this.pressed = null;
     if (this.saved.kind === 'saved') this.saved = { kind: 'unsaved' };
     if (this.#autosave !== null) clearTimeout(this.#autosave);

@@ -102,7 +102,9 @@ describe('kernel smoothing', () => {
     const fit = smoothed(table, { kind: 'kernel', bandwidth: 0.6622, after });
     const first = smoothed(table, logLinear('bic'));
     expect([fit.degree, fit.g2, fit.degrees]).toEqual([first.degree, first.g2, first.degrees]);
-    expect(fit.statement).toContain('Log-linear smoothing of degree 4, chosen by the lowest BIC');
+    expect(fit.statement).toContain(
+      'Log-linear smoothing of degree 4 of the observed scores, chosen by the lowest BIC',
+    );
   });
 
   it('is refused with the log-linear fit that is to come first, and offers what works', () => {

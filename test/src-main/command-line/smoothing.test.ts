@@ -175,7 +175,7 @@ describe('smoothing as text and csv', () => {
     ]);
     expect(stdout).toContain('Percentile points of the scores before smoothing, ');
     const kernel = normloom([...words, '--smooth', 'kernel:0.5']).stdout;
-    expect(kernel).toContain('Gaussian kernel smoothing with a bandwidth of 0.5 raw-score points');
+    expect(kernel).toContain('a Gaussian kernel with a bandwidth of 0.5 raw-score points');
     expect(kernel).not.toContain('Fit:');
     expect(normloom([...words, '--smooth', 'beta-binomial']).stdout).toMatch(
       /^Fit: G² \d+\.\d\d, X² \d+\.\d\d, df 18\.$/m,

@@ -2,6 +2,7 @@ import { readdir, readFile, rm, writeFile, mkdir } from 'node:fs/promises';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
+import { PROJECT_VERSION } from '../../../shared-core/norms/norm-project.ts';
 import { projectFromText, projectToText } from '../../../shared-core/norms/project-text.ts';
 import { Drafts } from '../../../src-main/project-file/drafts.ts';
 import { projectWithTally } from '../project-file/sample-projects.ts';
@@ -72,7 +73,7 @@ describe('projects on the desk', () => {
   });
 
   it('of a newer program or damaged are refused with a sentence and left alone', async () => {
-    const newer = projectToText(newProject('x')).replace('"version": 1', '"version": 7');
+    const newer = projectToText(newProject('x')).replace(`"version": ${PROJECT_VERSION}`, '"version": 7');
     await writeFile(join(hand.folder, 'newer.normloom'), newer);
     await writeFile(join(hand.folder, 'torn.normloom'), newer.slice(0, 99));
     const open = (name: string): Promise<string> =>

@@ -18,7 +18,7 @@ const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>
   'keep-draft': [
     { draft, project },
     { draft, handle: null },
-    { draft, handle: null, project: { ...project, version: 2 } },
+    { draft, handle: null, project: { ...project, version: 99 } },
   ],
   'save-project': [
     { draft, handle: null, project },

@@ -3,6 +3,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
+import { PROJECT_VERSION } from '../../../shared-core/norms/norm-project.ts';
 import { projectToText } from '../../../shared-core/norms/project-text.ts';
 import { diskTrouble } from '../../../src-main/project-file/disk-trouble.ts';
 import { Drafts } from '../../../src-main/project-file/drafts.ts';
@@ -36,18 +37,20 @@ describe('reading a project file', () => {
   it('explains a damaged file, a newer one, a folder, a missing one and one that is too large, and touches none', async () => {
     const text = projectToText(projectWithTally('Ostrey Vale', 3));
     await writeFile(at('half.normloom'), text.slice(0, text.length / 2));
-    await writeFile(at('newer.normloom'), text.replace('"version": 1', '"version": 2'));
+    await writeFile(at('newer.normloom'), text.replace(`"version": ${PROJECT_VERSION}`, '"version": 99'));
     await writeFile(at('latin.normloom'), Buffer.from([0x7b, 0xff, 0xfe, 0x7d]));
     await writeFile(at('large.normloom'), '');
     await truncate(at('large.normloom'), MAX_PROJECT_BYTES + 1);
     await mkdir(at('folder.normloom'));
     expect(await problemOf(at('half.normloom'))).toMatch(/damaged.*broke off.*not touched/);
-    expect(await problemOf(at('newer.normloom'))).toMatch(/newer Normloom \(file version 2.*not touched/);
+    expect(await problemOf(at('newer.normloom'))).toMatch(/newer Normloom \(file version 99.*not touched/);
     expect(await problemOf(at('latin.normloom'))).toMatch(/damaged.*UTF-8/);
     expect(await problemOf(at('large.normloom'))).toMatch(/larger than 64 MB/);
     expect(await problemOf(at('folder.normloom'))).toMatch(/not a file/);
     expect(await problemOf(at('none.normloom'))).toMatch(/no longer there/);
-    expect(await readFile(at('newer.normloom'), 'utf8')).toBe(text.replace('"version": 1', '"version": 2'));
+    expect(await readFile(at('newer.normloom'), 'utf8')).toBe(
+      text.replace(`"version": ${PROJECT_VERSION}`, '"version": 99'),
+    );
     expect(await readFile(at('half.normloom'), 'utf8')).toBe(text.slice(0, text.length / 2));
   });
 
