@@ -8,6 +8,9 @@ export const HELP = `normloom table FILE --score COL [options]   conversion tabl
 normloom differ FILE --score COL --ranks RANKFILE [options]
                                             how somebody's ranks were made from the same people
 normloom press PROJECT --into FOLDER        booklet.pdf, tables.xlsx, tables.csv and norm-set.json
+normloom compare OLD NEW [--format text|json]
+                                            every printed cell and choice in which two projects differ
+normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
 normloom --help | --version
 
 Options of table and differ:
@@ -41,6 +44,13 @@ Options of differ:
   --ranks RANKFILE          text file with one raw score and somebody's percentile rank a line
   --group VALUE,VALUE       the group that the ranks are of: one value for each column of --by
   --format NAME             text (default) or json
+
+Options of erratum:
+  --roster FILE             people with their raw scores, one a row; the erratum then names those it concerns
+  --score COL               column that holds the raw scores
+  --by COL,COL              columns of the group values; without it, called as in the projects
+  --person COL              column of names or codes; without it, people are told by their row
+  --cut RANK                also tells whose unrounded rank lies on another side of this percentile rank
 
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.

@@ -1,5 +1,7 @@
 import { readCommand, type Command } from './command.ts';
+import { compareCommand } from './compare-command.ts';
 import { differCommand } from './differ-command.ts';
+import { erratumCommand } from './erratum-command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
@@ -19,6 +21,10 @@ async function run(command: Command): Promise<Outcome> {
       return differCommand(command.path, command.options);
     case 'press':
       return pressCommand(command.path, command.into);
+    case 'compare':
+      return compareCommand(command.paths, command.format);
+    case 'erratum':
+      return erratumCommand(command.paths, command.options);
   }
 }
 

@@ -36,3 +36,14 @@ export const TABLE = {
 export const DIFFER = { ...COHORT, group: text, ranks: text, format: text } as const satisfies OptionNames;
 
 export const PRESS = { ...GENERAL, into: text } as const satisfies OptionNames;
+
+export const COMPARE = { ...GENERAL, format: text } as const satisfies OptionNames;
+
+export const ERRATUM = {
+  ...GENERAL,
+  roster: text,
+  score: text,
+  by: text,
+  person: text,
+  cut: text,
+} as const satisfies OptionNames;
