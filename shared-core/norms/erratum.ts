@@ -1,3 +1,4 @@
+import { printCount } from '../scores/printed-number.ts';
 import type { TextChange } from './edition-compare-choices.ts';
 import {
   cellsInWords,
@@ -70,7 +71,8 @@ function cautionsOf(comparison: EditionComparison, roster: FollowedRoster | null
     ...(cut === null
       ? []
       : [
-          `The side of the cut is decided by the unrounded rank; one that prints as ${cut.text} can lie on either side.`,
+          'The side of the cut is decided by the computed rank before rounding; ' +
+            `one that prints as ${cut.text}, or was adjusted by hand, can lie on either side.`,
         ]),
     ...(roster === null ? [] : ['This text holds data about persons. Keep it as you keep the roster.']),
     'No single score is ground enough for a decision about a person, the corrected one neither.',
@@ -78,12 +80,16 @@ function cautionsOf(comparison: EditionComparison, roster: FollowedRoster | null
 }
 
 function rosterLines({ people, cut, unchanged, changed, unplaced }: FollowedRoster): readonly string[] {
+  const parts = [
+    `${printCount(unchanged)} unchanged`,
+    `${printCount(changed.length)} changed`,
+    `${printCount(unplaced.length)} not found in both editions`,
+  ];
   const crossing = changed.filter(({ side }) => side !== null).length;
-  const crossed = cut === null ? '' : `; ${printCrossing(crossing)} the side of ${cut.text}`;
+  const verb = crossing === 1 ? 'changes' : 'change';
+  const crossed = cut === null ? '' : `; ${printCount(crossing)} ${verb} the side of ${cut.text}`;
   return [
-    ...headed('People of the roster', [
-      `${counted(people, 'row')}: ${unchanged} unchanged, ${changed.length} changed, ${unplaced.length} not found in both editions${crossed}.`,
-    ]),
+    ...headed('People of the roster', [`${counted(people, 'row')}: ${parts.join(', ')}${crossed}.`]),
     ...headed(
       'Changed for',
       changed.map((person) => changedInWords(person, cut?.text ?? '')),
@@ -93,10 +99,6 @@ function rosterLines({ people, cut, unchanged, changed, unplaced }: FollowedRost
       unplaced.map(({ of, problem }) => `${personInWords(of)}: ${problem}`),
     ),
   ];
-}
-
-function printCrossing(count: number): string {
-  return count === 1 ? '1 changes' : `${count} change`;
 }
 
 function changedInWords({ of, group, scoreText, ranks, cells, side }: ChangedPerson, cut: string): string {
