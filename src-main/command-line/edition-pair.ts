@@ -1,7 +1,9 @@
+import { readFile } from 'node:fs/promises';
 import { basename } from 'node:path';
 import type { Reply } from '../../shared-core/desk.ts';
 import { buildNormSet, pressProblem, type NormSet } from '../../shared-core/norms/norm-set.ts';
-import { readProject } from '../project-file/project-store.ts';
+import { projectFromText } from '../../shared-core/norms/project-text.ts';
+import { diskTrouble } from '../project-file/disk-trouble.ts';
 
 /** The paths of two projects, the earlier edition first. */
 export interface EditionPaths {
@@ -24,7 +26,13 @@ export async function readEditions(paths: EditionPaths): Promise<Reply<EditionPa
 
 async function readEdition(path: string): Promise<Reply<NormSet>> {
   const refused = (problem: string): Reply<NormSet> => ({ ok: false, problem: `${basename(path)}: ${problem}` });
-  const read = await readProject(path);
+  let text: string;
+  try {
+    text = await readFile(path, 'utf8');
+  } catch (error) {
+    return { ok: false, problem: diskTrouble(basename(path), 'read', error) };
+  }
+  const read = projectFromText(text);
   if (!read.ok) return refused(read.problem);
   const built = buildNormSet(read.project);
   if (!built.ok) return refused(built.problem);

@@ -107,7 +107,9 @@ describe('compare', () => {
 
   it('refuses a file that is not there or is no project', async () => {
     const old = projectFile('old.normloom', OLD);
-    expect(await ran('compare', `${folderForTest()}/none.normloom`, old)).toMatchObject({ kind: 'refused' });
+    const missing = await ran('compare', `${folderForTest()}/none.normloom`, old);
+    expect(missing).toMatchObject({ kind: 'refused' });
+    expect(missing).toHaveProperty('problem', expect.stringMatching(/^none\.normloom could not be read: /));
     const outcome = await ran('compare', old, fileForTest('b.normloom', '{}'));
     expect(outcome).toHaveProperty('problem', expect.stringContaining('b.normloom: This is not a Normloom project.'));
   });
