@@ -10,7 +10,8 @@ import {
 } from '../../../shared-core/norms/edition-compare.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
-import { builtSet, projectOf, scaleTo, settledProject, TEN_COUNTS } from './small-projects.ts';
+import { groupedProject } from './edition-projects.ts';
+import { builtSet, projectOf, settledProject, TEN_COUNTS } from './small-projects.ts';
 
 const BASE = projectOf(TEN_COUNTS);
 
@@ -190,17 +191,13 @@ const drawnSet: fc.Arbitrary<NormSet> = fc
     notes: fc.string(),
   })
   .map(({ max, counts, groups, columns, rounding, definition, inverse, notes }) => {
-    const cells = groups.map((group, index) => ({
-      values: [group],
-      counts: counts.slice(index * (max + 1), (index + 1) * (max + 1)).map((n, i) => (i === 0 ? n + 1 : n)),
-      weights: null,
-      squares: null,
-    }));
-    const bare = withTable(projectOf([1, 1]), { columns, rounding });
+    const drawn = groups.map((group, index): readonly [string, readonly number[]] => [
+      group,
+      counts.slice(index * (max + 1), (index + 1) * (max + 1)).map((n, i) => (i === 0 ? n + 1 : n)),
+    ]);
+    const bare = withTable(groupedProject('form', Object.fromEntries(drawn)), { columns, rounding });
     return builtSet({
       ...bare,
-      tally: { scale: scaleTo(max), groupColumns: ['form'], weightDecimals: null, cells },
-      groups: { ...bare.groups, by: ['form'] },
       curve: { ...bare.curve, definition },
       sheet: { ...bare.sheet, inverse, notes },
     });

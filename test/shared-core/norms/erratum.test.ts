@@ -10,29 +10,17 @@ import { erratumText } from '../../../shared-core/norms/erratum.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { ratio } from '../../../shared-core/percentile/exact-ratio.ts';
 import type { DecimalMark } from '../../../shared-core/scale/decimal.ts';
-import { builtSet, projectOf, scaleTo, settledProject } from './small-projects.ts';
+import { groupedProject } from './edition-projects.ts';
+import { builtSet, projectOf, settledProject } from './small-projects.ts';
 
 /** Grades 4 and 5 on a scale of 0 to 4, ten pupils each, with a rank alone beside the score. */
 function twoGrades(
   counts: { readonly [grade: string]: readonly number[] },
   release: Partial<NormProject['release']> = {},
 ): NormProject {
-  const bare = projectOf([1, 1]);
-  const length = Object.values(counts)[0]?.length ?? 0;
+  const bare = groupedProject('grade', counts);
   return {
     ...bare,
-    tally: {
-      scale: scaleTo(length - 1),
-      groupColumns: ['grade'],
-      weightDecimals: null,
-      cells: Object.entries(counts).map(([grade, people]) => ({
-        values: [grade],
-        counts: people,
-        weights: null,
-        squares: null,
-      })),
-    },
-    groups: { ...bare.groups, by: ['grade'] },
     table: { ...bare.table, columns: ['count'] },
     release: { ...bare.release, ...release },
   };
