@@ -18,6 +18,8 @@ Options of table and differ:
   --count COL               column that tells how many people stand in a row
   --weight COL              column of weights above 0
   --id COL                  column that names a person; of repeated ones the first row is kept
+  --cluster COL             column of the schools, or other clusters, that people were drawn in; intervals and
+                            standard errors are then those between clusters
   --by COL,COL              columns whose values make the groups, with a table each
   --scale MIN:MAX[:STEP]    attainable scores, such as 0:40 or -5:5:0.5; without it, those met in the file
   --low-is-good             low scores are the good ones: seconds, errors

@@ -12,6 +12,7 @@ const COHORT = {
   count: text,
   weight: text,
   id: text,
+  cluster: text,
   by: text,
   scale: text,
   'low-is-good': flag,
