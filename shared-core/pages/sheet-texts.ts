@@ -71,7 +71,7 @@ export function notesOf({ project }: NormSet, norms: GroupNorms): readonly Parag
   ];
 }
 
-/** The picture in words. */
+/** The words under the picture. */
 export function figureCaption(project: NormProject, { smoothing, precision }: GroupNorms): string {
   const side = project.tally?.scale.direction === 'low-is-good' ? 'above' : 'below';
   const curve =
@@ -81,6 +81,11 @@ export function figureCaption(project: NormProject, { smoothing, precision }: Gr
   const { level, interval } = project.precision;
   const band = `as a light band, the ${level} % ${intervalName(interval)} interval of the observed rank`;
   return `Cumulative per cent by raw score: ${steps}, ${curve} and, ${band} (error of sampling).`;
+}
+
+/** The picture for those who do not see it: what it shows, and the numbers of the group. */
+export function figureInWords(project: NormProject, norms: GroupNorms): string {
+  return `${figureCaption(project, norms)} ${sampleFacts(project, norms)}`;
 }
 
 /** n, mean, SD and five numbers in a sentence or two. */
