@@ -3,8 +3,9 @@ import { COMPARE_FORMATS, type CompareFormat } from './compare-command.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
 import type { EditionPaths } from './edition-pair.ts';
 import { erratumOptions, type ErratumOptions } from './erratum-options.ts';
-import { COMPARE, DIFFER, ERRATUM, GENERAL, PRESS, TABLE, type OptionNames } from './option-names.ts';
+import { COMPARE, DIFFER, ERRATUM, GENERAL, PRESS, QUERIES, TABLE, type OptionNames } from './option-names.ts';
 import { oneOf, readOrSay, textGiven, type OptionValues } from './option-values.ts';
+import { queriesOptions, type QueriesFormat } from './queries-options.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
 
@@ -15,6 +16,7 @@ export type Command =
   | { readonly kind: 'table'; readonly path: string; readonly options: TableOptions }
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
   | { readonly kind: 'press'; readonly path: string; readonly into: string }
+  | { readonly kind: 'queries'; readonly path: string; readonly format: QueriesFormat }
   | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
   | { readonly kind: 'erratum'; readonly paths: EditionPaths; readonly options: ErratumOptions };
 
@@ -50,6 +52,11 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       return readPairCommand(others, ERRATUM, 'erratum takes two projects', (paths, values) => {
         const options = erratumOptions(values);
         return options.ok ? { ok: true, value: { kind: 'erratum', paths, options: options.value } } : options;
+      });
+    case 'queries':
+      return readFileCommand(others, QUERIES, 'queries takes one project', (path, values) => {
+        const format = queriesOptions(values);
+        return format.ok ? { ok: true, value: { kind: 'queries', path, format: format.value } } : format;
       });
     default: {
       const read = readWords(words, GENERAL);

@@ -5,6 +5,7 @@ import { erratumCommand } from './erratum-command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
+import { queriesCommand } from './queries-command.ts';
 import { programVersion } from '../program-version.ts';
 import { tableCommand } from './table-command.ts';
 
@@ -21,6 +22,8 @@ async function run(command: Command): Promise<Outcome> {
       return differCommand(command.path, command.options);
     case 'press':
       return pressCommand(command.path, command.into);
+    case 'queries':
+      return queriesCommand(command.path, command.format);
     case 'compare':
       return compareCommand(command.paths, command.format);
     case 'erratum':

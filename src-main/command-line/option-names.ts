@@ -48,3 +48,5 @@ export const ERRATUM = {
   person: text,
   cut: text,
 } as const satisfies OptionNames;
+
+export const QUERIES = { ...GENERAL, format: text } as const satisfies OptionNames;

@@ -3,7 +3,7 @@ import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf } from '../../shared-core/pages/group-method.ts';
-import { cellText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, markedText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { printCount } from '../../shared-core/scores/printed-number.ts';
 import { distinctTitles } from './sheet-names.ts';
 import { asBold, asHead, asLabel, asTitle, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
@@ -41,7 +41,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
 
   sheet.columns = WIDTHS.map((width) => ({ width }));
-  sheet.getCell('A1').value = 'Look up a raw score';
+  sheet.getCell('A1').value = draftTitle(normSet, 'Look up a raw score');
   asTitle(sheet.getCell('A1'));
   proseRow(sheet, 2, surveyName(project), 2, WIDTHS[0] + WIDTHS[1]);
   sheet.getCell('A4').value = 'Group';
@@ -72,7 +72,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     const letter = list.getColumn(3 + index).letter;
     const found = `INDEX(${range(letter, 2, 1 + groups.length * perGroup)},${onList(places.position)})`;
     const otherwise = index === 0 ? textInFormula(notFound(normSet)) : '""';
-    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: cellText(exampleRow, column) };
+    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: markedText(exampleRow, column) };
     cell.alignment = { horizontal: 'right', wrapText: true };
     if (index === 0) for (const part of [name, cell]) asBold(part);
     for (const part of [name, cell]) ruleBelow(part, index === columns.length - 1 ? 'strong' : 'fine');
@@ -85,7 +85,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
   sheet.getCell(people, 2).alignment = { horizontal: 'right' };
   proseRow(sheet, people + 2, cautionsOf(project), 2, WIDTHS[0] + WIDTHS[1]);
-  setUpPages(sheet, project.sheet, `Edition ${project.release.edition} · check ${normSet.check}`);
+  setUpPages(sheet, project.sheet, draftTitle(normSet, `Edition ${project.release.edition} · check ${normSet.check}`));
 }
 
 /** Ranges of the list as formulas name them; the position is a single cell, without its sheet. */
@@ -107,7 +107,7 @@ function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]):
   groups.forEach(({ rows }, group) => {
     rows.forEach((row, index) => {
       const at = 2 + group * rows.length + index;
-      const cells = [titles[group] ?? '', row.score, ...columns.map((column) => cellText(row, column))];
+      const cells = [titles[group] ?? '', row.score, ...columns.map((column) => markedText(row, column))];
       cells.forEach((value, place) => {
         list.getCell(at, place + 1).value = value;
         if (place > 1) list.getCell(at, place + 1).alignment = { horizontal: 'right' };

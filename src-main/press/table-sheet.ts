@@ -1,10 +1,12 @@
 import type { Worksheet } from 'exceljs';
+import { ADJUSTED_MARK, adjustmentNote } from '../../shared-core/norms/adjustment-words.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
 import {
   cellText,
+  draftTitle,
   editionLine,
   sampleFacts,
   sheetSubtitle,
@@ -12,7 +14,7 @@ import {
   surveyName,
 } from '../../shared-core/pages/sheet-texts.ts';
 import { inFives } from '../../shared-core/pages/table-rows.ts';
-import { typedCell } from './typed-cell.ts';
+import { typedCell, type TypedCell } from './typed-cell.ts';
 import { UNROUNDED_FORMAT, unroundedColumns } from './unrounded-columns.ts';
 import { asBold, asHead, asTitle, fillCell, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
 
@@ -35,8 +37,9 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
     project.sheet.howToRead,
     cautionsOf(project),
     project.sheet.notes,
+    adjustmentNote(norms) ?? '',
   ].filter((text) => text.trim() !== '');
-  sheet.getCell(1, 1).value = sheetTitle(project, norms);
+  sheet.getCell(1, 1).value = draftTitle(normSet, sheetTitle(project, norms));
   asTitle(sheet.getCell(1, 1));
   prose.forEach((text, index) => proseRow(sheet, index + 2, text, width, width * COLUMN_WIDTH));
   const headRow = prose.length + 3;
@@ -55,7 +58,8 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
     const at = headRow + 1 + index;
     columns.forEach((column, place) => {
       const cell = sheet.getCell(at, place + 1);
-      fillCell(cell, typedCell(cellText(row, column)));
+      const typed = typedCell(cellText(row, column));
+      fillCell(cell, column.key === 'rank' && row.adjusted !== null ? marked(typed) : typed);
       if (place === 0) asBold(cell);
     });
     unrounded.forEach(({ valueOf }, place) => {
@@ -72,4 +76,11 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
   setUpPages(sheet, project.sheet, editionLine(normSet, norms));
   sheet.pageSetup.printArea = `A1:${sheet.getColumn(width).letter}${lastRow}`;
   sheet.pageSetup.printTitlesRow = `${headRow}:${headRow}`;
+}
+
+/** A rank adjusted by hand stays a number: its format shows the mark. */
+function marked(typed: TypedCell): TypedCell {
+  return typed.kind === 'text'
+    ? { kind: 'text', value: `${typed.value}${ADJUSTED_MARK}` }
+    : { ...typed, format: `${typed.format.split(';')[0] ?? ''}"${ADJUSTED_MARK}"` };
 }

@@ -1,7 +1,7 @@
 import ExcelJS from 'exceljs';
 import JSZip from 'jszip';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { ABOUT, fillAboutSheet } from './about-sheet.ts';
 import { fillLookUp, LOOK_UP, LOOK_UP_ROWS } from './look-up-sheet.ts';
 import { releaseDay } from './release-day.ts';
@@ -19,7 +19,7 @@ export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   workbook.lastModifiedBy = 'Normloom';
   workbook.created = day;
   workbook.modified = day;
-  workbook.title = surveyName(normSet.project);
+  workbook.title = draftTitle(normSet, surveyName(normSet.project));
   workbook.calcProperties.fullCalcOnLoad = true;
   const titles = normSet.groups.map(({ group }) => group.title);
   const names = sheetNames(titles, [LOOK_UP, LOOK_UP_ROWS, ABOUT]);
