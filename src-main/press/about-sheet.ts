@@ -7,18 +7,23 @@ import { fitFacts } from '../../shared-core/pages/fit-notes.ts';
 import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
 import { draftTitle } from '../../shared-core/pages/sheet-texts.ts';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
-import { asBold, asProse, asTitle, linesIn, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asProse, asTitle, linesIn, ruleBelow } from './workbook-look.ts';
+import { rangeText, type NamedRange } from './workbook-names.ts';
+import { editionFoot, setUpPages } from './workbook-pages.ts';
 
 export const ABOUT = 'About';
 const WIDTHS = [24, 90] as const;
 const ROW_NUMBERS_SHOWN = 20;
 
-/** Where the numbers come from: method, cautions, the source file with its fingerprint, and every row left out. */
-export function fillAboutSheet(sheet: Worksheet, normSet: NormSet): void {
+/**
+ * Where the numbers come from: method, cautions, the source file with its fingerprint, and every row left out; then how
+ * the workbook can be checked, and its named ranges.
+ */
+export function fillAboutSheet(sheet: Worksheet, normSet: NormSet, ranges: readonly NamedRange[]): void {
   sheet.columns = WIDTHS.map((width) => ({ width }));
   sheet.getCell(1, 1).value = draftTitle(normSet, 'About these tables');
   asTitle(sheet.getCell(1, 1));
-  aboutLines(normSet).forEach(([name, value], index) => {
+  [...aboutLines(normSet), ...checkLines(ranges)].forEach(([name, value], index) => {
     const [left, right] = [sheet.getCell(index + 3, 1), sheet.getCell(index + 3, 2)];
     left.value = name;
     right.value = value;
@@ -29,8 +34,7 @@ export function fillAboutSheet(sheet: Worksheet, normSet: NormSet): void {
     sheet.getRow(index + 3).height = 15 * Math.max(linesIn(name, WIDTHS[0]), linesIn(String(value), WIDTHS[1]));
     for (const cell of [left, right]) ruleBelow(cell, 'fine');
   });
-  const edition = `Edition ${normSet.project.release.edition} · check ${normSet.check}`;
-  setUpPages(sheet, normSet.project.sheet, draftTitle(normSet, edition));
+  setUpPages(sheet, normSet.project.sheet, editionFoot(normSet), WIDTHS[0] + WIDTHS[1]);
 }
 
 function aboutLines({
@@ -77,6 +81,17 @@ function aboutLines({
         ] as const)),
   ];
   return lines.filter(([, value]) => String(value).trim() !== '');
+}
+
+function checkLines(ranges: readonly NamedRange[]): readonly (readonly [string, string])[] {
+  return [
+    [
+      'Workings',
+      'Each group has a sheet of workings, in which formulas make its printed ranks anew and compare them with the ' +
+        'table. Change a count there and they follow; the tables themselves hold values.',
+    ],
+    ['Names', ranges.map((range) => `${range.name} = ${rangeText(range)}`).join('\n')],
+  ];
 }
 
 function rowNumbers(rows: readonly number[], count: number): string {
