@@ -65,7 +65,7 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       if (general !== null) return { ok: true, value: general };
       return wrong(
         name === undefined
-          ? 'Tell what to do: table, differ, press, compare or erratum.'
+          ? 'Tell what to do: table, differ, press, queries, compare or erratum.'
           : `There is no command "${name}".`,
       );
     }
