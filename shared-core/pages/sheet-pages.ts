@@ -41,6 +41,8 @@ const LEAST_ROWS = 5;
 const PICTURE_SHAPE = 0.47;
 const BELOW_PICTURE = 5;
 const LEAST_NOTE_LINES = 6;
+/** A note of more lines is set in two columns, which the eye follows more easily. */
+const MOST_LINES_ACROSS = 3;
 
 export interface SheetPages {
   readonly pages: readonly (readonly Block[])[];
@@ -166,7 +168,15 @@ function layAdjustments(flow: SheetFlow, norms: GroupNorms): void {
   const note = adjustmentNote(norms);
   if (note === null) return;
   flow.skip(BELOW_PICTURE);
-  flow.inTwoColumns(linesOf(note, 'sans', SMALL_PROSE, flow.halfWidth, paragraph('adjustments')), SMALL_PROSE);
+  const linesIn = (width: number): readonly LooseLine[] =>
+    linesOf(note, 'sans', SMALL_PROSE, width, paragraph('adjustments'));
+  const across = linesIn(flow.width);
+  if (across.length > MOST_LINES_ACROSS) {
+    flow.inTwoColumns(linesIn(flow.halfWidth), SMALL_PROSE);
+    return;
+  }
+  flow.need(heightOf(across, SMALL_PROSE));
+  placeFull(flow, across, SMALL_PROSE);
 }
 
 function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
