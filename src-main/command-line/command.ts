@@ -1,7 +1,8 @@
 import type { Reply } from '../../shared-core/desk.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
-import { DIFFER, GENERAL, PRESS, TABLE, type OptionNames } from './option-names.ts';
+import { DIFFER, GENERAL, PRESS, READ_BACK, TABLE, type OptionNames } from './option-names.ts';
 import { textGiven, type OptionValues } from './option-values.ts';
+import { readBackOptions, type ReadBackOptions } from './read-back-options.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
 
@@ -11,7 +12,8 @@ export type Command =
   | { readonly kind: 'version' }
   | { readonly kind: 'table'; readonly path: string; readonly options: TableOptions }
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
-  | { readonly kind: 'press'; readonly path: string; readonly into: string };
+  | { readonly kind: 'press'; readonly path: string; readonly into: string }
+  | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions };
 
 /** Reads the words; the problem is a sentence about what is wrong with them. */
 export function readCommand(words: readonly string[]): Reply<Command> {
@@ -34,12 +36,16 @@ export function readCommand(words: readonly string[]): Reply<Command> {
           ? wrong('Tell where to press with --into FOLDER.')
           : { ok: true, value: { kind: 'press', path, into } };
       });
+    case 'read-back':
+      return readReadBack(others);
     default: {
       const read = readWords(words, GENERAL);
       if (!read.ok) return read;
       const general = generalCommand(read.value.values);
       if (general !== null) return { ok: true, value: general };
-      return wrong(name === undefined ? 'Tell what to do: table, differ or press.' : `There is no command "${name}".`);
+      return wrong(
+        name === undefined ? 'Tell what to do: table, differ, press or read-back.' : `There is no command "${name}".`,
+      );
     }
   }
 }
@@ -61,6 +67,17 @@ function readFileCommand(
     return wrong(`${takes}, not ${positionals.length}. Put names with spaces in quotes.`);
   }
   return commandOn(path, values);
+}
+
+function readReadBack(words: readonly string[]): Reply<Command> {
+  const read = readWords(words, READ_BACK);
+  if (!read.ok) return read;
+  const { values, positionals } = read.value;
+  const general = generalCommand(values);
+  if (general !== null) return { ok: true, value: general };
+  if (positionals.length === 0) return wrong('read-back takes at least one pressed file.');
+  const options = readBackOptions(values);
+  return options.ok ? { ok: true, value: { kind: 'read-back', paths: positionals, options: options.value } } : options;
 }
 
 function generalCommand(values: OptionValues): Command | null {

@@ -36,3 +36,5 @@ export const TABLE = {
 export const DIFFER = { ...COHORT, group: text, ranks: text, format: text } as const satisfies OptionNames;
 
 export const PRESS = { ...GENERAL, into: text } as const satisfies OptionNames;
+
+export const READ_BACK = { ...GENERAL, against: text, format: text } as const satisfies OptionNames;

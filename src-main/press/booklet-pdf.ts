@@ -1,4 +1,3 @@
-import pdfmake from 'pdfmake';
 import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces.js';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import type { Block, Booklet, BookletPage, Rule, TextLine } from '../../shared-core/pages/booklet.ts';
@@ -6,7 +5,8 @@ import { composeBooklet } from '../../shared-core/pages/booklet-pages.ts';
 import { PRINTED_COLOURS } from '../../shared-core/pages/ogive-picture.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
 import { ascentOf } from '../../shared-core/pages/text-width.ts';
-import { FONT_STYLES, fontFiles } from './fonts.ts';
+import { FONT_STYLES } from './fonts.ts';
+import { housePrinter } from './house-printer.ts';
 import { releaseDay } from './release-day.ts';
 
 export interface DrawnBooklet {
@@ -21,13 +21,9 @@ export async function bookletPdf(
   onProgress: (share: number) => void = () => {},
 ): Promise<DrawnBooklet> {
   const booklet = composeBooklet(normSet);
-  const files = new Set(Object.values(fontFiles()).flatMap((family) => Object.values(family)));
-  pdfmake.setFonts(fontFiles());
-  pdfmake.setUrlAccessPolicy(() => false);
-  pdfmake.setLocalAccessPolicy((path) => files.has(path));
-  pdfmake.setProgressCallback(onProgress);
+  const printer = housePrinter(onProgress);
   // Kept pages can still be counted before they are written.
-  const document = pdfmake.createPdf(definition(booklet, releaseDay(normSet.project)), { bufferPages: true });
+  const document = printer.createPdf(definition(booklet, releaseDay(normSet.project)), { bufferPages: true });
   const drawn = (await document.getStream()).bufferedPageRange().count;
   if (drawn !== booklet.pages.length) {
     throw new Error(`the booklet has ${booklet.pages.length} pages, but ${drawn} were drawn`);

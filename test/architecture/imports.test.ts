@@ -28,8 +28,17 @@ const RULES: readonly (readonly [string, Rule])[] = [
   [
     'src-main/press',
     host(
-      ['pdfmake', 'exceljs', 'jszip', 'papaparse', 'write-file-atomic', '@expo-google-fonts/*'],
-      ['src-main/project-file'],
+      [
+        'pdfmake',
+        'pdfjs-dist',
+        'exceljs',
+        'jszip',
+        'papaparse',
+        'write-file-atomic',
+        'valibot',
+        '@expo-google-fonts/*',
+      ],
+      ['src-main/project-file', 'src-main/program-version.ts'],
     ),
   ],
   ['src-main/project-file', host(['write-file-atomic', 'valibot'], [])],
