@@ -7,7 +7,7 @@ const COLUMN_NAMES = [COLUMN_KEYS.slice(0, 5), COLUMN_KEYS.slice(5, 8), COLUMN_K
 export const HELP = `normloom table FILE --score COL [options]   conversion tables of a cohort file
 normloom differ FILE --score COL --ranks RANKFILE [options]
                                             how somebody's ranks were made from the same people
-normloom press PROJECT --into FOLDER        booklet.pdf, tables.xlsx, tables.csv, norm-set.json and certificate
+normloom press PROJECT --into FOLDER        booklet, workbook, csv, norm set and certificate of a project
 normloom read-back FILE… --against PROJECT  pressed files compared with the project, cell by cell
 normloom --help | --version
 
@@ -50,6 +50,5 @@ Options of read-back:
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.
 stdout carries only the result, stderr what there is to say about it.
-Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method,
-or cells differ.
+Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method, or cells differ.
 `;

@@ -54,7 +54,7 @@ function contentOf(certificate: Certificate): Content[] {
   const { survey, programVersion, cells, recomputed, notRecomputed, recipes } = certificate;
   const differ = certificate.files.reduce((sum, { differences }) => sum + differences, 0);
   return [
-    { text: CERTIFICATE_TITLE, ...FONT_STYLES['serif-bold'], fontSize: TITLE.size },
+    { text: CERTIFICATE_TITLE, outline: true, ...FONT_STYLES['serif-bold'], fontSize: TITLE.size },
     { text: survey, ...FONT_STYLES['serif-italic'], fontSize: SUBTITLE.size, margin: [0, 2, 0, 12] },
     paragraph(
       `Normloom ${programVersion} opened the files below again after they were made and compared every printed cell ` +

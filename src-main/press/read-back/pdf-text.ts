@@ -27,7 +27,12 @@ const SAME_LINE = 0.6;
 /** The lines of every page of a PDF, from the top, as another program reads them. Throws on a file that is no PDF. */
 export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
   const { getDocument } = await pdfReader();
-  const task = getDocument({ data: bytes.slice(), isEvalSupported: false, useSystemFonts: false, verbosity: 0 });
+  const task = getDocument({
+    data: Uint8Array.from(bytes),
+    isEvalSupported: false,
+    useSystemFonts: false,
+    verbosity: 0,
+  });
   try {
     const document = await task.promise;
     const pages: (readonly PdfLine[])[] = [];
