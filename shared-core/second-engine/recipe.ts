@@ -71,7 +71,7 @@ function rankSentences(
   const { definition } = project.curve;
   const all = exactly({ top: sum(counts.weights), bottom: counts.unit });
   const weight = (units: bigint): string => exactly({ top: units, bottom: counts.unit });
-  const divided = `Divide by ${all} and multiply by 100: ${decimalText(rank)}.`;
+  const divided = ended(`Divide by ${all} and multiply by 100: ${decimalText(rank)}`);
   switch (definition.kind) {
     case 'midpoint':
       return [
@@ -88,7 +88,9 @@ function rankSentences(
       const meanRank: Fraction = { top: people * (2n * worse + at) + total, bottom: 2n * total };
       const scaled = counts.people === counts.weights ? '' : `, multiply by ${people}/${all}`;
       return [
-        `Add half of the second number to the first${scaled} and add 1/2: the mean rank r is ${decimalText(meanRank)}.`,
+        ended(
+          `Add half of the second number to the first${scaled} and add 1/2: the mean rank r is ${decimalText(meanRank)}`,
+        ),
         `With a = ${definition.offset}, 100 (r − a)/(${people} + 1 − 2a) is ${decimalText(rank)} (held between 0 and 100).`,
       ];
     }
@@ -134,6 +136,10 @@ function exactly({ top, bottom }: Fraction): string {
     decimals += 1;
   }
   return withPoint(units / bottom, decimals);
+}
+
+function ended(sentence: string): string {
+  return sentence.endsWith('…') ? sentence : `${sentence}.`;
 }
 
 /** The first decimals, cut off, with dots where more would follow. */

@@ -127,6 +127,17 @@ describe('imports', () => {
     expect(problems).toEqual([]);
   });
 
+  it('of the second engine take nothing but types from the first', () => {
+    const own = files.filter(({ path }) => isInside(path, 'shared-core/second-engine'));
+    expect(own.length).toBeGreaterThan(3);
+    const values = own.flatMap(({ path, text }) =>
+      [...text.matchAll(/^import (?!type )[^;]*from '([^']+)';/gm)].flatMap(([, name = '']) =>
+        name.startsWith('./') ? [] : [`${path} imports ${name}`],
+      ),
+    );
+    expect(values).toEqual([]);
+  });
+
   it('of electron stand only in its host and the tests of it', () => {
     const importers = [...files, ...codeFiles('test')]
       .filter((file) => importsOf(file).includes('electron'))

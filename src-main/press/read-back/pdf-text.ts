@@ -1,5 +1,6 @@
 import { createRequire } from 'node:module';
 import { pathToFileURL } from 'node:url';
+import type * as pdfjs from 'pdfjs-dist/legacy/build/pdf.mjs';
 
 /** Words that stand together on a page; points from the left and from the bottom of the paper. */
 export interface PdfCell {
@@ -83,7 +84,7 @@ function joined(line: readonly PdfCell[]): readonly PdfCell[] {
   return cells;
 }
 
-type PdfReader = typeof import('pdfjs-dist/legacy/build/pdf.mjs');
+type PdfReader = typeof pdfjs;
 
 let reader: Promise<PdfReader> | null = null;
 
@@ -98,7 +99,7 @@ function pdfReader(): Promise<PdfReader> {
 
 async function loadReader(): Promise<PdfReader> {
   for (const name of ['DOMMatrix', 'ImageData', 'Path2D']) {
-    if (!Reflect.has(globalThis, name)) Reflect.set(globalThis, name, class {});
+    if (!Reflect.has(globalThis, name)) Reflect.set(globalThis, name, function unused(): void {});
   }
   const { warn } = console;
   console.warn = (...told: unknown[]): void => {

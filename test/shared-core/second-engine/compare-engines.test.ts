@@ -2,8 +2,10 @@ import fc from 'fast-check';
 import { describe, expect, it, vi } from 'vitest';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
+import type * as exactRatio from '../../../shared-core/percentile/exact-ratio.ts';
 import type { RankDefinition } from '../../../shared-core/percentile/percentile-rank.ts';
 import { comparedCells, compareEngines, engineProblem } from '../../../shared-core/second-engine/compare-engines.ts';
+import type * as fraction from '../../../shared-core/second-engine/fraction.ts';
 import { LOG_LINEAR, sampleNormSet, sampleProject, WHOLE_SCALE } from '../pages/sample-norm-set.ts';
 import { buildNormSet } from '../../../shared-core/norms/norm-set.ts';
 
@@ -123,7 +125,7 @@ describe('a wrong rounding', () => {
   it('in the first engine is found', async () => {
     vi.resetModules();
     vi.doMock('../../../shared-core/percentile/exact-ratio.ts', async (original) => {
-      const real = await original<typeof import('../../../shared-core/percentile/exact-ratio.ts')>();
+      const real = await original<typeof exactRatio>();
       const roundRatio: typeof real.roundRatio = (value, decimals) =>
         (value.numerator * 10n ** BigInt(decimals)) / value.denominator;
       return { ...real, roundRatio };
@@ -144,7 +146,7 @@ describe('a wrong rounding', () => {
   it('in the second engine is found', async () => {
     vi.resetModules();
     vi.doMock('../../../shared-core/second-engine/fraction.ts', async (original) => {
-      const real = await original<typeof import('../../../shared-core/second-engine/fraction.ts')>();
+      const real = await original<typeof fraction>();
       const nearestWhole: typeof real.nearestWhole = ({ top, bottom }) => top / bottom;
       return { ...real, nearestWhole };
     });

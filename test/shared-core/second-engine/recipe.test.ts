@@ -51,7 +51,7 @@ describe('recipeOf', () => {
       'Take the 10 pupils of Grade 4, whose weights add up to 14, and the raw score 1.',
       'Add up the weights of those with a higher score: 10.5; and of those with this score: 2.',
       'Add both numbers: 12.5.',
-      'Divide by 14 and multiply by 100: 89.2857….',
+      'Divide by 14 and multiply by 100: 89.2857…',
       'Round to one decimal, a half upwards. That gives 89.3.',
       'The table prints 89.3.',
     ]);
@@ -72,7 +72,7 @@ describe('recipeOf', () => {
       'With a = 3/8, 100 (r − a)/(10 + 1 − 2a) is 79.2682… (held between 0 and 100).',
     ]);
     expect(recipeOf(small({ kind: 'plotting-position', offset: '0' }, true), 0, 3)[2]).toBe(
-      'Add half of the second number to the first, multiply by 10/14 and add 1/2: the mean rank r is 9.4285….',
+      'Add half of the second number to the first, multiply by 10/14 and add 1/2: the mean rank r is 9.4285…',
     );
     expect(recipeOf(small({ kind: 'grouped', width: 2 }, false, 'low-is-good'), 0, 1).slice(2, 5)).toEqual([
       'Classes of 2 scores are laid from the poor end of the scale; this score is number 2 in its class, and its middle lies 3/4 of the way through it.',

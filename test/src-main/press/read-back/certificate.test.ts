@@ -3,9 +3,11 @@ import { mkdtemp, readdir, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it, onTestFinished, vi } from 'vitest';
+import type * as fraction from '../../../../shared-core/second-engine/fraction.ts';
 import { pressFiles, type FileToWrite } from '../../../../src-main/press/press-files.ts';
 import { differenceLine } from '../../../../src-main/press/read-back/cell-differences.ts';
 import { readBack } from '../../../../src-main/press/read-back/read-back.ts';
+import type * as csv from '../../../../src-main/press/tables-csv.ts';
 import { LOG_LINEAR, sampleNormSet, sampleProject, WHOLE_SCALE } from '../../../shared-core/pages/sample-norm-set.ts';
 import type { NormProject } from '../../../../shared-core/norms/norm-project.ts';
 import { readPdf } from '../pdf-text.ts';
@@ -104,7 +106,7 @@ describe('a press', () => {
     await writeFile(join(folder, 'certificate.json'), '{}');
     vi.resetModules();
     vi.doMock('../../../../src-main/press/tables-csv.ts', async (original) => {
-      const { tablesCsv } = await original<typeof import('../../../../src-main/press/tables-csv.ts')>();
+      const { tablesCsv } = await original<typeof csv>();
       const altered: typeof tablesCsv = (set) =>
         new TextEncoder().encode(
           new TextDecoder('utf-8', { ignoreBOM: true }).decode(tablesCsv(set)).replace('<1', '2'),
@@ -127,7 +129,7 @@ describe('a press', () => {
   it('whose tables the second engine works out otherwise is refused in a sentence', async () => {
     vi.resetModules();
     vi.doMock('../../../../shared-core/second-engine/fraction.ts', async (original) => {
-      const real = await original<typeof import('../../../../shared-core/second-engine/fraction.ts')>();
+      const real = await original<typeof fraction>();
       const nearestWhole: typeof real.nearestWhole = ({ top, bottom }) => top / bottom;
       return { ...real, nearestWhole };
     });
