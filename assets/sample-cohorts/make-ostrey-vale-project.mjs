@@ -26,7 +26,7 @@ const READING = {
   sheet: null,
   roles: [
     { column: 'pupil_id', role: 'id' },
-    { column: 'school', role: 'unused' },
+    { column: 'school', role: 'cluster' },
     { column: 'grade', role: 'group' },
     { column: 'form', role: 'group' },
     { column: 'age_months', role: 'unused' },
@@ -35,7 +35,7 @@ const READING = {
   ],
   missing: ['99', 'abs'],
   scale: { min: 0, max: 40, step: 1, direction: 'high-is-good' },
-  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
 };
 
 const DOCUMENTATION = {

@@ -75,7 +75,7 @@ export interface ConversionRow {
   /** Standard error of the printed rank, percentile-rank points; null where there is none. */
   readonly standardError: number | null;
   /** Standard error of the observed midpoint rank, whatever the definition. */
-  readonly midpointError: number;
+  readonly midpointError: number | null;
   /** What the error of measurement leaves open, 0–100; null without a reliability. */
   readonly band: PercentInterval | null;
   /** What else could have been printed; null where it was not asked for. */
@@ -148,7 +148,9 @@ function rowOf(basis: RowBasis, { position, score, observed, rank, part }: RowPa
   const interval = precision.intervals?.[position] ?? null;
   const band = precision.bands?.[position]?.ranks ?? null;
   const range = basis.ranges?.[position] ?? null;
-  const smoothedError = curve?.standardErrors?.[position] ?? null;
+  const oneByOne = curve?.standardErrors?.[position] ?? null;
+  const factor = precision.smoothedErrorFactor;
+  const smoothedError = oneByOne === null || factor === null ? null : oneByOne * factor;
   const standardError = curve === null ? (precision.standardErrors?.[position] ?? null) : smoothedError;
   const linear = choices.zSource === 'linear';
   const normal = derivedScores(rank, linear ? linearZ(table, summary, score) : normalisedZ(rank));
@@ -182,7 +184,7 @@ function rowOf(basis: RowBasis, { position, score, observed, rank, part }: RowPa
           },
     interval,
     standardError,
-    midpointError: precision.midpointErrors[position] ?? NaN,
+    midpointError: precision.midpointErrors?.[position] ?? null,
     band,
     range,
     printed: printed.text,

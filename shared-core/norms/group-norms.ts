@@ -1,3 +1,5 @@
+import { countedRank } from '../precision/counted-rank.ts';
+import { samplingDesign, type SamplingDesign } from '../precision/sampling-design.ts';
 import { summarise, type CohortSummary } from '../tally/cohort-summary.ts';
 import { smooth } from '../smoothing/smooth.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
@@ -16,6 +18,8 @@ import { smoothingOf, USUAL_LOG_LINEAR } from './smoothing-choice.ts';
 export interface GroupNorms {
   readonly group: NormGroup;
   readonly summary: CohortSummary;
+  /** How its people were drawn: one by one, or in clusters. */
+  readonly sampling: SamplingDesign;
   readonly smoothing: GroupSmoothing;
   /** How fair the smoothing is to the data; null without smoothing. */
   readonly evidence: FitEvidence | null;
@@ -34,14 +38,16 @@ export function normsOfGroup(project: NormProject, group: NormGroup, known: Grou
   const { table } = group;
   const { definition } = project.curve;
   const summary = summarise(table);
+  const sampling = samplingDesign(table, countedRank(definition) ?? 'midpoint', summary.effectiveN);
   const smoothing = known ?? smoothGroup(table, smoothingOf(project, group.key), definition);
   const curve = smoothing.state === 'smoothed' ? smoothing.curve : null;
-  const precision = precisionOf(table, summary, definition, project.precision, curve);
+  const precision = precisionOf({ table, summary, sampling, definition, choices: project.precision, curve });
   const ranges = project.table.columns.includes('print-range') ? printRanges(project, table, curve) : null;
   const rows = conversionRows({ table, summary, definition, choices: project.table, curve, precision, ranges });
   return {
     group,
     summary,
+    sampling,
     smoothing,
     evidence: curve === null ? null : fitEvidence(rows, curve, table, project.table),
     precision,

@@ -1,5 +1,6 @@
 import * as v from 'valibot';
 import { scaleProblems } from '../scale/score-scale.ts';
+import { cellClustersSchema, clustersFit } from './cluster-schema.ts';
 import { COLUMN_KEYS } from './column-keys.ts';
 import { LEFT_OUT_RULES } from './reading.ts';
 import { precisionSchema, smoothingSchema } from './smoothing-schema.ts';
@@ -40,6 +41,7 @@ const tally = v.pipe(
             counts: v.pipe(v.array(wholeNumber), v.readonly()),
             weights: v.nullable(v.pipe(v.array(unitText), v.readonly())),
             squares: v.nullable(v.pipe(v.array(unitText), v.readonly())),
+            clusters: v.nullable(cellClustersSchema),
           }),
           v.readonly(),
         ),
@@ -92,7 +94,10 @@ const reading = v.pipe(
     roles: v.pipe(
       v.array(
         v.pipe(
-          v.object({ column: shortText, role: v.picklist(['score', 'count', 'weight', 'group', 'id', 'unused']) }),
+          v.object({
+            column: shortText,
+            role: v.picklist(['score', 'count', 'weight', 'group', 'id', 'cluster', 'unused']),
+          }),
           v.readonly(),
         ),
       ),
@@ -107,6 +112,8 @@ const reading = v.pipe(
         duplicateId: v.picklist(['keep-first', 'leave-out-all', 'keep-all']),
         raggedRow: v.picklist(['leave-out', 'keep-readable']),
         blankGroup: v.picklist(['leave-out', 'keep']),
+        /** People whose cluster is not told: each a cluster of one, or left out. */
+        blankCluster: v.picklist(['alone', 'leave-out']),
       }),
       v.readonly(),
     ),
@@ -205,7 +212,7 @@ const release = v.pipe(
 );
 
 export const PROJECT_FORMAT = 'normloom-project';
-export const PROJECT_VERSION = 2;
+export const PROJECT_VERSION = 3;
 
 export const normProjectSchema = v.pipe(
   v.object({
@@ -250,8 +257,10 @@ function tallyFits({ tally, groups }: TallyBearing): boolean {
   const weighted = tally.weightDecimals !== null;
   return (
     groups.by.every((column) => tally.groupColumns.includes(column)) &&
+    tally.cells.every((cell) => (cell.clusters === null) === (tally.cells[0]?.clusters === null)) &&
     tally.cells.every(
       (cell) =>
+        clustersFit(cell) &&
         cell.values.length === tally.groupColumns.length &&
         cell.counts.length === length &&
         (weighted

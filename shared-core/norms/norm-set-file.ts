@@ -50,7 +50,7 @@ function groupForFile(
   points: readonly PercentilePoint[],
   bootstrap: GroupBootstrap | null,
 ): unknown {
-  const { summary, group, rows, smoothing } = norms;
+  const { summary, sampling, group, rows, smoothing } = norms;
   const curve = smoothing.state === 'smoothed' ? smoothing.curve : null;
   const ranges = printRanges(normSet.project, group.table, curve);
   return {
@@ -58,6 +58,8 @@ function groupForFile(
     n: summary.n,
     'weight-sum': summary.weightSum,
     'effective-n': summary.effectiveN,
+    clusters: sampling.clusters,
+    'design-effect': sampling.designEffect,
     mean: summary.mean,
     sd: summary.sd,
     skewness: summary.skewness,

@@ -8,6 +8,7 @@ import { definitionKey } from './definitions.ts';
 import { normsOfGroup, type GroupNorms } from './group-norms.ts';
 import { normGroups } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
+import { clusterFacts } from './sampling-words.ts';
 import { queriesOf, type Query } from './queries.ts';
 import { methodText } from './statements.ts';
 
@@ -67,10 +68,11 @@ function checkCode(project: NormProject, groups: readonly GroupNorms[]): string 
     [documentation.testDates, documentation.weighting],
     source === null ? [] : [source.file, source.sha256, source.rowsRead, source.rowsKept],
     project.table.columns,
-    groups.map(({ group, summary, smoothing, rows, inverse }) => [
+    groups.map(({ group, summary, sampling, smoothing, rows, inverse }) => [
       group.title,
       smoothing.state === 'smoothed' ? smoothing.curve.statement : '',
       factsIn(summary),
+      ...(sampling.clusters === null ? [] : [clusterFacts(sampling)]),
       rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
       sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
     ]),

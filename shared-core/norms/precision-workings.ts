@@ -1,3 +1,4 @@
+import type { SamplingDesign } from '../precision/sampling-design.ts';
 import { printCount, printNumber } from '../scores/printed-number.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { ConversionRow } from './conversion-table.ts';
@@ -5,6 +6,7 @@ import { definitionName } from './definitions.ts';
 import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
 import type { RankAlternative } from './print-range.ts';
+import { clusterFacts, DESIGN_EFFECT_NOTE, drawnInWords } from './sampling-words.ts';
 import { intervalName } from './smoothing-words.ts';
 
 export type PrecisionColumn = Extract<ColumnKey, 'interval' | 'standard-error' | 'measurement-band' | 'print-range'>;
@@ -20,24 +22,32 @@ export function precisionWorkings(
 }
 
 function lines(
-  { precision: choices, curve }: NormProject,
-  { summary, precision, group }: GroupNorms,
+  { precision: choices, curve, people }: NormProject,
+  { summary, sampling, precision, group }: GroupNorms,
   row: ConversionRow,
   column: PrecisionColumn,
 ): readonly string[] {
-  const n = group.table.weighted
-    ? `the effective n, ${printNumber(summary.effectiveN, 1)}`
-    : `n = ${printCount(summary.n)}`;
+  const clustered = sampling.clusters !== null;
+  const n =
+    group.table.weighted || clustered
+      ? `the effective n, ${printNumber(sampling.effectiveN, 1)}`
+      : `n = ${printCount(summary.n)}`;
   switch (column) {
     case 'interval':
       return row.interval === null
         ? [precision.intervalProblem ?? 'There is no interval.']
         : [
             `The ${choices.level} % ${intervalName(choices.interval)} interval of the observed share, on ${n}: ${printNumber(row.interval.low, 2)} to ${printNumber(row.interval.high, 2)}.`,
-            'It is error of sampling, as if people were drawn one by one; it says nothing of the error of one score.',
+            ...effectiveLines(sampling, summary.n),
+            `It is error of sampling, ${drawnInWords(people, sampling)}; it says nothing of the error of one score.`,
           ];
     case 'standard-error':
       if (row.standardError === null) return ['This definition or method has no standard error in closed form.'];
+      if (clustered && row.smoothed === null) {
+        return [
+          `Standard error of the ${definitionName(curve.definition)} rank between ${clusterFacts(sampling)}, linearised: ${printNumber(row.standardError, 4)} points.`,
+        ];
+      }
       return [
         row.smoothed === null
           ? `Multinomial standard error of the ${definitionName(curve.definition)} rank, on ${n}: ${printNumber(row.standardError, 4)} points.`
@@ -55,6 +65,17 @@ function lines(
         ? []
         : [`Lowest: ${alternativeInWords(row.range.lowBy)}.`, `Highest: ${alternativeInWords(row.range.highBy)}.`];
   }
+}
+
+/** How clusters make an effective n of the people. */
+function effectiveLines({ designEffect, effectiveN }: SamplingDesign, n: number): readonly string[] {
+  if (designEffect === null) return [];
+  return [
+    effectiveN < n / designEffect
+      ? `A design effect of ${printNumber(designEffect, 2)} leaves more than the weights do; the effective n is theirs.`
+      : `Effective n: ${printCount(n)} / ${printNumber(designEffect, 2)} = ${printNumber(effectiveN, 1)}.`,
+    DESIGN_EFFECT_NOTE,
+  ];
 }
 
 /** "at or below, smoothed": one of the defensible ways to a rank. */

@@ -35,12 +35,44 @@ export function projectFromText(text: string): ProjectRead {
   return damaged(`${fileKey(v.getDotPath(issue) ?? 'the whole')}: ${issue.message}`);
 }
 
+type FileObject = Readonly<Record<string, unknown>>;
+
+/** A project of an earlier version with what it did not know yet; keys are those of the file. */
+function broughtForward(value: FileObject): FileObject {
+  switch (value['version']) {
+    case 1:
+      return withClusters(withPrecision(value));
+    case 2:
+      return withClusters(value);
+    default:
+      return value;
+  }
+}
+
 /** Projects of version 1 knew neither smoothing nor precision: they get the defaults. */
-function broughtForward(value: Readonly<Record<string, unknown>>): Readonly<Record<string, unknown>> {
-  if (value['version'] !== 1) return value;
+function withPrecision(value: FileObject): FileObject {
   const { curve: now, precision } = newProject('');
   const curve = isRecord(value['curve']) ? { ...now, ...value['curve'] } : value['curve'];
-  return { ...value, version: PROJECT_VERSION, curve, precision };
+  return { ...value, curve, precision };
+}
+
+/** Projects before version 3 knew no clusters: their people stay drawn one by one. */
+function withClusters(value: FileObject): FileObject {
+  const { tally, reading } = value;
+  const cells = isRecord(tally) ? tally['cells'] : null;
+  const decisions = isRecord(reading) ? reading['decisions'] : null;
+  return {
+    ...value,
+    version: PROJECT_VERSION,
+    tally:
+      isRecord(tally) && Array.isArray(cells)
+        ? { ...tally, cells: cells.map((cell: unknown) => (isRecord(cell) ? { ...cell, clusters: null } : cell)) }
+        : tally,
+    reading:
+      isRecord(reading) && isRecord(decisions)
+        ? { ...reading, decisions: { ...decisions, 'blank-cluster': 'alone' } }
+        : reading,
+  };
 }
 
 function damaged(why: string): ProjectRead {
@@ -50,6 +82,6 @@ function damaged(why: string): ProjectRead {
   };
 }
 
-function isRecord(value: unknown): value is Readonly<Record<string, unknown>> {
+function isRecord(value: unknown): value is FileObject {
   return typeof value === 'object' && value !== null && !Array.isArray(value);
 }

@@ -3,6 +3,7 @@ import { printCount, printNumber, printShare } from '../scores/printed-number.ts
 import { countedPeople, missingDocumentation } from './norm-groups.ts';
 import { listed } from './listed.ts';
 import type { NormProject } from './norm-project.ts';
+import { clusterQueries, unusedClusterQueries } from './cluster-queries.ts';
 import { smoothingQueries } from './smoothing-queries.ts';
 import type { GroupNorms } from './group-norms.ts';
 
@@ -25,7 +26,7 @@ export interface Query {
   readonly answer: string | null;
 }
 
-type Asked = Omit<Query, 'answer'>;
+export type Asked = Omit<Query, 'answer'>;
 
 /** A query of one group, before it is told which; its id names the question alone. */
 export type AskedOfGroup = Omit<Asked, 'group'>;
@@ -44,6 +45,7 @@ const WIDE_STEP = 10;
 export function queriesOf(project: NormProject, groups: readonly GroupNorms[]): readonly Query[] {
   const asked = [
     ...cohortQueries(project),
+    ...unusedClusterQueries(project),
     ...releaseQueries(project),
     ...titleQueries(groups),
     ...groups.flatMap((one) => groupQueries(project, one)),
@@ -164,7 +166,7 @@ function groupQueries(project: NormProject, norms: GroupNorms): readonly Asked[]
   const add = (id: string, query: Omit<AskedOfGroup, 'id'>): void => {
     asked.push({ ...query, id: `${id}:${group.key}`, group: group.key });
   };
-  for (const query of smoothingQueries(project, norms)) add(query.id, query);
+  for (const query of [...smoothingQueries(project, norms), ...clusterQueries(norms)]) add(query.id, query);
   const people = countedPeople(printCount(summary.n), project.people);
   if (summary.n < SMALL_GROUP) {
     add('small-group', {

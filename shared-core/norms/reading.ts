@@ -20,6 +20,7 @@ export const LEFT_OUT_RULES = [
   'above-scale',
   'off-grid',
   'blank-group',
+  'blank-cluster',
   'bad-weight',
   'bad-count',
 ] as const;
@@ -41,6 +42,7 @@ export const LEFT_OUT_WORDS: Readonly<Record<LeftOutRule, string>> = {
   'above-scale': 'a score above the scale',
   'off-grid': 'a score between two steps of the scale',
   'blank-group': 'no value in a grouping column',
+  'blank-cluster': 'no value in the cluster column',
   'bad-weight': 'a weight that is not a number above 0',
   'bad-count': 'a count that is not a whole number',
 };

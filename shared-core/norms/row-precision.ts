@@ -1,11 +1,13 @@
 import { ratioNear } from '../percentile/exact-ratio.ts';
 import type { RankDefinition } from '../percentile/percentile-rank.ts';
 import { observedContinuization, smoothedContinuization } from '../precision/continuized-rank.ts';
-import { countedRank } from '../precision/counted-rank.ts';
+import { clusterRankErrors } from '../precision/cluster-variance.ts';
+import { countedRank, type CountedRank } from '../precision/counted-rank.ts';
 import { measurementBands, type MeasurementBand } from '../precision/measurement-band.ts';
 import type { PercentInterval } from '../precision/percent-interval.ts';
 import { rankIntervals } from '../precision/proportion-interval.ts';
 import { rankStandardErrors } from '../precision/rank-variance.ts';
+import type { SamplingDesign } from '../precision/sampling-design.ts';
 import { printRank, type RankPrint } from '../scores/printed-number.ts';
 import type { CohortSummary } from '../tally/cohort-summary.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
@@ -20,8 +22,11 @@ export interface GroupPrecision {
   readonly intervalProblem: string | null;
   /** Standard error of the observed rank by the definition, percentile-rank points. */
   readonly standardErrors: readonly number[] | null;
-  /** The same of the observed midpoint rank, whatever the definition. */
-  readonly midpointErrors: readonly number[];
+  /** The same of the observed midpoint rank, whatever the definition; null where clusters cannot tell it. */
+  readonly midpointErrors: readonly number[] | null;
+  /** What standard errors of smoothed ranks, had on the n of the weights, are multiplied by: the root of what the clusters
+   * add to the variance, 1 without clusters, null where they cannot tell it. */
+  readonly smoothedErrorFactor: number | null;
   /** Measurement band, from the reliability. */
   readonly bands: readonly MeasurementBand[] | null;
   readonly bandProblem: string | null;
@@ -29,17 +34,30 @@ export interface GroupPrecision {
   readonly sem: number | null;
 }
 
+interface PrecisionBasis {
+  readonly table: FrequencyTable;
+  readonly summary: CohortSummary;
+  readonly sampling: SamplingDesign;
+  readonly definition: RankDefinition;
+  readonly choices: PrecisionChoices;
+  readonly curve: SmoothedCurve | null;
+}
+
+const ONE_CLUSTER =
+  'All people of the group are in one cluster, which does not tell how clusters differ. Choose other groups, or leave ' +
+  'the cluster column unused and say so.';
+
 /** Intervals, standard errors and measurement bands of a group's ranks. */
-export function precisionOf(
-  table: FrequencyTable,
-  summary: CohortSummary,
-  definition: RankDefinition,
-  choices: PrecisionChoices,
-  curve: SmoothedCurve | null,
-): GroupPrecision {
-  const { effectiveN, sd } = summary;
+export function precisionOf({ table, summary, sampling, definition, choices, curve }: PrecisionBasis): GroupPrecision {
+  const { sd } = summary;
   const counted = countedRank(definition);
-  const intervals = rankIntervals(table, effectiveN, definition, { method: choices.interval, level: choices.level });
+  const { clusters, designEffect, effectiveN } = sampling;
+  const intervals =
+    clusters === 1
+      ? { ok: false as const, problem: ONE_CLUSTER }
+      : rankIntervals(table, effectiveN, definition, { method: choices.interval, level: choices.level });
+  const errors = (of: CountedRank): readonly number[] | null =>
+    clusters === null ? rankStandardErrors(table, of, effectiveN) : clusterRankErrors(table, of);
   const { reliability, level } = choices;
   const continuized =
     curve === null ? observedContinuization(table) : smoothedContinuization(smoothedFrom(curve), table.scale);
@@ -47,8 +65,9 @@ export function precisionOf(
   return {
     intervals: intervals.ok ? intervals.intervals : null,
     intervalProblem: intervals.ok ? null : intervals.problem,
-    standardErrors: counted === null ? null : rankStandardErrors(table, counted, effectiveN),
-    midpointErrors: rankStandardErrors(table, 'midpoint', effectiveN),
+    standardErrors: counted === null ? null : errors(counted),
+    midpointErrors: errors('midpoint'),
+    smoothedErrorFactor: clusters !== null && designEffect === null ? null : Math.sqrt(summary.effectiveN / effectiveN),
     bands: bands?.ok === true ? bands.bands : null,
     bandProblem: bands === null || bands.ok ? null : bands.problem,
     sem: bands?.ok === true ? bands.sem : null,

@@ -6,6 +6,7 @@ import type { NormProject } from './norm-project.ts';
 import { smoothingInScope, type SmoothingScope } from './smoothing-alternatives.ts';
 import { logLinearIn } from './smoothing-choice.ts';
 import { bandwidthInWords, degreeInWords, intervalName, keptInWords, smoothingInWords } from './smoothing-words.ts';
+import { drawnInGeneral } from './sampling-words.ts';
 import { columnOf } from './table-columns.ts';
 
 /** Phrases of the statements that stand for a choice. */
@@ -121,7 +122,7 @@ export function curveStatement(project: NormProject, scope: SmoothingScope = nul
     words(' '),
     ...smoothingStatement(smoothingInScope(project, scope)),
     words(' '),
-    ...intervalStatement(project),
+    ...intervalStatement(project, `, ${drawnInGeneral(project)}.`),
     words(' '),
     ...reliabilityStatement(project),
   ];
@@ -157,13 +158,13 @@ function smoothingStatement(smoothing: SmoothingChoice): readonly StatementPart[
   ];
 }
 
-function intervalStatement({ precision }: NormProject): readonly StatementPart[] {
+function intervalStatement({ precision }: NormProject, end = '.'): readonly StatementPart[] {
   return [
     words('The sampling error of a rank is told by its '),
     phrase('level', `${precision.level} %`),
     words(' '),
     phrase('interval', `${intervalName(precision.interval)} interval`),
-    words('.'),
+    words(end),
   ];
 }
 

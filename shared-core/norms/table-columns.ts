@@ -1,5 +1,6 @@
 import type { ColumnKey } from './column-keys.ts';
 import type { NormProject } from './norm-project.ts';
+import { drawnInGeneral } from './sampling-words.ts';
 
 /** How a column is headed and explained. The percentile rank and the raw score are columns of every table. */
 export interface TableColumn {
@@ -79,7 +80,7 @@ export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
         key,
         heading: ['Standard', 'error'],
         name: 'standard error of the rank',
-        explanation: 'Error of sampling, in percentile-rank points, as if people were drawn one by one.',
+        explanation: `Error of sampling, in percentile-rank points, ${drawnInGeneral({ ...project, people: 'people' })}.`,
       };
     case 'measurement-band':
       return {

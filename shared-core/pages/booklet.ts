@@ -1,4 +1,5 @@
 import type { ColumnKey } from '../norms/column-keys.ts';
+import type { TextRole } from './text-role.ts';
 import type { FontFace } from './text-width.ts';
 
 /**
@@ -49,6 +50,7 @@ export interface TextLine {
   readonly size: number;
   readonly colour: Colour;
   readonly runs: readonly TextRun[];
+  readonly role: TextRole;
 }
 
 export interface Rule {
@@ -66,7 +68,7 @@ export interface Picture {
   readonly width: number;
   readonly height: number;
   readonly svg: string;
-  /** The picture in words. */
+  /** The picture in words and numbers. */
   readonly alt: string;
 }
 
@@ -80,6 +82,8 @@ export interface TableColumnBlock {
   readonly headRule: number;
   readonly bottom: number;
   readonly size: number;
+  /** True where the heads of the same table stand before it already. */
+  readonly continued: boolean;
   readonly heads: readonly TableHead[];
   readonly rows: readonly PlacedRow[];
 }

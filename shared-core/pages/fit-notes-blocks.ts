@@ -16,8 +16,12 @@ const WIDEST_TABLE = 300;
  */
 export function layFitNotes(flow: SheetFlow, { degrees, moments, paragraphs }: FitNotes): void {
   const [first, second] = degrees === null ? [moments, null] : [degrees, moments];
-  const lines = paragraphLines(paragraphs, SMALL_PROSE, flow.halfWidth);
-  const title = linesOf(TITLE, 'serif-bold', CONTINUED, flow.width);
+  const lines = paragraphLines(paragraphs, SMALL_PROSE, flow.halfWidth, 'technical notes');
+  const title = linesOf(TITLE, 'serif-bold', CONTINUED, flow.width, {
+    kind: 'heading',
+    level: 2,
+    name: 'technical title',
+  });
   const titleHeight = heightOf(title, CONTINUED) + BELOW_TITLE;
   const aboveLines = second === null ? 0 : noteTableHeight(second) + BETWEEN_PARTS;
   const height = Math.max(noteTableHeight(first), aboveLines + heightOf(lines, SMALL_PROSE));

@@ -42,6 +42,7 @@ export function fitNotesOf({ people }: NormProject, { smoothing, evidence }: Gro
 
 function degreeTable({ degrees, degree }: SmoothedCurve): NoteTable {
   return {
+    name: 'degrees',
     heads: ['Degree', 'G²', 'X²', 'df', 'AIC', 'BIC', 'p'],
     firstColumn: 'figures',
     rows: degrees.map((line) => ({ cells: degreeCells(line), marked: line.degree === degree })),
@@ -79,6 +80,7 @@ function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve): NoteTab
     marked: false,
   });
   return {
+    name: 'moments',
     heads: ['Moment', 'Observed', 'Smoothed'],
     firstColumn: 'words',
     rows: [

@@ -2,6 +2,7 @@ import type { GroupNorms } from '../norms/group-norms.ts';
 import { onePerson } from '../norms/norm-groups.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { smoothingOf } from '../norms/smoothing-choice.ts';
+import { DESIGN_EFFECT_NOTE, drawnInWords } from '../norms/sampling-words.ts';
 import { methodText } from '../norms/statements.ts';
 import { columnOf } from '../norms/table-columns.ts';
 import { printNumber } from '../scores/printed-number.ts';
@@ -29,24 +30,29 @@ export function smoothingSentence(project: NormProject, { group, smoothing }: Gr
 }
 
 /** What the printed columns of errors hold, a sentence each. */
-function errorSentences(project: NormProject, { group, smoothing, precision }: GroupNorms): readonly string[] {
+function errorSentences(
+  project: NormProject,
+  { group, smoothing, precision, sampling }: GroupNorms,
+): readonly string[] {
   const { columns } = project.table;
   const smoothed = smoothing.state === 'smoothed';
-  const on = group.table.weighted ? ' and on the effective n' : '';
-  const asIf = `as if ${project.people} were drawn one by one${on}`;
+  const clustered = sampling.clusters !== null;
+  const on = group.table.weighted && !clustered ? ' and on the effective n' : '';
+  const asIf = `${drawnInWords(project.people, sampling)}${on}`;
   const sentences: string[] = [];
   if (columns.includes('interval') && precision.intervals !== null) {
     sentences.push(`The interval is that of the observed rank${smoothed ? ', before smoothing' : ''}, ${asIf}.`);
   }
   if (columns.includes('standard-error')) {
     const values = smoothed ? smoothing.curve.standardErrors : precision.standardErrors;
-    const how = smoothed ? 'by the delta method for the smoothed rank' : 'from the multinomial distribution';
+    const how = errorMethod(smoothed, clustered);
     sentences.push(
       values === null
         ? `The standard error has no formula for this ${smoothed ? 'smoothing' : 'definition'}; its column is empty.`
         : `The standard error is error of sampling in percentile-rank points, ${how}, ${asIf}.`,
     );
   }
+  if (clustered && sentences.length > 0 && sampling.designEffect !== null) sentences.push(DESIGN_EFFECT_NOTE);
   if (columns.includes('measurement-band') && precision.sem !== null) {
     sentences.push(
       `The ${project.precision.level} % measurement band is error of measurement, by a standard error of ` +
@@ -58,6 +64,15 @@ function errorSentences(project: NormProject, { group, smoothing, precision }: G
     sentences.push(`“${heading.join(' ')}”: ${inSentence(explanation)}`);
   }
   return sentences;
+}
+
+function errorMethod(smoothed: boolean, clustered: boolean): string {
+  if (smoothed) {
+    return clustered
+      ? 'by the delta method for the smoothed rank, widened by the design effect'
+      : 'by the delta method for the smoothed rank';
+  }
+  return clustered ? 'linearised between clusters' : 'from the multinomial distribution';
 }
 
 /** The project's cautions and, where a column of errors is printed, that the two errors are different things. */

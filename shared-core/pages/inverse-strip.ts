@@ -1,6 +1,8 @@
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { Block } from './booklet.ts';
+import { spokenFigure } from './spoken-text.ts';
 import { linesOf, placeLines } from './text-lines.ts';
+import { REPEATED, type CellRole } from './text-role.ts';
 import { textWidth } from './text-width.ts';
 import { FINE_RULE, ROW, STRONG_RULE, TABLE_HEAD } from './type-sizes.ts';
 
@@ -42,7 +44,7 @@ export function inverseStrip({ inverse, group }: GroupNorms, width: number): Inv
           rule(stripTop + STRIP_HEIGHT, STRONG_RULE),
           ...labels.flatMap((label, line) =>
             placeLines(
-              linesOf(label, 'sans-bold', TABLE_HEAD, labelWidth),
+              linesOf(label, 'sans-bold', TABLE_HEAD, labelWidth, strip === 0 ? cellRole(line, 0, label) : REPEATED),
               { ...TABLE_HEAD, leading: ROW.leading },
               {
                 x,
@@ -53,15 +55,37 @@ export function inverseStrip({ inverse, group }: GroupNorms, width: number): Inv
           ),
           ...rows.flatMap(({ percentile, scoreText }, index) =>
             ([String(percentile), scoreText] as const).flatMap((text, line) =>
-              placeLines(linesOf(text, line === 0 ? 'sans' : 'sans-bold', ROW, cellWidth), ROW, {
-                x: x + labelWidth + index * cellWidth,
-                top: lines[line] ?? stripTop,
-                width: cellWidth,
-                align: 'right',
-              }),
+              placeLines(
+                linesOf(
+                  text,
+                  line === 0 ? 'sans' : 'sans-bold',
+                  ROW,
+                  cellWidth,
+                  cellRole(line, 1 + strip * inStrip + index, text),
+                ),
+                ROW,
+                {
+                  x: x + labelWidth + index * cellWidth,
+                  top: lines[line] ?? stripTop,
+                  width: cellWidth,
+                  align: 'right',
+                },
+              ),
             ),
           ),
         ];
       }).flat(),
+  };
+}
+
+/** The strips are one table of two rows: percentiles as heads of columns, and scores. Labels head their rows. */
+function cellRole(line: number, column: number, text: string): CellRole {
+  return {
+    kind: 'cell',
+    table: 'inverse',
+    row: line === 0 ? 'head' : line,
+    column,
+    headOf: column === 0 ? 'row' : line === 0 ? 'column' : null,
+    said: column === 0 ? null : spokenFigure(text),
   };
 }

@@ -1,10 +1,14 @@
 import type { Block } from './booklet.ts';
+import { spokenFigure } from './spoken-text.ts';
+import type { CellRole } from './text-role.ts';
 import type { FontFace } from './text-width.ts';
 import { textWidth } from './text-width.ts';
 import { FINE_RULE, SMALL_PROSE, STRONG_RULE } from './type-sizes.ts';
 
 /** A small table of the technical notes. */
 export interface NoteTable {
+  /** Unique among the tables of a sheet. */
+  readonly name: string;
   readonly heads: readonly string[];
   /** Words begin at the left edge, figures end at the right of their column, like those of all further columns. */
   readonly firstColumn: 'words' | 'figures';
@@ -56,7 +60,7 @@ export function placeNoteTable(
   const figures = widths.reduce((sum, wide) => sum + wide, 0);
   const gap = (width - figures) / (widths.length - 1);
   const rule = (y: number, weight: number): Block => ({ kind: 'rule', x, y, width, weight });
-  const line = (cells: readonly string[], baseline: number, bold: boolean): readonly Block[] => {
+  const line = (cells: readonly string[], baseline: number, bold: boolean, row: CellRole['row']): readonly Block[] => {
     let left = x;
     return cells.map((text, index): Block => {
       const wide = widths[index] ?? 0;
@@ -69,6 +73,14 @@ export function placeNoteTable(
         size: SIZE,
         colour: 'ink',
         runs: [{ text, face: face(bold) }],
+        role: {
+          kind: 'cell',
+          table: table.name,
+          row,
+          column: index,
+          headOf: row === 'head' ? 'column' : index === 0 ? 'row' : null,
+          said: row === 'head' ? null : spokenFigure(text),
+        },
       };
       left += wide + gap;
       return block;
@@ -76,8 +88,8 @@ export function placeNoteTable(
   };
   const headRule = top + LEADING + 2 * HEAD_PADDING;
   let y = headRule + AROUND_ROWS;
-  const rows = table.rows.flatMap(({ cells, marked }) => {
-    const blocks = line(cells, y + ROW_LEADING * ABOVE_BASELINE, marked);
+  const rows = table.rows.flatMap(({ cells, marked }, index) => {
+    const blocks = line(cells, y + ROW_LEADING * ABOVE_BASELINE, marked, index);
     y += ROW_LEADING;
     if (!marked) return blocks;
     y += UNDER_MARKED;
@@ -85,7 +97,7 @@ export function placeNoteTable(
   });
   return [
     rule(top, STRONG_RULE),
-    ...line(table.heads, top + HEAD_PADDING + LEADING * ABOVE_BASELINE, true),
+    ...line(table.heads, top + HEAD_PADDING + LEADING * ABOVE_BASELINE, true, 'head'),
     rule(headRule, FINE_RULE),
     ...rows,
     rule(y + AROUND_ROWS, STRONG_RULE),

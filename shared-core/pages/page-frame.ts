@@ -4,6 +4,7 @@ import type { Block, Paper } from './booklet.ts';
 import { firstLines } from './prose.ts';
 import { editionLine, surveyName, tableName } from './sheet-texts.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
+import type { PageRole } from './text-role.ts';
 import { textWidth } from './text-width.ts';
 import { GUTTER, RUNNING, STRONG_RULE } from './type-sizes.ts';
 
@@ -28,6 +29,8 @@ const ROOM_TO_BODY = 13;
 /** Share of the width that the survey's name may take. */
 const LEFT_SHARE = 0.58;
 const WIDEST_PAGE_NUMBER = 'page 9999 of 9999';
+const HEAD: PageRole = { kind: 'running', edge: 'top' };
+const FOOT: PageRole = { kind: 'running', edge: 'bottom' };
 
 export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
   const left = paper.margin;
@@ -37,7 +40,7 @@ export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, pa
   const headTop = paper.margin - OUTSIDE - RUNNING.leading / 2;
   const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
   const numberWidth = textWidth(WIDEST_PAGE_NUMBER, 'sans', RUNNING.size);
-  const edition = linesOf(editionLine(normSet, norms), 'sans', RUNNING, width - numberWidth - GUTTER);
+  const edition = linesOf(editionLine(normSet, norms), 'sans', RUNNING, width - numberWidth - GUTTER, FOOT);
   const footTop = paper.height - paper.margin + OUTSIDE + RUNNING.leading / 2 - heightOf(edition, RUNNING);
   const footRule = footTop - ROOM_AT_RULE;
   const rule = (y: number): Block => ({ kind: 'rule', x: left, y, width, weight: STRONG_RULE });
@@ -54,7 +57,7 @@ export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, pa
       rule(headRule),
       rule(footRule),
       ...running(edition, footTop, 'left'),
-      ...running(linesOf(`page ${page} of ${pages}`, 'sans', RUNNING, width), footTop, 'right'),
+      ...running(linesOf(`page ${page} of ${pages}`, 'sans', RUNNING, width, FOOT), footTop, 'right'),
     ],
     shortened: survey.cut || table.cut,
   };
@@ -62,5 +65,5 @@ export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, pa
 
 function headLines(text: string, width: number): { readonly lines: readonly LooseLine[]; readonly cut: boolean } {
   const first = firstLines([{ text, face: 'sans' }], RUNNING.size, width, MOST_HEAD_LINES);
-  return { lines: first.lines.map((runs) => ({ runs, before: 0 })), cut: first.cut };
+  return { lines: first.lines.map((runs) => ({ runs, before: 0, role: HEAD })), cut: first.cut };
 }

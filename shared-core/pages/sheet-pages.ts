@@ -10,7 +10,7 @@ import { ogivePicture } from './ogive-picture.ts';
 import type { PageFrame } from './page-frame.ts';
 import { firstLines } from './prose.ts';
 import { SheetFlow } from './sheet-flow.ts';
-import { figureCaption, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
+import { figureCaption, figureInWords, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
 import { placeTable, rowMeasure, tableOverhead } from './table-blocks.ts';
 import type { TableMeasure } from './table-measure.ts';
 import { columnHeight, fillColumns, inFives, type Five } from './table-rows.ts';
@@ -23,6 +23,7 @@ import {
   plainParagraphs,
   type LooseLine,
 } from './text-lines.ts';
+import { paragraph, REPEATED, type TextRole } from './text-role.ts';
 import { CONTINUED, PROSE, SMALL_PROSE, SUBTITLE, TITLE, type TypeSize } from './type-sizes.ts';
 
 const MOST_TITLE_LINES = 6;
@@ -50,10 +51,21 @@ export interface SheetPages {
 export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, measure: TableMeasure): SheetPages {
   const norms = normSet.groups[index];
   if (norms === undefined) throw new RangeError('no such group');
-  const title = cutText(sheetTitle(normSet.project, norms), 'serif-bold', TITLE, frame.width, MOST_TITLE_LINES);
+  const title = cutText(sheetTitle(normSet.project, norms), 'serif-bold', TITLE, frame.width, MOST_TITLE_LINES, {
+    kind: 'heading',
+    level: 1,
+    name: 'title',
+  });
   const flow = new SheetFlow(frame, (top) => furtherHead(normSet, norms, frame, top));
   placeFull(flow, title.lines, TITLE);
-  const subtitle = cutText(sheetSubtitle(normSet.project), 'serif-italic', SUBTITLE, frame.width, MOST_SUBTITLE_LINES);
+  const subtitle = cutText(
+    sheetSubtitle(normSet.project),
+    'serif-italic',
+    SUBTITLE,
+    frame.width,
+    MOST_SUBTITLE_LINES,
+    paragraph('subtitle'),
+  );
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
   layTable(flow, normSet, norms, measure);
@@ -63,9 +75,16 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   return { pages: flow.pages, shortened: title.cut };
 }
 
-function cutText(text: string, face: TextRun['face'], type: TypeSize, width: number, most: number): CutLines {
+function cutText(
+  text: string,
+  face: TextRun['face'],
+  type: TypeSize,
+  width: number,
+  most: number,
+  role: TextRole,
+): CutLines {
   const first = firstLines([{ text, face }], type.size, width, most);
-  return { lines: first.lines.map((runs) => ({ runs, before: 0 })), cut: first.cut };
+  return { lines: first.lines.map((runs) => ({ runs, before: 0, role })), cut: first.cut };
 }
 
 interface CutLines {
@@ -85,12 +104,17 @@ function furtherHead(
   top: number,
 ): { readonly blocks: readonly Block[]; readonly bottom: number } {
   const { project } = normSet;
-  const cautions = linesOf(cautionsOf(project), 'sans', SMALL_PROSE, width);
+  const cautions = linesOf(cautionsOf(project), 'sans', SMALL_PROSE, width, REPEATED);
   const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
-    [cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2).lines, CONTINUED],
-    [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2).lines, PROSE],
     [
-      cautions.length <= MOST_CAUTION_LINES ? cautions : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width),
+      cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2, REPEATED).lines,
+      CONTINUED,
+    ],
+    [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2, REPEATED).lines, PROSE],
+    [
+      cautions.length <= MOST_CAUTION_LINES
+        ? cautions
+        : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width, REPEATED),
       SMALL_PROSE,
     ],
   ];
@@ -106,9 +130,8 @@ function furtherHead(
 /** How to read the table, and what its columns of errors tell, beside the cautions. */
 function introduce(flow: SheetFlow, { project }: NormSet): void {
   const { howToRead, cautions } = project.sheet;
-  const sides = [[howToRead, errorCaution(project)], [cautions]].map((texts) =>
-    plainParagraphs(texts, 'sans', PROSE, flow.halfWidth),
-  );
+  const texts = { 'how to read': [howToRead, errorCaution(project)], cautions: [cautions] };
+  const sides = Object.entries(texts).map(([name, side]) => plainParagraphs(side, 'sans', PROSE, flow.halfWidth, name));
   const [left = [], right = []] = sides.filter((lines) => lines.length > 0);
   flow.skip(AROUND_INTRODUCTION);
   flow.sideBySide(left, right, PROSE);
@@ -118,13 +141,18 @@ function layTable(flow: SheetFlow, normSet: NormSet, norms: GroupNorms, measure:
   const heads = tableColumns(normSet.project);
   const rows = rowMeasure(measure);
   const overhead = tableOverhead(measure);
-  let rest: readonly Five[] = inFives(norms.rows, norms.group.table.scale);
+  const all = inFives(norms.rows, norms.group.table.scale);
+  let rest: readonly Five[] = all;
   flow.skip(AROUND_INTRODUCTION + 2);
   while (rest.length > 0) {
     const first = rest[0] ?? [];
     flow.need(overhead + Math.max(columnHeight([first], rows), Math.min(LEAST_ROWS, norms.rows.length) * rows.pitch));
     const page = fillColumns(rest, measure.columns, flow.room - overhead, rows);
-    const { blocks, height } = placeTable(page.columns, heads, measure, { x: flow.left, top: flow.y });
+    const { blocks, height } = placeTable(page.columns, heads, measure, {
+      x: flow.left,
+      top: flow.y,
+      continued: rest !== all,
+    });
     flow.place(blocks, height);
     rest = page.rest;
     if (rest.length > 0) flow.turn();
@@ -142,7 +170,7 @@ function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): v
 /** The picture and, beside it, the notes; notes that are longer than the page go on in two columns on the next. */
 function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: GroupNorms): void {
   const { project } = normSet;
-  const lines = paragraphLines(notesOf(normSet, norms), PROSE, flow.halfWidth);
+  const lines = paragraphLines(notesOf(normSet, norms), PROSE, flow.halfWidth, 'notes');
   flow.skip(BELOW_TABLE);
   if (!project.sheet.ogive) {
     flow.need(Math.min(heightOf(lines, PROSE) / 2 + PROSE.leading, LEAST_NOTE_LINES * PROSE.leading));
@@ -150,8 +178,8 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
     return;
   }
   const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
-  const alt = figureCaption(project, norms);
-  const caption = paragraphLines([{ lead: `Figure ${index + 1}.`, text: alt }], SMALL_PROSE, flow.halfWidth);
+  const figureLead = { lead: `Figure ${index + 1}.`, text: figureCaption(project, norms) };
+  const caption = paragraphLines([figureLead], SMALL_PROSE, flow.halfWidth, 'caption');
   const figure = picture.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
   const whole = heightOf(lines, PROSE);
   flow.need(Math.max(figure, whole <= flow.freshRoom ? whole : LEAST_NOTE_LINES * PROSE.leading));
@@ -165,7 +193,7 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
         y: top,
         ...picture,
         svg: ogivePicture(norms, project.precision.level, picture),
-        alt,
+        alt: figureInWords(project, norms),
       },
       ...placeLines(caption, SMALL_PROSE, {
         x: flow.left,

@@ -5,6 +5,7 @@ import { columnInWords, countedPeople, groupNoun, standingTitle, valueInWords } 
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { NormProject } from '../norms/norm-project.ts';
+import { clusterFacts } from '../norms/sampling-words.ts';
 import { intervalName } from '../norms/smoothing-words.ts';
 import type { TableColumn } from '../norms/table-columns.ts';
 import { scaleGrid } from '../scale/score-scale.ts';
@@ -70,7 +71,7 @@ export function notesOf({ project }: NormSet, norms: GroupNorms): readonly Parag
   ];
 }
 
-/** The picture in words. */
+/** The words under the picture. */
 export function figureCaption(project: NormProject, { smoothing, precision }: GroupNorms): string {
   const side = project.tally?.scale.direction === 'low-is-good' ? 'above' : 'below';
   const curve =
@@ -82,13 +83,19 @@ export function figureCaption(project: NormProject, { smoothing, precision }: Gr
   return `Cumulative per cent by raw score: ${steps}, ${curve} and, ${band} (error of sampling).`;
 }
 
+/** The picture for those who do not see it: what it shows, and the numbers of the group. */
+export function figureInWords(project: NormProject, norms: GroupNorms): string {
+  return `${figureCaption(project, norms)} ${sampleFacts(project, norms)}`;
+}
+
 /** n, mean, SD and five numbers in a sentence or two. */
 export function sampleFacts(project: NormProject, norms: GroupNorms): string {
-  const { summary, group } = norms;
+  const { summary, sampling, group } = norms;
   const people = countedPeople(printCount(summary.n), project.people);
   const weighted = group.table.weighted
     ? `, weighted, with an effective n of ${printNumber(summary.effectiveN, 1)}`
     : '';
+  const drawn = sampling.clusters === null ? '' : `, drawn in ${clusterFacts(sampling)}`;
   const decimals = scaleGrid(group.table.scale).decimals + 1;
   const spread = summary.sd === null ? '' : `, SD ${printNumber(summary.sd, decimals)}`;
   const five = namedFiveNumbers(norms).map(({ name, printed }) =>
@@ -96,7 +103,7 @@ export function sampleFacts(project: NormProject, norms: GroupNorms): string {
   );
   const sentence = five.join(', ');
   return (
-    `${people}${weighted}. Mean ${printNumber(summary.mean, decimals)}${spread}. ` +
+    `${people}${weighted}${drawn}. Mean ${printNumber(summary.mean, decimals)}${spread}. ` +
     `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`
   );
 }

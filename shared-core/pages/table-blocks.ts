@@ -1,9 +1,11 @@
 import type { TableColumn } from '../norms/table-columns.ts';
 import type { Rule, TableColumnBlock, TableHead, TextLine } from './booklet.ts';
 import { rangeSides } from './range-cell.ts';
+import { spokenFigure, spokenHead } from './spoken-text.ts';
 import { cellText } from './sheet-texts.ts';
 import type { TableMeasure } from './table-measure.ts';
 import { columnHeight, type RowColumn, type RowMeasure } from './table-rows.ts';
+import { REPEATED, type CellRole, type TextRole } from './text-role.ts';
 import { textWidth } from './text-width.ts';
 import { FINE_RULE, GUTTER, ROW, STRONG_RULE, TABLE_HEAD } from './type-sizes.ts';
 
@@ -35,12 +37,12 @@ function headHeight(lineCounts: readonly number[], typeScale: number): number {
   return Math.max(...lineCounts) * TABLE_HEAD.leading * typeScale + 2 * HEAD_PADDING;
 }
 
-/** Columns of rows side by side, all between the same lines. */
+/** Columns of rows side by side, all between the same lines; `continued` where the table began on an earlier page. */
 export function placeTable(
   columns: readonly RowColumn[],
   tableColumns: readonly TableColumn[],
   measure: TableMeasure,
-  place: { readonly x: number; readonly top: number },
+  place: { readonly x: number; readonly top: number; readonly continued: boolean },
 ): { readonly blocks: readonly TableColumnBlock[]; readonly height: number } {
   const rows = rowMeasure(measure);
   const { typeScale } = measure;
@@ -62,6 +64,7 @@ export function placeTable(
       headRule,
       bottom,
       size: ROW.size * typeScale,
+      continued: place.continued || index > 0,
       heads: measure.heads,
       rows: column.flatMap((five, block) => {
         if (block > 0) y += rows.gap;
@@ -85,7 +88,15 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
     if (head === undefined) throw new RangeError('a cell without a head');
     return head;
   };
-  const figure = (index: number, text: string, baseline: number, size: number, bold: boolean, left = 0): TextLine => {
+  const figure = (
+    index: number,
+    text: string,
+    role: TextRole,
+    baseline: number,
+    size: number,
+    bold: boolean,
+    left = 0,
+  ): TextLine => {
     const head = headOf(index);
     return {
       kind: 'text',
@@ -96,6 +107,7 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
       size,
       colour: 'ink',
       runs: [{ text, face: bold ? 'sans-bold' : 'sans' }],
+      role,
     };
   };
   return [
@@ -105,15 +117,31 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
     ...block.heads.flatMap(({ lines }, index) =>
       lines.map((line, place) => {
         const up = (lines.length - 1 - place) * TABLE_HEAD.leading * typeScale;
-        return figure(index, line, block.headRule - HEAD_PADDING - 1.5 - up, TABLE_HEAD.size * typeScale, true);
+        const role = block.continued ? REPEATED : cell('head', index, spokenHead(lines));
+        return figure(index, line, role, block.headRule - HEAD_PADDING - 1.5 - up, TABLE_HEAD.size * typeScale, true);
       }),
     ),
-    ...block.rows.flatMap(({ baseline, texts }) =>
-      texts.map((text, index) =>
-        figure(index, text, baseline, block.size, index === 0, leftBehind(text, headOf(index), block.size)),
-      ),
+    ...block.rows.flatMap(({ score, baseline, texts }) =>
+      texts.map((text, index) => {
+        const role = cell(score, index, spokenFigure(text));
+        return figure(
+          index,
+          text,
+          role,
+          baseline,
+          block.size,
+          index === 0,
+          leftBehind(text, headOf(index), block.size),
+        );
+      }),
     ),
   ];
+}
+
+/** A cell of the conversion table of a sheet: the raw score heads its row. */
+function cell(row: CellRole['row'], column: number, said: string | null): CellRole {
+  const headOf = row === 'head' ? 'column' : column === 0 ? 'row' : null;
+  return { kind: 'cell', table: 'conversion', row, column, headOf, said };
 }
 
 /** Points between the end of a cell's text and the end of its column. */

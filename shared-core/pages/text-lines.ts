@@ -1,6 +1,7 @@
 import type { Colour, TextLine, TextRun } from './booklet.ts';
 import { breakLines, type ProseLine } from './prose.ts';
 import type { Paragraph } from './paragraph.ts';
+import { paragraph, type TextRole } from './text-role.ts';
 import type { FontFace } from './text-width.ts';
 import { PARAGRAPH_GAP, type TypeSize } from './type-sizes.ts';
 
@@ -9,30 +10,43 @@ export interface LooseLine {
   readonly runs: ProseLine;
   /** Extra room above it, where it does not stand at the top. */
   readonly before: number;
+  readonly role: TextRole;
 }
 
 /** One text of one face, broken to a width. */
-export function linesOf(text: string, face: FontFace, { size }: TypeSize, width: number): readonly LooseLine[] {
-  return breakLines([{ text, face }], size, width).map((runs) => ({ runs, before: 0 }));
+export function linesOf(
+  text: string,
+  face: FontFace,
+  { size }: TypeSize,
+  width: number,
+  role: TextRole,
+): readonly LooseLine[] {
+  return breakLines([{ text, face }], size, width).map((runs) => ({ runs, before: 0, role }));
 }
 
-/** Paragraphs of one face, broken to a width; those without text are left out. */
+/** Paragraphs of one face under a name of their own, broken to a width; those without text are left out. */
 export function plainParagraphs(
   texts: readonly string[],
   face: FontFace,
   type: TypeSize,
   width: number,
+  name: string,
 ): readonly LooseLine[] {
   return texts
-    .map((text) => linesOf(text, face, type, width))
+    .map((text, index) => linesOf(text, face, type, width, paragraph(`${name} ${index}`)))
     .filter((lines) => lines.length > 0)
     .flatMap((lines, index) =>
       lines.map((line, place) => ({ ...line, before: place === 0 && index > 0 ? PARAGRAPH_GAP : 0 })),
     );
 }
 
-/** Paragraphs with bold leads, broken to a width. */
-export function paragraphLines(paragraphs: readonly Paragraph[], type: TypeSize, width: number): readonly LooseLine[] {
+/** Paragraphs with bold leads under a name of their own, broken to a width. */
+export function paragraphLines(
+  paragraphs: readonly Paragraph[],
+  type: TypeSize,
+  width: number,
+  name: string,
+): readonly LooseLine[] {
   return paragraphs.flatMap(({ lead, text }, index) => {
     const runs: readonly TextRun[] = [
       { text: `${lead} `, face: 'sans-bold' },
@@ -41,6 +55,7 @@ export function paragraphLines(paragraphs: readonly Paragraph[], type: TypeSize,
     return breakLines(runs, type.size, width).map((line, place) => ({
       runs: line,
       before: place === 0 && index > 0 ? PARAGRAPH_GAP : 0,
+      role: paragraph(`${name} ${index}`),
     }));
   });
 }
@@ -71,7 +86,7 @@ const ABOVE_BASELINE = 0.76;
 /** Lines set one below the other. */
 export function placeLines(lines: readonly LooseLine[], type: TypeSize, place: Place): readonly TextLine[] {
   let { top } = place;
-  return lines.map(({ runs, before }, index) => {
+  return lines.map(({ runs, before, role }, index) => {
     if (index > 0) top += before;
     const baseline = top + type.leading * ABOVE_BASELINE;
     top += type.leading;
@@ -84,6 +99,7 @@ export function placeLines(lines: readonly LooseLine[], type: TypeSize, place: P
       size: type.size,
       colour: place.colour ?? 'ink',
       runs,
+      role,
     };
   });
 }

@@ -33,11 +33,6 @@ export function textWidth(text: string, face: FontFace, size: number): number {
   return (sum * size) / 1000;
 }
 
-/** Distance from the top of a line of type to its baseline, in points. */
-export function ascentOf(face: FontFace, size: number): number {
-  return (FONT_WIDTHS[face].ascent * size) / 1000;
-}
-
 /** Characters of a text that a typeface cannot draw, each once. */
 export function missingCharacters(text: string, face: FontFace): readonly string[] {
   const widths = widthsByFace[face];

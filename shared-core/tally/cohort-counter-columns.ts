@@ -7,6 +7,8 @@ export interface CountedColumns {
   readonly count: number | null;
   readonly weight: number | null;
   readonly id: number | null;
+  /** The column of the clusters people were drawn in. */
+  readonly cluster: { readonly at: number; readonly name: string } | null;
   /** Positions and names of the grouping columns, in file order. */
   readonly groups: readonly number[];
   readonly groupColumns: readonly string[];
@@ -18,7 +20,15 @@ export interface CountedColumns {
 
 /** Finds the columns that a reading names among the columns of the file. The problem says which column to change. */
 export function countedColumns(reading: Reading, columns: readonly string[]): Reply<CountedColumns> {
-  const found: Record<ColumnRole, number[]> = { score: [], count: [], weight: [], group: [], id: [], unused: [] };
+  const found: Record<ColumnRole, number[]> = {
+    score: [],
+    count: [],
+    weight: [],
+    group: [],
+    id: [],
+    cluster: [],
+    unused: [],
+  };
   for (const { column, role } of reading.roles) {
     if (role === 'unused') continue;
     const position = columns.indexOf(column);
@@ -26,13 +36,13 @@ export function countedColumns(reading: Reading, columns: readonly string[]): Re
     if (!found[role].includes(position)) found[role].push(position);
   }
   const nameAt = (position: number | undefined): string => columns[position ?? 0] ?? '';
-  for (const role of ['score', 'count', 'weight', 'id'] as const) {
+  for (const role of ['score', 'count', 'weight', 'id', 'cluster'] as const) {
     const [first, second] = found[role];
     if (second !== undefined) {
       return refused(`Both "${nameAt(first)}" and "${nameAt(second)}" are marked as ${role}. Keep one of them.`);
     }
   }
-  const all = [...found.score, ...found.count, ...found.weight, ...found.group, ...found.id];
+  const all = [...found.score, ...found.count, ...found.weight, ...found.group, ...found.id, ...found.cluster];
   const twice = all.find((position, index) => all.indexOf(position) !== index);
   if (twice !== undefined) return refused(`Column "${nameAt(twice)}" is given two roles. Keep one of them.`);
   const score = found.score[0];
@@ -50,6 +60,7 @@ export function countedColumns(reading: Reading, columns: readonly string[]): Re
         'Read the rows as counts, or leave the column unused.',
     );
   }
+  const [cluster] = found.cluster;
   const groups = found.group.toSorted((left, right) => left - right);
   return {
     ok: true,
@@ -58,6 +69,7 @@ export function countedColumns(reading: Reading, columns: readonly string[]): Re
       count,
       weight: found.weight[0] ?? null,
       id: found.id[0] ?? null,
+      cluster: cluster === undefined ? null : { at: cluster, name: nameAt(cluster) },
       groups,
       groupColumns: groups.map(nameAt),
       width: columns.length,

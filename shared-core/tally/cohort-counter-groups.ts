@@ -1,4 +1,5 @@
-import { ownCopy, TextMemo } from './cohort-counter-texts.ts';
+import { CellClusterCounts } from './cohort-counter-clusters.ts';
+import { ownCopy, ValueNumbers } from './cohort-counter-texts.ts';
 import { widened, type WeightSums, type WeightUnit } from './cohort-counter-weights.ts';
 
 export const MAX_GROUPS = 2000;
@@ -7,6 +8,7 @@ const MAX_VALUE_LENGTH = 400;
 /** What is counted of one combination of group values. */
 export class GroupCell {
   counts: Float64Array;
+  readonly clusters = new CellClusterCounts();
 
   constructor(
     readonly values: readonly string[],
@@ -25,27 +27,6 @@ export class GroupCell {
 interface GroupNode {
   readonly children: (GroupNode | undefined)[];
   cell: GroupCell | null;
-}
-
-/** Numbers the values of one column as they come; blank values have number 0. */
-class ValueNumbers {
-  readonly values: string[] = [''];
-  private readonly numbers = new Map<string, number>([['', 0]]);
-  private readonly memo = new TextMemo((text) => this.numberOfTrimmed(text.trim()));
-
-  numberOf(text: string): number {
-    return this.memo.get(text);
-  }
-
-  private numberOfTrimmed(text: string): number {
-    const known = this.numbers.get(text);
-    if (known !== undefined) return known;
-    const value = ownCopy(text);
-    const number = this.values.length;
-    this.values.push(value);
-    this.numbers.set(value, number);
-    return number;
-  }
 }
 
 /** Finds the cell of a row by its group values: one small table a column, no text built for a row. */

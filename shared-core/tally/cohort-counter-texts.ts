@@ -23,3 +23,24 @@ export class TextMemo<T> {
     return value;
   }
 }
+
+/** Numbers the values of one column as they come; blank values have number 0. */
+export class ValueNumbers {
+  readonly values: string[] = [''];
+  private readonly numbers = new Map<string, number>([['', 0]]);
+  private readonly memo = new TextMemo((text) => this.numberOfTrimmed(text.trim()));
+
+  numberOf(text: string): number {
+    return this.memo.get(text);
+  }
+
+  private numberOfTrimmed(text: string): number {
+    const known = this.numbers.get(text);
+    if (known !== undefined) return known;
+    const value = ownCopy(text);
+    const number = this.values.length;
+    this.values.push(value);
+    this.numbers.set(value, number);
+    return number;
+  }
+}

@@ -3,13 +3,14 @@ import { LEFT_OUT_WORDS, type LeftOutRule, type Reading } from '../norms/reading
 import { parseDecimal, type DecimalMark } from '../scale/decimal.ts';
 import { scaleGrid, scaleProblems } from '../scale/score-scale.ts';
 import { countedColumns, type CountedColumns } from './cohort-counter-columns.ts';
+import { ClusterCounter } from './cohort-counter-clusters.ts';
 import { FlowRecorder, type RowFlow } from './cohort-counter-flow.ts';
 import { GroupCells, type GroupCell } from './cohort-counter-groups.ts';
 import type { Identities } from './cohort-counter-identities.ts';
 import { scoreSlots, type PlacedSlots, type ScoreSlots } from './cohort-counter-scores.ts';
 import { TextMemo } from './cohort-counter-texts.ts';
 import { WeightReader, WeightUnit } from './cohort-counter-weights.ts';
-import { compareGroupValues, type Tally, type TallyCell } from './tally.ts';
+import { compareGroupValues, type Tally, type CellClusters, type TallyCell } from './tally.ts';
 
 export interface CountedCohort {
   readonly tally: Tally;
@@ -45,6 +46,7 @@ export class CohortCounter {
   private readonly recorder = new FlowRecorder();
   private readonly scores: ScoreSlots;
   private readonly groups: GroupCells;
+  private readonly clusters: ClusterCounter | null;
   private readonly weightUnit: WeightUnit | null;
   private readonly weights: WeightReader;
   private readonly peopleIn: TextMemo<number>;
@@ -62,12 +64,15 @@ export class CohortCounter {
     this.keepsRagged = reading.decisions.raggedRow === 'keep-readable';
     const slots = reading.scale === null ? 0 : scaleGrid(reading.scale).length;
     const keepsBlank = reading.decisions.blankGroup === 'keep';
+    const keepsAlone = reading.decisions.blankCluster === 'alone';
+    this.clusters =
+      at.cluster === null ? null : new ClusterCounter(at.cluster.at, at.cluster.name, keepsAlone, this.weightUnit);
     this.groups = new GroupCells(at.groups, at.groupColumns, keepsBlank, slots, this.weightUnit);
   }
 
   /** A sentence once the rows cannot be tallied whatever follows; null as long as they can. */
   get problem(): string | null {
-    return this.scores.problem ?? this.groups.problem;
+    return this.scores.problem ?? this.groups.problem ?? this.clusters?.problem ?? null;
   }
 
   /** One row of texts with its number in the file, the heading being row 1. */
@@ -86,8 +91,14 @@ export class CohortCounter {
     if (!placed.ok) return placed;
     const { scale, inferred } = placed.value;
     const { length } = scaleGrid(scale);
-    const cells = this.groups.cells
-      .map((cell) => tallyCell(cell, placed.value, length))
+    const found = this.groups.cells;
+    const clusters = this.clusters?.finish(
+      found.map((cell) => cell.clusters),
+      placed.value,
+      length,
+    );
+    const cells = found
+      .map((cell, index) => tallyCell(cell, placed.value, length, clusters?.[index] ?? null))
       .filter((cell) => cell.counts.some((count) => count > 0))
       .sort((left, right) => compareGroupValues(left.values, right.values));
     if (cells.length === 0) return { ok: false, problem: 'All counts are 0: there is nobody to tally.' };
@@ -120,6 +131,8 @@ export class CohortCounter {
     if (typeof slot === 'string') return slot;
     const node = this.groups.nodeOf(row);
     if (node === null) return 'blank-group';
+    const cluster = this.clusters?.numberOf(row) ?? null;
+    if (this.clusters !== null && cluster === null) return 'blank-cluster';
     if (at.weight !== null && !this.weights.read(row[at.weight] ?? '')) return 'bad-weight';
     const people = at.count === null ? 1 : this.peopleIn.get(row[at.count] ?? '');
     if (people < 0) return 'bad-count';
@@ -127,6 +140,7 @@ export class CohortCounter {
     this.scores.use(slot);
     cell.count(slot, people);
     if (this.weightUnit !== null && cell.sums !== null) this.weightUnit.add(cell.sums, slot, this.weights, people);
+    if (cluster !== null) this.clusters?.add(cell.clusters, cluster, slot, people, this.weights);
     return null;
   }
 }
@@ -147,7 +161,7 @@ function countIn(text: string, mark: DecimalMark): number {
   return decimal.units % unit === 0n && Number.isSafeInteger(people) ? people : -1;
 }
 
-function tallyCell(cell: GroupCell, placed: PlacedSlots, length: number): TallyCell {
+function tallyCell(cell: GroupCell, placed: PlacedSlots, length: number, clusters: CellClusters | null): TallyCell {
   const counts = new Array<number>(length).fill(0);
   const weights = cell.sums === null ? null : new Array<string>(length).fill('0');
   const squares = cell.sums === null ? null : new Array<string>(length).fill('0');
@@ -159,7 +173,7 @@ function tallyCell(cell: GroupCell, placed: PlacedSlots, length: number): TallyC
     weights[position] = cell.sums.weights.total(slot).toString();
     squares[position] = cell.sums.squares.total(slot).toString();
   });
-  return { values: cell.values, counts, weights, squares };
+  return { values: cell.values, counts, weights, squares, clusters };
 }
 
 function nothingKept({ rowsRead, leftOut }: RowFlow, reading: Reading): string {
@@ -191,6 +205,8 @@ function whatToDo(rule: LeftOutRule, { decimalMark }: Reading): string {
       return 'Are the ends and the step of the scale right?';
     case 'blank-group':
       return 'Are the grouping columns the right ones?';
+    case 'blank-cluster':
+      return 'Is the cluster column the right one?';
     case 'bad-weight':
       return 'Is the weight column the right one, and is the decimal mark right?';
     case 'bad-count':

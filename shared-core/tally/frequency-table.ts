@@ -1,5 +1,6 @@
 import { powerOfTen } from '../scale/decimal.ts';
 import { scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
+import { clustersFromCell, mergeClusters, mirrorClusters, type TableClusters } from './clusters.ts';
 import { compareGroupValues, type Tally, type TallyCell } from './tally.ts';
 
 /**
@@ -17,6 +18,8 @@ export interface FrequencyTable {
   /** Units in a weight of 1: 1n without weights, 10^decimals with. */
   readonly weightUnit: bigint;
   readonly weighted: boolean;
+  /** The same people by the cluster they were drawn in; null where they are taken as drawn one by one. */
+  readonly clusters: TableClusters | null;
 }
 
 /** An unweighted table from people counted at each attainable score; counts are whole numbers of 0 or more. */
@@ -27,13 +30,14 @@ export function tableFromCounts(scale: ScoreScale, counts: readonly number[]): F
     throw new RangeError('counts are whole numbers of 0 or more');
   }
   const weights = counts.map(BigInt);
-  return { scale, counts, weights, squares: weights, weightUnit: 1n, weighted: false };
+  return { scale, counts, weights, squares: weights, weightUnit: 1n, weighted: false, clusters: null };
 }
 
 /** One cell of a tally as a frequency table. */
 export function tableFromCell(tally: Tally, cell: TallyCell): FrequencyTable {
+  const clusters = cell.clusters === null ? null : clustersFromCell(cell.clusters);
   if (tally.weightDecimals === null || cell.weights === null || cell.squares === null) {
-    return tableFromCounts(tally.scale, cell.counts);
+    return { ...tableFromCounts(tally.scale, cell.counts), clusters };
   }
   return {
     scale: tally.scale,
@@ -42,19 +46,25 @@ export function tableFromCell(tally: Tally, cell: TallyCell): FrequencyTable {
     squares: cell.squares.map(BigInt),
     weightUnit: powerOfTen(tally.weightDecimals),
     weighted: true,
+    clusters,
   };
 }
 
-/** People of two tables of one scale and one weight unit taken together. */
+/** People of two tables of one scale and one weight unit taken together, both with clusters or both without. */
 export function mergeTables(left: FrequencyTable, right: FrequencyTable): FrequencyTable {
   if (left.weighted !== right.weighted || left.weightUnit !== right.weightUnit || !sameScale(left.scale, right.scale)) {
     throw new RangeError('only tables of one scale and one weight unit can be merged');
+  }
+  const [clusters, others] = [left.clusters, right.clusters];
+  if ((clusters === null) !== (others === null)) {
+    throw new RangeError('clusters of some people cannot be merged with no clusters of others');
   }
   return {
     ...left,
     counts: left.counts.map((count, index) => count + (right.counts[index] ?? 0)),
     weights: left.weights.map((weight, index) => weight + (right.weights[index] ?? 0n)),
     squares: left.squares.map((square, index) => square + (right.squares[index] ?? 0n)),
+    clusters: clusters === null || others === null ? null : mergeClusters(clusters, others),
   };
 }
 
@@ -71,6 +81,7 @@ export function mirrorTable(table: FrequencyTable): FrequencyTable {
     counts: table.counts.toReversed(),
     weights: table.weights.toReversed(),
     squares: table.squares.toReversed(),
+    clusters: table.clusters === null ? null : mirrorClusters(table.clusters, table.counts.length),
   };
 }
 

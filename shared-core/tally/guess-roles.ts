@@ -15,7 +15,9 @@ const WEIGHT = /^(weight|weights|wt|wgt|w)$/;
 const GROUP = /^(grade|form|sex|gender|group|year|season|level|class|stratum|region|language|stage|version)$/;
 const ID = /^(id|ids|code|pupil|pupilid|student|candidate|person|number|no|nr|name)$/;
 const COUNT = /^(count|counts|n|freq|frequency|frequencies|f|number|people)$/;
-const UNUSED = /^(school|schools|age|ages|birth|birthday|dob|date|tested|teacher|city|town|comment|remarks?)$/;
+/** Pupils of a school are drawn together. */
+const CLUSTER = /^(school|schools|cluster|clusters|psu)$/;
+const UNUSED = /^(age|ages|birth|birthday|dob|date|tested|teacher|city|town|comment|remarks?)$/;
 
 const MAX_GROUP_VALUES = 20;
 
@@ -32,7 +34,7 @@ interface Column {
 
 /**
  * Guesses what the columns are from their names and the first rows. A name decides where the contents allow it; without
- * a telling name the score is the one numeric column that is left. Columns of schools and ages are left unused.
+ * a telling name the score is the one numeric column that is left. Ages are left unused; schools are clusters.
  */
 export function guessRoles(
   columns: readonly string[],
@@ -51,6 +53,13 @@ export function guessRoles(
     described.find((column) => !roles.has(column.name) && test(column));
 
   for (const column of described) if (named(column, UNUSED)) roles.set(column.name, 'unused');
+  const schools = described.filter((column) => named(column, CLUSTER));
+  give(
+    schools.find((column) => column.distinct > 1),
+    'cluster',
+    'by its name: those of one school or the like were drawn together',
+  );
+  for (const column of schools) if (!roles.has(column.name)) roles.set(column.name, 'unused');
   give(
     free((column) => named(column, WEIGHT) && column.numeric > 0.9),
     'weight',
@@ -97,6 +106,11 @@ export function guessRoles(
   return { layout, roles: columns.map((column) => ({ column, role: roles.get(column) ?? 'unused' })), remarks };
 }
 
+/** True for the name of a column that by its words holds clusters, such as schools. */
+export function isClusterName(name: string): boolean {
+  return wordsIn(name).some((word) => CLUSTER.test(word));
+}
+
 function named(column: Column, words: RegExp): boolean {
   return column.words.some((word) => words.test(word));
 }
@@ -131,14 +145,18 @@ function describe(name: string, rows: readonly (readonly string[])[], index: num
   return {
     index,
     name,
-    words: name
-      .replace(/([a-z])([A-Z])/g, '$1 $2')
-      .toLowerCase()
-      .split(/[^\p{L}]+/u)
-      .filter((word) => word !== ''),
+    words: wordsIn(name),
     filled,
     distinct: new Set(cells).size,
     numeric: filled === 0 ? 0 : numeric / filled,
     whole: filled === 0 ? 0 : cells.filter((cell) => /^\d+$/.test(cell)).length / filled,
   };
+}
+
+function wordsIn(name: string): readonly string[] {
+  return name
+    .replace(/([a-z])([A-Z])/g, '$1 $2')
+    .toLowerCase()
+    .split(/[^\p{L}]+/u)
+    .filter((word) => word !== '');
 }

@@ -2,7 +2,8 @@ import type { ScoreScale } from '../scale/score-scale.ts';
 
 /**
  * The sufficient statistic of a cohort: for every combination of group values the number of people at each attainable
- * score and, in a weighted cohort, the sum of their weights and of their squared weights. It holds no person's record.
+ * score and, in a weighted cohort, the sum of their weights and of their squared weights; with a cluster column, the same
+ * by cluster. It holds no person's record and no name of a cluster.
  *
  * Weight sums are whole numbers of 10^-decimals, written as decimal text so that they are exact at any size: cohorts
  * added up in any order give the same bytes.
@@ -26,6 +27,29 @@ export interface TallyCell {
   readonly weights: readonly string[] | null;
   /** Sums of squared weights in units of 10^-(2 weightDecimals); null for an unweighted cohort. */
   readonly squares: readonly string[] | null;
+  /** The same people by the cluster (school) they were drawn in; null where no cluster column was read. */
+  readonly clusters: CellClusters | null;
+}
+
+/** The people of a cell by cluster. Parts and `alone` add up to the cell at every score. */
+export interface CellClusters {
+  /** One for each cluster with people in the cell, in order of their numbers. */
+  readonly parts: readonly ClusterPart[];
+  /** People whose cluster is not told, at each attainable score: each stands as a cluster of one. */
+  readonly alone: readonly number[];
+  /** Sums of their squared weights, in the units of `squares`; null for an unweighted cohort. */
+  readonly aloneSquares: readonly string[] | null;
+}
+
+/** The people of one cluster in a cell; the lists go with `positions`. */
+export interface ClusterPart {
+  /** From 0 by the order of the cluster column's values, the same in every cell. The values themselves are not kept. */
+  readonly cluster: number;
+  /** Positions on the scale, ascending, at which the cluster has people. */
+  readonly positions: readonly number[];
+  readonly counts: readonly number[];
+  /** Weight sums, in the units of the cell's weights; null for an unweighted cohort. */
+  readonly weights: readonly string[] | null;
 }
 
 /**

@@ -136,7 +136,7 @@ function tallied(text: string, rows: readonly ScoreLine[], declared: ScoreScale 
     leftOut: [],
     scaleInferred: declared === null,
   };
-  const cells = [{ values: [], counts, weights: null, squares: null }];
+  const cells = [{ values: [], counts, weights: null, squares: null, clusters: null }];
   return { counted: { source, tally: { scale, groupColumns: [], weightDecimals: null, cells } }, problems: [] };
 }
 

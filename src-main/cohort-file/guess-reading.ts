@@ -22,7 +22,7 @@ export function plainReading(split: Split): Reading {
     roles: [],
     missing: [],
     scale: null,
-    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
   };
 }
 

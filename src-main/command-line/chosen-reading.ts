@@ -32,7 +32,7 @@ export async function chosenReading(path: string, file: string, options: CohortO
       roles: columns.map((column) => ({ column, role: roleOf(column, options.named) })),
       missing: options.missing,
       scale: options.scale,
-      decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+      decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
     },
     remarks: [...splitRemarks(reading, sheets), ...codeRemarks(reading, options), ...countRemarks(reading, options)],
   };
@@ -63,15 +63,16 @@ function hasAll({ columns }: CohortPreview, named: NamedColumns): boolean {
   return namesIn(named).every((name) => columns.includes(name));
 }
 
-function namesIn({ score, count, weight, id, by }: NamedColumns): readonly string[] {
-  return [score, count, weight, id, ...by].filter((name) => name !== null);
+function namesIn({ score, count, weight, id, cluster, by }: NamedColumns): readonly string[] {
+  return [score, count, weight, id, cluster, ...by].filter((name) => name !== null);
 }
 
-function roleOf(column: string, { score, count, weight, id, by }: NamedColumns): ColumnRole {
+function roleOf(column: string, { score, count, weight, id, cluster, by }: NamedColumns): ColumnRole {
   if (column === score) return 'score';
   if (column === count) return 'count';
   if (column === weight) return 'weight';
   if (column === id) return 'id';
+  if (column === cluster) return 'cluster';
   return by.includes(column) ? 'group' : 'unused';
 }
 

@@ -7,6 +7,7 @@ export interface NamedColumns {
   readonly count: string | null;
   readonly weight: string | null;
   readonly id: string | null;
+  readonly cluster: string | null;
   readonly by: readonly string[];
 }
 
@@ -39,9 +40,10 @@ function namedColumns(values: OptionValues): NamedColumns {
     count: textGiven(values, 'count'),
     weight: textGiven(values, 'weight'),
     id: textGiven(values, 'id'),
+    cluster: textGiven(values, 'cluster'),
     by: listOf('by', textGiven(values, 'by')),
   };
-  const all = [score, named.count, named.weight, named.id, ...named.by].filter((name) => name !== null);
+  const all = [score, named.count, named.weight, named.id, named.cluster, ...named.by].filter((name) => name !== null);
   const twice = all.find((name, index) => all.indexOf(name) !== index);
   if (twice !== undefined) throw new WrongOption(`Column "${twice}" is given two kinds of work. Keep one of them.`);
   return named;

@@ -1,7 +1,10 @@
 import type { Reply } from '../../shared-core/desk.ts';
+import { COMPARE_FORMATS, type CompareFormat } from './compare-command.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
-import { DIFFER, GENERAL, PRESS, READ_BACK, TABLE, type OptionNames } from './option-names.ts';
-import { textGiven, type OptionValues } from './option-values.ts';
+import type { EditionPaths } from './edition-pair.ts';
+import { erratumOptions, type ErratumOptions } from './erratum-options.ts';
+import { COMPARE, DIFFER, ERRATUM, GENERAL, PRESS, READ_BACK, TABLE, type OptionNames } from './option-names.ts';
+import { oneOf, readOrSay, textGiven, type OptionValues } from './option-values.ts';
 import { readBackOptions, type ReadBackOptions } from './read-back-options.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
@@ -13,7 +16,9 @@ export type Command =
   | { readonly kind: 'table'; readonly path: string; readonly options: TableOptions }
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
   | { readonly kind: 'press'; readonly path: string; readonly into: string }
-  | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions };
+  | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions }
+  | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
+  | { readonly kind: 'erratum'; readonly paths: EditionPaths; readonly options: ErratumOptions };
 
 /** Reads the words; the problem is a sentence about what is wrong with them. */
 export function readCommand(words: readonly string[]): Reply<Command> {
@@ -37,47 +42,77 @@ export function readCommand(words: readonly string[]): Reply<Command> {
           : { ok: true, value: { kind: 'press', path, into } };
       });
     case 'read-back':
-      return readReadBack(others);
+      return readFilesCommand(others, READ_BACK, (paths, values) => {
+        if (paths.length === 0) return wrong('read-back takes at least one pressed file.');
+        const options = readBackOptions(values);
+        return options.ok ? { ok: true, value: { kind: 'read-back', paths, options: options.value } } : options;
+      });
+    case 'compare':
+      return readPairCommand(others, COMPARE, 'compare takes two projects', (paths, values) =>
+        readOrSay(() => {
+          const format = oneOf('format', COMPARE_FORMATS, textGiven(values, 'format') ?? 'text');
+          return { kind: 'compare', paths, format };
+        }),
+      );
+    case 'erratum':
+      return readPairCommand(others, ERRATUM, 'erratum takes two projects', (paths, values) => {
+        const options = erratumOptions(values);
+        return options.ok ? { ok: true, value: { kind: 'erratum', paths, options: options.value } } : options;
+      });
     default: {
       const read = readWords(words, GENERAL);
       if (!read.ok) return read;
       const general = generalCommand(read.value.values);
       if (general !== null) return { ok: true, value: general };
       return wrong(
-        name === undefined ? 'Tell what to do: table, differ, press or read-back.' : `There is no command "${name}".`,
+        name === undefined
+          ? 'Tell what to do: table, differ, press, read-back, compare or erratum.'
+          : `There is no command "${name}".`,
       );
     }
   }
 }
 
-/** A command that works on one file; help and version come before all else. */
+/** A command that works on one file. */
 function readFileCommand(
   words: readonly string[],
   names: OptionNames,
   takes: string,
   commandOn: (path: string, values: OptionValues) => Reply<Command>,
 ): Reply<Command> {
+  return readFilesCommand(words, names, (paths, values) => {
+    const [path] = paths;
+    if (path !== undefined && paths.length === 1) return commandOn(path, values);
+    return wrong(`${takes}, not ${paths.length}. Put names with spaces in quotes.`);
+  });
+}
+
+/** A command that works on two projects, the earlier one first. */
+function readPairCommand(
+  words: readonly string[],
+  names: OptionNames,
+  takes: string,
+  commandOn: (paths: EditionPaths, values: OptionValues) => Reply<Command>,
+): Reply<Command> {
+  return readFilesCommand(words, names, (paths, values) => {
+    const [before, after] = paths;
+    if (before !== undefined && after !== undefined && paths.length === 2) return commandOn({ before, after }, values);
+    return wrong(`${takes}, the earlier one first, not ${paths.length}. Put names with spaces in quotes.`);
+  });
+}
+
+/** A command that works on files; help and version come before all else. */
+function readFilesCommand(
+  words: readonly string[],
+  names: OptionNames,
+  commandOn: (paths: readonly string[], values: OptionValues) => Reply<Command>,
+): Reply<Command> {
   const read = readWords(words, names);
   if (!read.ok) return read;
   const { values, positionals } = read.value;
   const general = generalCommand(values);
   if (general !== null) return { ok: true, value: general };
-  const [path] = positionals;
-  if (path === undefined || positionals.length > 1) {
-    return wrong(`${takes}, not ${positionals.length}. Put names with spaces in quotes.`);
-  }
-  return commandOn(path, values);
-}
-
-function readReadBack(words: readonly string[]): Reply<Command> {
-  const read = readWords(words, READ_BACK);
-  if (!read.ok) return read;
-  const { values, positionals } = read.value;
-  const general = generalCommand(values);
-  if (general !== null) return { ok: true, value: general };
-  if (positionals.length === 0) return wrong('read-back takes at least one pressed file.');
-  const options = readBackOptions(values);
-  return options.ok ? { ok: true, value: { kind: 'read-back', paths: positionals, options: options.value } } : options;
+  return commandOn(positionals, values);
 }
 
 function generalCommand(values: OptionValues): Command | null {

@@ -16,10 +16,10 @@ export async function groupBootstraps(
   const counted = countedRank(project.curve.definition);
   if (counted === null) throw new RangeError('a bootstrap of ranks that are no share of a count');
   const made = new Map<string, GroupBootstrap>();
-  for (const { group, summary } of groups) {
+  for (const { group, sampling } of groups) {
     const choice = smoothingOf(project, group.key);
     const plan = { choice, counted, replicates, seed, level: project.precision.level };
-    const result = await drawn(group.table, summary.effectiveN, plan);
+    const result = await drawn(group.table, sampling.effectiveN, plan);
     if (!result.ok) return { ok: false, problem: `${group.title}: ${result.problem}` };
     made.set(group.key, { seed, bootstrapped: result.bootstrapped });
   }

@@ -9,6 +9,9 @@ normloom differ FILE --score COL --ranks RANKFILE [options]
                                             how somebody's ranks were made from the same people
 normloom press PROJECT --into FOLDER        booklet, workbook, csv, norm set and certificate of a project
 normloom read-back FILE… --against PROJECT  pressed files compared with the project, cell by cell
+normloom compare OLD NEW [--format text|json]
+                                            every printed cell and choice in which two projects differ
+normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
 normloom --help | --version
 
 Options of table and differ:
@@ -16,6 +19,8 @@ Options of table and differ:
   --count COL               column that tells how many people stand in a row
   --weight COL              column of weights above 0
   --id COL                  column that names a person; of repeated ones the first row is kept
+  --cluster COL             column of the schools, or other clusters, that people were drawn in; intervals and
+                            standard errors are then those between clusters
   --by COL,COL              columns whose values make the groups, with a table each
   --scale MIN:MAX[:STEP]    attainable scores, such as 0:40 or -5:5:0.5; without it, those met in the file
   --low-is-good             low scores are the good ones: seconds, errors
@@ -46,6 +51,13 @@ Options of differ:
 Options of read-back:
   --against PROJECT         the project that the files were pressed from
   --format NAME             text (default): a line for each cell that differs; or json
+
+Options of erratum:
+  --roster FILE             people with their raw scores, one a row; the erratum then names those it concerns
+  --score COL               column that holds the raw scores
+  --by COL,COL              columns of the group values; without it, called as in the projects
+  --person COL              column of names or codes; without it, people are told by their row
+  --cut RANK                also tells whose unrounded rank lies on another side of this percentile rank
 
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.

@@ -1,5 +1,7 @@
 import { readCommand, type Command } from './command.ts';
+import { compareCommand } from './compare-command.ts';
 import { differCommand } from './differ-command.ts';
+import { erratumCommand } from './erratum-command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
@@ -22,6 +24,10 @@ async function run(command: Command): Promise<Outcome> {
       return pressCommand(command.path, command.into);
     case 'read-back':
       return readBackCommand(command.paths, command.options);
+    case 'compare':
+      return compareCommand(command.paths, command.format);
+    case 'erratum':
+      return erratumCommand(command.paths, command.options);
   }
 }
 

@@ -12,6 +12,7 @@ const COHORT = {
   count: text,
   weight: text,
   id: text,
+  cluster: text,
   by: text,
   scale: text,
   'low-is-good': flag,
@@ -38,3 +39,14 @@ export const DIFFER = { ...COHORT, group: text, ranks: text, format: text } as c
 export const PRESS = { ...GENERAL, into: text } as const satisfies OptionNames;
 
 export const READ_BACK = { ...GENERAL, against: text, format: text } as const satisfies OptionNames;
+
+export const COMPARE = { ...GENERAL, format: text } as const satisfies OptionNames;
+
+export const ERRATUM = {
+  ...GENERAL,
+  roster: text,
+  score: text,
+  by: text,
+  person: text,
+  cut: text,
+} as const satisfies OptionNames;

@@ -2,6 +2,7 @@ import type { GroupBootstrap } from '../../shared-core/norms/bootstrap-file.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import { countedPeople } from '../../shared-core/norms/norm-groups.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
+import { drawnInWords } from '../../shared-core/norms/sampling-words.ts';
 import { INTERVAL_METHOD_WORDS } from '../../shared-core/precision/proportion-interval.ts';
 import { RANDOM_GENERATOR } from '../../shared-core/precision/seeded-random.ts';
 import { printCount, printNumber } from '../../shared-core/scores/printed-number.ts';
@@ -41,7 +42,7 @@ export function precisionLines({ precision, table }: NormProject, norms: GroupNo
     ...(columns.includes('interval') && intervals !== null
       ? [
           `Intervals: ${level}, ${INTERVAL_METHOD_WORDS[precision.interval]}, of the observed rank; error of sampling, ` +
-            'as if people were drawn one by one.',
+            `${drawnInWords('people', norms.sampling)}.`,
         ]
       : []),
     ...(columns.includes('measurement-band') && sem !== null

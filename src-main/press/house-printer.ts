@@ -1,12 +1,11 @@
 import pdfmake from 'pdfmake';
-import { fontFiles } from './fonts.ts';
+import { FONT_FILES, type FACE_FONTS, type PICTURE_FONTS } from './fonts.ts';
 
-/** The writer of PDF files with the bundled typefaces, which opens no other file and no address. */
-export function housePrinter(onProgress: (share: number) => void): typeof pdfmake {
-  const files = new Set(Object.values(fontFiles()).flatMap((family) => Object.values(family)));
-  pdfmake.setFonts(fontFiles());
+/** The writer of PDF files with some of the bundled typefaces; it opens no other file and no address. */
+export function housePrinter(fonts: typeof FACE_FONTS | typeof PICTURE_FONTS): typeof pdfmake {
+  const files = new Set<string>(Object.values(FONT_FILES));
+  pdfmake.setFonts({ ...fonts });
   pdfmake.setUrlAccessPolicy(() => false);
   pdfmake.setLocalAccessPolicy((path) => files.has(path));
-  pdfmake.setProgressCallback(onProgress);
   return pdfmake;
 }

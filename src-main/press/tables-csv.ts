@@ -45,7 +45,7 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
       numberOrNothing(row.smoothed?.standardError),
       numberOrNothing(row.interval?.low),
       numberOrNothing(row.interval?.high),
-      String(row.midpointError),
+      numberOrNothing(row.midpointError),
       row.printed,
       ...columns.map((key) => row.texts[key]),
       safeForCsv(project.release.edition),

@@ -9,6 +9,7 @@ import { explanationInWords, findingInWords } from '../../shared-core/norms/why-
 import { whyDiffer } from '../../shared-core/norms/why-differ.ts';
 import { bootstrapRanks, type BootstrapProgress, type BootstrapResult } from '../../shared-core/precision/bootstrap.ts';
 import { countedRank } from '../../shared-core/precision/counted-rank.ts';
+import { samplingDesign } from '../../shared-core/precision/sampling-design.ts';
 import { printScore } from '../../shared-core/scores/printed-number.ts';
 import { summarise } from '../../shared-core/tally/cohort-summary.ts';
 import type { DifferAnswer } from './compute-message.ts';
@@ -65,6 +66,7 @@ export function* bootstrapOf(
     };
   }
   const { bootstrap, level } = project.precision;
+  const { effectiveN } = samplingDesign(table, counted, summarise(table).effectiveN);
   const plan = { ...bootstrap, level, counted, choice: smoothingOf(project, key) };
-  return yield* bootstrapRanks(table, summarise(table).effectiveN, plan);
+  return yield* bootstrapRanks(table, effectiveN, plan);
 }

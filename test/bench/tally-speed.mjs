@@ -72,7 +72,7 @@ function reading(roles) {
     roles,
     missing: ['99'],
     scale: { min: 0, max: 60, step: 1, direction: 'high-is-good' },
-    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
   };
 }
 

@@ -69,7 +69,7 @@ export function weightedTable(
     weights[place] = (weights[place] ?? 0n) + units;
     squares[place] = (squares[place] ?? 0n) + units * units;
   }
-  const cell = { values: [], counts, weights: weights.map(String), squares: squares.map(String) };
+  const cell = { values: [], counts, weights: weights.map(String), squares: squares.map(String), clusters: null };
   return tableFromCell({ scale, groupColumns: [], weightDecimals: decimals, cells: [cell] }, cell);
 }
 

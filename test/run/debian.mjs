@@ -39,6 +39,7 @@ export const installOnDebian = (packages, say) => {
 
 const TOOLS = [
   { program: ['pdftotext'], package: 'poppler-utils', why: 'reads the pages of pressed PDFs back' },
+  { program: ['qpdf'], package: 'qpdf', why: 'checks pressed PDFs' },
   { program: ['soffice', 'libreoffice'], package: 'libreoffice-calc-nogui', why: 'computes pressed workbooks' },
   { program: ['7z', '7zz'], package: 'p7zip-full', why: 'packs archives' },
 ];

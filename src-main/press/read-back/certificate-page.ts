@@ -12,7 +12,7 @@ import {
   TITLE,
 } from '../../../shared-core/pages/type-sizes.ts';
 import { printCount } from '../../../shared-core/scores/printed-number.ts';
-import { FONT_STYLES } from '../fonts.ts';
+import { FACE_FONTS } from '../fonts.ts';
 import { housePrinter } from '../house-printer.ts';
 import { releaseDay } from '../release-day.ts';
 import type { Certificate, CertifiedFile } from './certificate.ts';
@@ -34,7 +34,7 @@ export async function certificatePdf(certificate: Certificate, { project }: Norm
     info: { title, creator: 'Normloom', producer: 'Normloom', creationDate: day, modDate: day },
     pageSize: { width: paper.width, height: paper.height },
     pageMargins: paper.margin,
-    defaultStyle: { ...FONT_STYLES.sans, fontSize: PROSE.size, color: PRINTED_COLOURS.ink, lineHeight: 1.05 },
+    defaultStyle: { font: 'sans', fontSize: PROSE.size, color: PRINTED_COLOURS.ink, lineHeight: 1.05 },
     footer: (page, pages) => ({
       margin: [paper.margin, 12, paper.margin, 0],
       fontSize: RUNNING.size,
@@ -43,19 +43,15 @@ export async function certificatePdf(certificate: Certificate, { project }: Norm
     }),
     content: contentOf(certificate),
   };
-  return new Uint8Array(
-    await housePrinter(() => {})
-      .createPdf(definition)
-      .getBuffer(),
-  );
+  return new Uint8Array(await housePrinter(FACE_FONTS).createPdf(definition).getBuffer());
 }
 
 function contentOf(certificate: Certificate): Content[] {
   const { survey, programVersion, cells, recomputed, notRecomputed, recipes } = certificate;
   const differ = certificate.files.reduce((sum, { differences }) => sum + differences, 0);
   return [
-    { text: CERTIFICATE_TITLE, outline: true, ...FONT_STYLES['serif-bold'], fontSize: TITLE.size },
-    { text: survey, ...FONT_STYLES['serif-italic'], fontSize: SUBTITLE.size, margin: [0, 2, 0, 12] },
+    { text: CERTIFICATE_TITLE, outline: true, font: 'serif-bold', fontSize: TITLE.size },
+    { text: survey, font: 'serif-italic', fontSize: SUBTITLE.size, margin: [0, 2, 0, 12] },
     paragraph(
       `Normloom ${programVersion} opened the files below again after they were made and compared every printed cell ` +
         `with the norm set: ${printCount(cells)} cells, ${differences(differ)}.`,
@@ -69,12 +65,12 @@ function contentOf(certificate: Certificate): Content[] {
     paragraph('To compare again at any time: normloom read-back FILE … --against PROJECT.'),
     {
       text: 'One row of each table, redone by hand',
-      ...FONT_STYLES['serif-bold'],
+      font: 'serif-bold',
       fontSize: SUBTITLE.size,
       margin: [0, 10, 0, 4],
     },
     ...recipes.map(({ group, score, printed, sentences }) => ({
-      text: [{ text: `${group}, raw score ${score}: ${printed}. `, ...FONT_STYLES['sans-bold'] }, sentences.join(' ')],
+      text: [{ text: `${group}, raw score ${score}: ${printed}. `, font: 'sans-bold' }, sentences.join(' ')],
       margin: [0, 0, 0, 5] as [number, number, number, number],
       unbreakable: true,
     })),
@@ -85,7 +81,7 @@ function filesTable(files: readonly CertifiedFile[]): Content {
   const head = (text: string, alignment: 'left' | 'right'): TableCell => ({
     text,
     alignment,
-    ...FONT_STYLES['sans-bold'],
+    font: 'sans-bold',
   });
   return {
     margin: [0, 6, 0, 10],

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { LEFT_OUT_RULES } from '../../../shared-core/norms/reading.ts';
+import type { CellClusters } from '../../../shared-core/tally/tally.ts';
 import type { ScoreScale } from '../../../shared-core/scale/score-scale.ts';
 import { drawnPrecision, drawnSmoothing } from './drawn-smoothing.ts';
 
@@ -32,12 +33,38 @@ function drawnTally(scale: ScoreScale, columns: readonly string[], weighted: boo
     weights: weighted ? drawn.counts.map((count) => String(count * 12)) : null,
     squares: weighted ? drawn.counts.map((count) => String(count * 144)) : null,
   }));
-  return fc.array(cell, { maxLength: 4 }).map((cells) => ({
-    scale,
-    groupColumns: columns,
-    weightDecimals: weighted ? 1 : null,
-    cells,
-  }));
+  const number = fc.option(fc.nat(1e6));
+  return fc
+    .record({ cells: fc.array(cell, { maxLength: 4 }), clustered: fc.boolean(), cluster: number })
+    .map(({ cells, clustered, cluster }) => ({
+      scale,
+      groupColumns: columns,
+      weightDecimals: weighted ? 1 : null,
+      cells: cells.map((one) => ({ ...one, clusters: clustered ? clustersOf(one.counts, weighted, cluster) : null })),
+    }));
+}
+
+/** Half of the people, rounded down, in a cluster and the others alone; all alone without a cluster. */
+function clustersOf(counts: readonly number[], weighted: boolean, cluster: number | null): CellClusters {
+  const within = counts.map((count) => (cluster === null ? 0 : Math.floor(count / 2)));
+  const positions = within.flatMap((count, position) => (count > 0 ? [position] : []));
+  const people = positions.map((position) => within[position] ?? 0);
+  const alone = counts.map((count, position) => count - (within[position] ?? 0));
+  return {
+    parts:
+      cluster === null || positions.length === 0
+        ? []
+        : [
+            {
+              cluster,
+              positions,
+              counts: people,
+              weights: weighted ? people.map((count) => String(count * 12)) : null,
+            },
+          ],
+    alone,
+    aloneSquares: weighted ? alone.map((count) => String(count * 144)) : null,
+  };
 }
 
 const drawnSource = fc
@@ -66,13 +93,16 @@ const drawnReading = (scale: ScoreScale | null) =>
     decimalMark: fc.constantFrom('.' as const, ',' as const),
     header: fc.boolean(),
     sheet: fc.option(drawnText),
-    roles: fc.array(fc.record({ column: drawnText, role: fc.constantFrom('score' as const, 'group' as const) })),
+    roles: fc.array(
+      fc.record({ column: drawnText, role: fc.constantFrom('score' as const, 'group' as const, 'cluster' as const) }),
+    ),
     missing: fc.array(drawnText, { maxLength: 3 }),
     scale: fc.constant(scale),
     decisions: fc.record({
       duplicateId: fc.constantFrom('keep-first' as const, 'leave-out-all' as const, 'keep-all' as const),
       raggedRow: fc.constantFrom('leave-out' as const, 'keep-readable' as const),
       blankGroup: fc.constantFrom('leave-out' as const, 'keep' as const),
+      blankCluster: fc.constantFrom('alone' as const, 'leave-out' as const),
     }),
   });
 

@@ -36,7 +36,7 @@ describe('the five numbers in print', () => {
 describe('the title of a sheet', () => {
   it('stands in one line, whatever line ends the values hold', () => {
     const project = projectOf([1, 2]);
-    const cell = { values: ['A\nB '], counts: [1, 2], weights: null, squares: null };
+    const cell = { values: ['A\nB '], counts: [1, 2], weights: null, squares: null, clusters: null };
     const tally = project.tally && { ...project.tally, groupColumns: ['class'], cells: [cell] };
     const grouped = { ...project, tally, groups: { ...project.groups, by: ['class'] } };
     expect(sheetTitle(grouped, firstNorms(grouped))).toBe('Raw score to percentile rank, class A B');

@@ -30,6 +30,8 @@ describe('a norm set as plain JSON', () => {
       'n',
       'weight-sum',
       'effective-n',
+      'clusters',
+      'design-effect',
       'mean',
       'sd',
       'skewness',

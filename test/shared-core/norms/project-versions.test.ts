@@ -65,7 +65,30 @@ function asVersion1(project: NormProject): string {
   delete file.precision;
   delete file.curve.smoothing;
   delete file.curve.exceptions;
-  return JSON.stringify({ ...file, version: 1 });
+  return JSON.stringify({ ...file, ...withoutClusters(project), version: 1 });
+}
+
+/** The text of a project without anything that version 2 did not know. */
+function asVersion2(project: NormProject): string {
+  return JSON.stringify({ ...JSON.parse(projectToText(project)), ...withoutClusters(project), version: 2 });
+}
+
+/** Tally and reading as versions 1 and 2 wrote them. */
+function withoutClusters(project: NormProject): object {
+  const { tally, reading } = JSON.parse(projectToText(project));
+  for (const cell of tally?.cells ?? []) delete cell.clusters;
+  if (reading !== null) delete reading.decisions['blank-cluster'];
+  return { tally, reading };
+}
+
+/** The project as it is where nothing is known of clusters. */
+function oneByOne(project: NormProject): NormProject {
+  const { tally, reading } = project;
+  return {
+    ...project,
+    tally: tally && { ...tally, cells: tally.cells.map((cell) => ({ ...cell, clusters: null })) },
+    reading: reading && { ...reading, decisions: { ...reading.decisions, blankCluster: 'alone' } },
+  };
 }
 
 const fresh = newProject('');
@@ -75,7 +98,7 @@ describe('a project of version 1', () => {
     const read = projectFromText(VERSION_1);
     if (!read.ok) throw new Error(read.problem);
     const { project } = read;
-    expect(project.version).toBe(2);
+    expect(project.version).toBe(3);
     expect(project.curve).toEqual({
       definition: { kind: 'plotting-position', offset: '3/8' },
       smoothing: { kind: 'none' },
@@ -112,7 +135,7 @@ describe('a project of version 1', () => {
       fc.property(drawnProject, (project) => {
         const { definition } = project.curve;
         const curve: NormProject['curve'] = { definition, smoothing: { kind: 'none' }, exceptions: [] };
-        const expected: NormProject = { ...project, curve, precision: fresh.precision };
+        const expected: NormProject = { ...oneByOne(project), curve, precision: fresh.precision };
         expect(projectFromText(asVersion1(project))).toEqual({ ok: true, project: expected });
       }),
     );
@@ -135,12 +158,36 @@ describe('a project of version 1', () => {
   });
 });
 
+describe('a project of version 2', () => {
+  it('is brought forward with its people drawn one by one, and nothing else changes', () => {
+    fc.assert(
+      fc.property(drawnProject, (project) => {
+        expect(projectFromText(asVersion2(project))).toEqual({ ok: true, project: oneByOne(project) });
+      }),
+    );
+  });
+
+  it('prints what it printed before', () => {
+    const project = settledProject();
+    const read = projectFromText(asVersion2(project));
+    expect(read.ok && builtSet(read.project)).toEqual(builtSet(project));
+  });
+
+  it('is damaged, not crashed on, when its cells are not what they should be', () => {
+    const text = asVersion2(settledProject());
+    for (const cells of ['7', '[7]', 'null']) {
+      const read = projectFromText(text.replace(/"cells":\[.*?\}\]/, `"cells":${cells}`));
+      expect(read.ok ? '' : read.problem).toContain('(tally.cells');
+    }
+  });
+});
+
 describe('a project of another version', () => {
   it('is refused when it is newer, without a change', () => {
-    for (const version of [3, 4, 1000]) {
+    for (const version of [4, 5, 1000]) {
       const read = projectFromText(VERSION_1.replace('"version": 1', `"version": ${version}`));
       expect(read.ok ? '' : read.problem).toMatch(
-        new RegExp(`saved by a newer Normloom \\(file version ${version}; this one reads up to 2\\)`),
+        new RegExp(`saved by a newer Normloom \\(file version ${version}; this one reads up to 3\\)`),
       );
     }
   });

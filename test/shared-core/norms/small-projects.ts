@@ -35,7 +35,7 @@ export function projectOf(counts: readonly number[], scale: ScoreScale = scaleTo
       scale,
       groupColumns: [],
       weightDecimals: null,
-      cells: [{ values: [], counts, weights: null, squares: null }],
+      cells: [{ values: [], counts, weights: null, squares: null, clusters: null }],
     },
   };
 }
@@ -54,6 +54,7 @@ export function weightedProject(direction: Direction = 'high-is-good'): NormProj
           counts: TEN_COUNTS,
           weights: ['10', '10', '36', '0', '36'],
           squares: ['100', '50', '432', '0', '324'],
+          clusters: null,
         },
       ],
     },
@@ -75,7 +76,7 @@ export const READING: Reading = {
   ],
   missing: ['99', 'abs'],
   scale: scaleTo(20),
-  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
 };
 
 /** Two grades of 420 people each, spread evenly over 0 to 20, fully documented: nothing to ask about. */
@@ -102,7 +103,13 @@ export function settledProject(): NormProject {
       groupColumns: ['grade', 'form'],
       weightDecimals: null,
       cells: ['4', '10'].flatMap((grade) =>
-        ['A', 'B'].map((form) => ({ values: [grade, form], counts: even, weights: null, squares: null })),
+        ['A', 'B'].map((form) => ({
+          values: [grade, form],
+          counts: even,
+          weights: null,
+          squares: null,
+          clusters: null,
+        })),
       ),
     },
     groups: {

@@ -110,6 +110,7 @@ describe('laws of smoothed rows', () => {
             counts: SMOOTHED_COUNTS,
             weights: SMOOTHED_COUNTS.map((count) => String(count * 7)),
             squares: SMOOTHED_COUNTS.map((count) => String(count * 49)),
+            clusters: null,
           },
         ],
       },

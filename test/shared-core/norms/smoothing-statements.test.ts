@@ -9,7 +9,8 @@ import { logLinear, settledProject, smoothedBy } from './small-projects.ts';
 const settled = settledProject();
 const RANK = 'A pupil’s percentile rank is the share of the group scoring below, plus half of those at the same score.';
 const SURE =
-  'The sampling error of a rank is told by its 95 % Wilson interval. The reliability of the test is not given.';
+  'The sampling error of a rank is told by its 95 % Wilson interval, as if pupils were drawn one by one. ' +
+  'The reliability of the test is not given.';
 
 const chosenIn = (listed: readonly Alternative[]): readonly string[] =>
   listed.filter(({ chosen }) => chosen).map(({ label }) => label);
@@ -52,7 +53,7 @@ describe('the statement of the Curve station', () => {
   it('names level, interval and reliability', () => {
     const precision = { ...settled.precision, interval: 'jeffreys' as const, level: 90, reliability: 0.88 };
     expect(statementText(curveStatement({ ...settled, precision }))).toContain(
-      'told by its 90 % Jeffreys interval. The reliability of the test is 0.88.',
+      'told by its 90 % Jeffreys interval, as if pupils were drawn one by one. The reliability of the test is 0.88.',
     );
   });
 

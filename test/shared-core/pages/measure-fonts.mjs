@@ -35,7 +35,7 @@ function measure(path) {
     const text = widths.join(' ').replace(/( -)+$/, '');
     if (text !== '-') rows.push([start, text]);
   }
-  return { ascent: toThousandths(view.getInt16(tables.get('hhea') + 4)), rows };
+  return rows;
 }
 
 function glyphsByCodePoint(view, cmap) {
@@ -63,13 +63,13 @@ function readSegments(view, table, glyphs) {
 }
 
 const entries = Object.entries(FACES).map(([face, path]) => {
-  const { ascent, rows } = measure(require.resolve(path));
+  const rows = measure(require.resolve(path));
   const name = /^\w+$/.test(face) ? face : `'${face}'`;
   const lines = rows.map(([start, text]) => {
     const key = `      0x${start.toString(16)}:`;
     return `${key} '${text}',`.length > 120 && start > 0xff ? `${key}\n        '${text}',` : `${key} '${text}',`;
   });
-  return `  ${name}: {\n    ascent: ${ascent},\n    rows: {\n${lines.join('\n')}\n    },\n  },\n`;
+  return `  ${name}: {\n    rows: {\n${lines.join('\n')}\n    },\n  },\n`;
 });
 
 process.stdout.write(`/**

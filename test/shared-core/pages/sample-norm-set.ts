@@ -28,6 +28,7 @@ export function sampleProject(
       counts,
       weights: weighted ? counts.map((count, place) => String(count * (90 + (place % 5) * 10))) : null,
       squares: weighted ? counts.map((count, place) => String(count * (90 + (place % 5) * 10) ** 2)) : null,
+      clusters: null,
     };
   });
   const project = newProject('Ostrey Vale reading survey (invented)');

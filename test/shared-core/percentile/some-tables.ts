@@ -52,7 +52,7 @@ export function weightedTables(): fc.Arbitrary<FrequencyTable> {
       weights[place] = (weights[place] ?? 0n) + BigInt(units);
       squares[place] = (squares[place] ?? 0n) + BigInt(units) ** 2n;
     }
-    const cell = { values: [], counts, weights: weights.map(String), squares: squares.map(String) };
+    const cell = { values: [], counts, weights: weights.map(String), squares: squares.map(String), clusters: null };
     return tableFromCell({ scale, groupColumns: [], weightDecimals: 4, cells: [cell] }, cell);
   });
 }

@@ -53,6 +53,7 @@ const projects = fc
           counts: cell.map(([count]) => count),
           weights: drawn.weightDecimals === null ? null : cell.map(([count, each]) => String(count * each)),
           squares: drawn.weightDecimals === null ? null : cell.map(([count, each]) => String(count * each ** 2)),
+          clusters: null,
         })),
       },
       groups: { ...project.groups, by: ['grade'] },
@@ -118,7 +119,7 @@ describe('a wrong rounding', () => {
       scale: { min: 1, max: 4, step: 1, direction: 'high-is-good' },
       groupColumns: ['grade'],
       weightDecimals: null,
-      cells: [{ values: ['4'], counts: [1, 1, 1, 1], weights: null, squares: null }],
+      cells: [{ values: ['4'], counts: [1, 1, 1, 1], weights: null, squares: null, clusters: null }],
     },
   });
 

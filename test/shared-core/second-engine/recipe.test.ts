@@ -26,6 +26,7 @@ function small(
           counts,
           weights: weighted ? weights.map(String) : null,
           squares: weighted ? squares.map(String) : null,
+          clusters: null,
         },
       ],
     },

@@ -64,7 +64,12 @@ describe('the exclusion flow', () => {
   });
 
   it('keeps ragged rows whose needed cells are there, when that is decided', () => {
-    const decisions = { duplicateId: 'keep-first', raggedRow: 'keep-readable', blankGroup: 'leave-out' } as const;
+    const decisions = {
+      duplicateId: 'keep-first',
+      raggedRow: 'keep-readable',
+      blankGroup: 'leave-out',
+      blankCluster: 'alone',
+    } as const;
     const { flow } = countRows(
       readingWith({ score: 'score' }, { decisions }),
       ['a', 'score', 'b'],
@@ -75,7 +80,12 @@ describe('the exclusion flow', () => {
   });
 
   it('keeps blank groups as a group of their own, when that is decided', () => {
-    const decisions = { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'keep' } as const;
+    const decisions = {
+      duplicateId: 'keep-first',
+      raggedRow: 'leave-out',
+      blankGroup: 'keep',
+      blankCluster: 'alone',
+    } as const;
     const { tally } = countRows(
       readingWith({ g: 'group', score: 'score' }, { decisions }),
       ['g', 'score'],

@@ -9,7 +9,7 @@ const SCALE: ScoreScale = { min: 0, max: 4, step: 1, direction: 'high-is-good' }
 
 /** Weights in tenths. */
 function weighted(counts: readonly number[], weights: readonly bigint[], squares: readonly bigint[]): FrequencyTable {
-  return { scale: SCALE, counts, weights, squares, weightUnit: 10n, weighted: true };
+  return { scale: SCALE, counts, weights, squares, weightUnit: 10n, weighted: true, clusters: null };
 }
 
 function shapeOf(summary: CohortSummary): readonly number[] {

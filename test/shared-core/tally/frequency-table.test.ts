@@ -21,7 +21,7 @@ const SCALE: ScoreScale = { min: 0, max: 3, step: 1, direction: 'high-is-good' }
 function cellOf(values: readonly string[], units: readonly (readonly number[])[]): TallyCell {
   const sum = (power: number): string[] =>
     units.map((weights) => String(weights.reduce((total, weight) => total + BigInt(weight) ** BigInt(power), 0n)));
-  return { values, counts: units.map((weights) => weights.length), weights: sum(1), squares: sum(2) };
+  return { values, counts: units.map((weights) => weights.length), weights: sum(1), squares: sum(2), clusters: null };
 }
 
 /** Tallies by grade and form: the weights, in ten-thousandths, of the people at each of four scores. */
@@ -69,6 +69,7 @@ describe('a table from a tally cell', () => {
       counts: [1, 0, 0, 0],
       weights: [long, '0', '0', '0'],
       squares: [long, '0', '0', '0'],
+      clusters: null,
     };
     const table = tableFromCell({ scale: SCALE, groupColumns: [], weightDecimals: 25, cells: [cell] }, cell);
     expect(weightUnitsIn(table)).toBe(123456789012345678901234567890n);
@@ -76,7 +77,7 @@ describe('a table from a tally cell', () => {
   });
 
   it('has no weights where the tally has none', () => {
-    const cell: TallyCell = { values: [], counts: [1, 0, 0, 2], weights: null, squares: null };
+    const cell: TallyCell = { values: [], counts: [1, 0, 0, 2], weights: null, squares: null, clusters: null };
     const table = tableFromCell({ scale: SCALE, groupColumns: [], weightDecimals: null, cells: [cell] }, cell);
     expect(table).toEqual(tableFromCounts(SCALE, [1, 0, 0, 2]));
   });

@@ -115,7 +115,7 @@ describe('roles', () => {
     expect(rolesOf(['Pupil ID', 'School', 'Grade', 'form', 'age_years', 'rawScore', 'WT'], rows)).toEqual({
       layout: 'people',
       'Pupil ID': 'id',
-      School: 'unused',
+      School: 'cluster',
       Grade: 'group',
       form: 'group',
       age_years: 'unused',

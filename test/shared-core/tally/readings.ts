@@ -17,7 +17,7 @@ export function readingWith(
     roles: Object.entries(roles).map(([column, role]) => ({ column, role })),
     missing: [],
     scale: { min: 0, max: 20, step: 1, direction: 'high-is-good' },
-    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+    decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
     ...more,
   };
 }

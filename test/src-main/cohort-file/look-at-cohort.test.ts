@@ -37,7 +37,7 @@ describe('a first look at a cohort file', () => {
       sheet: null,
       roles: [
         { column: 'id', role: 'id' },
-        { column: 'school', role: 'unused' },
+        { column: 'school', role: 'cluster' },
         { column: 'grade', role: 'group' },
         { column: 'form', role: 'group' },
         { column: 'age', role: 'unused' },
@@ -46,7 +46,7 @@ describe('a first look at a cohort file', () => {
       ],
       missing: ['NA', '99'],
       scale: null,
-      decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+      decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
     });
     expect(rows).toHaveLength(200);
     expect(rows[0]?.slice(0, 2)).toEqual(['00001', 'School 0']);

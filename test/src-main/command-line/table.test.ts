@@ -128,7 +128,9 @@ describe('table as json', () => {
     expect(file.groups).toHaveLength(3);
     for (const group of file.groups) {
       expect(Object.keys(group)).toEqual(
-        ['group', 'n', 'weight-sum', 'effective-n', 'mean', 'sd', 'skewness', 'excess-kurtosis'].concat([
+        ['group', 'n', 'weight-sum', 'effective-n', 'clusters', 'design-effect', 'mean', 'sd'].concat([
+          'skewness',
+          'excess-kurtosis',
           'five-number',
           'points',
           'smoothing',

@@ -71,6 +71,8 @@ const group = v.object({
   n: v.number(),
   'weight-sum': v.number(),
   'effective-n': v.number(),
+  clusters: v.nullable(v.number()),
+  'design-effect': v.nullable(v.number()),
   mean: v.number(),
   sd: v.nullable(v.number()),
   skewness: v.nullable(v.number()),

@@ -17,7 +17,7 @@ export const READING: Reading = {
   roles: [{ column: 'score', role: 'score' }],
   missing: [],
   scale: null,
-  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out' },
+  decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
 };
 
 /** Work that stands in for the reader and the press: it writes two small files that hold the project's title. */

@@ -8,6 +8,7 @@ export function projectWithTally(title: string, groups: number): NormProject {
     counts: Array.from({ length: 41 }, (__, score) => (score * 7 + group * 3 + title.length) % 23),
     weights: null,
     squares: null,
+    clusters: null,
   }));
   const people = cells.flatMap((cell) => cell.counts).reduce((sum, count) => sum + count, 0);
   return {

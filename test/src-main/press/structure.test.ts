@@ -1,0 +1,233 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { afterAll, describe, expect, it } from 'vitest';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
+import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
+import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
+import { bookletPdf } from '../../../src-main/press/booklet-pdf.ts';
+import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
+import { readStructure, type ReadElement, type ReadStructure } from './structure-reader.ts';
+import { cellsHeard, elementsIn, findAll, findOne, printed, spoken } from './structure-speech.ts';
+
+const folder = mkdtempSync(join(tmpdir(), 'normloom-structure-'));
+afterAll(() => rmSync(folder, { recursive: true, force: true }));
+
+/** The tree of the pressed booklet, of which qpdf has found no fault. */
+async function pressedTree(normSet: NormSet): Promise<ReadStructure & { readonly sheets: readonly ReadElement[] }> {
+  const { pdf } = await bookletPdf(normSet);
+  const file = join(folder, `${normSet.check}.pdf`);
+  writeFileSync(file, pdf);
+  expect(execFileSync('qpdf', ['--check', file], { encoding: 'utf8' })).toContain(
+    'No syntax or stream encoding errors',
+  );
+  const tree = await readStructure(file, pdf);
+  expect(tree.faults).toEqual([]);
+  expect(tree.loose).toEqual([]);
+  expect(tree.root.type).toBe('Document');
+  return { ...tree, sheets: elementsIn(tree.root) };
+}
+
+type Sheet = Partial<NormProject['sheet']>;
+
+const withSheet =
+  (sheet: Sheet, columns?: NormProject['table']['columns']) =>
+  (project: NormProject): NormProject => ({
+    ...project,
+    sheet: { ...project.sheet, ...sheet },
+    precision: { ...project.precision, reliability: 0.9 },
+    table: { ...project.table, columns: columns ?? project.table.columns },
+  });
+
+const smoothed =
+  (change: (project: NormProject) => NormProject) =>
+  (project: NormProject): NormProject => ({
+    ...change(project),
+    curve: { ...project.curve, smoothing: LOG_LINEAR, exceptions: [{ values: ['5'], smoothing: KERNEL }] },
+  });
+
+/** Spoken texts as a person would write them down, sign by sign. */
+function saidOf(text: string): string {
+  if (text === '–') return 'no value';
+  const words: Readonly<Record<string, string>> = {
+    '<': 'below ',
+    '>': 'above ',
+    '−': 'minus ',
+    '–': ' to ',
+    '\u202f': '',
+  };
+  return [...text].map((sign) => words[sign] ?? sign).join('');
+}
+
+/** The heads as they would be written in one line. */
+const HEADS: Readonly<Record<string, string>> = { 'Sta- nine': 'Stanine', 'Measure- ment band': 'Measurement band' };
+
+function checkConversion(normSet: NormSet, sheets: readonly ReadElement[]): void {
+  const columns = tableColumns(normSet.project);
+  expect(sheets.map(({ type }) => type)).toEqual(normSet.groups.map(() => 'Sect'));
+  normSet.groups.forEach(({ rows }, group) => {
+    const sheet = sheets[group];
+    const table = sheet === undefined ? undefined : findAll(sheet, 'Table')[0];
+    if (table === undefined) throw new Error('no table');
+    const expected = rows.flatMap((row) =>
+      columns.slice(1).map((column) => {
+        const text = column.key === 'rank' ? row.printed : column.key === 'score' ? '' : row.texts[column.key];
+        const head = column.heading.join(' ');
+        return {
+          rowHead: saidOf(row.scoreText),
+          columnHead: HEADS[head] ?? head,
+          spoken: saidOf(text),
+          printed: text,
+        };
+      }),
+    );
+    expect(cellsHeard(table)).toEqual(expected);
+    const [first] = findAll(findOne(table, 'THead'), 'TH');
+    expect(first === undefined ? '' : spoken(first).trim()).toBe('Raw score');
+  });
+}
+
+describe('the structure tree of a pressed booklet', () => {
+  it('gives every cell its raw score and the head of its column, whatever the paper and however many pages', async () => {
+    const long = { scale: { min: -40, max: 260, step: 1 }, groups: ['4', '5'] };
+    for (const normSet of [
+      sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5', '6'] }, withSheet({ tableColumns: 3 })),
+      sampleNormSet(long, withSheet({ tableColumns: 3 }, ['z', 'stanine'])),
+      sampleNormSet({ ...long, weighted: true }, withSheet({ paper: 'a5', tableColumns: 2 }, ['count', 'cumulative'])),
+      sampleNormSet(
+        { scale: { min: 0, max: 60, step: 0.5 }, direction: 'low-is-good' },
+        smoothed(
+          withSheet({ orientation: 'landscape', inverse: true, notes: 'A note. '.repeat(500) }, [
+            'interval',
+            'standard-error',
+            'measurement-band',
+            'print-range',
+          ]),
+        ),
+      ),
+    ]) {
+      checkConversion(normSet, (await pressedTree(normSet)).sheets);
+    }
+  }, 120_000);
+
+  it('reads title, subtitle, how to read, cautions, tables, figure and notes, in this order', async () => {
+    const texts = { howToRead: 'How to read it.', cautions: 'Take care.', notes: 'As noted.' };
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE }, smoothed(withSheet({ ...texts, inverse: true })));
+    const { sheets } = await pressedTree(normSet);
+    const [sheet] = sheets;
+    if (sheet === undefined) throw new Error('no sheet');
+    expect(sheet.title).toBe('Table 1 · Grade 4');
+    const order = elementsIn(sheet).map((part) => `${part.type} ${part.type === 'Table' ? '' : printed(part)}`);
+    const starts = [
+      'H1 Raw score to percentile rank, grade 4',
+      'P The share of the sample scoring',
+      'P How to read it.',
+      'P Take care.',
+      'Table ',
+      'Table ',
+      'Figure ',
+      'P Figure 1. Cumulative per cent',
+      'P Sample. ',
+      'P Method. ',
+      'P Notes. As noted.',
+      'H2 Technical notes on the smoothing',
+      'Table ',
+      'Table ',
+      'P Degrees. ',
+      'P Fit. ',
+    ];
+    expect(order.map((part, index) => part.slice(0, starts[index]?.length))).toEqual(starts);
+  });
+
+  it('states the numbers of the group in the words for the figure', async () => {
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5'] }, withSheet({}));
+    const { sheets } = await pressedTree(normSet);
+    normSet.groups.forEach(({ summary }, group) => {
+      const sheet = sheets[group];
+      if (sheet === undefined) throw new Error('no sheet');
+      const { alt, children } = findOne(sheet, 'Figure');
+      const [lowest, lower, median, upper, highest] = summary.fiveNumbers.map(String);
+      expect(alt.replaceAll('\u202f', '')).toContain(`${summary.n} pupils`);
+      expect(alt).toContain(
+        `Lowest score ${lowest}, lower hinge ${lower}, median ${median}, upper hinge ${upper}, highest score ${highest}.`,
+      );
+      expect(children).toHaveLength(1);
+    });
+  });
+
+  it('gives the inverse table and the tables of the fit their heads', async () => {
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE }, smoothed(withSheet({ paper: 'a5', inverse: true })));
+    const { sheets } = await pressedTree(normSet);
+    normSet.groups.forEach(({ inverse, smoothing }, group) => {
+      const sheet = sheets[group];
+      if (sheet === undefined || smoothing.state !== 'smoothed') throw new Error('no sheet');
+      const tables = findAll(sheet, 'Table');
+      const { degrees, momentsObserved } = smoothing.curve;
+      expect(tables).toHaveLength(degrees.length > 0 ? 4 : 3);
+      const [, strip] = tables;
+      expect(strip === undefined ? [] : cellsHeard(strip)).toEqual(
+        inverse.map(({ percentile, scoreText }) => ({
+          rowHead: 'Lowest raw score',
+          columnHead: String(percentile),
+          spoken: saidOf(scoreText),
+          printed: scoreText,
+        })),
+      );
+      const moments = tables.at(-1);
+      const heard = moments === undefined ? [] : cellsHeard(moments);
+      const mean = heard.find(({ rowHead, columnHead }) => rowHead === 'Mean' && columnHead === 'Observed');
+      expect(Number(mean?.printed)).toBeCloseTo(momentsObserved.mean, 3);
+      if (degrees.length === 0) return;
+      const [fits] = tables.slice(2);
+      const figures = fits === undefined ? [] : cellsHeard(fits);
+      expect(figures).toHaveLength(degrees.length * 6);
+      for (const { degree, df } of degrees) {
+        const cell = figures.find(({ rowHead, columnHead }) => rowHead === String(degree) && columnHead === 'df');
+        expect(cell?.printed).toBe(String(df));
+      }
+    });
+  });
+
+  it('leaves out heads, feet and whatever is printed again on further pages', async () => {
+    const normSet = sampleNormSet(
+      { scale: { min: 0, max: 300, step: 1 }, groups: ['4'] },
+      withSheet({ tableColumns: 3 }),
+    );
+    const { root, artifacts, pages } = await pressedTree(normSet);
+    const read = printed(root);
+    expect(pages.length).toBeGreaterThan(2);
+    artifacts.forEach((texts, index) => {
+      expect(texts).toContain(`page ${index + 1} of ${pages.length}`);
+      expect(texts.join(' ')).toContain(`check ${normSet.check}`);
+      expect(texts.join(' ').includes('(continued)')).toBe(index > 0);
+    });
+    // The heads of the table stand once in the tree, and as artifacts over all its other columns.
+    const headings = artifacts.map((texts) => texts.filter((text) => text.trim() === 'Percentile').length);
+    expect(headings.slice(0, 2)).toEqual([2, 3]);
+    for (const out of ['page 1', normSet.check, '(continued)', 'Ostrey Vale']) expect(read).not.toContain(out);
+    expect(findAll(root, 'TH').filter((head) => printed(head) === 'Percentile rank')).toHaveLength(1);
+  });
+
+  it('keeps words apart where lines end, and together where a word goes on', async () => {
+    const cautions = 'Take care with the half-hearted and the well-read pupils. '.repeat(6).trim();
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] }, withSheet({ cautions }));
+    const file = join(folder, 'words.pdf');
+    writeFileSync(file, (await bookletPdf(normSet)).pdf);
+    const read = execFileSync('pdfinfo', ['-struct-text', file], { encoding: 'utf8' });
+    for (const paragraph of [cautions, normSet.project.sheet.howToRead, 'Raw score', 'Percentile rank']) {
+      expect(read).toContain(`"${paragraph} "`);
+    }
+  });
+
+  it('says in the catalogue that it is tagged, in which language, by what title and with which page numbers', async () => {
+    const { catalogue, pages } = await pressedTree(sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] }));
+    expect(catalogue['/Lang']).toBe('u:en');
+    const named = JSON.stringify(catalogue);
+    expect(named).toContain('"/PageLabels":{"/Nums":[0,{"/S":"/D"}]}');
+    for (const key of ['/MarkInfo', '/StructTreeRoot', '/Outlines', '/ViewerPreferences', '/Metadata']) {
+      expect(catalogue).toHaveProperty([key]);
+    }
+    for (const page of pages) expect(page['/Tabs']).toBe('/S');
+  });
+});
