@@ -1,5 +1,6 @@
 import { ratioToNumber } from '../percentile/exact-ratio.ts';
 import { printNumber } from '../scores/printed-number.ts';
+import { computedText } from './adjustments.ts';
 import { conversionRows } from './conversion-table.ts';
 import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
@@ -30,7 +31,10 @@ export function choiceEffect(norms: GroupNorms, other: NormProject): ChoiceEffec
   });
   return {
     rows: rows.length,
-    changed: rows.filter((row, position) => row.printed !== norms.rows[position]?.printed).length,
+    changed: rows.filter((row, position) => {
+      const before = norms.rows[position];
+      return before === undefined || row.printed !== computedText(before);
+    }).length,
     largestMove: Math.max(...moves),
   };
 }

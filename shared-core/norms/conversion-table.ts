@@ -44,7 +44,7 @@ export interface RowProvenance {
     readonly all: number;
   };
   /** Which rank was printed, and which end rule, if any, took the place of the rounded number. */
-  readonly printed: { readonly from: 'observed' | 'smoothed'; readonly end: EndTaken };
+  readonly printed: { readonly from: 'observed' | 'smoothed' | 'adjusted'; readonly end: EndTaken };
   readonly derived: DerivedFrom;
 }
 
@@ -82,6 +82,8 @@ export interface ConversionRow {
   readonly range: PrintRange | null;
   /** As printed everywhere. */
   readonly printed: string;
+  /** What was printed before somebody changed it by hand, why and who; null where nobody did. The rank stays. */
+  readonly adjusted: { readonly from: string; readonly reason: string; readonly by: string } | null;
   /** Unrounded; null where no finite value exists. */
   readonly derived: DerivedScores;
   /** The z that printed scores are made from, before they are held: that of `derived`, or what stands in for it. */
@@ -188,6 +190,7 @@ function rowOf(basis: RowBasis, { position, score, observed, rank, part }: RowPa
     band,
     range,
     printed: printed.text,
+    adjusted: null,
     derived,
     printedZ: behindPrint.z,
     texts: {

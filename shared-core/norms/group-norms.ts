@@ -3,6 +3,7 @@ import { samplingDesign, type SamplingDesign } from '../precision/sampling-desig
 import { summarise, type CohortSummary } from '../tally/cohort-summary.ts';
 import { smooth } from '../smoothing/smooth.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
+import { adjustRows, type RefusedAdjustment } from './adjustments.ts';
 import { conversionRows, type ConversionRow } from './conversion-table.ts';
 import { fitEvidence, type FitEvidence } from './fit-evidence.ts';
 import { smoothedFrom, smoothGroup, type GroupSmoothing, type SmoothedCurve } from './group-smoothing.ts';
@@ -27,6 +28,8 @@ export interface GroupNorms {
   /** One row for each attainable score, lowest first. */
   readonly rows: readonly ConversionRow[];
   readonly inverse: readonly InverseRow[];
+  /** Adjustments of its printed ranks that could not be made. */
+  readonly refusedAdjustments: readonly RefusedAdjustment[];
 }
 
 /**
@@ -43,16 +46,18 @@ export function normsOfGroup(project: NormProject, group: NormGroup, known: Grou
   const curve = smoothing.state === 'smoothed' ? smoothing.curve : null;
   const precision = precisionOf({ table, summary, sampling, definition, choices: project.precision, curve });
   const ranges = project.table.columns.includes('print-range') ? printRanges(project, table, curve) : null;
-  const rows = conversionRows({ table, summary, definition, choices: project.table, curve, precision, ranges });
+  const computed = conversionRows({ table, summary, definition, choices: project.table, curve, precision, ranges });
+  const { rows, refused } = adjustRows(project, group, computed);
   return {
     group,
     summary,
     sampling,
     smoothing,
-    evidence: curve === null ? null : fitEvidence(rows, curve, table, project.table),
+    evidence: curve === null ? null : fitEvidence(computed, curve, table, project.table),
     precision,
     rows,
     inverse: inverseTable(rows, table.scale.direction),
+    refusedAdjustments: refused,
   };
 }
 

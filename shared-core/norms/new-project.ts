@@ -1,3 +1,4 @@
+import { DEFAULT_POLICY } from './policy.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
 
 /** Cautions that print unless the user rewrites them. */
@@ -48,5 +49,7 @@ export function newProject(title: string): NormProject {
       inverse: false,
     },
     release: { edition: '1.0', date: '', answers: [] },
+    adjustments: [],
+    policy: DEFAULT_POLICY,
   };
 }

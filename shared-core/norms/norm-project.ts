@@ -1,7 +1,10 @@
 import * as v from 'valibot';
 import { scaleProblems } from '../scale/score-scale.ts';
+import { adjustmentsSchema } from './adjustment-schema.ts';
 import { cellClustersSchema, clustersFit } from './cluster-schema.ts';
 import { COLUMN_KEYS } from './column-keys.ts';
+import { DEFAULT_POLICY } from './policy.ts';
+import { policySchema } from './policy-schema.ts';
 import { LEFT_OUT_RULES } from './reading.ts';
 import { precisionSchema, smoothingSchema } from './smoothing-schema.ts';
 
@@ -232,6 +235,10 @@ export const normProjectSchema = v.pipe(
     table,
     sheet,
     release,
+    /** Printed ranks that somebody changed by hand. */
+    adjustments: v.optional(adjustmentsSchema, []),
+    /** Thresholds of the queries. */
+    policy: v.optional(policySchema, DEFAULT_POLICY),
   }),
   v.check((project) => tallyFits(project), 'the tally does not fit its scale and columns'),
   v.readonly(),

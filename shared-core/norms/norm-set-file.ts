@@ -75,6 +75,7 @@ function groupForFile(
       cumulative: row.cumulative,
       'percentile-rank': row.observed.percentileRank,
       printed: row.printed,
+      adjusted: row.adjusted,
       derived: row.derived,
       interval: row.interval === null ? null : { low: row.interval.low, high: row.interval.high },
       'standard-error': row.midpointError,

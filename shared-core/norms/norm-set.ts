@@ -6,10 +6,12 @@ import type { CohortSummary } from '../tally/cohort-summary.ts';
 import { peopleIn } from '../tally/frequency-table.ts';
 import { definitionKey } from './definitions.ts';
 import { normsOfGroup, type GroupNorms } from './group-norms.ts';
+import { adjustmentNote } from './adjustment-words.ts';
+import { strayAdjustments, type RefusedAdjustment } from './adjustments.ts';
 import { normGroups } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
 import { clusterFacts } from './sampling-words.ts';
-import { queriesOf, type Query } from './queries.ts';
+import { openMustQueries, queriesOf, type Query } from './queries.ts';
 import { methodText } from './statements.ts';
 
 /** Every number that screen, PDF, workbook and csv print, from one project. */
@@ -18,6 +20,10 @@ export interface NormSet {
   /** Groups that get a table, in print order. */
   readonly groups: readonly GroupNorms[];
   readonly queries: readonly Query[];
+  /** Adjustments by hand that could not be made, of all groups and of groups that are no more. */
+  readonly refusedAdjustments: readonly RefusedAdjustment[];
+  /** A draft while a query that must be answered is open; every page and file says so. */
+  readonly status: 'draft' | 'released';
   /** "7F3A-91C2": the same on every page and machine for the same printed texts, another when one differs. */
   readonly check: string;
 }
@@ -36,29 +42,36 @@ export function buildNormSet(project: NormProject): NormSetBuilt {
   const { definition } = project.curve;
   const problem = definitionProblem(project.tally.scale, definition);
   if (problem !== null) return { ok: false, problem };
-  const printed = normGroups(project).filter((group) => group.printed && peopleIn(group.table) > 0);
+  const all = normGroups(project);
+  const printed = all.filter((group) => group.printed && peopleIn(group.table) > 0);
   if (printed.length === 0) {
     return { ok: false, problem: 'No group gets a table. At the Groups station, let at least one be printed.' };
   }
   const groups = printed.map((group) => normsOfGroup(project, group));
-  return {
-    ok: true,
-    normSet: { project, groups, queries: queriesOf(project, groups), check: checkCode(project, groups) },
-  };
+  const refusedAdjustments = [
+    ...strayAdjustments(project, all),
+    ...groups.flatMap((norms) => norms.refusedAdjustments),
+  ];
+  const queries = queriesOf(project, groups, refusedAdjustments);
+  const status = openMustQueries(queries).length > 0 ? 'draft' : 'released';
+  const check = checkCode(project, groups, status);
+  return { ok: true, normSet: { project, groups, queries, refusedAdjustments, status, check } };
 }
 
 /**
  * Why a set cannot be pressed or handed out, in a sentence that tells what to do, or null: a group whose smoothing was
- * refused would be printed as something it is not.
+ * refused would be printed as something it is not, and a rank that could not be adjusted as what nobody wanted.
  */
-export function pressProblem({ groups }: NormSet): string | null {
+export function pressProblem({ groups, refusedAdjustments }: NormSet): string | null {
+  const [adjustment] = refusedAdjustments;
+  if (adjustment !== undefined) return adjustment.problem;
   const refused = groups.find(({ smoothing }) => smoothing.state === 'refused');
   if (refused?.smoothing.state !== 'refused') return null;
   return `${refused.group.title} cannot be smoothed as chosen. ${refused.smoothing.problem}`;
 }
 
 /** Of everything that is printed, except the paper it is printed on. */
-function checkCode(project: NormProject, groups: readonly GroupNorms[]): string {
+function checkCode(project: NormProject, groups: readonly GroupNorms[], status: NormSet['status']): string {
   const { title, subtitle, people, source, sheet, release } = project;
   const { documentation } = project.groups;
   const printed = [
@@ -76,6 +89,9 @@ function checkCode(project: NormProject, groups: readonly GroupNorms[]): string 
       rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
       sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
     ]),
+    // What few sets have leaves the code of the others as it is.
+    ...groups.map(adjustmentNote).filter((note) => note !== null),
+    ...(status === 'draft' ? [status] : []),
   ];
   const hash = bytesToHex(sha256(utf8ToBytes(JSON.stringify(printed)))).toUpperCase();
   return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;

@@ -1,5 +1,5 @@
 import { ratio, type ExactRatio } from '../percentile/exact-ratio.ts';
-import { printCount, printNumber, printRatio } from '../scores/printed-number.ts';
+import { printCount, printNumber, printRank, printRatio } from '../scores/printed-number.ts';
 import type { FrequencyTable } from '../tally/frequency-table.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { ConversionRow } from './conversion-table.ts';
@@ -56,7 +56,13 @@ export function workingsOf(
     case 'rank':
       return {
         title,
-        lines: [...counts, ...rankLines(project, norms, row), ...smoothedLines(norms, row), roundingLine(project, row)],
+        lines: [
+          ...counts,
+          ...rankLines(project, norms, row),
+          ...smoothedLines(norms, row),
+          roundingLine(project, row),
+          ...adjustedLines(row),
+        ],
         result: row.printed,
       };
     default:
@@ -150,9 +156,16 @@ function exactWeight(table: FrequencyTable, units: bigint): string {
 function roundingLine(project: NormProject, row: ConversionRow): string {
   const { decimals, rounding, ends } = project.table;
   const unit = decimals === 0 ? 'whole numbers' : 'one decimal';
-  if (row.provenance.printed.end !== null) {
-    const why = row.provenance.printed.end === 'low' ? 'Below the lowest' : 'Above the highest';
-    return `${why} rank that is printed${ends === 'held' ? '; held there' : ''}: ${row.printed}.`;
+  const { text, end } = printRank(row.rank, project.table);
+  if (end !== null) {
+    const why = end === 'low' ? 'Below the lowest' : 'Above the highest';
+    return `${why} rank that is printed${ends === 'held' ? '; held there' : ''}: ${text}.`;
   }
-  return `Rounded to ${unit}, ${rounding === 'half-up' ? 'halves up' : 'halves to even'}: ${row.printed}.`;
+  return `Rounded to ${unit}, ${rounding === 'half-up' ? 'halves up' : 'halves to even'}: ${text}.`;
+}
+
+/** What somebody made of the rounded rank; nothing where nobody changed it. */
+function adjustedLines({ adjusted, printed }: ConversionRow): readonly string[] {
+  if (adjusted === null) return [];
+  return [`Adjusted by hand (${adjusted.reason}; ${adjusted.by}), from ${adjusted.from} to ${printed}.`];
 }

@@ -3,7 +3,7 @@ import type { Block, Booklet, BookletPage } from './booklet.ts';
 import { pageFrame } from './page-frame.ts';
 import { paperOf } from './paper.ts';
 import { sheetPages } from './sheet-pages.ts';
-import { surveyName, tableName } from './sheet-texts.ts';
+import { draftTitle, surveyName, tableName } from './sheet-texts.ts';
 import { measureTables } from './table-measure.ts';
 import { missingCharacters } from './text-width.ts';
 
@@ -32,7 +32,7 @@ export function composeBooklet(normSet: NormSet): Booklet {
     }),
   );
   return {
-    title: surveyName(normSet.project) || 'Conversion tables',
+    title: draftTitle(normSet, surveyName(normSet.project) || 'Conversion tables'),
     paper,
     pages,
     remarks: [

@@ -105,4 +105,6 @@ export interface PlacedRow {
   readonly baseline: number;
   /** One text for each head. */
   readonly texts: readonly string[];
+  /** True where the rank was adjusted by hand: a mark hangs behind it. */
+  readonly adjusted: boolean;
 }

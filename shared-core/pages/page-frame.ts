@@ -1,8 +1,8 @@
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import type { Block, Paper } from './booklet.ts';
+import type { Block, Paper, TextRun } from './booklet.ts';
 import { firstLines } from './prose.ts';
-import { editionLine, surveyName, tableName } from './sheet-texts.ts';
+import { draftMark, editionLine, surveyName, tableName } from './sheet-texts.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import type { PageRole } from './text-role.ts';
 import { textWidth } from './text-width.ts';
@@ -35,8 +35,8 @@ const FOOT: PageRole = { kind: 'running', edge: 'bottom' };
 export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
   const left = paper.margin;
   const width = paper.width - 2 * paper.margin;
-  const survey = headLines(surveyName(normSet.project), (width - GUTTER) * LEFT_SHARE);
-  const table = headLines(tableName(index, norms), (width - GUTTER) * (1 - LEFT_SHARE));
+  const survey = headLines(surveyRuns(normSet), (width - GUTTER) * LEFT_SHARE);
+  const table = headLines([{ text: tableName(index, norms), face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
   const headTop = paper.margin - OUTSIDE - RUNNING.leading / 2;
   const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
   const numberWidth = textWidth(WIDEST_PAGE_NUMBER, 'sans', RUNNING.size);
@@ -63,7 +63,20 @@ export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, pa
   };
 }
 
-function headLines(text: string, width: number): { readonly lines: readonly LooseLine[]; readonly cut: boolean } {
-  const first = firstLines([{ text, face: 'sans' }], RUNNING.size, width, MOST_HEAD_LINES);
+/** The survey's name, behind the word that a draft carries on every page. */
+function surveyRuns(normSet: NormSet): readonly TextRun[] {
+  const [mark, name] = [draftMark(normSet), surveyName(normSet.project)];
+  if (mark === '') return [{ text: name, face: 'sans' }];
+  return [
+    { text: mark, face: 'sans-bold' },
+    { text: name === '' ? '' : ` · ${name}`, face: 'sans' },
+  ];
+}
+
+function headLines(
+  runs: readonly TextRun[],
+  width: number,
+): { readonly lines: readonly LooseLine[]; readonly cut: boolean } {
+  const first = firstLines(runs, RUNNING.size, width, MOST_HEAD_LINES);
   return { lines: first.lines.map((runs) => ({ runs, before: 0, role: HEAD })), cut: first.cut };
 }

@@ -1,3 +1,4 @@
+import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { tableColumns } from '../norms/table-columns.ts';
@@ -69,6 +70,7 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
   layTable(flow, normSet, norms, measure);
+  layAdjustments(flow, norms);
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
   layTechnicalNotes(flow, normSet, norms);
@@ -157,6 +159,14 @@ function layTable(flow: SheetFlow, normSet: NormSet, norms: GroupNorms, measure:
     rest = page.rest;
     if (rest.length > 0) flow.turn();
   }
+}
+
+/** Which ranks of the table were changed by hand, and why. */
+function layAdjustments(flow: SheetFlow, norms: GroupNorms): void {
+  const note = adjustmentNote(norms);
+  if (note === null) return;
+  flow.skip(BELOW_PICTURE);
+  flow.inTwoColumns(linesOf(note, 'sans', SMALL_PROSE, flow.halfWidth, paragraph('adjustments')), SMALL_PROSE);
 }
 
 function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {

@@ -1,3 +1,4 @@
+import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import { namedFiveNumbers } from '../norms/five-numbers.ts';
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
@@ -49,10 +50,22 @@ export function surveyName({ title, subtitle }: NormProject): string {
   return [title.trim(), subtitle.trim()].filter((part) => part !== '').join(' · ');
 }
 
+/** Stands before titles of a set that is not released; nothing otherwise. */
+export function draftMark({ status }: NormSet): string {
+  return status === 'draft' ? 'DRAFT' : '';
+}
+
+/** A title, marked where the set is a draft. */
+export function draftTitle(normSet: NormSet, title: string): string {
+  return [draftMark(normSet), title].filter((part) => part !== '').join(' · ');
+}
+
 /** Left side of the foot: which edition this is and what its numbers are. */
-export function editionLine({ project, check }: NormSet, { summary, smoothing }: GroupNorms): string {
+export function editionLine(normSet: NormSet, { summary, smoothing }: GroupNorms): string {
+  const { project, check } = normSet;
   const { edition, date } = project.release;
   return [
+    ...(normSet.status === 'draft' ? [draftMark(normSet)] : []),
     ...(edition.trim() === '' ? [] : [`Edition ${edition.trim()}`]),
     ...(date === '' ? [] : [date]),
     `check ${check}`,
@@ -134,4 +147,10 @@ export function cellText(row: ConversionRow, { key }: TableColumn): string {
     default:
       return row.texts[key];
   }
+}
+
+/** The same with the mark of a rank that was adjusted by hand, where one printed text holds both. */
+export function markedText(row: ConversionRow, column: TableColumn): string {
+  const text = cellText(row, column);
+  return column.key === 'rank' && row.adjusted !== null ? `${text}${ADJUSTED_MARK}` : text;
 }

@@ -1,3 +1,4 @@
+import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import type { TableColumn } from '../norms/table-columns.ts';
 import type { Rule, TableColumnBlock, TableHead, TextLine } from './booklet.ts';
 import { rangeSides } from './range-cell.ts';
@@ -16,6 +17,8 @@ const ABOVE_ROWS = 3;
 const BELOW_ROWS = 4;
 /** Share of a line of rows above its baseline. */
 const ABOVE_BASELINE = 0.72;
+/** How the mark behind a rank is read aloud. */
+const ADJUSTED_IN_WORDS = 'adjusted by hand';
 
 export function rowMeasure({ typeScale }: TableMeasure): RowMeasure {
   return { pitch: ROW.leading * typeScale, gap: FIVE_GAP * typeScale };
@@ -71,7 +74,12 @@ export function placeTable(
         return five.map((row) => {
           const baseline = y + rows.pitch * ABOVE_BASELINE;
           y += rows.pitch;
-          return { score: row.score, baseline, texts: tableColumns.map((head) => cellText(row, head)) };
+          return {
+            score: row.score,
+            baseline,
+            texts: tableColumns.map((head) => cellText(row, head)),
+            adjusted: row.adjusted !== null,
+          };
         });
       }),
     };
@@ -121,18 +129,14 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
         return figure(index, line, role, block.headRule - HEAD_PADDING - 1.5 - up, TABLE_HEAD.size * typeScale, true);
       }),
     ),
-    ...block.rows.flatMap(({ score, baseline, texts }) =>
-      texts.map((text, index) => {
-        const role = cell(score, index, spokenFigure(text));
-        return figure(
-          index,
-          text,
-          role,
-          baseline,
-          block.size,
-          index === 0,
-          leftBehind(text, headOf(index), block.size),
-        );
+    ...block.rows.flatMap(({ score, baseline, texts, adjusted }) =>
+      texts.flatMap((text, index) => {
+        const marked = adjusted && headOf(index).key === 'rank';
+        const figureSaid = spokenFigure(text);
+        const role = cell(score, index, marked ? `${figureSaid ?? text}, ${ADJUSTED_IN_WORDS}` : figureSaid);
+        const left = leftBehind(text, headOf(index), block.size);
+        const printed = figure(index, text, role, baseline, block.size, index === 0, left);
+        return marked ? [printed, adjustedMark(block, baseline, role)] : [printed];
       }),
     ),
   ];
@@ -142,6 +146,23 @@ export function tableMarks(block: TableColumnBlock): readonly (TextLine | Rule)[
 function cell(row: CellRole['row'], column: number, said: string | null): CellRole {
   const headOf = row === 'head' ? 'column' : column === 0 ? 'row' : null;
   return { kind: 'cell', table: 'conversion', row, column, headOf, said };
+}
+
+/** The mark hangs behind the rank, so that figures stay under figures. */
+function adjustedMark({ x, heads, size }: TableColumnBlock, baseline: number, role: TextRole): TextLine {
+  const head = heads.find(({ key }) => key === 'rank');
+  if (head === undefined) throw new RangeError('a table without ranks');
+  return {
+    kind: 'text',
+    x: x + head.right,
+    baseline,
+    width: textWidth(ADJUSTED_MARK, 'sans', size),
+    align: 'left',
+    size,
+    colour: 'ink',
+    runs: [{ text: ADJUSTED_MARK, face: 'sans' }],
+    role,
+  };
 }
 
 /** Points between the end of a cell's text and the end of its column. */

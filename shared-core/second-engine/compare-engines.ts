@@ -86,10 +86,11 @@ function recounted({ tally, groups, curve, table }: NormProject, { group }: Grou
   });
 }
 
-function cellsOf({ score, printed, count, texts }: ConversionRow, { table }: NormProject): Cells {
+function cellsOf({ score, printed, adjusted, count, texts }: ConversionRow, { table }: NormProject): Cells {
   return {
     'raw score': String(score),
-    'percentile rank': printed,
+    // What was changed by hand is compared as it was computed.
+    'percentile rank': adjusted === null ? printed : adjusted.from,
     'rank to two decimals': texts['exact-rank'],
     number: String(count),
     'number at or below': texts.cumulative,

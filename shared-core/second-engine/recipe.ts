@@ -27,7 +27,7 @@ export function recipeOf(normSet: NormSet, group: number, score: number): readon
     `${roundingSentence(normSet, counted.rank)} That gives ${redone}.`,
     norms.smoothing.state === 'smoothed'
       ? `The table prints ${row.printed}: its ranks are smoothed, and smoothing cannot be redone by hand.`
-      : `The table prints ${row.printed}.`,
+      : `The table prints ${row.printed}${row.adjusted === null ? '' : `: it was adjusted by hand from ${row.adjusted.from}`}.`,
   ];
 }
 

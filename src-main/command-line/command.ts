@@ -3,8 +3,19 @@ import { COMPARE_FORMATS, type CompareFormat } from './compare-command.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
 import type { EditionPaths } from './edition-pair.ts';
 import { erratumOptions, type ErratumOptions } from './erratum-options.ts';
-import { COMPARE, DIFFER, ERRATUM, GENERAL, PRESS, READ_BACK, TABLE, type OptionNames } from './option-names.ts';
+import {
+  COMPARE,
+  DIFFER,
+  ERRATUM,
+  GENERAL,
+  PRESS,
+  QUERIES,
+  READ_BACK,
+  TABLE,
+  type OptionNames,
+} from './option-names.ts';
 import { oneOf, readOrSay, textGiven, type OptionValues } from './option-values.ts';
+import { queriesOptions, type QueriesFormat } from './queries-options.ts';
 import { readBackOptions, type ReadBackOptions } from './read-back-options.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
@@ -17,6 +28,7 @@ export type Command =
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
   | { readonly kind: 'press'; readonly path: string; readonly into: string }
   | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions }
+  | { readonly kind: 'queries'; readonly path: string; readonly format: QueriesFormat }
   | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
   | { readonly kind: 'erratum'; readonly paths: EditionPaths; readonly options: ErratumOptions };
 
@@ -59,6 +71,11 @@ export function readCommand(words: readonly string[]): Reply<Command> {
         const options = erratumOptions(values);
         return options.ok ? { ok: true, value: { kind: 'erratum', paths, options: options.value } } : options;
       });
+    case 'queries':
+      return readFileCommand(others, QUERIES, 'queries takes one project', (path, values) => {
+        const format = queriesOptions(values);
+        return format.ok ? { ok: true, value: { kind: 'queries', path, format: format.value } } : format;
+      });
     default: {
       const read = readWords(words, GENERAL);
       if (!read.ok) return read;
@@ -66,7 +83,7 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       if (general !== null) return { ok: true, value: general };
       return wrong(
         name === undefined
-          ? 'Tell what to do: table, differ, press, read-back, compare or erratum.'
+          ? 'Tell what to do: table, differ, press, read-back, queries, compare or erratum.'
           : `There is no command "${name}".`,
       );
     }

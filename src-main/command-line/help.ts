@@ -12,6 +12,8 @@ normloom read-back FILE… --against PROJECT  pressed files compared with the pr
 normloom compare OLD NEW [--format text|json]
                                             every printed cell and choice in which two projects differ
 normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
+normloom queries PROJECT [--format text|json]
+                                            what a proof-reader would ask, and what was answered
 normloom --help | --version
 
 Options of table and differ:

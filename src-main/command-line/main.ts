@@ -5,6 +5,7 @@ import { erratumCommand } from './erratum-command.ts';
 import { HELP } from './help.ts';
 import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcome.ts';
 import { pressCommand } from './press-command.ts';
+import { queriesCommand } from './queries-command.ts';
 import { programVersion } from '../program-version.ts';
 import { readBackCommand } from './read-back-command.ts';
 import { tableCommand } from './table-command.ts';
@@ -24,6 +25,8 @@ async function run(command: Command): Promise<Outcome> {
       return pressCommand(command.path, command.into);
     case 'read-back':
       return readBackCommand(command.paths, command.options);
+    case 'queries':
+      return queriesCommand(command.path, command.format);
     case 'compare':
       return compareCommand(command.paths, command.format);
     case 'erratum':

@@ -50,3 +50,5 @@ export const ERRATUM = {
   person: text,
   cut: text,
 } as const satisfies OptionNames;
+
+export const QUERIES = { ...GENERAL, format: text } as const satisfies OptionNames;

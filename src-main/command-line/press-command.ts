@@ -1,31 +1,20 @@
-import { readFile } from 'node:fs/promises';
 import { basename } from 'node:path';
-import { buildNormSet, pressProblem } from '../../shared-core/norms/norm-set.ts';
-import { projectFromText } from '../../shared-core/norms/project-text.ts';
-import { openQueries, type Query } from '../../shared-core/norms/queries.ts';
-import { diskTrouble } from '../project-file/disk-trouble.ts';
+import { pressProblem } from '../../shared-core/norms/norm-set.ts';
+import { openMustQueries, type Query } from '../../shared-core/norms/queries.ts';
 import { refused, type Outcome } from './outcome.ts';
+import { readProject } from './read-project.ts';
 
 /** Presses a project into a folder, which is made where it is missing; the result names each file with its SHA-256. */
 export async function pressCommand(path: string, into: string): Promise<Outcome> {
-  let text: string;
-  try {
-    text = await readFile(path, 'utf8');
-  } catch (error) {
-    return refused(diskTrouble(basename(path), 'read', error));
-  }
-  const read = projectFromText(text);
-  if (!read.ok) return refused(`${basename(path)}: ${read.problem}`);
-  const built = buildNormSet(read.project);
-  if (!built.ok) return refused(`${basename(path)}: ${built.problem}`);
-  const unfit = pressProblem(built.normSet);
+  const read = await readProject(path);
+  if (!read.ok) return refused(read.problem);
+  const normSet = read.value;
+  const unfit = pressProblem(normSet);
   if (unfit !== null) return refused(`${basename(path)}: ${unfit}`);
-  const remarks = openQueries(built.normSet.queries)
-    .filter(({ weight }) => weight === 'must')
-    .map(queryLine);
+  const remarks = openMustQueries(normSet.queries).map(queryLine);
   // The press brings fonts and writers of PDF and workbooks, which no other command waits for.
   const { pressInto } = await import('../press/press-files.ts');
-  const pressed = await pressInto(read.project, into);
+  const pressed = await pressInto(normSet.project, into);
   if (!pressed.ok) return refused(pressed.problem, remarks);
   return {
     kind: 'done',

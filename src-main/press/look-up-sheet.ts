@@ -3,10 +3,11 @@ import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf } from '../../shared-core/pages/group-method.ts';
-import { cellText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, markedText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { printCount } from '../../shared-core/scores/printed-number.ts';
 import { distinctTitles } from './sheet-names.ts';
-import { asBold, asHead, asLabel, asTitle, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
+import { asBold, asHead, asLabel, asTitle, linesIn, proseRow, ruleBelow } from './workbook-look.ts';
+import { colophonRow, editionFoot, setUpPages } from './workbook-pages.ts';
 
 export const LOOK_UP = 'Look-up';
 export const LOOK_UP_ROWS = 'Look-up rows';
@@ -17,6 +18,9 @@ export const SCORE_CELL = 'B5';
 export const FIRST_RESULT_ROW = 7;
 
 const WIDTHS = [30, 34] as const;
+/** Of the two columns of titles in the list: they widen with the titles, but not without end. */
+const TITLE_WIDTHS = [24, 60] as const;
+const HEAD_HEIGHT = 40;
 const CHOICE_FILL = { type: 'pattern', pattern: 'solid', fgColor: { argb: 'FFF1EEE7' } } as const;
 
 /**
@@ -41,10 +45,11 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
 
   sheet.columns = WIDTHS.map((width) => ({ width }));
-  sheet.getCell('A1').value = 'Look up a raw score';
+  sheet.getCell('A1').value = draftTitle(normSet, 'Look up a raw score');
   asTitle(sheet.getCell('A1'));
   proseRow(sheet, 2, surveyName(project), 2, WIDTHS[0] + WIDTHS[1]);
   sheet.getCell('A4').value = 'Group';
+  sheet.getCell('A4').alignment = { vertical: 'top' };
   sheet.getCell('A5').value = 'Raw score';
   const group = sheet.getCell(GROUP_CELL);
   group.value = titles[0] ?? '';
@@ -58,12 +63,22 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
   const score = sheet.getCell(SCORE_CELL);
   score.value = exampleRow.score;
+  score.dataValidation = {
+    type: 'decimal',
+    operator: 'between',
+    allowBlank: false,
+    formulae: [example.rows[0]?.score ?? 0, example.rows.at(-1)?.score ?? 0],
+    showErrorMessage: true,
+    errorTitle: 'Raw score',
+    error: 'Type a raw score of the scale.',
+  };
   for (const cell of [group, score]) {
     cell.fill = CHOICE_FILL;
     asBold(cell);
-    cell.alignment = { horizontal: 'right' };
+    cell.alignment = { horizontal: 'right', vertical: 'top', wrapText: true };
     ruleBelow(cell, 'strong');
   }
+  sheet.getRow(4).height = 15 * Math.max(...titles.map((title) => linesIn(title, WIDTHS[1] - 4)));
   columns.forEach((column, index) => {
     const row = FIRST_RESULT_ROW + index;
     const name = sheet.getCell(row, 1);
@@ -72,7 +87,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     const letter = list.getColumn(3 + index).letter;
     const found = `INDEX(${range(letter, 2, 1 + groups.length * perGroup)},${onList(places.position)})`;
     const otherwise = index === 0 ? textInFormula(notFound(normSet)) : '""';
-    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: cellText(exampleRow, column) };
+    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: markedText(exampleRow, column) };
     cell.alignment = { horizontal: 'right', wrapText: true };
     if (index === 0) for (const part of [name, cell]) asBold(part);
     for (const part of [name, cell]) ruleBelow(part, index === columns.length - 1 ? 'strong' : 'fine');
@@ -85,7 +100,10 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
   sheet.getCell(people, 2).alignment = { horizontal: 'right' };
   proseRow(sheet, people + 2, cautionsOf(project), 2, WIDTHS[0] + WIDTHS[1]);
-  setUpPages(sheet, project.sheet, `Edition ${project.release.edition} · check ${normSet.check}`);
+  colophonRow(sheet, people + 4, normSet, 2, WIDTHS[0] + WIDTHS[1]);
+  setUpPages(sheet, project.sheet, editionFoot(normSet), WIDTHS[0] + WIDTHS[1]);
+  setUpPages(list, project.sheet, editionFoot(normSet), titleWidth(titles) * 2 + 9 * (columns.length + 4));
+  list.pageSetup.printTitlesRow = '1:1';
 }
 
 /** Ranges of the list as formulas name them; the position is a single cell, without its sheet. */
@@ -107,7 +125,7 @@ function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]):
   groups.forEach(({ rows }, group) => {
     rows.forEach((row, index) => {
       const at = 2 + group * rows.length + index;
-      const cells = [titles[group] ?? '', row.score, ...columns.map((column) => cellText(row, column))];
+      const cells = [titles[group] ?? '', row.score, ...columns.map((column) => markedText(row, column))];
       cells.forEach((value, place) => {
         list.getCell(at, place + 1).value = value;
         if (place > 1) list.getCell(at, place + 1).alignment = { horizontal: 'right' };
@@ -118,9 +136,11 @@ function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]):
   groups.forEach(({ summary }, group) => {
     list.getCell(2 + group, titleColumn).value = titles[group] ?? '';
     list.getCell(2 + group, titleColumn + 1).value = printCount(summary.n);
+    list.getCell(2 + group, titleColumn + 1).alignment = { horizontal: 'right' };
   });
-  list.getColumn(1).width = 24;
-  list.getColumn(titleColumn).width = 24;
+  list.getColumn(1).width = titleWidth(titles);
+  list.getColumn(titleColumn).width = titleWidth(titles);
+  list.getRow(1).height = HEAD_HEIGHT;
   list.views = [{ state: 'frozen', ySplit: 1 }];
   const letter = (column: number): string => list.getColumn(column).letter;
   return {
@@ -129,6 +149,11 @@ function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]):
     scores: range('B', 2, 1 + (groups[0]?.rows.length ?? 0)),
     position: `${letter(titleColumn + 2)}2`,
   };
+}
+
+function titleWidth(titles: readonly string[]): number {
+  const longest = Math.max(...titles.map((title) => Math.ceil(title.length * 1.15) + 2));
+  return Math.min(TITLE_WIDTHS[1], Math.max(TITLE_WIDTHS[0], longest));
 }
 
 /** Number of the chosen group in the list, compared letter by letter (MATCH would read * and ? as wildcards). */

@@ -15,6 +15,7 @@ export function normSetJson(normSet: NormSet): Uint8Array {
     edition: release.edition,
     date: release.date,
     check: normSet.check,
+    status: normSet.status,
     ...normSetForFile(normSet, () => []),
   };
   return new TextEncoder().encode(`${JSON.stringify(file, null, 1)}\n`);

@@ -1,6 +1,9 @@
 const LONGEST = 31;
 /** Characters that sheet names cannot hold, and control characters. */
 const FORBIDDEN = /[[\]:*?/\\]|\p{Cc}/gu;
+/** Formulas put names into apostrophes; one within a name becomes the curved one, which needs no care. */
+const APOSTROPHE = /'/g;
+const CURVED = '\u2019';
 /** What would make a name a formula, or break the quotes that stand round it in one. */
 const BAD_START = /^[=+\-@'\s]+/;
 /** Excel keeps this name for itself. */
@@ -17,7 +20,8 @@ export function sheetNames(titles: readonly string[], taken: readonly string[]):
       .replace(FORBIDDEN, ' ')
       .replace(/\s+/g, ' ')
       .replace(BAD_START, '')
-      .replace(/['\s]+$/, '');
+      .replace(/['\s]+$/, '')
+      .replace(APOSTROPHE, CURVED);
     const name = unusedName(cleaned === '' ? `Table ${index + 1}` : cleaned, LONGEST, used);
     used.add(name.toLowerCase());
     return name;

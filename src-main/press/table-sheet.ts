@@ -1,45 +1,32 @@
 import type { Worksheet } from 'exceljs';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { tableColumns } from '../../shared-core/norms/table-columns.ts';
-import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
-import {
-  cellText,
-  editionLine,
-  sampleFacts,
-  sheetSubtitle,
-  sheetTitle,
-  surveyName,
-} from '../../shared-core/pages/sheet-texts.ts';
+import { cellText, draftTitle, editionLine, sheetTitle } from '../../shared-core/pages/sheet-texts.ts';
 import { inFives } from '../../shared-core/pages/table-rows.ts';
-import { typedCell } from './typed-cell.ts';
-import { UNROUNDED_FORMAT, unroundedColumns } from './unrounded-columns.ts';
-import { asBold, asHead, asTitle, fillCell, proseRow, ruleBelow, setUpPages } from './workbook-look.ts';
+import type { TableSheetLayout } from './table-layout.ts';
+import { rankCell, typedCell } from './typed-cell.ts';
+import { UNROUNDED_FORMAT } from './unrounded-columns.ts';
+import { asBold, asHead, fillCell, proseRow, ruleBelow, titleRow } from './workbook-look.ts';
+import { colophonRow, setUpPages } from './workbook-pages.ts';
 
 const COLUMN_WIDTH = 11;
 const HEAD_LINES = 3;
+/** Text over a narrow table may be wider than the table. */
+const FEWEST_PROSE_COLUMNS = 6;
 
 /** One group's table: what it is, its cautions, and a row of typed cells for each attainable score. */
-export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupNorms): void {
+export function fillTableSheet(
+  sheet: Worksheet,
+  normSet: NormSet,
+  norms: GroupNorms,
+  { prose, columns, unrounded, width, headRow, firstRow, lastRow }: TableSheetLayout,
+): void {
   const { project } = normSet;
-  const columns = tableColumns(project);
-  const unrounded = unroundedColumns(project, norms);
-  const width = columns.length + unrounded.length;
-  sheet.columns = Array.from({ length: width }, () => ({ width: COLUMN_WIDTH }));
-  const prose = [
-    surveyName(project),
-    `${sheetSubtitle(project)}.`,
-    sampleFacts(project, norms),
-    smoothingSentence(project, norms),
-    `${editionLine(normSet, norms)}.`,
-    project.sheet.howToRead,
-    cautionsOf(project),
-    project.sheet.notes,
-  ].filter((text) => text.trim() !== '');
-  sheet.getCell(1, 1).value = sheetTitle(project, norms);
-  asTitle(sheet.getCell(1, 1));
-  prose.forEach((text, index) => proseRow(sheet, index + 2, text, width, width * COLUMN_WIDTH));
-  const headRow = prose.length + 3;
+  const proseColumns = Math.max(width, FEWEST_PROSE_COLUMNS);
+  const across = proseColumns * COLUMN_WIDTH;
+  sheet.columns = Array.from({ length: proseColumns }, () => ({ width: COLUMN_WIDTH }));
+  titleRow(sheet, draftTitle(normSet, sheetTitle(project, norms)), proseColumns, across);
+  prose.forEach((text, index) => proseRow(sheet, index + 2, text, proseColumns, across));
   const heads = [
     ...columns.map(({ heading }) => heading.join(' ').replace('- ', '')),
     ...unrounded.map(({ head }) => head),
@@ -52,10 +39,10 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
   sheet.getRow(headRow).height = 14 * HEAD_LINES;
   const endsFive = new Set(inFives(norms.rows, norms.group.table.scale).map((five) => five.at(-1)?.score));
   norms.rows.forEach((row, index) => {
-    const at = headRow + 1 + index;
+    const at = firstRow + index;
     columns.forEach((column, place) => {
       const cell = sheet.getCell(at, place + 1);
-      fillCell(cell, typedCell(cellText(row, column)));
+      fillCell(cell, column.key === 'rank' ? rankCell(row) : typedCell(cellText(row, column)));
       if (place === 0) asBold(cell);
     });
     unrounded.forEach(({ valueOf }, place) => {
@@ -67,9 +54,9 @@ export function fillTableSheet(sheet: Worksheet, normSet: NormSet, norms: GroupN
     if (!endsFive.has(row.score)) return;
     for (let place = 1; place <= width; place += 1) ruleBelow(sheet.getCell(at, place), last ? 'strong' : 'fine');
   });
-  const lastRow = headRow + norms.rows.length;
-  sheet.views = [{ state: 'frozen', xSplit: 1, ySplit: headRow, topLeftCell: `B${headRow + 1}`, activeCell: 'A1' }];
-  setUpPages(sheet, project.sheet, editionLine(normSet, norms));
-  sheet.pageSetup.printArea = `A1:${sheet.getColumn(width).letter}${lastRow}`;
+  colophonRow(sheet, lastRow + 2, normSet, proseColumns, across);
+  sheet.views = [{ state: 'frozen', xSplit: 1, ySplit: headRow, topLeftCell: `B${firstRow}`, activeCell: 'A1' }];
+  setUpPages(sheet, project.sheet, editionLine(normSet, norms), across);
+  sheet.pageSetup.printArea = `A$1:${sheet.getColumn(proseColumns).letter}$${lastRow + 2}`;
   sheet.pageSetup.printTitlesRow = `${headRow}:${headRow}`;
 }

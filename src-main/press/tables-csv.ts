@@ -8,9 +8,10 @@ import { safeForCsv } from './safe-text.ts';
  * The names mean what they mean in `norm-set.json`: `percentile-rank` is the observed one, `standard-error` that of the
  * midpoint rank, `interval-low` and `interval-high` (0–100) are of the observed rank; where a group is smoothed, `printed`
  * follows `smoothed-percentile-rank`. Cells are empty where there is no such number.
+ * `adjusted` tells what was changed by hand, why and by whom; `status` is draft or released.
  */
 export function tablesCsv(normSet: NormSet): Uint8Array {
-  const { project, groups, check } = normSet;
+  const { project, groups, check, status } = normSet;
   const { columns } = project.table;
   const { by } = project.groups;
   const heads = [
@@ -31,6 +32,8 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
     'edition',
     'definition',
     'check',
+    'adjusted',
+    'status',
   ];
   const records = groups.flatMap(({ group, summary, rows }) =>
     rows.map((row) => [
@@ -51,6 +54,10 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
       safeForCsv(project.release.edition),
       definitionKey(project.curve.definition),
       check,
+      row.adjusted === null
+        ? ''
+        : `from ${row.adjusted.from} to ${row.printed}: ${row.adjusted.reason} (${row.adjusted.by})`,
+      status,
     ]),
   );
   const text = [heads, ...records].map((record) => `${record.map(quoted).join(',')}\r\n`).join('');

@@ -1,3 +1,6 @@
+import { ADJUSTED_MARK } from '../../shared-core/norms/adjustment-words.ts';
+import type { ConversionRow } from '../../shared-core/norms/conversion-table.ts';
+
 /** A printed text as a workbook cell holds it. */
 export type TypedCell =
   | { readonly kind: 'number'; readonly value: number; readonly format: string }
@@ -16,4 +19,13 @@ export function typedCell(printed: string): TypedCell {
   const positive = `${places.join(`"${NARROW_SPACE}"`)}${fraction === '' ? '' : `.${'0'.repeat(fraction.length)}`}`;
   const value = Number(`${sign === '' ? '' : '-'}${groups.join('')}.${fraction || '0'}`);
   return { kind: 'number', value, format: `${positive};"${MINUS}"${positive}` };
+}
+
+/** The printed rank of a row. One adjusted by hand carries its mark, and stays a number: its format shows the mark. */
+export function rankCell({ printed, adjusted }: ConversionRow): TypedCell {
+  const typed = typedCell(printed);
+  if (adjusted === null) return typed;
+  return typed.kind === 'text'
+    ? { kind: 'text', value: `${typed.value}${ADJUSTED_MARK}` }
+    : { ...typed, format: `${typed.format.split(';')[0] ?? ''}"${ADJUSTED_MARK}"` };
 }

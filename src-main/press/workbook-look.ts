@@ -1,15 +1,17 @@
 import type { Cell, Worksheet } from 'exceljs';
-import type { SheetChoices } from '../../shared-core/norms/norm-project.ts';
 import type { TypedCell } from './typed-cell.ts';
 
-/** Numbers by which workbooks name paper (Office Open XML, part 1, 18.3.1.63). */
-const PAPER_SIZES: Readonly<Record<SheetChoices['paper'], number>> = { letter: 1, a4: 9, a5: 11 };
-
 const INK = { argb: 'FF1E2326' };
+const QUIET = { argb: 'FF5B6166' };
 const FINE = { style: 'thin', color: { argb: 'FFD8D3C7' } } as const;
 const STRONG = { style: 'thin', color: INK } as const;
 
 const BODY = { name: 'Calibri', family: 2, size: 11, color: INK } as const;
+
+const TITLE_SIZE = 15;
+const TITLE_HEIGHT = 21;
+/** Width of a title's letters, in those of the usual type. */
+const TITLE_LETTER = 1.5;
 
 export function asBold(cell: Cell): void {
   cell.font = { ...BODY, bold: true };
@@ -27,10 +29,32 @@ export function fillCell(cell: Cell, typed: TypedCell): void {
 }
 
 export function asTitle(cell: Cell): void {
-  cell.font = { ...BODY, size: 15, bold: true };
+  cell.font = { ...BODY, size: TITLE_SIZE, bold: true };
+}
+
+/** A title over several columns, as high as its lines; the width is in characters of the usual type. */
+export function titleRow(sheet: Worksheet, text: string, columns: number, width: number): void {
+  sheet.mergeCells(1, 1, 1, columns);
+  const cell = sheet.getCell(1, 1);
+  cell.value = text;
+  asTitle(cell);
+  asProse(cell);
+  sheet.getRow(1).height = TITLE_HEIGHT * linesIn(text, width / TITLE_LETTER);
 }
 
 export function asProse(cell: Cell): void {
+  cell.alignment = { wrapText: true, vertical: 'top' };
+}
+
+/** Small words that explain a column, or name a number that stands below them. */
+export function asNote(cell: Cell): void {
+  cell.font = { ...BODY, size: 8, color: QUIET };
+  cell.alignment = { horizontal: 'right', vertical: 'top', wrapText: true };
+}
+
+/** Where a sheet comes from, in small type. */
+export function asColophon(cell: Cell): void {
+  cell.font = { ...BODY, size: 8, color: QUIET };
   cell.alignment = { wrapText: true, vertical: 'top' };
 }
 
@@ -57,16 +81,4 @@ export function proseRow(sheet: Worksheet, row: number, text: string, columns: n
 /** About how many lines a wrapped text takes in so many characters of the usual type. */
 export function linesIn(text: string, width: number): number {
   return text.split('\n').reduce((sum, line) => sum + Math.max(1, Math.ceil((line.length * 1.1) / width)), 0);
-}
-
-/** Paper, orientation and foot as in the booklet. */
-export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string): void {
-  Object.assign(sheet.pageSetup, {
-    paperSize: PAPER_SIZES[choices.paper],
-    orientation: choices.orientation,
-    fitToPage: true,
-    fitToWidth: 1,
-    fitToHeight: 0,
-  });
-  sheet.headerFooter.oddFooter = `&L${foot.replaceAll('&', '&&')}&RPage &P of &N`;
 }

@@ -1,17 +1,41 @@
 import ExcelJS from 'exceljs';
 import JSZip from 'jszip';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { ABOUT, fillAboutSheet } from './about-sheet.ts';
 import { fillLookUp, LOOK_UP, LOOK_UP_ROWS } from './look-up-sheet.ts';
 import { releaseDay } from './release-day.ts';
 import { sheetNames } from './sheet-names.ts';
+import { tablePlaces, tableSheetLayout } from './table-layout.ts';
 import { fillTableSheet } from './table-sheet.ts';
+import { nameStems, withNamedRanges, type NamedRange } from './workbook-names.ts';
+import { fillWorkingsSheet } from './workings-sheet.ts';
 
 /** Zip archives cannot hold an earlier day. */
 const FIRST_ZIP_DAY = new Date('1980-01-01T00:00:00Z');
+const WORKBOOK_PART = 'xl/workbook.xml';
 
-/** A workbook (xlsx): a look-up sheet, one sheet for each group, where they come from, and the rows behind the look-up. */
+/** Names of the sheets of each group, in the order of the norm set's groups. */
+export interface GroupSheets {
+  readonly table: string;
+  readonly workings: string;
+}
+
+export function groupSheets({ groups }: NormSet): readonly GroupSheets[] {
+  const titles = groups.map(({ group }) => group.title);
+  const standing = [LOOK_UP, LOOK_UP_ROWS, ABOUT];
+  const tables = sheetNames(titles, standing);
+  const workings = sheetNames(
+    tables.map((table) => `Workings ${table}`),
+    [...standing, ...tables],
+  );
+  return tables.map((table, index) => ({ table, workings: workings[index] ?? '' }));
+}
+
+/**
+ * A workbook (xlsx): a look-up sheet, a table for each group, its workings in formulas, where they come from, and the
+ * rows behind the look-up. A group's table, its number of people and its count of agreeing rows have names.
+ */
 export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   const day = releaseDay(normSet.project);
   const workbook = new ExcelJS.Workbook();
@@ -19,22 +43,41 @@ export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   workbook.lastModifiedBy = 'Normloom';
   workbook.created = day;
   workbook.modified = day;
-  workbook.title = surveyName(normSet.project);
+  workbook.title = draftTitle(normSet, surveyName(normSet.project));
   workbook.calcProperties.fullCalcOnLoad = true;
-  const titles = normSet.groups.map(({ group }) => group.title);
-  const names = sheetNames(titles, [LOOK_UP, LOOK_UP_ROWS, ABOUT]);
   const lookUp = workbook.addWorksheet(LOOK_UP);
-  normSet.groups.forEach((norms, index) => {
-    fillTableSheet(workbook.addWorksheet(names[index] ?? ''), normSet, norms);
+  const sheets = groupSheets(normSet);
+  const stems = nameStems(normSet.groups.map(({ group }) => group.title));
+  const printed = normSet.groups.map((norms, index) => {
+    const layout = tableSheetLayout(normSet, norms);
+    const names = sheets[index] ?? { table: '', workings: '' };
+    return { norms, layout, names, stem: stems[index] ?? '' };
   });
-  fillAboutSheet(workbook.addWorksheet(ABOUT), normSet);
+  for (const { norms, layout, names } of printed) {
+    fillTableSheet(workbook.addWorksheet(names.table), normSet, norms, layout);
+  }
+  const ranges = printed.flatMap(({ norms, layout, names, stem }): readonly NamedRange[] => {
+    const sheet = workbook.addWorksheet(names.workings);
+    const cells = fillWorkingsSheet(sheet, normSet, norms, tablePlaces(names.table, layout));
+    const lastColumn = sheet.getColumn(layout.width).letter;
+    const table = `A${layout.headRow}:${lastColumn}${layout.lastRow}`;
+    return [
+      { name: `Table_${stem}`, sheetName: names.table, address: table },
+      { name: `People_${stem}`, sheetName: names.workings, address: cells.people },
+      { name: `Agreement_${stem}`, sheetName: names.workings, address: cells.agreement },
+    ];
+  });
+  fillAboutSheet(workbook.addWorksheet(ABOUT), normSet, ranges);
   fillLookUp(lookUp, workbook.addWorksheet(LOOK_UP_ROWS), normSet);
-  return withFixedDates(await workbook.xlsx.writeBuffer(), day < FIRST_ZIP_DAY ? FIRST_ZIP_DAY : day);
+  return finished(await workbook.xlsx.writeBuffer(), ranges, day < FIRST_ZIP_DAY ? FIRST_ZIP_DAY : day);
 }
 
-/** The same archive with one date on every part, so that it does not tell when it was made. */
-async function withFixedDates(bytes: ExcelJS.Buffer, day: Date): Promise<Uint8Array> {
+/** The same archive with named ranges, and with one date on every part, so that it does not tell when it was made. */
+async function finished(bytes: ExcelJS.Buffer, ranges: readonly NamedRange[], day: Date): Promise<Uint8Array> {
   const archive = await JSZip.loadAsync(bytes);
+  const sheets = await archive.file(WORKBOOK_PART)?.async('string');
+  if (sheets === undefined) throw new RangeError('a workbook without its list of sheets');
+  archive.file(WORKBOOK_PART, withNamedRanges(sheets, ranges), { createFolders: false });
   for (const part of Object.values(archive.files)) part.date = day;
   return archive.generateAsync({ type: 'uint8array', compression: 'DEFLATE', platform: 'DOS' });
 }

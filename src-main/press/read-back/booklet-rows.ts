@@ -1,6 +1,6 @@
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
-import { cellText } from '../../../shared-core/pages/sheet-texts.ts';
+import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
 import { bookletTables } from './booklet-tables.ts';
 import type { CellComparison } from './cell-differences.ts';
 import { inverseOn } from './inverse-strips.ts';
@@ -81,7 +81,7 @@ export class BookletRows {
     }
     this.#scores[group]?.push(score);
     columns.forEach((column, index) => {
-      const expected = withPlainSpaces(cellText(row, column));
+      const expected = withPlainSpaces(markedText(row, column));
       this.#comparison.compare({ ...place, column: column.name }, expected, cells[index] ?? '');
     });
   }

@@ -1,3 +1,5 @@
+import { ADJUSTED_MARK } from '../../../shared-core/norms/adjustment-words.ts';
+import { textWidth } from '../../../shared-core/pages/text-width.ts';
 import type { TableColumn } from '../../../shared-core/norms/table-columns.ts';
 import { squeezed, type PdfCell, type PdfLine } from './pdf-text.ts';
 import { withPlainSpaces } from './plain-spaces.ts';
@@ -23,7 +25,7 @@ export function bookletTables(lines: readonly PdfLine[], columns: readonly Table
     for (const row of rowLines(lines, at)) {
       const cells = edges.map(() => '');
       for (const cell of row.cells) {
-        const edge = edges.findIndex((right) => cell.right <= right + EDGE);
+        const edge = edges.findIndex((right) => endOf(cell) <= right + EDGE);
         const place = edge < 0 ? edges.length - 1 : edge;
         cells[place] = `${cells[place] ?? ''}${withPlainSpaces(cell.text)}`;
       }
@@ -34,6 +36,11 @@ export function bookletTables(lines: readonly PdfLine[], columns: readonly Table
     }
     return [{ heads: headsOf(lines, at, columns), rows: blocks.flat() }];
   });
+}
+
+/** Where the figures of a cell end; the mark of an adjusted rank may hang beyond them. */
+function endOf({ text, right, size }: PdfCell): number {
+  return text.endsWith(ADJUSTED_MARK) ? right - textWidth(ADJUSTED_MARK, 'sans', size) : right;
 }
 
 /** The last lines of all heads, once or several times over; half of them may be misprinted. */

@@ -39,7 +39,7 @@ export function readCsv(file: string, text: string, normSet: NormSet): FileReadB
   return comparison.result('csv');
 }
 
-function columnsOf({ project, check }: NormSet): readonly (readonly [string, CellOf])[] {
+function columnsOf({ project, check, status }: NormSet): readonly (readonly [string, CellOf])[] {
   const number = (value: number | null | undefined): string =>
     value === null || value === undefined ? '' : String(value);
   return [
@@ -63,5 +63,11 @@ function columnsOf({ project, check }: NormSet): readonly (readonly [string, Cel
     ['edition', () => safeForCsv(project.release.edition)],
     ['definition', () => definitionKey(project.curve.definition)],
     ['check', () => check],
+    [
+      'adjusted',
+      ({ adjusted, printed }) =>
+        adjusted === null ? '' : `from ${adjusted.from} to ${printed}: ${adjusted.reason} (${adjusted.by})`,
+    ],
+    ['status', () => status],
   ];
 }

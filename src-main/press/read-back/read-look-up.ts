@@ -1,7 +1,7 @@
 import type { Workbook } from 'exceljs';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
-import { cellText } from '../../../shared-core/pages/sheet-texts.ts';
+import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
 import { FIRST_RESULT_ROW, GROUP_CELL, LOOK_UP, LOOK_UP_ROWS, SCORE_CELL } from '../look-up-sheet.ts';
 import { distinctTitles } from '../sheet-names.ts';
 import type { CellComparison } from './cell-differences.ts';
@@ -25,7 +25,7 @@ export function readLookUp(comparison: CellComparison, workbook: Workbook, normS
       const expected = [
         ['group', titles[index] ?? ''],
         ['raw score', String(row.score)],
-        ...columns.map((column) => [column.name, cellText(row, column)]),
+        ...columns.map((column) => [column.name, markedText(row, column)]),
       ];
       expected.forEach(([column = '', text = ''], place) => {
         const cell = list.getCell(at, place + 1);
@@ -49,6 +49,6 @@ export function readLookUp(comparison: CellComparison, workbook: Workbook, normS
   columns.forEach((column, index) => {
     const cell = sheet.getCell(FIRST_RESULT_ROW + index, 2);
     const where = `${LOOK_UP}!${cell.address}`;
-    comparison.compare({ ...place, where, column: column.name }, cellText(row, column), shownCell(cell));
+    comparison.compare({ ...place, where, column: column.name }, markedText(row, column), shownCell(cell));
   });
 }

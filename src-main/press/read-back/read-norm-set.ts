@@ -6,7 +6,14 @@ import { CellComparison, type CellPlace, type FileReadBack } from './cell-differ
 export function readNormSet(file: string, content: unknown, normSet: NormSet): FileReadBack {
   const comparison = new CellComparison(file);
   const { title, subtitle, release } = normSet.project;
-  const about = { title, subtitle, edition: release.edition, date: release.date, check: normSet.check };
+  const about = {
+    title,
+    subtitle,
+    edition: release.edition,
+    date: release.date,
+    status: normSet.status,
+    check: normSet.check,
+  };
   const expected = asJson({ ...about, ...normSetForFile(normSet, () => []) });
   compareValues(comparison, normSet, [], expected, content);
   return comparison.result('norm set');

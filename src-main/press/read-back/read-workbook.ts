@@ -1,7 +1,7 @@
 import ExcelJS, { type Cell, type Worksheet } from 'exceljs';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
-import { cellText, sheetTitle } from '../../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, markedText, sheetTitle } from '../../../shared-core/pages/sheet-texts.ts';
 import { unroundedColumns } from '../unrounded-columns.ts';
 import { CellComparison, type CellPlace, type FileReadBack } from './cell-differences.ts';
 import { readLookUp } from './read-look-up.ts';
@@ -20,7 +20,7 @@ export async function readWorkbook(file: string, bytes: Uint8Array, normSet: Nor
   await workbook.xlsx.load(Uint8Array.from(bytes).buffer);
   const left = [...workbook.worksheets];
   normSet.groups.forEach((norms, group) => {
-    const title = sheetTitle(normSet.project, norms);
+    const title = draftTitle(normSet, sheetTitle(normSet.project, norms));
     const at = left.findIndex((sheet) => sheet.getCell(1, 1).value === title);
     const [sheet] = at < 0 ? [] : left.splice(at, 1);
     const place = { where: sheet?.name ?? 'workbook', group: norms.group.title, score: '', column: 'title' };
@@ -54,7 +54,7 @@ function readTable(comparison: CellComparison, sheet: Worksheet, normSet: NormSe
     const at = headRow + 1 + index;
     columns.forEach((column, position) => {
       const cell = sheet.getCell(at, position + 1);
-      comparePrinted(comparison, place(at, position + 1, row.scoreText), cellText(row, column), cell);
+      comparePrinted(comparison, place(at, position + 1, row.scoreText), markedText(row, column), cell);
     });
     unrounded.forEach(({ valueOf }, position) => {
       const cell = sheet.getCell(at, columns.length + 1 + position);

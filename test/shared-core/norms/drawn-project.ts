@@ -3,6 +3,7 @@ import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { LEFT_OUT_RULES } from '../../../shared-core/norms/reading.ts';
 import type { CellClusters } from '../../../shared-core/tally/tally.ts';
+import { DEFAULT_POLICY } from '../../../shared-core/norms/policy.ts';
 import type { ScoreScale } from '../../../shared-core/scale/score-scale.ts';
 import { drawnPrecision, drawnSmoothing } from './drawn-smoothing.ts';
 
@@ -172,5 +173,16 @@ export const drawnProject: fc.Arbitrary<NormProject> = fc
         date: fc.constantFrom('', '2026-06-15'),
         answers: fc.array(fc.record({ query: drawnText, reason: drawnText }), { maxLength: 3 }),
       }),
+      adjustments: fc.array(
+        fc.record({
+          values: fc.array(drawnText, { maxLength: 3 }),
+          score: fc.constantFrom(scale.min, scale.max, scale.max + 1),
+          to: fc.constantFrom('50', '<1', '50.5', 'high'),
+          reason: drawnText.map((text) => `It says ${text}`),
+          by: fc.constant('A. Reader'),
+        }),
+        { maxLength: 2 },
+      ),
+      policy: fc.constantFrom(DEFAULT_POLICY, { ...DEFAULT_POLICY, title: '', wideStep: { value: 2.5, source: '-' } }),
     }),
   );

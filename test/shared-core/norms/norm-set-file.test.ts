@@ -50,6 +50,7 @@ describe('a norm set as plain JSON', () => {
       'cumulative',
       'percentile-rank',
       'printed',
+      'adjusted',
       'derived',
       'interval',
       'standard-error',

@@ -11,7 +11,7 @@ const text = projectToText(settled);
 
 /** Keys that the settled project has no use for. */
 const OPTIONAL_KEYS = [
-  ...['offset', 'width', 'printed', 'query', 'reason'],
+  ...['offset', 'width', 'printed', 'query', 'reason', 'values', 'score', 'to', 'by'],
   ...['degree', 'kept-scores', 'comb', 'every', 'bandwidth', 'after'],
   ...['parts', 'alone', 'alone-squares', 'cluster', 'positions'],
 ] as const;

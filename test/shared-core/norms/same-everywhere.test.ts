@@ -22,7 +22,8 @@ function everythingOf(project: ReturnType<typeof settledProject>): string {
   const normSet = builtSet(project);
   const norms = firstNorms(project);
   const workings = norms.rows.map((row) => workingsOf(project, norms, row.scoreText, 't'));
-  const parts = [normSet, workings, queriesOf(project, normSet.groups), methodText(project), projectToText(project)];
+  const queries = queriesOf(project, normSet.groups, normSet.refusedAdjustments);
+  const parts = [normSet, workings, queries, methodText(project), projectToText(project)];
   return JSON.stringify(parts, (_, value: unknown) => (typeof value === 'bigint' ? `${value}n` : value));
 }
 

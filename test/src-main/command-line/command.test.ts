@@ -28,7 +28,7 @@ describe('the words of the command line', () => {
 
   it('mean the usual things where little is said', () => {
     expect(optionsOf()).toEqual({
-      named: { score: 'raw', count: null, weight: null, id: null, by: [] },
+      named: { score: 'raw', count: null, weight: null, id: null, cluster: null, by: [] },
       scale: null,
       direction: 'high-is-good',
       missing: [],
@@ -55,11 +55,14 @@ describe('the words of the command line', () => {
   });
 
   it('name columns, commas in quotes', () => {
-    expect(optionsOf('--count', 'n', '--weight', 'w', '--id', 'pupil', '--by', 'grade, form').named).toEqual({
+    expect(
+      optionsOf('--count', 'n', '--weight', 'w', '--id', 'pupil', '--cluster', 'school', '--by', 'grade, form').named,
+    ).toEqual({
       score: 'raw',
       count: 'n',
       weight: 'w',
       id: 'pupil',
+      cluster: 'school',
       by: ['grade', 'form'],
     });
     expect(optionsOf('--by', '"grade, or year",form').named.by).toEqual(['grade, or year', 'form']);
@@ -119,7 +122,7 @@ describe('the words of the command line', () => {
         kind: 'differ',
         path: 'a.csv',
         options: {
-          named: { score: 's', count: null, weight: null, id: null, by: ['g', 'h'] },
+          named: { score: 's', count: null, weight: null, id: null, cluster: null, by: ['g', 'h'] },
           scale: null,
           direction: 'low-is-good',
           missing: [],

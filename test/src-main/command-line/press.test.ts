@@ -51,6 +51,7 @@ describe('press', () => {
     expect([ran.exit, ran.stdout.split('\n').length]).toEqual([0, 7]);
     expect(ran.stderr).toBe(
       'Still open: Only 10 pupils in All pupils. One alone is worth 10.0 points of percentile rank. ' +
+        'Policy: at least 30, or a reason (common practice). ' +
         'Merge groups, gather more data, or say on the sheet how coarse the ranks are.\n',
     );
     const answers = [{ query: 'small-group:[]', reason: 'A class.' }];

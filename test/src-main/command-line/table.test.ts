@@ -147,6 +147,7 @@ describe('table as json', () => {
           'cumulative',
           'percentile-rank',
           'printed',
+          'adjusted',
           'derived',
           'interval',
           'standard-error',

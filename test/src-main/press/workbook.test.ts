@@ -1,9 +1,7 @@
-import { execFileSync } from 'node:child_process';
 import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { pathToFileURL } from 'node:url';
-import ExcelJS from 'exceljs';
+import type ExcelJS from 'exceljs';
 import Papa from 'papaparse';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
@@ -11,6 +9,7 @@ import { printCount, printNumber } from '../../../shared-core/scores/printed-num
 import { FIRST_RESULT_ROW, GROUP_CELL, LOOK_UP, SCORE_CELL } from '../../../src-main/press/look-up-sheet.ts';
 import { typedCell } from '../../../src-main/press/typed-cell.ts';
 import { tablesWorkbook } from '../../../src-main/press/workbook.ts';
+import { convert, forgetResults, openWorkbook } from './office.ts';
 import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 
 const normSet = sampleNormSet({ scale: { min: -2, max: 20, step: 0.5 }, groups: ['4', '5'] }, (project) => ({
@@ -37,15 +36,6 @@ const smoothedSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5', '6'] 
   table: { ...project.table, columns: ['interval', 'standard-error', 'measurement-band'] },
 }));
 
-async function open(bytes: Uint8Array): Promise<ExcelJS.Workbook> {
-  const workbook = new ExcelJS.Workbook();
-  const whole = new ArrayBuffer(bytes.length);
-  new Uint8Array(whole).set(bytes);
-  await workbook.xlsx.load(whole);
-  return workbook;
-}
-
-const OFFICE = 'soffice';
 let bytes: Uint8Array;
 let smoothedBytes: Uint8Array;
 let folder: string;
@@ -72,11 +62,13 @@ describe('typed cells', () => {
 
 describe('tablesWorkbook', () => {
   it('has a sheet for each group with every score once, as numbers', async () => {
-    const workbook = await open(bytes);
+    const workbook = await openWorkbook(bytes);
     expect(workbook.worksheets.map(({ name }) => name)).toEqual([
       'Look-up',
       'Grade 4',
       'A1 & "co"',
+      'Workings Grade 4',
+      'Workings A1 & "co"',
       'About',
       'Look-up rows',
     ]);
@@ -98,7 +90,7 @@ describe('tablesWorkbook', () => {
   });
 
   it('runs no text of the user as a formula', async () => {
-    const workbook = await open(bytes);
+    const workbook = await openWorkbook(bytes);
     const formulas: string[] = [];
     for (const sheet of workbook.worksheets) {
       sheet.eachRow((row) =>
@@ -107,10 +99,25 @@ describe('tablesWorkbook', () => {
         }),
       );
     }
-    expect(formulas.length).toBe(6);
-    expect(formulas.every((formula) => /^Look-up( rows)?: (IFERROR\(INDEX|\(1\/\(1\/SUMPRODUCT)/.test(formula))).toBe(
-      true,
-    );
+    const own = formulas.filter((formula) => !formula.startsWith('Workings '));
+    expect(own.length).toBe(6);
+    expect(own.every((formula) => /^Look-up( rows)?: (IFERROR\(INDEX|\(1\/\(1\/SUMPRODUCT)/.test(formula))).toBe(true);
+    const parts =
+      /"(same|differs|other score|<1|>99| of | rows agree)"|'(Grade 4|A1 & "co")'!|[A-Z]{1,12}|[$\d(),.:&<>=*+/-]/g;
+    const workings = formulas.filter((formula) => formula.startsWith('Workings '));
+    expect(workings.length).toBeGreaterThan(800);
+    expect(workings.filter((formula) => formula.replace(/^[^:]*: /, '').replace(parts, '') !== '')).toEqual([]);
+  });
+
+  it('has room in every foot for its page, in a line of its own', async () => {
+    for (const sheet of [
+      ...(await openWorkbook(bytes)).worksheets,
+      ...(await openWorkbook(smoothedBytes)).worksheets,
+    ]) {
+      const foot = sheet.headerFooter.oddFooter ?? '';
+      expect(foot).toMatch(/^&L&8 .*\n&8 Page &P of &N$/s);
+      expect(foot.length).toBeLessThan(256);
+    }
   });
 
   it('is the same each time', async () => {
@@ -120,7 +127,7 @@ describe('tablesWorkbook', () => {
   });
 
   it('shows the right row for the example before anything is computed', async () => {
-    const sheet = (await open(bytes)).getWorksheet(LOOK_UP);
+    const sheet = (await openWorkbook(bytes)).getWorksheet(LOOK_UP);
     const row = normSet.groups[0]?.rows.find(({ score }) => score === sheet?.getCell(SCORE_CELL).value);
     expect(sheet?.getCell(GROUP_CELL).value).toBe('Grade 4');
     expect(sheet?.getCell(FIRST_RESULT_ROW, 2).result).toBe(row?.printed);
@@ -140,7 +147,7 @@ describe('tablesWorkbook', () => {
     ] as const;
     const files = await Promise.all(
       cases.map(async ([set, group, score], index) => {
-        const workbook = await open(set === normSet ? bytes : smoothedBytes);
+        const workbook = await openWorkbook(set === normSet ? bytes : smoothedBytes);
         const sheet = workbook.getWorksheet(LOOK_UP);
         if (sheet === undefined) throw new Error('no look-up sheet');
         sheet.getCell(GROUP_CELL).value = group;
@@ -151,11 +158,7 @@ describe('tablesWorkbook', () => {
         return file;
       }),
     );
-    const profile = `-env:UserInstallation=${pathToFileURL(join(folder, 'profile')).href}`;
-    const filter = 'csv:Text - txt - csv (StarCalc):44,34,76,1';
-    execFileSync(OFFICE, ['--headless', profile, '--convert-to', filter, '--outdir', folder, ...files], {
-      stdio: 'ignore',
-    });
+    convert(files, 'csv:Text - txt - csv (StarCalc):44,34,76,1', folder, folder);
     const results = await Promise.all(files.map((file) => lookedUp(file.replace(/xlsx$/, 'csv'))));
     const sentence =
       'Not in the table. Choose a group from the list and type a raw score from -2 to 20 in steps of 0.5.';
@@ -172,7 +175,7 @@ describe('tablesWorkbook', () => {
 
 describe('a workbook with smoothing', () => {
   it('keeps printed ranges as texts and the unrounded numbers beyond them', async () => {
-    const workbook = await open(smoothedBytes);
+    const workbook = await openWorkbook(smoothedBytes);
     smoothedSet.groups.forEach((norms, index) => {
       const sheet = workbook.worksheets[index + 1];
       if (sheet === undefined) throw new Error('no sheet');
@@ -214,7 +217,7 @@ describe('a workbook with smoothing', () => {
   });
 
   it('says of each group how it is smoothed and how well that fits', async () => {
-    const about = (await open(smoothedBytes)).getWorksheet('About');
+    const about = (await openWorkbook(smoothedBytes)).getWorksheet('About');
     const lines = new Map<unknown, unknown>();
     about?.eachRow((row) => lines.set(row.getCell(1).value, row.getCell(2).value));
     const [four, , six] = smoothedSet.groups;
@@ -242,17 +245,6 @@ function valuesIn(sheet: ExcelJS.Worksheet, row: number): readonly unknown[] {
   return Array.from({ length: sheet.columnCount }, (_, place) => sheet.getCell(row, place + 1).value ?? undefined);
 }
 
-/** Without written results a spreadsheet program has to compute. */
-function forgetResults(workbook: ExcelJS.Workbook): void {
-  for (const sheet of workbook.worksheets) {
-    sheet.eachRow((row) =>
-      row.eachCell((cell) => {
-        if (cell.formula) cell.value = { formula: cell.formula, date1904: false };
-      }),
-    );
-  }
-}
-
 async function lookedUp(file: string): Promise<readonly (string | undefined)[]> {
   const { data } = Papa.parse<readonly string[]>(await readFile(file, 'utf8'));
   return data.slice(FIRST_RESULT_ROW - 1, FIRST_RESULT_ROW + 4).map((row) => row[1]);
@@ -272,7 +264,7 @@ function expected(set: NormSet, group: string, score: number): readonly string[]
 
 describe('a workbook of one group', () => {
   it('can be made', async () => {
-    const workbook = await open(await tablesWorkbook(sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] })));
-    expect(workbook.worksheets).toHaveLength(4);
+    const workbook = await openWorkbook(await tablesWorkbook(sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] })));
+    expect(workbook.worksheets).toHaveLength(5);
   });
 });

@@ -4,10 +4,11 @@ import type { NormProject } from '../../../../shared-core/norms/norm-project.ts'
 import type { NormSet } from '../../../../shared-core/norms/norm-set.ts';
 import { normSetJson } from '../../../../src-main/press/norm-set-json.ts';
 import { differenceLine } from '../../../../src-main/press/read-back/cell-differences.ts';
+import { pressFiles } from '../../../../src-main/press/press-files.ts';
 import { readBack, readBackProblem } from '../../../../src-main/press/read-back/read-back.ts';
 import { tablesCsv } from '../../../../src-main/press/tables-csv.ts';
 import { tablesWorkbook } from '../../../../src-main/press/workbook.ts';
-import { KERNEL, sampleNormSet, WHOLE_SCALE } from '../../../shared-core/pages/sample-norm-set.ts';
+import { KERNEL, sampleNormSet, sampleProject, WHOLE_SCALE } from '../../../shared-core/pages/sample-norm-set.ts';
 
 const everything = (project: NormProject): NormProject => ({
   ...project,
@@ -152,6 +153,28 @@ describe('a norm set file', () => {
   });
 });
 
+describe('a rank that was adjusted by hand', () => {
+  it.each([1, 0] as const)('is read back with its mark in every file, decimals: %s', async (decimals) => {
+    const usual = (project: NormProject): NormProject => ({ ...project, table: { ...project.table, decimals } });
+    const plain = sampleNormSet({ scale: WHOLE_SCALE }, usual);
+    const [four] = plain.groups;
+    const [row, next] = [four?.rows[20], four?.rows[21]];
+    if (row === undefined || next === undefined) throw new Error('no such row');
+    const adjusted = sampleProject({ scale: WHOLE_SCALE }, (project) => ({
+      ...usual(project),
+      adjustments: [{ values: ['4'], score: 20, to: next.printed, reason: 'order', by: 'A. B.' }],
+    }));
+    const made = await pressFiles(adjusted);
+    if (!made.ok) throw new Error(made.problem);
+    const built = sampleNormSet({ scale: WHOLE_SCALE }, () => adjusted);
+    expect(built.groups[0]?.rows[20]?.adjusted?.from).toBe(row.printed);
+    const found = await linesOf('booklet.pdf', made.value.files[0]?.bytes ?? new Uint8Array(), plain);
+    expect(found).toContain(
+      `booklet.pdf, page 1: Grade 4, raw score 20, percentile rank: expected "${row.printed}", found "${next.printed}†"`,
+    );
+  });
+});
+
 describe('readBack', () => {
   it('tells files that were never pressed, and damaged ones, in a sentence', async () => {
     expect(await readBack([{ file: 'a.txt', bytes: bytesOf('hello') }], set)).toEqual({
@@ -170,7 +193,7 @@ describe('readBack', () => {
     const small = sampleNormSet({ scale: WHOLE_SCALE });
     const read = await readBack([{ file: 'tables.csv', bytes: tablesCsv(small) }], small);
     if (!read.ok) throw new Error(read.problem);
-    expect(read.value.map(({ cells }) => cells)).toEqual([83 * 18]);
+    expect(read.value.map(({ cells }) => cells)).toEqual([83 * 20]);
     expect(readBackProblem(read.value)).toBeNull();
     const other = await readBack([{ file: 'tables.csv', bytes: tablesCsv({ ...small, check: '0000-0000' }) }], small);
     if (!other.ok) throw new Error(other.problem);

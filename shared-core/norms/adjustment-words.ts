@@ -1,0 +1,18 @@
+import type { GroupNorms } from './group-norms.ts';
+
+/** Stands behind every printed rank that was changed by hand. */
+export const ADJUSTED_MARK = '†';
+
+/**
+ * What was changed by hand in a group's table, as it is printed under it; null where nothing was.
+ * "† Adjusted by hand: raw 31 from 84 to 85 (reason; who)."
+ */
+export function adjustmentNote({ rows }: GroupNorms): string | null {
+  const changes = rows.flatMap(({ scoreText, printed, adjusted }) =>
+    adjusted === null
+      ? []
+      : [`raw ${scoreText} from ${adjusted.from} to ${printed} (${adjusted.reason}; ${adjusted.by})`],
+  );
+  if (changes.length === 0) return null;
+  return `${ADJUSTED_MARK} Adjusted by hand: ${changes.join('; ')}. Everything else follows the computed rank.`;
+}
