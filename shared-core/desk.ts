@@ -73,6 +73,8 @@ export interface Pressed {
   /** Where the files lie, as the host would say it to the user. */
   readonly folder: string;
   readonly files: readonly PressedFile[];
+  /** Cells of the files that were read back and agree, and cells that the second engine worked out alike. */
+  readonly readBack: { readonly cells: number; readonly recomputed: number };
 }
 
 export interface DrawnPages {
@@ -160,7 +162,7 @@ export interface DeskRequests {
   'tally-cohort': { ask: { readonly handle: FileHandle; readonly reading: Reading }; answer: { readonly job: string } };
   /** The booklet of a project as a PDF, for the Sheet station. */
   'draw-pages': { ask: { readonly project: NormProject }; answer: { readonly job: string } };
-  /** Writes booklet, workbook, csv and norm set into a folder named after the project. */
+  /** Writes booklet, workbook, csv, norm set and certificate into a folder named after the project. */
   press: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
   'job-state': { ask: { readonly job: string }; answer: JobState };
   'cancel-job': { ask: { readonly job: string }; answer: null };

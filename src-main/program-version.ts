@@ -1,8 +1,12 @@
-import { readFileSync } from 'node:fs';
+import { existsSync, readFileSync } from 'node:fs';
 
-/** The version of the program, from the package.json above the folder of built programs. */
+/** Seen from the sources, and from the folder of built programs. */
+const PLACES = ['../package.json', '../../package.json'] as const;
+
+/** The version of the program, from its package.json. */
 export function programVersion(): string {
-  const about: unknown = JSON.parse(readFileSync(new URL('../../package.json', import.meta.url), 'utf8'));
+  const place = PLACES.map((path) => new URL(path, import.meta.url)).find((url) => existsSync(url));
+  const about: unknown = place === undefined ? null : JSON.parse(readFileSync(place, 'utf8'));
   const version = typeof about === 'object' && about !== null && 'version' in about ? about.version : null;
   if (typeof version !== 'string') throw new Error('package.json names no version');
   return version;

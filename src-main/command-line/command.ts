@@ -3,9 +3,20 @@ import { COMPARE_FORMATS, type CompareFormat } from './compare-command.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
 import type { EditionPaths } from './edition-pair.ts';
 import { erratumOptions, type ErratumOptions } from './erratum-options.ts';
-import { COMPARE, DIFFER, ERRATUM, GENERAL, PRESS, QUERIES, TABLE, type OptionNames } from './option-names.ts';
+import {
+  COMPARE,
+  DIFFER,
+  ERRATUM,
+  GENERAL,
+  PRESS,
+  QUERIES,
+  READ_BACK,
+  TABLE,
+  type OptionNames,
+} from './option-names.ts';
 import { oneOf, readOrSay, textGiven, type OptionValues } from './option-values.ts';
 import { queriesOptions, type QueriesFormat } from './queries-options.ts';
+import { readBackOptions, type ReadBackOptions } from './read-back-options.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
 
@@ -16,6 +27,7 @@ export type Command =
   | { readonly kind: 'table'; readonly path: string; readonly options: TableOptions }
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
   | { readonly kind: 'press'; readonly path: string; readonly into: string }
+  | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions }
   | { readonly kind: 'queries'; readonly path: string; readonly format: QueriesFormat }
   | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
   | { readonly kind: 'erratum'; readonly paths: EditionPaths; readonly options: ErratumOptions };
@@ -41,6 +53,12 @@ export function readCommand(words: readonly string[]): Reply<Command> {
           ? wrong('Tell where to press with --into FOLDER.')
           : { ok: true, value: { kind: 'press', path, into } };
       });
+    case 'read-back':
+      return readFilesCommand(others, READ_BACK, (paths, values) => {
+        if (paths.length === 0) return wrong('read-back takes at least one pressed file.');
+        const options = readBackOptions(values);
+        return options.ok ? { ok: true, value: { kind: 'read-back', paths, options: options.value } } : options;
+      });
     case 'compare':
       return readPairCommand(others, COMPARE, 'compare takes two projects', (paths, values) =>
         readOrSay(() => {
@@ -65,7 +83,7 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       if (general !== null) return { ok: true, value: general };
       return wrong(
         name === undefined
-          ? 'Tell what to do: table, differ, press, queries, compare or erratum.'
+          ? 'Tell what to do: table, differ, press, read-back, queries, compare or erratum.'
           : `There is no command "${name}".`,
       );
     }

@@ -7,7 +7,8 @@ const COLUMN_NAMES = [COLUMN_KEYS.slice(0, 5), COLUMN_KEYS.slice(5, 8), COLUMN_K
 export const HELP = `normloom table FILE --score COL [options]   conversion tables of a cohort file
 normloom differ FILE --score COL --ranks RANKFILE [options]
                                             how somebody's ranks were made from the same people
-normloom press PROJECT --into FOLDER        booklet.pdf, tables.xlsx, tables.csv and norm-set.json
+normloom press PROJECT --into FOLDER        booklet, workbook, csv, norm set and certificate of a project
+normloom read-back FILE… --against PROJECT  pressed files compared with the project, cell by cell
 normloom compare OLD NEW [--format text|json]
                                             every printed cell and choice in which two projects differ
 normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
@@ -49,6 +50,10 @@ Options of differ:
   --group VALUE,VALUE       the group that the ranks are of: one value for each column of --by
   --format NAME             text (default) or json
 
+Options of read-back:
+  --against PROJECT         the project that the files were pressed from
+  --format NAME             text (default): a line for each cell that differs; or json
+
 Options of erratum:
   --roster FILE             people with their raw scores, one a row; the erratum then names those it concerns
   --score COL               column that holds the raw scores
@@ -59,5 +64,5 @@ Options of erratum:
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.
 stdout carries only the result, stderr what there is to say about it.
-Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method.
+Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method, or cells differ.
 `;

@@ -7,6 +7,7 @@ import { EXIT_CODES, EXIT_INTERRUPTED, wrongUsage, type Outcome } from './outcom
 import { pressCommand } from './press-command.ts';
 import { queriesCommand } from './queries-command.ts';
 import { programVersion } from '../program-version.ts';
+import { readBackCommand } from './read-back-command.ts';
 import { tableCommand } from './table-command.ts';
 
 /** The same work as the other hosts', without a window: the result goes to stdout, everything else to stderr. */
@@ -22,6 +23,8 @@ async function run(command: Command): Promise<Outcome> {
       return differCommand(command.path, command.options);
     case 'press':
       return pressCommand(command.path, command.into);
+    case 'read-back':
+      return readBackCommand(command.paths, command.options);
     case 'queries':
       return queriesCommand(command.path, command.format);
     case 'compare':
@@ -45,7 +48,7 @@ process.once('SIGINT', () => {
 const command = readCommand(process.argv.slice(2));
 const outcome = command.ok ? await run(command.value) : wrongUsage(command.problem);
 if (outcome.kind !== 'wrong-usage') for (const remark of outcome.remarks) process.stderr.write(`${remark}\n`);
-if (outcome.kind === 'done') process.stdout.write(outcome.result);
-else process.stderr.write(`normloom: ${outcome.problem}\n`);
+if (outcome.kind === 'done' || outcome.kind === 'differs') process.stdout.write(outcome.result);
+if (outcome.kind !== 'done') process.stderr.write(`normloom: ${outcome.problem}\n`);
 if (outcome.kind === 'wrong-usage') process.stderr.write('normloom --help tells how the commands are used.\n');
 process.exitCode = EXIT_CODES[outcome.kind];

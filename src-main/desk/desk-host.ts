@@ -100,7 +100,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
       staged = await folders.stage();
       const reply = await work.press({ kind: 'press', project, folder: staged }, hooks, signal);
       if (!reply.ok || reply.value.kind !== 'pressed' || signal.aborted) return reply;
-      const pressed = await folders.settle(staged, reply.value.pressed.files, { name: folder, title, subtitle });
+      const pressed = await folders.settle(staged, reply.value.pressed, { name: folder, title, subtitle });
       lastPressed = pressed.folder;
       return { ok: true, value: { kind: 'pressed', pressed: { ...pressed, folder: asCalledHere(pressed.folder) } } };
     } catch (error) {

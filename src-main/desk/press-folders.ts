@@ -54,7 +54,7 @@ export class PressFolders {
   }
 
   /** Puts freshly pressed files where they belong, and says where that is. The hidden folder is gone afterwards. */
-  async settle(staged: string, files: readonly PressedFile[], pressedFor: PressedFor): Promise<Pressed> {
+  async settle(staged: string, { files, readBack }: Omit<Pressed, 'folder'>, pressedFor: PressedFor): Promise<Pressed> {
     for (let number = 1; ; number += 1) {
       const folder = join(this.#projectsFolder, number === 1 ? pressedFor.name : `${pressedFor.name} (${number})`);
       const earlier = await this.#earlierPress(folder, files, pressedFor);
@@ -67,7 +67,7 @@ export class PressFolders {
       await this.discard(staged);
       const untouched = earlier.filter((old) => !fresh.some(({ file }) => file === old.file));
       await this.#record({ folder, title, subtitle, files: [...untouched, ...fresh] });
-      return { folder, files };
+      return { folder, files, readBack };
     }
   }
 

@@ -1,10 +1,10 @@
-import pdfmake from 'pdfmake';
 import type { TDocumentDefinitions } from 'pdfmake/interfaces.js';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import type { Block, Booklet, Picture, Rule, TextLine } from '../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../shared-core/pages/booklet-pages.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
-import { FONT_FILES, PICTURE_FONTS } from './fonts.ts';
+import { PICTURE_FONTS } from './fonts.ts';
+import { housePrinter } from './house-printer.ts';
 import { drawPicture, drawRule, drawText } from './page-drawing.ts';
 import { releaseDay } from './release-day.ts';
 import { packStructure } from './structure-packing.ts';
@@ -25,11 +25,7 @@ export async function bookletPdf(
   onProgress: (share: number) => void = () => {},
 ): Promise<DrawnBooklet> {
   const booklet = composeBooklet(normSet);
-  const files = new Set<string>(Object.values(FONT_FILES));
-  pdfmake.setFonts({ ...PICTURE_FONTS });
-  pdfmake.setUrlAccessPolicy(() => false);
-  pdfmake.setLocalAccessPolicy((path) => files.has(path));
-  const made = pdfmake.createPdf(definition(booklet, releaseDay(normSet.project)));
+  const made = housePrinter(PICTURE_FONTS).createPdf(definition(booklet, releaseDay(normSet.project)));
   const document = await made.getStream();
   drawBooklet(document, booklet, onProgress);
   const { start, count } = document.bufferedPageRange();

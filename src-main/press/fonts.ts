@@ -16,3 +16,11 @@ export const FONT_FILES: Readonly<Record<FontFace, string>> = {
 
 /** The typeface of pictures, under the name that they use for it. */
 export const PICTURE_FONTS = { 'Source Sans 3': { normal: FONT_FILES.sans, bold: FONT_FILES['sans-bold'] } } as const;
+
+/** Every face under its own name, for running text. */
+export const FACE_FONTS = {
+  sans: { normal: FONT_FILES.sans },
+  'sans-bold': { normal: FONT_FILES['sans-bold'] },
+  'serif-bold': { normal: FONT_FILES['serif-bold'] },
+  'serif-italic': { normal: FONT_FILES['serif-italic'] },
+} as const satisfies Record<FontFace, { readonly normal: string }>;

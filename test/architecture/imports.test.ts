@@ -28,8 +28,17 @@ const RULES: readonly (readonly [string, Rule])[] = [
   [
     'src-main/press',
     host(
-      ['pdfmake', 'exceljs', 'jszip', 'papaparse', 'write-file-atomic', '@expo-google-fonts/*'],
-      ['src-main/project-file'],
+      [
+        'pdfmake',
+        'pdfjs-dist',
+        'exceljs',
+        'jszip',
+        'papaparse',
+        'write-file-atomic',
+        'valibot',
+        '@expo-google-fonts/*',
+      ],
+      ['src-main/project-file', 'src-main/program-version.ts'],
     ),
   ],
   ['src-main/project-file', host(['write-file-atomic', 'valibot'], [])],
@@ -116,6 +125,17 @@ describe('imports', () => {
     expect(files.length).toBeGreaterThan(20);
     const problems = files.flatMap((file) => importsOf(file).flatMap((name) => problemOf(file.path, name) ?? []));
     expect(problems).toEqual([]);
+  });
+
+  it('of the second engine take nothing but types from the first', () => {
+    const own = files.filter(({ path }) => isInside(path, 'shared-core/second-engine'));
+    expect(own.length).toBeGreaterThan(3);
+    const values = own.flatMap(({ path, text }) =>
+      [...text.matchAll(/^import (?!type )[^;]*from '([^']+)';/gm)].flatMap(([, name = '']) =>
+        name.startsWith('./') ? [] : [`${path} imports ${name}`],
+      ),
+    );
+    expect(values).toEqual([]);
   });
 
   it('of electron stand only in its host and the tests of it', () => {

@@ -68,6 +68,7 @@ test('smoothed ranks with their intervals, from the Curve station to print', asy
   await goTo(page, 'Release');
   await page.getByRole('button', { name: 'Press edition 1.0' }).click();
   await expect(page.getByText('Pressed.')).toBeVisible({ timeout: 60_000 });
+  await expect(page.getByText(/Smoothed tables are not worked out a second time\./)).toBeVisible();
   const [folder = ''] = readdirSync(program.projects).map((name) => join(program.projects, name));
   const filed = JSON.parse(readFileSync(join(folder, 'norm-set.json'), 'utf8')) as FiledSet;
   expect(filed.groups.map(({ smoothing }) => [smoothing.method, smoothing.converged])).toEqual(

@@ -116,9 +116,18 @@ const checkPress = () => {
   const project = join(program, 'assets', 'sample-cohorts', 'ostrey-vale.normloom');
   const folder = join(outside, 'pressed');
   run([join(program, 'dist', 'main', 'command-line.js'), 'press', project, '--into', folder], outside);
-  for (const file of ['booklet.pdf', 'tables.xlsx', 'tables.csv', 'norm-set.json']) {
+  for (const file of [
+    'booklet.pdf',
+    'tables.xlsx',
+    'tables.csv',
+    'norm-set.json',
+    'certificate.json',
+    'certificate.pdf',
+  ]) {
     assert.ok(statSync(join(folder, file)).size > 0, `${file} is empty.`);
   }
+  const { 'read-back': readBack } = JSON.parse(readFileSync(join(folder, 'certificate.json'), 'utf8'));
+  assert.ok(readBack['cells-compared'] > 1000 && readBack.differences === 0, 'The pressed files were not read back.');
 };
 
 try {

@@ -8,7 +8,7 @@ import { projectOf } from '../../shared-core/norms/small-projects.ts';
 import { fileForTest, folderForTest, normloom, SAMPLE_PROJECT } from './run-normloom.ts';
 import { readTables } from './tables-file.ts';
 
-const FILES = ['booklet.pdf', 'tables.xlsx', 'tables.csv', 'norm-set.json'];
+const FILES = ['booklet.pdf', 'tables.xlsx', 'tables.csv', 'norm-set.json', 'certificate.json', 'certificate.pdf'];
 
 /** What `sha256sum` would print of the pressed files. */
 function fingerprints(folder: string): string {
@@ -21,7 +21,7 @@ function fingerprints(folder: string): string {
 }
 
 describe('press', () => {
-  it('writes the four files and names each with its SHA-256', () => {
+  it('writes the files and names each with its SHA-256', () => {
     const folder = join(folderForTest(), 'new', 'folder');
     const ran = normloom(['press', SAMPLE_PROJECT, '--into', folder]);
     expect([ran.exit, ran.stderr]).toEqual([0, '']);
@@ -48,7 +48,7 @@ describe('press', () => {
     const project = projectOf([1, 2, 3, 0, 4]);
     const path = fileForTest('small.normloom', projectToText(project));
     const ran = normloom(['press', path, '--into', folderForTest()]);
-    expect([ran.exit, ran.stdout.split('\n').length]).toEqual([0, 5]);
+    expect([ran.exit, ran.stdout.split('\n').length]).toEqual([0, 7]);
     expect(ran.stderr).toBe(
       'Still open: Only 10 pupils in All pupils. One alone is worth 10.0 points of percentile rank. ' +
         'Policy: at least 30, or a reason (common practice). ' +

@@ -39,7 +39,8 @@ export const PLAIN_WORK: DeskWork = {
       await writeFile(join(request.folder, file), text);
       files.push({ file, bytes: text.length, sha256: createHash('sha256').update(text).digest('hex') });
     }
-    return { ok: true, value: { kind: 'pressed', pressed: { folder: request.folder, files } } };
+    const readBack = { cells: 2, recomputed: 1 };
+    return { ok: true, value: { kind: 'pressed', pressed: { folder: request.folder, files, readBack } } };
   },
 };
 

@@ -105,20 +105,28 @@ describe('tablesCsv', () => {
 describe('pressFiles', () => {
   const project = sampleProject({ scale: WHOLE_SCALE });
 
-  it('makes the same four files each time, and writes them with their fingerprints', async () => {
+  it('makes the same files each time, reads them back, and writes them with their fingerprints', async () => {
     const told: number[] = [];
     const made = await pressFiles(project, (progress) => told.push(progress));
     if (!made.ok) throw new Error(made.problem);
-    expect(made.value.map(({ file }) => file)).toEqual(['booklet.pdf', 'tables.xlsx', 'tables.csv', 'norm-set.json']);
+    expect(made.value.files.map(({ file }) => file)).toEqual([
+      'booklet.pdf',
+      'tables.xlsx',
+      'tables.csv',
+      'norm-set.json',
+      'certificate.json',
+      'certificate.pdf',
+    ]);
+    expect(made.value.readBack.recomputed).toBe(2 * 41 * 6);
     expect(told).toEqual(told.toSorted((left, right) => left - right));
 
     const into = join(folder, 'a', 'b');
     const pressed = await pressInto(project, into);
     if (!pressed.ok) throw new Error(pressed.problem);
-    expect((await readdir(into)).sort()).toEqual(['booklet.pdf', 'norm-set.json', 'tables.csv', 'tables.xlsx']);
+    expect((await readdir(into)).sort()).toEqual(made.value.files.map(({ file }) => file).sort());
     for (const [index, { file, bytes, sha256 }] of pressed.value.files.entries()) {
       const written = await readFile(join(into, file));
-      expect(written.equals(Buffer.from(made.value[index]?.bytes ?? []))).toBe(true);
+      expect(written.equals(Buffer.from(made.value.files[index]?.bytes ?? []))).toBe(true);
       expect(written.length).toBe(bytes);
       expect(createHash('sha256').update(written).digest('hex')).toBe(sha256);
     }

@@ -49,7 +49,7 @@ describe('startPressJob', () => {
     const reply = await startPressJob({ kind: 'press', project, folder: into }, quiet, never(), worker);
     if (!reply.ok || reply.value.kind !== 'pressed') throw new Error('not pressed');
     expect(reply.value.pressed.folder).toBe(into);
-    expect(reply.value.pressed.files).toHaveLength(4);
+    expect(reply.value.pressed.files).toHaveLength(6);
   });
 
   it('presses the same bytes in every language and time zone', () => {

@@ -1,0 +1,39 @@
+import { squeezed, type PdfCell, type PdfLine } from './pdf-text.ts';
+
+/** A percentile of the inverse table with the raw score below it. */
+interface InverseCell {
+  readonly percentile: string;
+  readonly score: string;
+}
+
+/** Label and figures of one line differ in size; their baselines lie this close, in points. */
+const SAME_LINE = 2.5;
+const NEXT_LINE = 16;
+/** Points by which right edges of a percentile and its score may differ. */
+const EDGE = 1;
+
+/** The inverse tables on a page: a line of percentiles, and below each the raw score that ends at the same edge. */
+export function inverseOn(lines: readonly PdfLine[]): readonly InverseCell[] {
+  const cells = lines.flatMap((line) => line.cells);
+  return cells
+    .filter(({ text }) => squeezed(text) === 'Percentilerank')
+    .flatMap((label) => {
+      const below = cells.find(
+        ({ text, left, baseline }) =>
+          /^(?:Low|High)estrawscore$/.test(squeezed(text)) &&
+          Math.abs(left - label.left) <= EDGE &&
+          label.baseline - baseline > SAME_LINE &&
+          label.baseline - baseline < NEXT_LINE,
+      );
+      if (below === undefined) return [];
+      const scores = beside(cells, below);
+      return beside(cells, label).map(({ text, right }) => ({
+        percentile: text,
+        score: scores.find((score) => Math.abs(score.right - right) <= EDGE)?.text ?? '',
+      }));
+    });
+}
+
+function beside(cells: readonly PdfCell[], label: PdfCell): readonly PdfCell[] {
+  return cells.filter((cell) => cell.left > label.right && Math.abs(cell.baseline - label.baseline) < SAME_LINE);
+}
