@@ -1,3 +1,4 @@
+import { ADJUSTED_MARK } from './adjustment-words.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { ConversionRow } from './conversion-table.ts';
 import { changedChoices, type TextChange } from './edition-compare-choices.ts';
@@ -237,8 +238,10 @@ function inOrderOf(
   return set.groups.flatMap((norms) => changes.get(norms) ?? []);
 }
 
+/** As it stands in print: a rank adjusted by hand carries its mark. */
 function textIn(row: ConversionRow, column: PrintedColumnKey): string {
-  return column === 'rank' ? row.printed : row.texts[column];
+  if (column !== 'rank') return row.texts[column];
+  return row.adjusted === null ? row.printed : `${row.printed}${ADJUSTED_MARK}`;
 }
 
 function editionName({ project, check }: NormSet): EditionName {

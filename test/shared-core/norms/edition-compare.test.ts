@@ -71,6 +71,15 @@ describe('two editions', () => {
     expect(comparisonText(comparison)).toContain('  raw score 1: percentile rank 20 → 25; number of pupils 2 → 3\n');
   });
 
+  it('tell a rank adjusted by hand by its mark', () => {
+    const before = settledProject();
+    const adjustment = { values: ['4'], score: 3, to: '18', reason: 'Agreed with the board', by: 'M. Orr' };
+    const after = { ...before, adjustments: [adjustment] };
+    const comparison = compared(before, after);
+    expect(comparison.counts.cellsChanged).toBe(1);
+    expect(comparisonText(comparison)).toContain('18†');
+  });
+
   it('tell another rounding as a choice and the halves that it moves', () => {
     // Midpoint ranks of 1, 0, 3 of 4: 12.5, 25 and 62.5; the rule for halves decides two of them.
     const project = withTable(projectOf([1, 0, 3]), { columns: [] });
