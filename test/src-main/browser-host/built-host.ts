@@ -26,7 +26,7 @@ export async function buildHost(): Promise<string> {
           'tally-worker': here('../../../src-main/cohort-file/tally-worker.ts'),
           'press-worker': here('../../../src-main/press/press-worker.ts'),
         },
-        output: { entryFileNames: '[name].js' },
+        output: { entryFileNames: '[name].js', chunkFileNames: '[name]-[hash].js' },
       },
     },
   });
