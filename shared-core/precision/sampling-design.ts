@@ -49,8 +49,11 @@ function meanEffect(table: FrequencyTable, counted: CountedRank, n: number): num
   const simple = rankStandardErrors(table, counted, n);
   const known = errors.flatMap((error, position) => {
     const rank = ranks[position] ?? 0;
-    if ((table.counts[position] ?? 0) === 0 || rank < NO_VARIANCE || rank > 100 - NO_VARIANCE) return [];
-    return [{ rank, effect: (error / (simple[position] ?? NaN)) ** 2 }];
+    const plain = simple[position] ?? 0;
+    // Where all score alike the rank is that of everybody and does not vary either.
+    if ((table.counts[position] ?? 0) === 0 || plain < NO_VARIANCE) return [];
+    if (rank < NO_VARIANCE || rank > 100 - NO_VARIANCE) return [];
+    return [{ rank, effect: (error / plain) ** 2 }];
   });
   const [low, high] = DESIGN_EFFECT_RANKS;
   const middle = known.filter(({ rank }) => rank >= low && rank <= high);

@@ -183,6 +183,13 @@ describe('the design effect', () => {
     expectNear([samplingDesign(table, 'below', 80).designEffect ?? NaN], [mean]);
   });
 
+  it('has no design effect where everybody scores alike', () => {
+    const table = tableOf([personOf('a', 1), personOf('b', 1), personOf('', 1)], scaleTo(2), false);
+    for (const counted of COUNTED) {
+      expect(samplingDesign(table, counted, 3)).toEqual({ clusters: 3, designEffect: null, effectiveN: 3 });
+    }
+  });
+
   it('never makes more of the people than they and their weights are', () => {
     // Each school holds one at either end: schools are more alike than chance.
     const people = Array.from({ length: 60 }, (_, index) => personOf(`s${index >> 1}`, index % 2));
