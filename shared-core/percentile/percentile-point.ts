@@ -199,7 +199,7 @@ function interpolated(table: FrequencyTable, scores: readonly number[], position
 }
 
 /** The score of the person at a rank counted from 1, the first or last person beyond the ends. */
-function personAt(table: FrequencyTable, scores: readonly number[], rank: bigint): number {
+export function personAt(table: FrequencyTable, scores: readonly number[], rank: bigint): number {
   const people = BigInt(peopleIn(table));
   let left = rank < 1n ? 1n : rank > people ? people : rank;
   for (let position = 0; position < table.counts.length; position += 1) {

@@ -1,4 +1,4 @@
-import { percentilePoint } from '../percentile/percentile-point.ts';
+import { percentilePoint, personAt } from '../percentile/percentile-point.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { attainableScores } from '../scale/score-scale.ts';
 import { centralMoments } from './central-moments.ts';
@@ -78,16 +78,7 @@ function weightedQuarters(table: FrequencyTable): readonly [number, number, numb
 function hinges(table: FrequencyTable, scores: readonly number[]): readonly [number, number, number] {
   const n = peopleIn(table);
   const depth = (Math.floor((n + 1) / 2) + 1) / 2;
-  const at = (position: number): number =>
-    (personAt(table, scores, Math.floor(position)) + personAt(table, scores, Math.ceil(position))) / 2;
+  const personOf = (rank: number): number => personAt(table, scores, BigInt(rank));
+  const at = (position: number): number => (personOf(Math.floor(position)) + personOf(Math.ceil(position))) / 2;
   return [at(depth), at((n + 1) / 2), at(n + 1 - depth)];
-}
-
-function personAt(table: FrequencyTable, scores: readonly number[], rank: number): number {
-  let passed = 0;
-  const position = table.counts.findIndex((count) => {
-    passed += count;
-    return passed >= rank;
-  });
-  return scores[position] ?? NaN;
 }
