@@ -181,6 +181,12 @@ export function alternatives(
           'three columns',
           'The table is split in three, the heading repeated.',
         ),
+        sheetAlternative(
+          project,
+          { tableColumns: 4 },
+          'four columns',
+          'For few figures and many scores, or a sheet on its side.',
+        ),
       ];
     case 'ogive':
       return [

@@ -1,5 +1,7 @@
+import { DEFAULT_BLOCKS } from './booklet-blocks.ts';
 import { DEFAULT_POLICY } from './policy.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
+import { DEFAULT_SETTING, ENGLISH_LANGUAGE } from './sheet-schema.ts';
 
 /** Cautions that print unless the user rewrites them. */
 export const STANDING_CAUTIONS =
@@ -41,14 +43,20 @@ export function newProject(title: string): NormProject {
       paper: 'a4',
       orientation: 'portrait',
       tableColumns: 3,
+      marginMm: null,
+      ...DEFAULT_SETTING,
       title: 'Raw score to percentile rank',
       howToRead: STANDING_HOW_TO_READ,
       cautions: STANDING_CAUTIONS,
       notes: '',
       ogive: true,
       inverse: false,
+      blocks: DEFAULT_BLOCKS,
+      language: ENGLISH_LANGUAGE,
     },
-    release: { edition: '1.0', date: '', answers: [] },
+    release: { edition: '1.0', date: '', answers: [], analyst: '', checker: '', changes: null },
+    cuts: [],
+    classTable: null,
     adjustments: [],
     policy: DEFAULT_POLICY,
   };

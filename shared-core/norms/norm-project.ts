@@ -1,11 +1,13 @@
 import * as v from 'valibot';
 import { scaleProblems } from '../scale/score-scale.ts';
 import { adjustmentsSchema } from './adjustment-schema.ts';
+import { cutsSchema } from './cut-schema.ts';
 import { cellClustersSchema, clustersFit } from './cluster-schema.ts';
 import { COLUMN_KEYS } from './column-keys.ts';
 import { DEFAULT_POLICY } from './policy.ts';
 import { policySchema } from './policy-schema.ts';
 import { LEFT_OUT_RULES } from './reading.ts';
+import { sheetSchema } from './sheet-schema.ts';
 import { precisionSchema, smoothingSchema } from './smoothing-schema.ts';
 
 /**
@@ -187,35 +189,36 @@ const table = v.pipe(
   v.readonly(),
 );
 
-const sheet = v.pipe(
-  v.object({
-    paper: v.picklist(['a4', 'letter', 'a5']),
-    orientation: v.picklist(['portrait', 'landscape']),
-    tableColumns: v.picklist([1, 2, 3]),
-    /** Title before the group's name. */
-    title: shortText,
-    howToRead: longText,
-    cautions: longText,
-    notes: longText,
-    ogive: v.boolean(),
-    /** The inverse table: the lowest raw score that reaches each of some percentiles. */
-    inverse: v.boolean(),
-  }),
-  v.readonly(),
-);
-
 const release = v.pipe(
   v.object({
     edition: v.pipe(v.string(), v.maxLength(40)),
     /** Date printed on every sheet, yyyy-mm-dd, or empty. */
     date: v.pipe(v.string(), v.regex(/^(\d{4}-\d{2}-\d{2})?$/)),
     answers: v.pipe(v.array(v.pipe(v.object({ query: longText, reason: longText }), v.readonly())), v.readonly()),
+    /** Who made the tables and who checked them, as they sign; empty while they have not. */
+    analyst: v.optional(shortText, ''),
+    checker: v.optional(shortText, ''),
+    /** What changed since an earlier edition, for the change list; null where none was compared. */
+    changes: v.optional(
+      v.nullable(
+        v.pipe(
+          v.object({
+            edition: v.pipe(v.string(), v.maxLength(40)),
+            date: v.pipe(v.string(), v.maxLength(10)),
+            check: v.pipe(v.string(), v.maxLength(9)),
+            lines: v.pipe(v.array(longText), v.readonly()),
+          }),
+          v.readonly(),
+        ),
+      ),
+      null,
+    ),
   }),
   v.readonly(),
 );
 
 export const PROJECT_FORMAT = 'normloom-project';
-export const PROJECT_VERSION = 3;
+export const PROJECT_VERSION = 4;
 
 export const normProjectSchema = v.pipe(
   v.object({
@@ -233,8 +236,12 @@ export const normProjectSchema = v.pipe(
     curve,
     precision: precisionSchema,
     table,
-    sheet,
+    sheet: sheetSchema,
     release,
+    /** Raw scores that decide something, told in the booklet. */
+    cuts: v.optional(cutsSchema, []),
+    /** Values of the group whose table is meant where a class list does not say which; null: none is. */
+    classTable: v.optional(v.nullable(texts), null),
     /** Printed ranks that somebody changed by hand. */
     adjustments: v.optional(adjustmentsSchema, []),
     /** Thresholds of the queries. */
@@ -251,6 +258,7 @@ export type Documentation = NormProject['groups']['documentation'];
 export type TableChoices = NormProject['table'];
 export type PrecisionChoices = NormProject['precision'];
 export type SheetChoices = NormProject['sheet'];
+export type Cut = NormProject['cuts'][number];
 export type PeopleNoun = NormProject['people'];
 
 interface TallyBearing {

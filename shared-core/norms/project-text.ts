@@ -44,6 +44,9 @@ function broughtForward(value: FileObject): FileObject {
       return withClusters(withPrecision(value));
     case 2:
       return withClusters(value);
+    case 3:
+      // Blocks, setting, language, cuts and signatures have defaults of their own.
+      return { ...value, version: PROJECT_VERSION };
     default:
       return value;
   }

@@ -216,7 +216,7 @@ export function tableStatement(project: NormProject): readonly StatementPart[] {
 }
 
 const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
-const NUMBER_WORDS = { 1: 'one column', 2: 'two columns', 3: 'three columns' } as const;
+const NUMBER_WORDS = { 1: 'one column', 2: 'two columns', 3: 'three columns', 4: 'four columns' } as const;
 
 export function sheetStatement(project: NormProject): readonly StatementPart[] {
   const { paper, orientation, tableColumns, ogive, inverse } = project.sheet;

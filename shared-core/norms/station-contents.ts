@@ -18,7 +18,7 @@ export function stationContents(project: NormProject, openQueries: number): Read
     groups: groupsInWords(project),
     curve: `${definitionName(project.curve.definition)}, ${smoothingInBrief(project.curve.smoothing)}`,
     table: ['rank', ...table.columns.map((key) => columnOf(key, project).name)].join(', '),
-    sheet: `${{ a4: 'A4', letter: 'Letter', a5: 'A5' }[sheet.paper]}, ${{ 1: 'one column', 2: 'two columns', 3: 'three columns' }[sheet.tableColumns]}`,
+    sheet: `${{ a4: 'A4', letter: 'Letter', a5: 'A5' }[sheet.paper]}, ${{ 1: 'one column', 2: 'two columns', 3: 'three columns', 4: 'four columns' }[sheet.tableColumns]}`,
     release:
       openQueries === 0
         ? `edition ${release.edition}`

@@ -37,7 +37,7 @@ export function measureTables(
     return figures + natural.length * LEAST_GAP * typeScale <= columnWidth(columns);
   };
   const columnWidth = (columns: number): number => (pageWidth - (columns - 1) * GUTTER) / columns;
-  const most = [sheet.tableColumns, 2, 1].filter((columns) => columns <= sheet.tableColumns);
+  const most = [4, 3, 2, 1].filter((columns) => columns <= sheet.tableColumns);
   const columns = most.find((count) => fits(count, 1)) ?? 1;
   const typeScale = TYPE_SCALES.find((scale) => fits(columns, scale)) ?? Math.min(...TYPE_SCALES);
   return {
@@ -97,7 +97,7 @@ function placed(
   return { width: right, heads };
 }
 
-const COUNT_WORDS = ['no', 'one', 'two', 'three'] as const;
+const COUNT_WORDS = ['no', 'one', 'two', 'three', 'four'] as const;
 const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
 
 function remarksOn(sheet: SheetChoices, columns: number, typeScale: number): readonly string[] {

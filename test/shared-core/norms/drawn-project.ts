@@ -1,3 +1,4 @@
+import { BLOCK_KINDS } from '../../../shared-core/norms/booklet-blocks.ts';
 import fc from 'fast-check';
 import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from '../../../shared-core/norms/norm-project.ts';
@@ -107,6 +108,37 @@ const drawnReading = (scale: ScoreScale | null) =>
     }),
   });
 
+/** Margins, rows, blocks and language of a sheet. */
+const drawnSetting = {
+  marginMm: fc.constantFrom(null, 8, 18.5, 45),
+  gutterMm: fc.constantFrom(0, 7.5, 30),
+  rowType: fc.constantFrom(6, 8.7, 14),
+  rowHeight: fc.constantFrom(8, 12.4, 36),
+  fives: fc.boolean(),
+  rangeRows: fc.boolean(),
+  fillToFours: fc.boolean(),
+  blocks: fc
+    .shuffledSubarray([...BLOCK_KINDS])
+    .chain((kinds) =>
+      fc.tuple(
+        ...kinds.map((kind) =>
+          fc.record({ kind: fc.constant(kind), printed: fc.boolean(), heading: drawnText, text: drawnText }),
+        ),
+      ),
+    ),
+  language: fc.record({
+    tag: fc.constantFrom('en', 'de-CH', 'nb'),
+    words: fc.constantFrom('en' as const, 'de' as const, 'es' as const, 'fr' as const),
+    numbers: fc.record({
+      decimalMark: fc.constantFrom('.' as const, ',' as const),
+      thousands: fc.constantFrom('narrow-space' as const, 'comma' as const, 'none' as const),
+      minus: fc.constantFrom('minus' as const, 'hyphen' as const),
+      dateOrder: fc.constantFrom('yyyy-mm-dd' as const, 'dd.mm.yyyy' as const),
+    }),
+    phrases: fc.array(fc.record({ key: fc.constantFrom('page', 'edition'), text: drawnText }), { maxLength: 2 }),
+  }),
+};
+
 /** Any project that the schema accepts, one in some with nothing read yet. */
 export const drawnProject: fc.Arbitrary<NormProject> = fc
   .record({ scale: drawnScale, columns: fc.uniqueArray(drawnText, { maxLength: 3 }), weighted: fc.boolean() })
@@ -160,7 +192,8 @@ export const drawnProject: fc.Arbitrary<NormProject> = fc
       sheet: fc.record({
         paper: fc.constantFrom('a4' as const, 'letter' as const, 'a5' as const),
         orientation: fc.constantFrom('portrait' as const, 'landscape' as const),
-        tableColumns: fc.constantFrom(1 as const, 2 as const, 3 as const),
+        tableColumns: fc.constantFrom(1 as const, 2 as const, 3 as const, 4 as const),
+        ...drawnSetting,
         title: drawnText,
         howToRead: drawnText,
         cautions: drawnText,
@@ -169,10 +202,29 @@ export const drawnProject: fc.Arbitrary<NormProject> = fc
         inverse: fc.boolean(),
       }),
       release: fc.record({
+        analyst: drawnText,
+        checker: drawnText,
+        changes: fc.option(
+          fc.record({
+            edition: fc.constantFrom('', '0.9'),
+            date: fc.constantFrom('', '2025-06-15'),
+            check: fc.constant('0123-89AB'),
+            lines: fc.array(drawnText, { maxLength: 3 }),
+          }),
+        ),
         edition: drawnText,
         date: fc.constantFrom('', '2026-06-15'),
         answers: fc.array(fc.record({ query: drawnText, reason: drawnText }), { maxLength: 3 }),
       }),
+      cuts: fc.array(
+        fc.record({
+          name: drawnText,
+          score: fc.constantFrom(scale.min, scale.max, scale.max + 1),
+          values: fc.option(fc.array(drawnText, { maxLength: 3 })),
+        }),
+        { maxLength: 2 },
+      ),
+      classTable: fc.option(fc.array(drawnText, { maxLength: 3 })),
       adjustments: fc.array(
         fc.record({
           values: fc.array(drawnText, { maxLength: 3 }),

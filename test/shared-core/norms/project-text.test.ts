@@ -14,6 +14,7 @@ const OPTIONAL_KEYS = [
   ...['offset', 'width', 'printed', 'query', 'reason', 'values', 'score', 'to', 'by'],
   ...['degree', 'kept-scores', 'comb', 'every', 'bandwidth', 'after'],
   ...['parts', 'alone', 'alone-squares', 'cluster', 'positions'],
+  ...['check', 'lines', 'name', 'key', 'text'],
 ] as const;
 
 /** The text of the settled project with one value put elsewhere in its JSON. */
@@ -103,9 +104,9 @@ describe('the text of a project', () => {
 
 describe('a text that cannot be used', () => {
   it('tells of a newer program', () => {
-    const newer = text.replace('"version": 3', '"version": 4');
+    const newer = text.replace('"version": 4', '"version": 5');
     expect(problemOf(newer)).toBe(
-      'This project was saved by a newer Normloom (file version 4; this one reads up to 3). ' +
+      'This project was saved by a newer Normloom (file version 5; this one reads up to 4). ' +
         'Open it with the newer program; the file was not touched.',
     );
   });
@@ -124,8 +125,8 @@ describe('a text that cannot be used', () => {
   });
 
   it.each<[string, string, string]>([
-    ['an older version', text.replace('"version": 3', '"version": 0'), 'version'],
-    ['a version that is no number', text.replace('"version": 3', '"version": "2"'), 'version'],
+    ['an older version', text.replace('"version": 4', '"version": 0'), 'version'],
+    ['a version that is no number', text.replace('"version": 4', '"version": "2"'), 'version'],
     ['a missing part', changed((file) => delete file['sheet']), 'sheet'],
     ['a choice that does not exist', text.replace('"half-up"', '"half-down"'), 'table.rounding'],
     ['a date that is none', text.replace('2026-06-15', '15 June'), 'release.date'],

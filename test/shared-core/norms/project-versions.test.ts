@@ -98,7 +98,17 @@ describe('a project of version 1', () => {
     const read = projectFromText(VERSION_1);
     if (!read.ok) throw new Error(read.problem);
     const { project } = read;
-    expect(project.version).toBe(3);
+    expect(project.version).toBe(PROJECT_VERSION);
+    expect(project.sheet).toEqual({
+      ...fresh.sheet,
+      paper: 'letter',
+      orientation: 'landscape',
+      tableColumns: 2,
+      title: 'Spelling',
+      howToRead: 'Look.',
+      cautions: 'Beware.',
+      inverse: true,
+    });
     expect(project.curve).toEqual({
       definition: { kind: 'plotting-position', offset: '3/8' },
       smoothing: { kind: 'none' },
@@ -182,12 +192,58 @@ describe('a project of version 2', () => {
   });
 });
 
+describe('a project of version 3', () => {
+  /** The text of a project without anything that version 3 did not know. */
+  function asVersion3(project: NormProject): string {
+    const file = JSON.parse(projectToText(project));
+    for (const key of ['cuts', 'class-table']) delete file[key];
+    for (const key of ['analyst', 'checker', 'changes']) delete file.release[key];
+    const { paper, orientation, title, cautions, notes, ogive, inverse } = file.sheet;
+    const [tableColumns, howToRead] = [file.sheet['table-columns'], file.sheet['how-to-read']];
+    return JSON.stringify({
+      ...file,
+      version: 3,
+      sheet: {
+        paper,
+        orientation,
+        title,
+        cautions,
+        notes,
+        ogive,
+        inverse,
+        'table-columns': tableColumns,
+        'how-to-read': howToRead,
+      },
+    });
+  }
+
+  it('is brought forward as its tables alone, in English, unsigned, and nothing else changes', () => {
+    fc.assert(
+      fc.property(drawnProject, (project) => {
+        const { paper, orientation, tableColumns, title, howToRead, cautions, notes, ogive, inverse } = project.sheet;
+        const kept = { paper, orientation, tableColumns, title, howToRead, cautions, notes, ogive, inverse };
+        const { edition, date, answers } = project.release;
+        expect(projectFromText(asVersion3(project))).toEqual({
+          ok: true,
+          project: {
+            ...project,
+            sheet: { ...fresh.sheet, ...kept },
+            release: { ...fresh.release, edition, date, answers },
+            cuts: [],
+            classTable: null,
+          },
+        });
+      }),
+    );
+  });
+});
+
 describe('a project of another version', () => {
   it('is refused when it is newer, without a change', () => {
-    for (const version of [4, 5, 1000]) {
+    for (const version of [PROJECT_VERSION + 1, 50, 1000]) {
       const read = projectFromText(VERSION_1.replace('"version": 1', `"version": ${version}`));
       expect(read.ok ? '' : read.problem).toMatch(
-        new RegExp(`saved by a newer Normloom \\(file version ${version}; this one reads up to 3\\)`),
+        new RegExp(`saved by a newer Normloom \\(file version ${version}; this one reads up to ${PROJECT_VERSION}\\)`),
       );
     }
   });

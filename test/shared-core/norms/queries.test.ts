@@ -165,7 +165,12 @@ describe('answers', () => {
     ...withCounts([5, 0, 5]),
     source: settled.source && { ...settled.source, scaleInferred: true },
     sheet: { ...settled.sheet, cautions: '' },
-    release: { edition: '1.0', date: '', answers: [{ query: 'scale-inferred', reason: 'Yes, 0 to 20.' }] },
+    release: {
+      ...settled.release,
+      edition: '1.0',
+      date: '',
+      answers: [{ query: 'scale-inferred', reason: 'Yes, 0 to 20.' }],
+    },
   };
 
   it('go to their query alone, and answered queries stand last', () => {

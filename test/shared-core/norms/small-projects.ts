@@ -124,7 +124,7 @@ export function settledProject(): NormProject {
       },
     },
     sheet: { ...bare.sheet, notes: 'Read aloud.', inverse: true },
-    release: { edition: '1.0', date: '2026-06-15', answers: [] },
+    release: { ...bare.release, edition: '1.0', date: '2026-06-15', answers: [] },
   };
 }
 

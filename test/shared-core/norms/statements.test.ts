@@ -171,7 +171,7 @@ describe('statements', () => {
     expect(choicesIn(columns(['count', 'stanine'], 'linear'))).toContain('z-source');
     expect(statementText(tableStatement(columns([], 'normalised')))).toContain('beside them nothing else.');
     expect(statementText(groupsStatement(bare))).toBe('There is one table for all people.');
-    expect(statementText(releaseStatement({ ...bare, release: { edition: ' ', date: '', answers: [] } }))).toBe(
+    expect(statementText(releaseStatement({ ...bare, release: { ...bare.release, edition: ' ', date: '' } }))).toBe(
       'This is edition (no number), dated (no date).',
     );
   });

@@ -1,0 +1,105 @@
+import * as v from 'valibot';
+import { BLOCK_KINDS, DEFAULT_BLOCKS } from './booklet-blocks.ts';
+
+const shortText = v.pipe(v.string(), v.maxLength(400));
+const longText = v.pipe(v.string(), v.maxLength(8000));
+
+function lengthFrom(least: number, most: number) {
+  return v.pipe(v.number(), v.minValue(least), v.maxValue(most));
+}
+
+const blocks = v.pipe(
+  v.array(
+    v.pipe(
+      v.object({
+        kind: v.picklist(BLOCK_KINDS),
+        printed: v.boolean(),
+        /** Empty: the standing heading, or the standing text, in the language of the booklet. */
+        heading: shortText,
+        text: longText,
+      }),
+      v.readonly(),
+    ),
+  ),
+  v.check((listed) => new Set(listed.map(({ kind }) => kind)).size === listed.length, 'a block stands in it twice'),
+  v.readonly(),
+);
+
+/** How numbers are written in print. */
+const numbers = v.pipe(
+  v.object({
+    decimalMark: v.picklist(['.', ',']),
+    thousands: v.picklist(['narrow-space', 'comma', 'point', 'apostrophe', 'none']),
+    minus: v.picklist(['minus', 'hyphen']),
+    dateOrder: v.picklist(['yyyy-mm-dd', 'dd.mm.yyyy', 'dd/mm/yyyy', 'mm/dd/yyyy']),
+  }),
+  v.readonly(),
+);
+
+const language = v.pipe(
+  v.object({
+    /** Tag of the language of the booklet (BCP 47): it decides how a screen reader speaks. */
+    tag: v.pipe(v.string(), v.regex(/^[A-Za-z]{2,3}(-[A-Za-z0-9]{2,8})*$/)),
+    /** The words that ship with the program and are printed where no others are given. */
+    words: v.picklist(['en', 'de', 'es', 'fr']),
+    numbers,
+    /** Printed words put in place of those that ship. */
+    phrases: v.pipe(
+      v.array(v.pipe(v.object({ key: v.pipe(v.string(), v.maxLength(80)), text: longText }), v.readonly())),
+      v.readonly(),
+    ),
+  }),
+  v.readonly(),
+);
+
+/** Words and numbers as they are printed in English. */
+export const ENGLISH_LANGUAGE: v.InferOutput<typeof language> = {
+  tag: 'en',
+  words: 'en',
+  numbers: { decimalMark: '.', thousands: 'narrow-space', minus: 'minus', dateOrder: 'yyyy-mm-dd' },
+  phrases: [],
+};
+
+/** How everything is set where nothing else was chosen; lengths of type in points. */
+export const DEFAULT_SETTING = {
+  rowType: 8.7,
+  rowHeight: 12.4,
+  fives: true,
+  rangeRows: false,
+  gutterMm: 0,
+  fillToFours: false,
+} as const;
+
+export const sheetSchema = v.pipe(
+  v.object({
+    paper: v.picklist(['a4', 'letter', 'a5']),
+    orientation: v.picklist(['portrait', 'landscape']),
+    tableColumns: v.picklist([1, 2, 3, 4]),
+    /** White space at every edge, millimetres; null for what is usual on the paper. */
+    marginMm: v.optional(v.nullable(lengthFrom(8, 45)), null),
+    /** More of it at the edge that is bound: left on odd pages, right on even ones. */
+    gutterMm: v.optional(lengthFrom(0, 30), DEFAULT_SETTING.gutterMm),
+    /** Size of the figures, and from one row to the next, points. */
+    rowType: v.optional(lengthFrom(6, 14), DEFAULT_SETTING.rowType),
+    rowHeight: v.optional(lengthFrom(8, 36), DEFAULT_SETTING.rowHeight),
+    /** Rows stand in fives. */
+    fives: v.optional(v.boolean(), DEFAULT_SETTING.fives),
+    /** Neighbouring scores that print alike stand in one row: "23–25". */
+    rangeRows: v.optional(v.boolean(), DEFAULT_SETTING.rangeRows),
+    /** Blank pages fill the booklet to a multiple of four, for folding and stitching. */
+    fillToFours: v.optional(v.boolean(), DEFAULT_SETTING.fillToFours),
+    /** Title before the group's name. */
+    title: shortText,
+    /** Beside each table. */
+    howToRead: longText,
+    cautions: longText,
+    notes: longText,
+    ogive: v.boolean(),
+    /** The inverse table beside each table: the lowest raw score that reaches each of some percentiles. */
+    inverse: v.boolean(),
+    /** What the booklet is made of, in print order; kinds that are not listed are not printed. */
+    blocks: v.optional(blocks, DEFAULT_BLOCKS),
+    language: v.optional(language, ENGLISH_LANGUAGE),
+  }),
+  v.readonly(),
+);
