@@ -196,13 +196,15 @@ describe('a project of version 3', () => {
   /** The text of a project without anything that version 3 did not know. */
   function asVersion3(project: NormProject): string {
     const file = JSON.parse(projectToText(project));
-    for (const key of ['cuts', 'class-table']) delete file[key];
-    for (const key of ['analyst', 'checker', 'changes']) delete file.release[key];
+    delete file.cuts;
+    delete file['class-table'];
+    const { edition, date, answers } = file.release;
     const { paper, orientation, title, cautions, notes, ogive, inverse } = file.sheet;
     const [tableColumns, howToRead] = [file.sheet['table-columns'], file.sheet['how-to-read']];
     return JSON.stringify({
       ...file,
       version: 3,
+      release: { edition, date, answers },
       sheet: {
         paper,
         orientation,
