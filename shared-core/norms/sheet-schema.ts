@@ -60,13 +60,13 @@ export const ENGLISH_LANGUAGE: v.InferOutput<typeof language> = {
   phrases: [],
 };
 
-/** How everything is set where nothing else was chosen; lengths of type in points. */
+/** How everything is set where nothing else was chosen, in the order of the schema; lengths of type in points. */
 export const DEFAULT_SETTING = {
+  gutterMm: 0,
   rowType: 8.7,
   rowHeight: 12.4,
   fives: true,
   rangeRows: false,
-  gutterMm: 0,
   fillToFours: false,
 } as const;
 
