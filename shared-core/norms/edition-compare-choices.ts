@@ -1,14 +1,9 @@
 import { scaleInWords } from '../scale/score-scale.ts';
 import { printCount } from '../scores/printed-number.ts';
+import { BLOCK_NAMES, blocksInWords } from './blocks-in-words.ts';
 import type { NormProject } from './norm-project.ts';
-import {
-  cohortStatement,
-  curveStatement,
-  groupsStatement,
-  sheetStatement,
-  tableStatement,
-  type ChoiceKey,
-} from './statements.ts';
+import { sheetStatement } from './sheet-statement.ts';
+import { cohortStatement, curveStatement, groupsStatement, tableStatement, type ChoiceKey } from './statements.ts';
 
 /** A text that differs; null on a side that has none. */
 export interface TextChange {
@@ -57,9 +52,17 @@ const CHOICE_NAMES: Readonly<Record<Exclude<ChoiceKey, 'scale' | 'edition' | 'da
   columns: 'columns beside the rank',
   'z-source': 'z scores',
   'z-ends': 'ends of the z scores',
+  booklet: 'booklet',
   paper: 'paper',
   orientation: 'orientation',
+  margin: 'margins',
+  gutter: 'binding edge',
+  fours: 'blank pages',
   'table-columns': 'columns on the page',
+  'row-type': 'size of the figures',
+  'row-height': 'height of the rows',
+  fives: 'spacing of the rows',
+  'range-rows': 'rows',
   ogive: 'picture',
   inverse: 'inverse table',
 };
@@ -95,7 +98,8 @@ function sourceOf({ source }: NormProject): readonly NamedText[] {
 }
 
 /** What the user wrote for the sheets. */
-function textsOf({ groups, sheet }: NormProject): readonly NamedText[] {
+function textsOf(project: NormProject): readonly NamedText[] {
+  const { groups, sheet } = project;
   const { population, sampling, participation, testDates, weighting } = groups.documentation;
   return [
     { what: 'population', text: given(population) },
@@ -107,6 +111,11 @@ function textsOf({ groups, sheet }: NormProject): readonly NamedText[] {
     { what: 'how to read the table', text: given(sheet.howToRead) },
     { what: 'cautions', text: given(sheet.cautions) },
     { what: 'notes', text: given(sheet.notes) },
+    { what: 'blocks of the booklet', text: given(blocksInWords(project)) },
+    ...sheet.blocks.flatMap(({ kind, heading, text }) => [
+      { what: `heading of the block “${BLOCK_NAMES[kind]}”`, text: given(heading) },
+      { what: `text of the block “${BLOCK_NAMES[kind]}”`, text: given(text) },
+    ]),
   ];
 }
 

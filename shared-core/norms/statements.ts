@@ -31,13 +31,40 @@ export type ChoiceKey =
   | 'columns'
   | 'z-source'
   | 'z-ends'
+  | 'booklet'
   | 'paper'
   | 'orientation'
+  | 'margin'
+  | 'gutter'
+  | 'fours'
   | 'table-columns'
+  | 'row-type'
+  | 'row-height'
+  | 'fives'
+  | 'range-rows'
   | 'ogive'
   | 'inverse'
   | 'edition'
   | 'date';
+
+/** Choices that take a number, a text or several ticks; all others are made from a list. */
+export const EDITED_CHOICES = [
+  'scale',
+  'missing',
+  'grouping',
+  'kept',
+  'bandwidth',
+  'reliability',
+  'columns',
+  'margin',
+  'gutter',
+  'row-type',
+  'row-height',
+  'edition',
+  'date',
+] as const satisfies readonly ChoiceKey[];
+
+export type EditedChoice = (typeof EDITED_CHOICES)[number];
 
 export interface StatementPart {
   readonly text: string;
@@ -45,8 +72,15 @@ export interface StatementPart {
   readonly choice: ChoiceKey | null;
 }
 
-const words = (text: string): StatementPart => ({ text, choice: null });
-const phrase = (choice: ChoiceKey, text: string): StatementPart => ({ choice, text });
+/** Plain words of a statement. */
+export function words(text: string): StatementPart {
+  return { text, choice: null };
+}
+
+/** Words of a statement that stand for a choice. */
+export function phrase(choice: ChoiceKey, text: string): StatementPart {
+  return { choice, text };
+}
 
 /** The statement as one plain sentence, for print. */
 export function statementText(parts: readonly StatementPart[]): string {
@@ -212,26 +246,6 @@ export function tableStatement(project: NormProject): readonly StatementPart[] {
           words('.'),
         ]
       : []),
-  ];
-}
-
-const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
-const NUMBER_WORDS = { 1: 'one column', 2: 'two columns', 3: 'three columns', 4: 'four columns' } as const;
-
-export function sheetStatement(project: NormProject): readonly StatementPart[] {
-  const { paper, orientation, tableColumns, ogive, inverse } = project.sheet;
-  return [
-    words('Each table is set on '),
-    phrase('paper', PAPER_NAMES[paper]),
-    words(', '),
-    phrase('orientation', orientation),
-    words(', in '),
-    phrase('table-columns', NUMBER_WORDS[tableColumns]),
-    words(', '),
-    phrase('ogive', ogive ? 'with its ogive' : 'without a picture'),
-    words(' and '),
-    phrase('inverse', inverse ? 'with the lowest score for each percentile' : 'without an inverse table'),
-    words('.'),
   ];
 }
 

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { alternatives, type ListedChoice } from '../../../shared-core/norms/alternatives.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { normProjectSchema, type NormProject } from '../../../shared-core/norms/norm-project.ts';
+import { sheetStatement } from '../../../shared-core/norms/sheet-statement.ts';
 import {
   cohortStatement,
   curveStatement,
@@ -10,7 +11,6 @@ import {
   joined,
   methodText,
   releaseStatement,
-  sheetStatement,
   statementText,
   tableStatement,
   type ChoiceKey,
@@ -41,9 +41,13 @@ const LISTED = [
   'ends',
   'z-source',
   'z-ends',
+  'booklet',
   'paper',
   'orientation',
+  'fours',
   'table-columns',
+  'fives',
+  'range-rows',
   'ogive',
   'inverse',
 ] as const satisfies readonly ListedChoice[];
@@ -146,7 +150,9 @@ describe('statements', () => {
         'z scores are normal deviates of the ranks; they are held between −3 and 3.',
     );
     expect(statementText(sheetStatement(settled))).toBe(
-      'Each table is set on A4, portrait, in three columns, with its ogive and with the lowest score for each percentile.',
+      'The booklet is a sheet for each table, on A4, portrait, with the usual margins, no gutter and no blank pages. ' +
+        'Tables stand in three columns, figures of 8.7 points on rows of 12.4 points, set in fives, with a row for each ' +
+        'score. Each comes with its ogive and with the lowest score for each percentile.',
     );
     expect(statementText(releaseStatement(settled))).toBe('This is edition 1.0, dated 2026-06-15.');
   });
