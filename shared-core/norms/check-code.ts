@@ -1,0 +1,100 @@
+import { sha256 } from '@noble/hashes/sha2.js';
+import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
+import { printNumber, printShare } from '../scores/printed-number.ts';
+import type { CohortSummary } from '../tally/cohort-summary.ts';
+import { adjustmentNote } from './adjustment-words.ts';
+import { DEFAULT_BLOCKS, type BlockKind, type BookletBlock } from './booklet-blocks.ts';
+import { definitionKey } from './definitions.ts';
+import type { GroupNorms } from './group-norms.ts';
+import type { NormProject } from './norm-project.ts';
+import { clusterFacts } from './sampling-words.ts';
+import { ENGLISH_LANGUAGE } from './sheet-schema.ts';
+import { methodText } from './statements.ts';
+
+/**
+ * "7F3A-91C2": eight hexadecimal digits of the SHA-256 of everything that is printed, except the paper it is printed on
+ * and the version of the program that pressed it.
+ */
+export function checkCode(project: NormProject, groups: readonly GroupNorms[], status: 'draft' | 'released'): string {
+  const { title, subtitle, people, source, sheet, release } = project;
+  const { documentation } = project.groups;
+  const printed = [
+    [title, subtitle, people, release.edition, release.date, definitionKey(project.curve.definition)],
+    [sheet.title, sheet.howToRead, sheet.cautions, sheet.notes, methodText(project)],
+    [documentation.population, documentation.sampling, documentation.participation],
+    [documentation.testDates, documentation.weighting],
+    source === null ? [] : [source.file, source.sha256, source.rowsRead, source.rowsKept],
+    project.table.columns,
+    groups.map(({ group, summary, sampling, smoothing, rows, inverse }) => [
+      group.title,
+      smoothing.state === 'smoothed' ? smoothing.curve.statement : '',
+      factsIn(summary),
+      ...(sampling.clusters === null ? [] : [clusterFacts(sampling)]),
+      rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
+      sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
+    ]),
+    // What few sets have leaves the code of the others as it is.
+    ...groups.map(adjustmentNote).filter((note) => note !== null),
+    ...blockTexts(project, groups),
+    ...languageTexts(sheet.language),
+    ...(status === 'draft' ? [status] : []),
+  ];
+  const hash = bytesToHex(sha256(utf8ToBytes(JSON.stringify(printed)))).toUpperCase();
+  return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;
+}
+
+/** What is printed of the blocks besides the tables, under names that say what it is; nothing for the tables alone. */
+function blockTexts(project: NormProject, groups: readonly GroupNorms[]): readonly unknown[] {
+  const { sheet, release, cuts, source } = project;
+  const blocks = printedBlocks(sheet.blocks);
+  if (same(blocks, printedBlocks(DEFAULT_BLOCKS))) return [];
+  const changes = release.changes;
+  const parts: Partial<Record<BlockKind, unknown>> = {
+    'norm-group': [
+      source?.leftOut.map(({ rule, count }) => [rule, count]) ?? null,
+      groups.map(({ summary }) => [printShare(summary.shareAtLowest), printShare(summary.shareAtHighest)]),
+    ],
+    inverse: groups.map(({ inverse }) => inverse.map(({ percentile, scoreText }) => [percentile, scoreText])),
+    'cut-scores': cuts.map(({ name, score, values }) => [name, score, values]),
+    'change-list': changes === null ? null : [changes.edition, changes.date, changes.check, changes.lines],
+    colophon: [release.analyst, release.checker, source === null ? null : [source.kind, source.bytes]],
+  };
+  return [{ blocks }, ...Object.entries(parts).filter(([kind]) => blocks.some(([printed]) => printed === kind))];
+}
+
+/** Kind, heading and text of the blocks that are printed, in print order. */
+function printedBlocks(blocks: readonly BookletBlock[]): readonly (readonly [BlockKind, string, string])[] {
+  return blocks
+    .filter(({ printed }) => printed)
+    .map(({ kind, heading, text }) => [kind, heading.trim(), text.trim()] as const);
+}
+
+/** Nothing for the English that ships. */
+function languageTexts(language: NormProject['sheet']['language']): readonly unknown[] {
+  const told = languageFacts(language);
+  return same(told, languageFacts(ENGLISH_LANGUAGE)) ? [] : [{ language: told }];
+}
+
+function languageFacts({ tag, words, numbers, phrases }: NormProject['sheet']['language']): readonly unknown[] {
+  const { decimalMark, thousands, minus, dateOrder } = numbers;
+  return [tag, words, decimalMark, thousands, minus, dateOrder, phrases.map(({ key, text }) => [key, text])];
+}
+
+function same(one: unknown, other: unknown): boolean {
+  return JSON.stringify(one) === JSON.stringify(other);
+}
+
+/** Rounded, so that the last digit of a machine's square roots decides nothing. */
+function factsIn({
+  n,
+  weightSum,
+  effectiveN,
+  mean,
+  sd,
+  skewness,
+  excessKurtosis,
+  fiveNumbers,
+}: CohortSummary): unknown {
+  const rounded = [weightSum, effectiveN, mean, sd, skewness, excessKurtosis, ...fiveNumbers];
+  return [n, rounded.map((value) => (value === null ? null : printNumber(value, 2)))];
+}
