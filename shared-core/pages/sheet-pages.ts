@@ -1,8 +1,8 @@
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { tableColumns } from '../norms/table-columns.ts';
 import type { Block, TextRun } from './booklet.ts';
+import { conversionLines } from './conversion-rows.ts';
 import { fitNotesOf } from './fit-notes.ts';
 import { layFitNotes } from './fit-notes-blocks.ts';
 import { cautionsOf, errorCaution } from './group-method.ts';
@@ -12,9 +12,9 @@ import type { PageFrame } from './page-frame.ts';
 import { firstLines } from './prose.ts';
 import { SheetFlow } from './sheet-flow.ts';
 import { figureCaption, figureInWords, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
-import { placeTable, rowMeasure, tableOverhead } from './table-blocks.ts';
 import type { TableMeasure } from './table-measure.ts';
-import { columnHeight, fillColumns, inFives, type Five } from './table-rows.ts';
+import { layTable } from './table-pages.ts';
+import { rowBlocks } from './table-rows.ts';
 import {
   countThatFits,
   heightOf,
@@ -35,8 +35,6 @@ const CAUTIONS_ELSEWHERE = 'Read with the cautions on the first page of this tab
 const AROUND_INTRODUCTION = 10;
 const BETWEEN_HEAD_LINES = 2;
 const BELOW_TABLE = 22;
-/** A table begins on a page only where this many of its rows find room. */
-const LEAST_ROWS = 5;
 /** Height of the picture against its width. */
 const PICTURE_SHAPE = 0.47;
 const BELOW_PICTURE = 5;
@@ -71,7 +69,7 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   );
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
-  layTable(flow, normSet, norms, measure);
+  layConversion(flow, normSet, norms, measure);
   layAdjustments(flow, norms);
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
@@ -141,26 +139,10 @@ function introduce(flow: SheetFlow, { project }: NormSet): void {
   flow.sideBySide(left, right, PROSE);
 }
 
-function layTable(flow: SheetFlow, normSet: NormSet, norms: GroupNorms, measure: TableMeasure): void {
-  const heads = tableColumns(normSet.project);
-  const rows = rowMeasure(measure);
-  const overhead = tableOverhead(measure);
-  const all = inFives(norms.rows, norms.group.table.scale);
-  let rest: readonly Five[] = all;
+function layConversion(flow: SheetFlow, { project }: NormSet, norms: GroupNorms, measure: TableMeasure): void {
   flow.skip(AROUND_INTRODUCTION + 2);
-  while (rest.length > 0) {
-    const first = rest[0] ?? [];
-    flow.need(overhead + Math.max(columnHeight([first], rows), Math.min(LEAST_ROWS, norms.rows.length) * rows.pitch));
-    const page = fillColumns(rest, measure.columns, flow.room - overhead, rows);
-    const { blocks, height } = placeTable(page.columns, heads, measure, {
-      x: flow.left,
-      top: flow.y,
-      continued: rest !== all,
-    });
-    flow.place(blocks, height);
-    rest = page.rest;
-    if (rest.length > 0) flow.turn();
-  }
+  const rows = conversionLines(project, norms);
+  layTable(flow, 'conversion', rowBlocks(rows, project.sheet, norms.group.table.scale), measure);
 }
 
 /** Which ranks of the table were changed by hand, and why. */
