@@ -45,9 +45,10 @@ export function buildNormSet(project: NormProject): NormSetBuilt {
     ...strayAdjustments(project, all),
     ...groups.flatMap((norms) => norms.refusedAdjustments),
   ];
-  const queries = queriesOf(project, groups, refusedAdjustments);
+  const whenReleased = checkCode(project, groups, 'released');
+  const queries = queriesOf(project, groups, refusedAdjustments, whenReleased);
   const status = openMustQueries(queries).length > 0 ? 'draft' : 'released';
-  const check = checkCode(project, groups, status);
+  const check = status === 'released' ? whenReleased : checkCode(project, groups, status);
   return { ok: true, normSet: { project, groups, queries, refusedAdjustments, status, check } };
 }
 

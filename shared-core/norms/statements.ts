@@ -45,7 +45,9 @@ export type ChoiceKey =
   | 'ogive'
   | 'inverse'
   | 'edition'
-  | 'date';
+  | 'date'
+  | 'analyst'
+  | 'checker';
 
 /** Choices that take a number, a text or several ticks; all others are made from a list. */
 export const EDITED_CHOICES = [
@@ -62,6 +64,8 @@ export const EDITED_CHOICES = [
   'row-height',
   'edition',
   'date',
+  'analyst',
+  'checker',
 ] as const satisfies readonly ChoiceKey[];
 
 export type EditedChoice = (typeof EDITED_CHOICES)[number];
@@ -250,12 +254,16 @@ export function tableStatement(project: NormProject): readonly StatementPart[] {
 }
 
 export function releaseStatement(project: NormProject): readonly StatementPart[] {
-  const { edition, date } = project.release;
+  const { edition, date, analyst, checker } = project.release;
   return [
     words('This is edition '),
     phrase('edition', edition.trim() === '' ? '(no number)' : edition),
     words(', dated '),
     phrase('date', date === '' ? '(no date)' : date),
+    words(', prepared by '),
+    phrase('analyst', analyst.trim() === '' ? '(nobody yet)' : analyst),
+    words(', checked by '),
+    phrase('checker', checker.trim() === '' ? '(nobody yet)' : checker),
     words('.'),
   ];
 }

@@ -154,7 +154,9 @@ describe('statements', () => {
         'Tables stand in three columns, figures of 8.7 points on rows of 12.4 points, set in fives, with a row for each ' +
         'score. Each comes with its ogive and with the lowest score for each percentile.',
     );
-    expect(statementText(releaseStatement(settled))).toBe('This is edition 1.0, dated 2026-06-15.');
+    expect(statementText(releaseStatement(settled))).toBe(
+      'This is edition 1.0, dated 2026-06-15, prepared by A. Weir, checked by J. Lund.',
+    );
   });
 
   it('turn round where low scores are good', () => {
@@ -178,7 +180,7 @@ describe('statements', () => {
     expect(statementText(tableStatement(columns([], 'normalised')))).toContain('beside them nothing else.');
     expect(statementText(groupsStatement(bare))).toBe('There is one table for all people.');
     expect(statementText(releaseStatement({ ...bare, release: { ...bare.release, edition: ' ', date: '' } }))).toBe(
-      'This is edition (no number), dated (no date).',
+      'This is edition (no number), dated (no date), prepared by (nobody yet), checked by (nobody yet).',
     );
   });
 
