@@ -4,6 +4,7 @@ import { printNumber, printShare } from '../scores/printed-number.ts';
 import type { CohortSummary } from '../tally/cohort-summary.ts';
 import { adjustmentNote } from './adjustment-words.ts';
 import { DEFAULT_BLOCKS, type BlockKind, type BookletBlock } from './booklet-blocks.ts';
+import { cutTables } from './cut-table.ts';
 import { definitionKey } from './definitions.ts';
 import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
@@ -35,6 +36,7 @@ export function checkCode(project: NormProject, groups: readonly GroupNorms[], s
     ]),
     // What few sets have leaves the code of the others as it is.
     ...groups.map(adjustmentNote).filter((note) => note !== null),
+    ...cutTexts(project, groups),
     ...blockTexts(project, groups),
     ...languageTexts(sheet.language),
     ...(status === 'draft' ? [status] : []),
@@ -43,9 +45,19 @@ export function checkCode(project: NormProject, groups: readonly GroupNorms[], s
   return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;
 }
 
+/** Cuts are marked in every table, whether or not they have a block of their own. */
+function cutTexts(project: NormProject, groups: readonly GroupNorms[]): readonly unknown[] {
+  return cutTables(project, groups).map(({ cut, scoreText, rows }) => [
+    'cut',
+    cut.name,
+    scoreText,
+    rows.map(({ title, rank, interval, shareText }) => [title, rank, interval, shareText]),
+  ]);
+}
+
 /** What is printed of the blocks besides the tables, under names that say what it is; nothing for the tables alone. */
 function blockTexts(project: NormProject, groups: readonly GroupNorms[]): readonly unknown[] {
-  const { sheet, release, cuts, source } = project;
+  const { sheet, release, source } = project;
   const blocks = printedBlocks(sheet.blocks);
   if (same(blocks, printedBlocks(DEFAULT_BLOCKS))) return [];
   const changes = release.changes;
@@ -55,7 +67,6 @@ function blockTexts(project: NormProject, groups: readonly GroupNorms[]): readon
       groups.map(({ summary }) => [printShare(summary.shareAtLowest), printShare(summary.shareAtHighest)]),
     ],
     inverse: groups.map(({ inverse }) => inverse.map(({ percentile, scoreText }) => [percentile, scoreText])),
-    'cut-scores': cuts.map(({ name, score, values }) => [name, score, values]),
     'change-list': changes === null ? null : [changes.edition, changes.date, changes.check, changes.lines],
     colophon: [release.analyst, release.checker, source === null ? null : [source.kind, source.bytes]],
   };

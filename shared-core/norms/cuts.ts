@@ -1,4 +1,6 @@
-import { attainableScores, type ScoreScale } from '../scale/score-scale.ts';
+import { decimalOf } from '../scale/decimal.ts';
+import { attainableScores, scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
+import { printNumber } from '../scores/printed-number.ts';
 import { groupKey } from './norm-groups.ts';
 import type { Cut, NormProject } from './norm-project.ts';
 
@@ -28,4 +30,15 @@ export function cutStarts(project: Pick<NormProject, 'cuts'>, key: string, scale
       return position === null ? [] : [position + beyond];
     }),
   );
+}
+
+/** “Reading support”, or "without a name". */
+export function cutName({ name }: Cut): string {
+  const given = name.replace(/\s+/g, ' ').trim();
+  return given === '' ? 'without a name' : `“${given}”`;
+}
+
+/** The score of a cut as it is printed: with the decimals of the scale, or with its own where it has more. */
+export function cutScoreText(scale: ScoreScale, score: number): string {
+  return printNumber(score, Math.max(scaleGrid(scale).decimals, decimalOf(score).decimals));
 }

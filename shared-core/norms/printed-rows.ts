@@ -28,6 +28,21 @@ export function printedRows(project: RowChoices, norms: GroupNorms): readonly Pr
   }).map(printedRow);
 }
 
+/** Scores of the rows that a cut parts though they print alike, as pairs of texts: the row below the cut, and above it. */
+export function partedByCuts(project: RowChoices, { group, rows }: GroupNorms): readonly (readonly [string, string])[] {
+  const starts = cutStarts(project, group.key, group.table.scale);
+  const alike = runsOf(rows, (before, row) => printAlike(project, before, row));
+  let position = 0;
+  return alike.flatMap((run) => {
+    const first = position;
+    position += run.length;
+    const inside = [...starts].filter((start) => start > first && start < first + run.length);
+    const ends = [first, ...inside.sort((left, right) => left - right), first + run.length];
+    const parts = ends.slice(1).map((end, index) => textOf(rows.slice(ends[index], end)));
+    return parts.slice(1).map((part, index) => [parts[index] ?? '', part] as const);
+  });
+}
+
 function printedRow(rows: readonly ConversionRow[]): PrintedRow {
   const [shown] = rows;
   if (shown === undefined) throw new RangeError('a row without a score');

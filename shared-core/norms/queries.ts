@@ -3,6 +3,7 @@ import type { RefusedAdjustment } from './adjustments.ts';
 import { unusedClusterQueries } from './cluster-queries.ts';
 import { cohortQueries } from './cohort-queries.ts';
 import { editionQueries } from './edition-queries.ts';
+import { cutQueries } from './cut-queries.ts';
 import { descriptionQueries } from './description-queries.ts';
 import type { GroupNorms } from './group-norms.ts';
 import { groupQueries } from './group-queries.ts';
@@ -49,6 +50,7 @@ export function queriesOf(
     ...unusedClusterQueries(project),
     ...descriptionQueries(project, groups),
     ...adjustmentQueries(groups, refused),
+    ...cutQueries(project),
     ...groups.flatMap((norms) =>
       groupQueries(project, norms).map((query) => ({
         ...query,

@@ -1,8 +1,10 @@
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
+import { BLOCK_WORDS } from './block-words.ts';
 import type { Block, TextRun } from './booklet.ts';
 import { conversionLines } from './conversion-rows.ts';
+import { cutNote } from './cut-note.ts';
 import { fitNotesOf } from './fit-notes.ts';
 import { layFitNotes } from './fit-notes-blocks.ts';
 import { cautionsOf, errorCaution } from './group-method.ts';
@@ -13,6 +15,7 @@ import { firstLines } from './prose.ts';
 import { SheetFlow } from './sheet-flow.ts';
 import { figureCaption, figureInWords, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
 import type { TableMeasure } from './table-measure.ts';
+import { layTableNote } from './table-notes.ts';
 import { layTable } from './table-pages.ts';
 import { rowBlocks } from './table-rows.ts';
 import {
@@ -39,8 +42,6 @@ const BELOW_TABLE = 22;
 const PICTURE_SHAPE = 0.47;
 const BELOW_PICTURE = 5;
 const LEAST_NOTE_LINES = 6;
-/** A note of more lines is set in two columns, which the eye follows more easily. */
-const MOST_LINES_ACROSS = 3;
 
 export interface SheetPages {
   readonly pages: readonly (readonly Block[])[];
@@ -70,7 +71,8 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
   layConversion(flow, normSet, norms, measure);
-  layAdjustments(flow, norms);
+  layTableNote(flow, 'adjustments', adjustmentNote(norms));
+  layTableNote(flow, 'cuts', cutNote(normSet.project, norms, BLOCK_WORDS));
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
   layTechnicalNotes(flow, normSet, norms);
@@ -143,22 +145,6 @@ function layConversion(flow: SheetFlow, { project }: NormSet, norms: GroupNorms,
   flow.skip(AROUND_INTRODUCTION + 2);
   const rows = conversionLines(project, norms);
   layTable(flow, 'conversion', rowBlocks(rows, project.sheet, norms.group.table.scale), measure);
-}
-
-/** Which ranks of the table were changed by hand, and why. */
-function layAdjustments(flow: SheetFlow, norms: GroupNorms): void {
-  const note = adjustmentNote(norms);
-  if (note === null) return;
-  flow.skip(BELOW_PICTURE);
-  const linesIn = (width: number): readonly LooseLine[] =>
-    linesOf(note, 'sans', SMALL_PROSE, width, paragraph('adjustments'));
-  const across = linesIn(flow.width);
-  if (across.length > MOST_LINES_ACROSS) {
-    flow.inTwoColumns(linesIn(flow.halfWidth), SMALL_PROSE);
-    return;
-  }
-  flow.need(heightOf(across, SMALL_PROSE));
-  placeFull(flow, across, SMALL_PROSE);
 }
 
 function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
