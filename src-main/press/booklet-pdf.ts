@@ -2,6 +2,7 @@ import type { TDocumentDefinitions } from 'pdfmake/interfaces.js';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import type { Block, Booklet, Picture, Rule, TextLine } from '../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../shared-core/pages/booklet-pages.ts';
+import { bookletSections, type BookletSection } from '../../shared-core/pages/booklet-sections.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
 import { programVersion } from '../program-version.ts';
 import { PICTURE_FONTS } from './fonts.ts';
@@ -14,6 +15,7 @@ import { placeOf, StructureTree, type DrawnPart } from './structure-tree.ts';
 export interface DrawnBooklet {
   readonly pdf: Uint8Array;
   readonly pages: number;
+  readonly sections: readonly BookletSection[];
   readonly remarks: readonly string[];
 }
 
@@ -33,7 +35,12 @@ export async function bookletPdf(
   if (start + count !== booklet.pages.length) {
     throw new Error(`the booklet has ${booklet.pages.length} pages, but ${start + count} were drawn`);
   }
-  return { pdf: packStructure(await made.getBuffer()), pages: start + count, remarks: booklet.remarks };
+  return {
+    pdf: packStructure(await made.getBuffer()),
+    pages: start + count,
+    sections: bookletSections(booklet.pages),
+    remarks: booklet.remarks,
+  };
 }
 
 /** The document with its first page, still white. */
