@@ -23,11 +23,11 @@ export const BLOCK_NAMES: Readonly<Record<BlockKind, string>> = {
 export function blockHolds(project: NormProject, kind: BlockKind): string {
   switch (kind) {
     case 'title-page':
-      return 'Title, form or season, edition and date on a page of their own.';
+      return 'Title, form or season, edition and date.';
     case 'contents':
       return 'What stands on which page.';
     case 'norm-group':
-      return 'Who was tested, how they were drawn, and the facts of each group.';
+      return 'Who was tested, how, and the facts of each group.';
     case 'how-to-read':
       return 'What a percentile rank tells, with an example.';
     case 'tables': {
@@ -35,9 +35,9 @@ export function blockHolds(project: NormProject, kind: BlockKind): string {
       return count === 1 ? 'One sheet for the one table.' : `A sheet for each of ${count} tables.`;
     }
     case 'groups-across':
-      return 'Raw scores down, groups across: the ranks of all groups in one table.';
+      return 'The ranks of all groups in one table.';
     case 'inverse':
-      return 'The raw score that reaches each of some percentiles, in every group.';
+      return 'Raw scores that reach certain percentiles.';
     case 'cut-scores':
       return cutsInWords(project.cuts.length);
     case 'pictures':
@@ -48,18 +48,18 @@ export function blockHolds(project: NormProject, kind: BlockKind): string {
       return 'What the tables must not be used for.';
     case 'change-list':
       return project.release.changes === null
-        ? 'Prints nothing yet: no earlier edition was compared at the Release station.'
+        ? 'Prints nothing yet: no edition was compared.'
         : `What changed since edition ${project.release.changes.edition}.`;
     case 'colophon':
-      return 'Fingerprint of the cohort, versions, check code, and how the numbers were made.';
+      return 'Fingerprint, versions and the check code.';
   }
 }
 
 function cutsInWords(count: number): string {
   if (count === 0) return 'Prints nothing yet: no cut score is named.';
   return count === 1
-    ? 'One raw score that decides something, and its ranks.'
-    : `${count} raw scores that decide something, and their ranks.`;
+    ? 'One raw score that decides, with its ranks.'
+    : `${count} raw scores that decide, with their ranks.`;
 }
 
 /** The printed blocks in print order, as a list of their names; empty for none. */

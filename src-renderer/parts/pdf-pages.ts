@@ -13,19 +13,21 @@ export async function openPages(base64: string): Promise<PDFDocumentProxy> {
   return getDocument({ data, worker: shared, isEvalSupported: false, useWorkerFetch: false }).promise;
 }
 
-/** Draws a page (from 1) into a canvas so wide that it fills `width` CSS pixels; returns its height in CSS pixels. */
-export async function drawPage(
-  pages: PDFDocumentProxy,
-  number: number,
-  canvas: HTMLCanvasElement,
-  width: number,
-): Promise<number> {
+/** Width of the first page against its height; all pages of a booklet are alike. */
+export async function shapeOf(pages: PDFDocumentProxy): Promise<number> {
+  const { width, height } = (await pages.getPage(1)).getViewport({ scale: 1 });
+  return width / height;
+}
+
+/** A page (from 1) as a picture that fills `width` CSS pixels. */
+export async function drawPage(pages: PDFDocumentProxy, number: number, width: number): Promise<HTMLCanvasElement> {
   const page = await pages.getPage(number);
   const whole = page.getViewport({ scale: 1 });
   const density = Math.max(1, window.devicePixelRatio);
   const viewport = page.getViewport({ scale: (width / whole.width) * density });
+  const canvas = document.createElement('canvas');
   canvas.width = Math.round(viewport.width);
   canvas.height = Math.round(viewport.height);
   await page.render({ canvas, viewport }).promise;
-  return viewport.height / density;
+  return canvas;
 }
