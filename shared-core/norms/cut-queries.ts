@@ -36,7 +36,8 @@ export function cutQueries(project: NormProject): readonly Asked[] {
 
 type Problem = Pick<Asked, 'why' | 'whatToDo'>;
 
-function offScale(scale: ScoreScale, { score }: Cut): Problem | null {
+/** Why a cut has no place on the scale, and what to do; null where it has one. */
+export function offScale(scale: ScoreScale, { score }: Pick<Cut, 'score'>): Problem | null {
   const place = placeOnGrid(scaleGrid(scale), decimalOf(score));
   if (typeof place === 'number') return null;
   const inWords = scaleInWords(scale);

@@ -1,6 +1,7 @@
 import { scaleInWords } from '../scale/score-scale.ts';
-import { printCount, printScore } from '../scores/printed-number.ts';
+import { printCount } from '../scores/printed-number.ts';
 import { BLOCK_NAMES, blocksInWords } from './blocks-in-words.ts';
+import { cutScoreText } from './cuts.ts';
 import type { NormProject } from './norm-project.ts';
 import { sheetStatement } from './sheet-statement.ts';
 import { cohortStatement, curveStatement, groupsStatement, tableStatement, type ChoiceKey } from './statements.ts';
@@ -146,7 +147,7 @@ function cutsOf({ cuts, tally }: NormProject): readonly NamedText[] {
   if (tally === null) return [];
   return cuts.map(({ name, score, values }) => ({
     what: `cut score ${name}${values === null ? '' : ` (${values.join(', ')})`}`,
-    text: printScore(tally.scale, score),
+    text: cutScoreText(tally.scale, score),
   }));
 }
 
