@@ -1,14 +1,8 @@
+import { GERMAN_COLUMNS } from './german/columns.ts';
+import { GERMAN_FIT } from './german/fit.ts';
+import { GERMAN_METHOD } from './german/method.ts';
+import { GERMAN_SHEET } from './german/sheet.ts';
 import type { Phrases } from './phrases.ts';
 
 /** Printed words in German. */
-export const GERMAN_PHRASES: Phrases = {
-  'foot.page': 'Seite {page} von {pages}',
-  'foot.edition': 'Ausgabe {edition}',
-  'foot.check': 'Prüfcode {check}',
-  'foot.definition': 'Definition: {definition}',
-  'foot.definition-smoothed': 'Definition: {definition}, geglättet',
-  'head.draft': 'ENTWURF',
-  'head.table': 'Tabelle {number} · {title}',
-  'sheet.title-with-group': '{title}, {group}',
-  'sheet.continued': '{title} (Fortsetzung)',
-};
+export const GERMAN_PHRASES: Phrases = { ...GERMAN_SHEET, ...GERMAN_COLUMNS, ...GERMAN_METHOD, ...GERMAN_FIT };

@@ -1,14 +1,8 @@
+import { SPANISH_COLUMNS } from './spanish/columns.ts';
+import { SPANISH_FIT } from './spanish/fit.ts';
+import { SPANISH_METHOD } from './spanish/method.ts';
+import { SPANISH_SHEET } from './spanish/sheet.ts';
 import type { Phrases } from './phrases.ts';
 
 /** Printed words in Spanish. */
-export const SPANISH_PHRASES: Phrases = {
-  'foot.page': 'página {page} de {pages}',
-  'foot.edition': 'Edición {edition}',
-  'foot.check': 'código de control {check}',
-  'foot.definition': 'definición: {definition}',
-  'foot.definition-smoothed': 'definición: {definition}, suavizada',
-  'head.draft': 'BORRADOR',
-  'head.table': 'Tabla {number} · {title}',
-  'sheet.title-with-group': '{title}, {group}',
-  'sheet.continued': '{title} (continuación)',
-};
+export const SPANISH_PHRASES: Phrases = { ...SPANISH_SHEET, ...SPANISH_COLUMNS, ...SPANISH_METHOD, ...SPANISH_FIT };

@@ -1,14 +1,14 @@
+import { FRENCH_COLUMNS } from './french/columns.ts';
+import { FRENCH_FIT } from './french/fit.ts';
+import { FRENCH_METHOD } from './french/method.ts';
+import { FRENCH_SHEET } from './french/sheet.ts';
+import { frenchSpaces } from './french/spaces.ts';
 import type { Phrases } from './phrases.ts';
 
 /** Printed words in French. */
-export const FRENCH_PHRASES: Phrases = {
-  'foot.page': 'page {page} sur {pages}',
-  'foot.edition': 'Édition {edition}',
-  'foot.check': 'code de contrôle {check}',
-  'foot.definition': 'définition : {definition}',
-  'foot.definition-smoothed': 'définition : {definition}, lissée',
-  'head.draft': 'BROUILLON',
-  'head.table': 'Tableau {number} · {title}',
-  'sheet.title-with-group': '{title}, {group}',
-  'sheet.continued': '{title} (suite)',
-};
+export const FRENCH_PHRASES: Phrases = frenchSpaces({
+  ...FRENCH_SHEET,
+  ...FRENCH_COLUMNS,
+  ...FRENCH_METHOD,
+  ...FRENCH_FIT,
+});

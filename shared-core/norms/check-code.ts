@@ -35,7 +35,7 @@ export function checkCode(project: NormProject, groups: readonly GroupNorms[], s
       sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
     ]),
     // What few sets have leaves the code of the others as it is.
-    ...groups.map(adjustmentNote).filter((note) => note !== null),
+    ...groups.map((norms) => adjustmentNote(norms)).filter((note) => note !== null),
     ...cutTexts(project, groups),
     ...blockTexts(project, groups),
     ...languageTexts(sheet.language),

@@ -53,7 +53,7 @@ export function offScale(scale: ScoreScale, { score }: Pick<Cut, 'score'>): Prob
 
 function ofNoGroup(values: readonly string[]): Problem {
   return {
-    why: `There is no group ${values.map(valueInWords).join(', ') || 'of everybody'}.`,
+    why: `There is no group ${values.map((value) => valueInWords(value)).join(', ') || 'of everybody'}.`,
     whatToDo: 'Name one of the groups, let the cut hold for all, or remove it.',
   };
 }

@@ -4,7 +4,8 @@ import { BLOCK_NAMES, blocksInWords } from './blocks-in-words.ts';
 import { cutScoreText } from './cuts.ts';
 import type { NormProject } from './norm-project.ts';
 import { sheetStatement } from './sheet-statement.ts';
-import { cohortStatement, curveStatement, groupsStatement, tableStatement, type ChoiceKey } from './statements.ts';
+import { tableStatement } from './method-statements.ts';
+import { cohortStatement, curveStatement, groupsStatement, type ChoiceKey } from './statements.ts';
 
 /** A text that differs; null on a side that has none. */
 export interface TextChange {

@@ -1,13 +1,14 @@
+import { listed } from '../languages/lists.ts';
+import { ENGLISH_WORDS } from '../languages/phrases.ts';
 import { scaleInWords } from '../scale/score-scale.ts';
-import { columnInWords, onePerson } from './norm-groups.ts';
-import { definitionInWords } from './definitions.ts';
+import { columnInWords } from './norm-groups.ts';
 import type { SmoothingChoice } from '../smoothing/smoothing.ts';
+import { intervalStatement, rankStatement, reliabilityStatement, tableStatement } from './method-statements.ts';
 import type { NormProject } from './norm-project.ts';
 import { smoothingInScope, type SmoothingScope } from './smoothing-alternatives.ts';
 import { logLinearIn } from './smoothing-choice.ts';
-import { bandwidthInWords, degreeInWords, intervalName, keptInWords, smoothingInWords } from './smoothing-words.ts';
+import { bandwidthInWords, degreeInWords, keptInWords, smoothingInWords } from './smoothing-words.ts';
 import { drawnInGeneral } from './sampling-words.ts';
-import { columnOf } from './table-columns.ts';
 
 /** Phrases of the statements that stand for a choice. */
 export type ChoiceKey =
@@ -93,7 +94,7 @@ export function statementText(parts: readonly StatementPart[]): string {
 
 /** "a, b and c" */
 export function joined(items: readonly string[]): string {
-  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1)}`;
+  return listed(ENGLISH_WORDS, items);
 }
 
 export function cohortStatement(project: NormProject): readonly StatementPart[] {
@@ -160,19 +161,10 @@ export function curveStatement(project: NormProject, scope: SmoothingScope = nul
     words(' '),
     ...smoothingStatement(smoothingInScope(project, scope)),
     words(' '),
-    ...intervalStatement(project, `, ${drawnInGeneral(project)}.`),
+    ...withoutStop(intervalStatement(project)),
+    words(`, ${drawnInGeneral(project)}.`),
     words(' '),
     ...reliabilityStatement(project),
-  ];
-}
-
-function rankStatement(project: NormProject): readonly StatementPart[] {
-  const direction = project.tally?.scale.direction ?? 'high-is-good';
-  const one = onePerson(project.people);
-  return [
-    words(`A ${one}’s percentile rank is the share of the group scoring `),
-    phrase('definition', definitionInWords(project.curve.definition, direction)),
-    words('.'),
   ];
 }
 
@@ -196,63 +188,6 @@ function smoothingStatement(smoothing: SmoothingChoice): readonly StatementPart[
   ];
 }
 
-function intervalStatement({ precision }: NormProject, end = '.'): readonly StatementPart[] {
-  return [
-    words('The sampling error of a rank is told by its '),
-    phrase('level', `${precision.level} %`),
-    words(' '),
-    phrase('interval', `${intervalName(precision.interval)} interval`),
-    words(end),
-  ];
-}
-
-function reliabilityStatement({ precision }: NormProject): readonly StatementPart[] {
-  return [
-    words('The reliability of the test is '),
-    phrase('reliability', precision.reliability === null ? 'not given' : String(precision.reliability)),
-    words('.'),
-  ];
-}
-
-export function tableStatement(project: NormProject): readonly StatementPart[] {
-  const { columns, decimals, rounding, ends, zSource, zEnds } = project.table;
-  const names = columns.map((key) => columnOf(key, project).name);
-  const derived = columns.some(
-    (key) => ['z', 't', 'nce', 'deviation', 'sten'].includes(key) || (key === 'stanine' && zSource === 'linear'),
-  );
-  const low = decimals === 0 ? '1' : '0.1';
-  const high = decimals === 0 ? '99' : '99.9';
-  return [
-    words('Percentile ranks are printed '),
-    phrase('decimals', decimals === 0 ? 'as whole numbers' : 'to one decimal'),
-    words(', '),
-    phrase('rounding', rounding === 'half-up' ? 'halves rounded up' : 'halves rounded to even'),
-    words(', '),
-    phrase('ends', ends === 'signs' ? `with <${low} and >${high} at the ends` : `held at ${low} and ${high}`),
-    words('; beside them '),
-    phrase(
-      'columns',
-      names.length === 0 ? 'nothing else' : names.length === 1 ? `the ${names[0]}` : `the ${joined(names)}`,
-    ),
-    words('.'),
-    ...(derived
-      ? [
-          words(' z scores are '),
-          phrase(
-            'z-source',
-            zSource === 'normalised' ? 'normal deviates of the ranks' : 'linear, from mean and standard deviation',
-          ),
-          words('; '),
-          phrase(
-            'z-ends',
-            zEnds === 'limits' ? 'they are held between −3 and 3' : 'at ranks 0 and 100 half a person stands in',
-          ),
-          words('.'),
-        ]
-      : []),
-  ];
-}
-
 export function releaseStatement(project: NormProject): readonly StatementPart[] {
   const { edition, date, analyst, checker } = project.release;
   return [
@@ -269,14 +204,21 @@ export function releaseStatement(project: NormProject): readonly StatementPart[]
 }
 
 /** What of the method holds for all tables, as it is printed. Each group's smoothing has a statement of its own. */
-export function methodText(project: NormProject): string {
+export function methodText(project: NormProject, words = ENGLISH_WORDS): string {
   const { columns } = project.table;
   return [
-    rankStatement(project),
-    ...(columns.includes('interval') ? [intervalStatement(project)] : []),
-    ...(columns.includes('measurement-band') ? [reliabilityStatement(project)] : []),
-    tableStatement(project),
+    rankStatement(project, words),
+    ...(columns.includes('interval') ? [intervalStatement(project, words)] : []),
+    ...(columns.includes('measurement-band') ? [reliabilityStatement(project, words)] : []),
+    tableStatement(project, words),
   ]
     .map(statementText)
     .join(' ');
+}
+
+/** A sentence that goes on. */
+function withoutStop(parts: readonly StatementPart[]): readonly StatementPart[] {
+  return parts.map((part, index) =>
+    index === parts.length - 1 ? { ...part, text: part.text.replace(/\.$/, '') } : part,
+  );
 }

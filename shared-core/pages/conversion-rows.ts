@@ -1,3 +1,4 @@
+import { figure, say, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import { cutsOfGroup, firstOnGoodSide } from '../norms/cuts.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormProject } from '../norms/norm-project.ts';
@@ -8,13 +9,11 @@ import { cellText } from './sheet-texts.ts';
 import { spokenFigure } from './spoken-text.ts';
 import type { LooseRow } from './table-rows.ts';
 
-/** How the mark behind a rank is read aloud. */
-const ADJUSTED_IN_WORDS = 'adjusted by hand';
-
 /** The rows of a group's conversion table, lowest score first, with the rules that mark its cuts. */
 export function conversionLines(project: NormProject, norms: GroupNorms): readonly LooseRow[] {
   const { scale } = norms.group.table;
   const columns = tableColumns(project);
+  const words = wordsOf(project);
   const side = scale.direction === 'high-is-good' ? 'above' : 'below';
   const cuts = new Set(
     cutsOfGroup(project, norms.group.key).map(({ score }) => norms.rows[firstOnGoodSide(scale, score) ?? -1]),
@@ -22,24 +21,26 @@ export function conversionLines(project: NormProject, norms: GroupNorms): readon
   return printedRows(project, norms).map((printed) => ({
     row: printed.shown.score,
     scores: printed.rows.map(({ score }) => score),
-    cells: columns.map((column) => conversionCell(printed, column)),
+    cells: columns.map((column) => conversionCell(words, printed, column)),
     cut: printed.rows.some((row) => cuts.has(row)) ? side : null,
   }));
 }
 
-function conversionCell({ scoreText, shown }: PrintedRow, column: TableColumn): PlacedCell {
-  if (column.key === 'score') return figureCell(scoreText);
+function conversionCell(words: PrintWords, { scoreText, shown }: PrintedRow, column: TableColumn): PlacedCell {
+  if (column.key === 'score') return figureCell(words, scoreText);
   const text = cellText(shown, column);
-  return column.key === 'rank' ? rankCell(text, shown.adjusted !== null) : figureCell(text);
+  return column.key === 'rank' ? rankCell(words, text, shown.adjusted !== null) : figureCell(words, text);
 }
 
-/** A printed figure. */
-export function figureCell(text: string): PlacedCell {
-  return { text, said: spokenFigure(text), marked: false };
+/** A figure of the norm set as it is printed. */
+export function figureCell(words: PrintWords, text: string): PlacedCell {
+  const printed = figure(words, text);
+  return { text: printed, said: spokenFigure(words, printed), marked: false };
 }
 
-/** A printed percentile rank, with its mark where it was adjusted by hand. */
-export function rankCell(text: string, adjusted: boolean): PlacedCell {
-  const figure = figureCell(text);
-  return adjusted ? { text, said: `${figure.said ?? text}, ${ADJUSTED_IN_WORDS}`, marked: true } : figure;
+/** A percentile rank of the norm set as it is printed, with its mark where it was adjusted by hand. */
+export function rankCell(words: PrintWords, text: string, adjusted: boolean): PlacedCell {
+  const cell = figureCell(words, text);
+  if (!adjusted) return cell;
+  return { ...cell, said: say(words, 'spoken.adjusted', { figure: cell.said ?? cell.text }), marked: true };
 }

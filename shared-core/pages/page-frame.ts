@@ -1,3 +1,4 @@
+import { say, wordsOf } from '../languages/phrases.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { Block, Paper, TextRun } from './booklet.ts';
@@ -27,7 +28,7 @@ const ROOM_AT_RULE = 4;
 const ROOM_TO_BODY = 13;
 /** Share of the width that the survey's name may take. */
 const LEFT_SHARE = 0.58;
-const WIDEST_PAGE_NUMBER = 'page 9999 of 9999';
+const WIDEST_NUMBER = '9999';
 const HEAD: PageRole = { kind: 'running', edge: 'top' };
 const FOOT: PageRole = { kind: 'running', edge: 'bottom' };
 
@@ -38,7 +39,7 @@ export function bodyWidth({ width, margin, gutter }: Paper): number {
 
 /** The pages of one group. */
 export function groupFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
-  return pageFrame(normSet, tableName(index, norms), editionLine(normSet, norms), paper);
+  return pageFrame(normSet, tableName(normSet.project, index, norms), editionLine(normSet, norms), paper);
 }
 
 /** Pages that belong to no single group; `place` stands at the right of their head. */
@@ -53,7 +54,9 @@ function pageFrame(normSet: NormSet, place: string, line: string, paper: Paper):
   const table = headLines([{ text: place, face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
   const headTop = paper.edge;
   const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
-  const numberWidth = textWidth(WIDEST_PAGE_NUMBER, 'sans', RUNNING.size);
+  const words = wordsOf(normSet.project);
+  const pageNumber = (page: string, pages: string): string => say(words, 'foot.page', { page, pages });
+  const numberWidth = textWidth(pageNumber(WIDEST_NUMBER, WIDEST_NUMBER), 'sans', RUNNING.size);
   const edition = linesOf(line, 'sans', RUNNING, width - numberWidth - GUTTER, FOOT);
   const footTop = paper.height - paper.edge - heightOf(edition, RUNNING);
   const footRule = footTop - ROOM_AT_RULE;
@@ -71,7 +74,7 @@ function pageFrame(normSet: NormSet, place: string, line: string, paper: Paper):
       rule(headRule),
       rule(footRule),
       ...running(edition, footTop, 'left'),
-      ...running(linesOf(`page ${page} of ${pages}`, 'sans', RUNNING, width, FOOT), footTop, 'right'),
+      ...running(linesOf(pageNumber(String(page), String(pages)), 'sans', RUNNING, width, FOOT), footTop, 'right'),
     ],
     shortened: survey.cut || table.cut,
   };

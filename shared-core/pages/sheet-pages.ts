@@ -1,3 +1,4 @@
+import { say, wordsOf } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
@@ -34,7 +35,6 @@ const MOST_TITLE_LINES = 6;
 const MOST_SUBTITLE_LINES = 3;
 /** Longer cautions are printed once and pointed to from the pages that follow. */
 const MOST_CAUTION_LINES = 6;
-const CAUTIONS_ELSEWHERE = 'Read with the cautions on the first page of this table.';
 const AROUND_INTRODUCTION = 10;
 const BETWEEN_HEAD_LINES = 2;
 const BELOW_TABLE = 22;
@@ -71,7 +71,7 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
   layConversion(flow, normSet, norms, measure);
-  layTableNote(flow, 'adjustments', adjustmentNote(norms));
+  layTableNote(flow, 'adjustments', adjustmentNote(norms, wordsOf(normSet.project)));
   layTableNote(flow, 'cuts', cutNote(normSet.project, norms, BLOCK_WORDS));
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
@@ -108,17 +108,16 @@ function furtherHead(
   top: number,
 ): { readonly blocks: readonly Block[]; readonly bottom: number } {
   const { project } = normSet;
+  const words = wordsOf(project);
+  const continued = say(words, 'sheet.continued', { title: sheetTitle(project, norms) });
   const cautions = linesOf(cautionsOf(project), 'sans', SMALL_PROSE, width, REPEATED);
   const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
-    [
-      cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2, REPEATED).lines,
-      CONTINUED,
-    ],
+    [cutText(continued, 'serif-bold', CONTINUED, width, 2, REPEATED).lines, CONTINUED],
     [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2, REPEATED).lines, PROSE],
     [
       cautions.length <= MOST_CAUTION_LINES
         ? cautions
-        : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width, REPEATED),
+        : linesOf(say(words, 'sheet.cautions-elsewhere'), 'sans', SMALL_PROSE, width, REPEATED),
       SMALL_PROSE,
     ],
   ];
@@ -149,7 +148,7 @@ function layConversion(flow: SheetFlow, { project }: NormSet, norms: GroupNorms,
 
 function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
   if (!project.sheet.inverse) return;
-  const strip = inverseStrip(norms, flow.width);
+  const strip = inverseStrip(norms, flow.width, wordsOf(project));
   flow.skip(BELOW_TABLE - 6);
   flow.need(strip.height);
   flow.place(strip.place(flow.left, flow.y), strip.height);
@@ -166,7 +165,11 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
     return;
   }
   const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
-  const figureLead = { lead: `Figure ${index + 1}.`, text: figureCaption(project, norms) };
+  const words = wordsOf(project);
+  const figureLead = {
+    lead: say(words, 'caption.lead', { number: String(index + 1) }),
+    text: figureCaption(project, norms),
+  };
   const caption = paragraphLines([figureLead], SMALL_PROSE, flow.halfWidth, 'caption');
   const figure = picture.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
   const whole = heightOf(lines, PROSE);
@@ -180,7 +183,7 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
         x: flow.left,
         y: top,
         ...picture,
-        svg: ogivePicture(norms, project.precision.level, picture),
+        svg: ogivePicture(norms, project.precision.level, picture, words),
         alt: figureInWords(project, norms),
       },
       ...placeLines(caption, SMALL_PROSE, {
@@ -199,5 +202,5 @@ function layTechnicalNotes(flow: SheetFlow, { project }: NormSet, norms: GroupNo
   const notes = fitNotesOf(project, norms);
   if (notes === null) return;
   flow.skip(BELOW_TABLE);
-  layFitNotes(flow, notes);
+  layFitNotes(flow, notes, wordsOf(project));
 }

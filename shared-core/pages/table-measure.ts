@@ -1,3 +1,4 @@
+import { figure, wordsOf } from '../languages/phrases.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { SheetChoices } from '../norms/norm-project.ts';
@@ -67,8 +68,11 @@ export function measureTables(
 
 function naturalColumns(normSet: NormSet, type: TableType): readonly NaturalColumn[] {
   const rows = normSet.groups.flatMap((norms) => printedRows(normSet.project, norms));
-  return tableColumns(normSet.project).map((column, index) => {
-    const texts = rows.map(({ scoreText, shown }) => (column.key === 'score' ? scoreText : cellText(shown, column)));
+  const words = wordsOf(normSet.project);
+  return tableColumns(normSet.project, words).map((column, index) => {
+    const texts = rows.map(({ scoreText, shown }) =>
+      figure(words, column.key === 'score' ? scoreText : cellText(shown, column)),
+    );
     const ranges = isRangeColumn(column.key) || column.key === 'score';
     const { width, range } = roomOf(texts, figureFace(index), type.row.size, ranges);
     return {

@@ -1,4 +1,5 @@
 import * as v from 'valibot';
+import { tableStatement } from '../../../shared-core/norms/method-statements.ts';
 import { describe, expect, it } from 'vitest';
 import { alternatives, type ListedChoice } from '../../../shared-core/norms/alternatives.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
@@ -12,7 +13,6 @@ import {
   methodText,
   releaseStatement,
   statementText,
-  tableStatement,
   type ChoiceKey,
   type StatementPart,
 } from '../../../shared-core/norms/statements.ts';
