@@ -1,4 +1,4 @@
-import { listed } from '../languages/lists.ts';
+import { inSeries } from '../languages/series.ts';
 import { ENGLISH_WORDS, figure, say, sayInParts } from '../languages/phrases.ts';
 import type { FilledPart } from '../languages/placeholders.ts';
 import { definitionInWords } from './definitions.ts';
@@ -64,7 +64,7 @@ export function tableStatement(project: NormProject, words = ENGLISH_WORDS): rea
     rounding: say(words, `rounding.${rounding}`),
     ends: say(words, `ends.${ends}`, endsOf(project.table, words)),
     columns:
-      names.length === 0 ? say(words, 'columns.none') : say(words, 'columns.some', { columns: listed(words, names) }),
+      names.length === 0 ? say(words, 'columns.none') : say(words, 'columns.some', { columns: inSeries(words, names) }),
   });
   if (!derived) return parts(printed);
   const z = sayInParts(words, 'statement.z', {

@@ -1,17 +1,10 @@
+import { standingTexts } from '../languages/standing-texts.ts';
 import { DEFAULT_BLOCKS } from './booklet-blocks.ts';
 import { DEFAULT_POLICY } from './policy.ts';
 import { PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
 import { DEFAULT_SETTING, ENGLISH_LANGUAGE } from './sheet-schema.ts';
 
-/** Cautions that print unless the user rewrites them. */
-export const STANDING_CAUTIONS =
-  'A percentile rank is a place in a named group, not a per cent of correct answers. Its steps are unequal: do not add, ' +
-  'subtract or average percentile ranks. Use this table only for this form, season and group. Never let one score be ' +
-  'the only ground for a decision about a person; follow local rules and the judgement of a qualified professional.';
-
-export const STANDING_HOW_TO_READ =
-  'Find the raw score in the first column. The percentile rank beside it tells where that score stands in the group ' +
-  'this table was made from.';
+const STANDING = standingTexts('en');
 
 /** A project with nothing read yet and every choice at its default. */
 export function newProject(title: string): NormProject {
@@ -45,9 +38,7 @@ export function newProject(title: string): NormProject {
       tableColumns: 3,
       marginMm: null,
       ...DEFAULT_SETTING,
-      title: 'Raw score to percentile rank',
-      howToRead: STANDING_HOW_TO_READ,
-      cautions: STANDING_CAUTIONS,
+      ...STANDING,
       notes: '',
       ogive: true,
       inverse: false,

@@ -6,6 +6,7 @@ import { editionQueries } from './edition-queries.ts';
 import { cutQueries } from './cut-queries.ts';
 import { descriptionQueries } from './description-queries.ts';
 import type { GroupNorms } from './group-norms.ts';
+import { languageQueries } from './language-queries.ts';
 import { groupQueries } from './group-queries.ts';
 import type { NormProject } from './norm-project.ts';
 import { reversalQueries } from './reversal-queries.ts';
@@ -49,6 +50,7 @@ export function queriesOf(
     ...cohortQueries(project),
     ...unusedClusterQueries(project),
     ...descriptionQueries(project, groups),
+    ...languageQueries(project),
     ...adjustmentQueries(groups, refused),
     ...cutQueries(project),
     ...groups.flatMap((norms) =>

@@ -1,4 +1,5 @@
 import * as v from 'valibot';
+import { ENGLISH_NUMBERS } from '../languages/number-format.ts';
 import { BLOCK_KINDS, DEFAULT_BLOCKS } from './booklet-blocks.ts';
 import { SHEET_LENGTHS } from './sheet-lengths.ts';
 
@@ -57,7 +58,7 @@ const language = v.pipe(
 export const ENGLISH_LANGUAGE: v.InferOutput<typeof language> = {
   tag: 'en',
   words: 'en',
-  numbers: { decimalMark: '.', thousands: 'narrow-space', minus: 'minus', dateOrder: 'yyyy-mm-dd' },
+  numbers: ENGLISH_NUMBERS,
   phrases: [],
 };
 

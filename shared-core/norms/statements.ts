@@ -1,4 +1,4 @@
-import { listed } from '../languages/lists.ts';
+import { inSeries } from '../languages/series.ts';
 import { ENGLISH_WORDS } from '../languages/phrases.ts';
 import { scaleInWords } from '../scale/score-scale.ts';
 import { columnInWords } from './norm-groups.ts';
@@ -94,7 +94,7 @@ export function statementText(parts: readonly StatementPart[]): string {
 
 /** "a, b and c" */
 export function joined(items: readonly string[]): string {
-  return listed(ENGLISH_WORDS, items);
+  return inSeries(ENGLISH_WORDS, items);
 }
 
 export function cohortStatement(project: NormProject): readonly StatementPart[] {

@@ -18,6 +18,7 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
   const pages = numbered(parts, paper);
   return {
     title: draftTitle(normSet, surveyName(normSet.project) || say(wordsOf(normSet.project), 'booklet.title')),
+    language: normSet.project.sheet.language.tag,
     paper,
     pages,
     remarks: [

@@ -9,6 +9,8 @@ import type { TypeSize } from './type-sizes.ts';
  */
 export interface Booklet {
   readonly title: string;
+  /** Tag of the language (BCP 47). */
+  readonly language: string;
   readonly paper: Paper;
   readonly pages: readonly BookletPage[];
   /** What had to be set otherwise than asked, as sentences that tell what to do. */

@@ -1,4 +1,4 @@
-import { listed } from '../languages/lists.ts';
+import { inSeries } from '../languages/series.ts';
 import { figure, say, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import type { FitEvidence } from '../norms/fit-evidence.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
@@ -78,7 +78,7 @@ function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence,
     ...(degrees.every(({ converged }) => converged) ? [] : [say(words, 'fit.none-found')]),
     ...(nearlyAsGood.length === 0
       ? []
-      : [say(words, 'fit.nearly-as-good', { degrees: listed(words, nearlyAsGood.map(String)) })]),
+      : [say(words, 'fit.nearly-as-good', { degrees: inSeries(words, nearlyAsGood.map(String)) })]),
   ].join(' ');
 }
 
@@ -183,7 +183,7 @@ function warnings(
 function named(scoreTexts: readonly string[], words: PrintWords): string {
   const scores = scoreTexts.map((score) => figure(words, score));
   const left = scores.length - MOST_NAMED;
-  return listed(
+  return inSeries(
     words,
     left > 1 ? [...scores.slice(0, MOST_NAMED), say(words, 'list.more', { count: String(left) })] : scores,
   );

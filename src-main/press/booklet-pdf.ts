@@ -44,10 +44,10 @@ export async function bookletPdf(
 }
 
 /** The document with its first page, still white. */
-function definition({ title, paper }: Booklet, day: Date): TDocumentDefinitions {
+function definition({ title, paper, language }: Booklet, day: Date): TDocumentDefinitions {
   return {
     version: '1.7',
-    language: 'en',
+    language,
     tagged: true,
     displayTitle: true,
     info: { title, creator: 'Normloom', producer: 'Normloom', creationDate: day, modDate: day },
