@@ -43,6 +43,22 @@ export interface OpenedProject {
   readonly file: string | null;
   /** The cohort file, where it lies beside the project and can be read again. */
   readonly cohort: FileHandle | null;
+  /** The released edition that the project goes on from, where it was opened from an edition file. */
+  readonly earlier: EarlierEdition | null;
+}
+
+/** An edition that a project is compared with, as it was read from its file. */
+export interface EarlierEdition {
+  readonly file: string;
+  readonly project: NormProject;
+  /** Null for a project file that was never released. */
+  readonly released: {
+    readonly check: string;
+    /** Version of the program that released it. */
+    readonly version: string;
+    readonly analyst: string;
+    readonly checker: string;
+  } | null;
 }
 
 export interface CohortPreview {
@@ -76,6 +92,8 @@ export interface Pressed {
   readonly files: readonly PressedFile[];
   /** Cells of the files that were read back and agree, and cells that the second engine worked out alike. */
   readonly readBack: { readonly cells: number; readonly recomputed: number };
+  /** The file in which the edition was frozen, one of the files; null for a proof. */
+  readonly editionFile: string | null;
 }
 
 export interface DrawnPages {
@@ -105,6 +123,9 @@ export interface GivenFile {
   readonly handle: FileHandle;
 }
 
+/** What a file is chosen for: `project` and `edition` take projects and released editions alike. */
+export type FileKind = 'cohort' | 'project' | 'edition' | 'roster';
+
 /** What a desktop window's menu asks of the page; `open-file` comes with the file. */
 export type MenuCommand = 'new' | 'open' | 'open-file' | 'save' | 'undo' | 'redo';
 
@@ -130,8 +151,11 @@ export interface DeskRequests {
     };
   };
   /** A dialog where the host has one; null when the user closed it. Browser hosts answer with a problem: they upload. */
-  'choose-file': { ask: { readonly kind: 'cohort' | 'project' }; answer: { readonly handle: FileHandle } | null };
+  'choose-file': { ask: { readonly kind: FileKind }; answer: { readonly handle: FileHandle } | null };
+  /** A released edition opens as a new project that goes on from it; nothing is ever saved into its file. */
   'open-project': { ask: { readonly handle: FileHandle }; answer: OpenedProject };
+  /** Reads a project or a released edition to be compared with. */
+  'look-at-edition': { ask: { readonly handle: FileHandle }; answer: EarlierEdition };
   'open-draft': { ask: { readonly draft: string }; answer: OpenedProject };
   'open-sample': { ask: Record<never, never>; answer: OpenedProject };
   'forget-draft': { ask: { readonly draft: string }; answer: null };
@@ -167,6 +191,8 @@ export interface DeskRequests {
   'draw-pages': { ask: { readonly project: NormProject }; answer: { readonly job: string } };
   /** Writes booklet, workbook, csv, norm set and certificate into a folder named after the project. */
   press: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
+  /** The same, and the edition is frozen: refused while something is missing, or where its number was used before. */
+  release: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
   'job-state': { ask: { readonly job: string }; answer: JobState };
   'cancel-job': { ask: { readonly job: string }; answer: null };
   /** Shows the folder of the last press in the file manager, where the host can. */
@@ -180,6 +206,7 @@ export const DESK_REQUESTS = [
   'list-projects',
   'choose-file',
   'open-project',
+  'look-at-edition',
   'open-draft',
   'open-sample',
   'forget-draft',
@@ -189,6 +216,7 @@ export const DESK_REQUESTS = [
   'tally-cohort',
   'draw-pages',
   'press',
+  'release',
   'job-state',
   'cancel-job',
   'show-pressed',

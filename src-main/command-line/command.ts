@@ -11,12 +11,14 @@ import {
   PRESS,
   QUERIES,
   READ_BACK,
+  RELEASE,
   TABLE,
   type OptionNames,
 } from './option-names.ts';
 import { oneOf, readOrSay, textGiven, type OptionValues } from './option-values.ts';
 import { queriesOptions, type QueriesFormat } from './queries-options.ts';
 import { readBackOptions, type ReadBackOptions } from './read-back-options.ts';
+import type { Signatures } from './release-command.ts';
 import { readWords } from './read-words.ts';
 import { tableOptions, type TableOptions } from './table-options.ts';
 
@@ -27,6 +29,7 @@ export type Command =
   | { readonly kind: 'table'; readonly path: string; readonly options: TableOptions }
   | { readonly kind: 'differ'; readonly path: string; readonly options: DifferOptions }
   | { readonly kind: 'press'; readonly path: string; readonly into: string }
+  | { readonly kind: 'release'; readonly path: string; readonly into: string; readonly signatures: Signatures }
   | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions }
   | { readonly kind: 'queries'; readonly path: string; readonly format: QueriesFormat }
   | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
@@ -52,6 +55,14 @@ export function readCommand(words: readonly string[]): Reply<Command> {
         return into === ''
           ? wrong('Tell where to press with --into FOLDER.')
           : { ok: true, value: { kind: 'press', path, into } };
+      });
+    case 'release':
+      return readFileCommand(others, RELEASE, 'release takes one project', (path, values) => {
+        const into = textGiven(values, 'into') ?? '';
+        const signatures = { analyst: textGiven(values, 'analyst'), checker: textGiven(values, 'checker') };
+        return into === ''
+          ? wrong('Tell where the edition is released to with --into FOLDER.')
+          : { ok: true, value: { kind: 'release', path, into, signatures } };
       });
     case 'read-back':
       return readFilesCommand(others, READ_BACK, (paths, values) => {
@@ -83,7 +94,7 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       if (general !== null) return { ok: true, value: general };
       return wrong(
         name === undefined
-          ? 'Tell what to do: table, differ, press, read-back, queries, compare or erratum.'
+          ? 'Tell what to do: table, differ, press, release, read-back, queries, compare or erratum.'
           : `There is no command "${name}".`,
       );
     }

@@ -7,12 +7,13 @@ import { refused, type Outcome } from './outcome.ts';
 export const COMPARE_FORMATS = ['text', 'json'] as const;
 export type CompareFormat = (typeof COMPARE_FORMATS)[number];
 
-/** Tells every printed cell and every choice in which two projects differ; done whether or not they do. */
+/** Tells every printed cell and every choice in which two editions differ; done whether or not they do. */
 export async function compareCommand(paths: EditionPaths, format: CompareFormat): Promise<Outcome> {
   const editions = await readEditions(paths);
   if (!editions.ok) return refused(editions.problem);
-  const comparison = compareEditions(editions.value.before, editions.value.after);
-  return { kind: 'done', result: format === 'json' ? asJson(comparison) : comparisonText(comparison), remarks: [] };
+  const { before, after, remarks } = editions.value;
+  const comparison = compareEditions(before, after);
+  return { kind: 'done', result: format === 'json' ? asJson(comparison) : comparisonText(comparison), remarks };
 }
 
 /** Every key is lower-case-with-hyphens; what users wrote stands in values only. */

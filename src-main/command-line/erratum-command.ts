@@ -6,14 +6,14 @@ import type { ErratumOptions, RosterOptions } from './erratum-options.ts';
 import { refused, wrongUsage, type Outcome } from './outcome.ts';
 import { readRoster } from './roster-file.ts';
 
-/** The erratum of the earlier of two projects; names of a roster go into the result and nowhere else. */
+/** The erratum of the earlier of two editions; names of a roster go into the result and nowhere else. */
 export async function erratumCommand(paths: EditionPaths, { roster, cut }: ErratumOptions): Promise<Outcome> {
   const editions = await readEditions(paths);
   if (!editions.ok) return refused(editions.problem);
-  const { before, after } = editions.value;
+  const { before, after, remarks } = editions.value;
   const followed = roster === null ? null : await follow(editions.value, roster, cut);
   if (followed !== null && 'outcome' in followed) return followed.outcome;
-  return { kind: 'done', result: erratumText(compareEditions(before, after), followed), remarks: [] };
+  return { kind: 'done', result: erratumText(compareEditions(before, after), followed), remarks };
 }
 
 async function follow(

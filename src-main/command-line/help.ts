@@ -7,7 +7,10 @@ const COLUMN_NAMES = [COLUMN_KEYS.slice(0, 5), COLUMN_KEYS.slice(5, 8), COLUMN_K
 export const HELP = `normloom table FILE --score COL [options]   conversion tables of a cohort file
 normloom differ FILE --score COL --ranks RANKFILE [options]
                                             how somebody's ranks were made from the same people
-normloom press PROJECT --into FOLDER        booklet, workbook, csv, norm set and certificate of a project
+normloom press PROJECT --into FOLDER        booklet, workbook, csv, norm set and certificate of a project; the
+                                            files of a released edition are held against those released
+normloom release PROJECT --into FOLDER [--analyst NAME --checker NAME]
+                                            the same files, and the edition frozen beside them for good
 normloom read-back FILE… --against PROJECT  pressed files compared with the project, cell by cell
 normloom compare OLD NEW [--format text|json]
                                             every printed cell and choice in which two projects differ
@@ -50,8 +53,12 @@ Options of differ:
   --group VALUE,VALUE       the group that the ranks are of: one value for each column of --by
   --format NAME             text (default) or json
 
+Options of release:
+  --analyst NAME            who prepared the tables; without it, as the project is signed
+  --checker NAME            who checked them: somebody else
+
 Options of read-back:
-  --against PROJECT         the project that the files were pressed from
+  --against PROJECT         the project or edition that the files were pressed from
   --format NAME             text (default): a line for each cell that differs; or json
 
 Options of erratum:
@@ -63,6 +70,7 @@ Options of erratum:
 
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.
+Wherever PROJECT, OLD or NEW stands, a project (*.normloom) or a released edition (*.normedition) is read.
 stdout carries only the result, stderr what there is to say about it.
-Exit codes: 0 done, 2 wrong usage, 3 the data were refused or cannot carry the method, or cells differ.
+Exit codes: 0 done, 2 wrong usage, 3 the data were refused, or cells or files differ.
 `;

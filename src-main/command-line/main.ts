@@ -8,6 +8,7 @@ import { pressCommand } from './press-command.ts';
 import { queriesCommand } from './queries-command.ts';
 import { programVersion } from '../program-version.ts';
 import { readBackCommand } from './read-back-command.ts';
+import { releaseCommand } from './release-command.ts';
 import { tableCommand } from './table-command.ts';
 
 /** The same work as the other hosts', without a window: the result goes to stdout, everything else to stderr. */
@@ -23,6 +24,8 @@ async function run(command: Command): Promise<Outcome> {
       return differCommand(command.path, command.options);
     case 'press':
       return pressCommand(command.path, command.into);
+    case 'release':
+      return releaseCommand(command.path, command.into, command.signatures);
     case 'read-back':
       return readBackCommand(command.paths, command.options);
     case 'queries':

@@ -38,6 +38,8 @@ export const DIFFER = { ...COHORT, group: text, ranks: text, format: text } as c
 
 export const PRESS = { ...GENERAL, into: text } as const satisfies OptionNames;
 
+export const RELEASE = { ...PRESS, analyst: text, checker: text } as const satisfies OptionNames;
+
 export const READ_BACK = { ...GENERAL, against: text, format: text } as const satisfies OptionNames;
 
 export const COMPARE = { ...GENERAL, format: text } as const satisfies OptionNames;

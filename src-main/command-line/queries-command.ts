@@ -8,10 +8,11 @@ import { readProject } from './read-project.ts';
 export async function queriesCommand(path: string, format: QueriesFormat): Promise<Outcome> {
   const read = await readProject(path);
   if (!read.ok) return refused(read.problem);
-  const { queries } = read.value;
+  const { normSet } = read.value;
+  const { queries } = normSet;
   return {
     kind: 'done',
-    result: format === 'json' ? asJson(read.value) : queries.map((query) => asText(query)).join('\n'),
+    result: format === 'json' ? asJson(normSet) : queries.map((query) => asText(query)).join('\n'),
     remarks: [openInWords(queries)],
   };
 }

@@ -17,8 +17,9 @@ const reading = normProjectSchema.entries.reading;
 export const ASK_SCHEMAS: AskSchemas = {
   about: nothing,
   'list-projects': nothing,
-  'choose-file': v.object({ kind: v.picklist(['cohort', 'project']) }),
+  'choose-file': v.object({ kind: v.picklist(['cohort', 'project', 'edition', 'roster']) }),
   'open-project': v.object({ handle }),
+  'look-at-edition': v.object({ handle }),
   'open-draft': v.object({ draft: draftNameSchema }),
   'open-sample': nothing,
   'forget-draft': v.object({ draft: draftNameSchema }),
@@ -28,6 +29,7 @@ export const ASK_SCHEMAS: AskSchemas = {
   'tally-cohort': v.object({ handle, reading: reading.wrapped }),
   'draw-pages': v.object({ project: normProjectSchema }),
   press: v.object({ project: normProjectSchema, name }),
+  release: v.object({ project: normProjectSchema, name }),
   'job-state': v.object({ job }),
   'cancel-job': v.object({ job }),
   'show-pressed': nothing,

@@ -1,5 +1,4 @@
-import { homedir } from 'node:os';
-import { extname, join, relative, isAbsolute } from 'node:path';
+import { join } from 'node:path';
 import * as v from 'valibot';
 import {
   DESK_REQUESTS,
@@ -8,21 +7,20 @@ import {
   type DeskRequest,
   type DeskRequests,
   type FileHandle,
-  type JobResult,
   type Reply,
 } from '../../shared-core/desk.ts';
+import { opensAsProject, PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
 import type { Dialogs } from '../dialogs.ts';
-import { diskTrouble, codeOf } from '../project-file/disk-trouble.ts';
 import { Drafts } from '../project-file/drafts.ts';
-import { cleanFileName } from '../project-file/file-name.ts';
 import { ProjectSaver } from '../project-file/project-saver.ts';
-import { PROJECT_EXTENSION } from '../project-file/project-store.ts';
 import { Recents } from '../project-file/recents.ts';
 import { ASK_SCHEMAS } from './ask-schemas.ts';
+import { asCalledHere } from './called-here.ts';
 import type { DeskWork } from './desk-work.ts';
 import { FileHandles, UNKNOWN_FILE, type KnownFile } from './file-handles.ts';
-import { Jobs, unexpected, type JobHooks } from './jobs.ts';
+import { Jobs, unexpected } from './jobs.ts';
 import { PressFolders } from './press-folders.ts';
+import { PressRoom } from './press-room.ts';
 import { ProjectRoom } from './project-room.ts';
 import { answered, refused } from './reply.ts';
 
@@ -64,7 +62,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
   const recents = new Recents(options.dataFolder);
   const saver = new ProjectSaver(options.dataFolder, Date.now);
   const folders = new PressFolders(options.projectsFolder, options.dataFolder);
-  const sample = join(options.assetsFolder, 'sample-cohorts', `ostrey-vale${PROJECT_EXTENSION}`);
+  const sample = join(options.assetsFolder, 'sample-cohorts', `ostrey-vale${PROJECT_ENDING}`);
   const { dialogs, projectsFolder } = options;
   const room = new ProjectRoom({
     handles,
@@ -77,7 +75,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
     now: Date.now,
   });
   const about = aboutHost(options, handles);
-  let lastPressed: string | null = null;
+  const pressRoom = new PressRoom(work, folders, options.showFolder);
 
   // What killed runs left behind is no reason not to start.
   const swept = Promise.all([
@@ -86,30 +84,6 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
     saver.sweep(),
     folders.sweep(),
   ]).catch(() => undefined);
-
-  const press = async (
-    { project, name }: DeskRequests['press']['ask'],
-    hooks: JobHooks,
-    signal: AbortSignal,
-  ): Promise<Reply<JobResult>> => {
-    const { title, subtitle, release } = project;
-    const shown = name.trim() === '' ? title : name.replace(/\.normloom$/i, '');
-    const folder = cleanFileName(`${shown} – edition ${release.edition}`, 'Normloom');
-    let staged: string | null = null;
-    try {
-      staged = await folders.stage();
-      const reply = await work.press({ kind: 'press', project, folder: staged }, hooks, signal);
-      if (!reply.ok || reply.value.kind !== 'pressed' || signal.aborted) return reply;
-      const pressed = await folders.settle(staged, reply.value.pressed, { name: folder, title, subtitle });
-      lastPressed = pressed.folder;
-      return { ok: true, value: { kind: 'pressed', pressed: { ...pressed, folder: asCalledHere(pressed.folder) } } };
-    } catch (error) {
-      if (codeOf(error) === null) throw error;
-      return refused(diskTrouble('The pressed files', 'written', error));
-    } finally {
-      if (staged !== null) await folders.discard(staged);
-    }
-  };
 
   const handlers: Handlers = {
     about: () => answered(about),
@@ -120,6 +94,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
       return answered(path === null ? null : { handle: handles.give(path) });
     },
     'open-project': ({ handle }) => room.open(handle),
+    'look-at-edition': ({ handle }) => room.lookAtEdition(handle),
     'open-draft': ({ draft }) => room.openDraft(draft),
     'open-sample': () => room.openSample(),
     'forget-draft': async ({ draft }) => {
@@ -139,7 +114,8 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
     },
     'draw-pages': ({ project }) =>
       answered({ job: jobs.start((hooks, signal) => work.press({ kind: 'draw', project }, hooks, signal)) }),
-    press: (ask) => answered({ job: jobs.start((hooks, signal) => press(ask, hooks, signal)) }),
+    press: (ask) => answered({ job: jobs.start((hooks, signal) => pressRoom.press('press', ask, hooks, signal)) }),
+    release: (ask) => answered({ job: jobs.start((hooks, signal) => pressRoom.press('release', ask, hooks, signal)) }),
     'job-state': ({ job }) => {
       const state = jobs.collect(job);
       return state === null
@@ -150,13 +126,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
       jobs.cancel(job);
       return answered(null);
     },
-    'show-pressed': async () => {
-      if (lastPressed === null) return refused('Nothing was pressed yet. Press the project first.');
-      if (options.showFolder === null)
-        return refused(`The files lie in ${asCalledHere(lastPressed)}. Open that folder.`);
-      await options.showFolder(lastPressed);
-      return answered(null);
-    },
+    'show-pressed': () => pressRoom.show(),
   };
 
   return {
@@ -194,15 +164,8 @@ function aboutHost(options: Omit<DeskOptions, 'workers'>, handles: FileHandles):
       openedWith === null
         ? null
         : {
-            kind: extname(openedWith).toLowerCase() === PROJECT_EXTENSION ? 'project' : 'cohort',
+            kind: opensAsProject(openedWith) ? 'project' : 'cohort',
             handle: handles.give(openedWith),
           },
   };
-}
-
-/** A folder as a person at this machine would write it: the home folder as ~. */
-function asCalledHere(folder: string): string {
-  if (process.platform === 'win32') return folder;
-  const below = relative(homedir(), folder);
-  return below === '' || below.startsWith('..') || isAbsolute(below) ? folder : `~/${below}`;
 }

@@ -1,11 +1,13 @@
 import { randomUUID } from 'node:crypto';
 import { mkdir, readFile, rename, rm, stat } from 'node:fs/promises';
-import { join } from 'node:path';
+import { basename, join } from 'node:path';
 import * as v from 'valibot';
-import type { Pressed, PressedFile } from '../../shared-core/desk.ts';
+import type { Pressed, PressedFile, Reply } from '../../shared-core/desk.ts';
 import { namesIn, replaceFile } from '../project-file/atomic-write.ts';
 import { fingerprintAt } from '../project-file/project-store.ts';
+import { harmedBy, releasedIn, type ReleasedThere } from '../press/released-editions.ts';
 import { isAlive } from './live-process.ts';
+import { answered, refused } from './reply.ts';
 
 /** What a folder of pressed files is for: two projects of the same name never share one. */
 export interface PressedFor {
@@ -13,6 +15,8 @@ export interface PressedFor {
   readonly name: string;
   readonly title: string;
   readonly subtitle: string;
+  /** As it is told to the user. */
+  readonly edition: string;
 }
 
 const ledgerSchema = v.object({
@@ -53,11 +57,25 @@ export class PressFolders {
     return folder;
   }
 
-  /** Puts freshly pressed files where they belong, and says where that is. The hidden folder is gone afterwards. */
-  async settle(staged: string, { files, readBack }: Omit<Pressed, 'folder'>, pressedFor: PressedFor): Promise<Pressed> {
+  /**
+   * Puts freshly pressed files where they belong, and says where that is. The hidden folder is gone afterwards. A folder
+   * with a released edition takes only that edition's own files: a proof goes elsewhere, and another release under the
+   * number of a released edition is refused.
+   */
+  async settle(
+    staged: string,
+    { files, editionFile }: Pick<Pressed, 'files' | 'editionFile'>,
+    pressedFor: PressedFor,
+  ): Promise<Reply<string>> {
     for (let number = 1; ; number += 1) {
       const folder = join(this.#projectsFolder, number === 1 ? pressedFor.name : `${pressedFor.name} (${number})`);
-      const earlier = await this.#earlierPress(folder, files, pressedFor);
+      const released = await releasedIn(folder);
+      if (harmedBy(released, files) !== null) {
+        const taken = released.find((there) => there.file === editionFile && isOf(there, pressedFor));
+        if (taken !== undefined) return refused(numberTaken(basename(folder), pressedFor.edition));
+        continue;
+      }
+      const earlier = await this.#earlierPress(folder, files, pressedFor, released.length > 0);
       if (earlier === null) continue;
       const { title, subtitle } = pressedFor;
       const fresh = files.map(({ file, sha256 }) => ({ file, sha256 }));
@@ -67,7 +85,7 @@ export class PressFolders {
       await this.discard(staged);
       const untouched = earlier.filter((old) => !fresh.some(({ file }) => file === old.file));
       await this.#record({ folder, title, subtitle, files: [...untouched, ...fresh] });
-      return { folder, files, readBack };
+      return answered(folder);
     }
   }
 
@@ -83,22 +101,28 @@ export class PressFolders {
     }
   }
 
-  /** The files an earlier press wrote into this folder; null when the folder may not be used for these files. */
+  /**
+   * The files an earlier press wrote into this folder; null when the folder may not be used for these files. Where the
+   * edition was released, they are its own and no list is needed: what lies there must be the same.
+   */
   async #earlierPress(
     folder: string,
     files: readonly PressedFile[],
     { title, subtitle }: PressedFor,
+    released: boolean,
   ): Promise<Entry['files'] | null> {
     const found = await stat(folder).catch(() => null);
     if (found === null) return [];
     const entry = (await this.#entries()).find((each) => each.folder === folder);
-    if (!found.isDirectory() || entry?.title !== title || entry.subtitle !== subtitle) return null;
+    const known = entry?.title === title && entry.subtitle === subtitle ? entry.files : null;
+    if (!found.isDirectory() || (known === null && !released)) return null;
+    const replaceable = released ? files : (known ?? []);
     for (const { file } of files) {
       const held = await fingerprintAt(join(folder, file));
-      const ours = entry.files.some((each) => each.file === file && each.sha256 === held);
+      const ours = replaceable.some((each) => each.file === file && each.sha256 === held);
       if (held !== null && !ours) return null;
     }
-    return entry.files;
+    return known ?? [];
   }
 
   async #record(entry: Entry): Promise<void> {
@@ -123,4 +147,15 @@ export class PressFolders {
   #ledger(): string {
     return join(this.#dataFolder, 'pressed.json');
   }
+}
+
+function isOf({ edition }: ReleasedThere, { title, subtitle }: PressedFor): boolean {
+  return edition !== null && edition.project.title === title && edition.project.subtitle === subtitle;
+}
+
+function numberTaken(folder: string, edition: string): string {
+  return (
+    `Edition ${edition} was released before, with other contents; it lies in “${folder}” and was left as it is. ` +
+    'Raise the number of this edition, and release it again.'
+  );
 }

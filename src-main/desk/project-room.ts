@@ -1,11 +1,13 @@
 import { randomUUID } from 'node:crypto';
 import { stat } from 'node:fs/promises';
 import { basename, dirname, join } from 'node:path';
-import type { DeskRequests, FileHandle, OpenedProject, Reply } from '../../shared-core/desk.ts';
+import type { DeskRequests, EarlierEdition, FileHandle, OpenedProject, Reply } from '../../shared-core/desk.ts';
+import { EDITION_ENDING } from '../../shared-core/norms/file-endings.ts';
+import { nextEdition } from '../../shared-core/norms/next-edition.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
 import type { Drafts } from '../project-file/drafts.ts';
-import { projectText, readProject } from '../project-file/project-store.ts';
+import { projectText, readProject, type StoredProject } from '../project-file/project-store.ts';
 import type { Recents } from '../project-file/recents.ts';
 import { UNKNOWN_FILE, type KnownFile } from './file-handles.ts';
 import { writeAgain, writeNew, type WritingParts } from './project-writing.ts';
@@ -20,6 +22,7 @@ export interface ProjectRoomParts extends WritingParts {
   readonly now: () => number;
 }
 
+type StoredRead = Extract<StoredProject, { readonly ok: true }>;
 type Saved = DeskRequests['save-project']['answer'];
 
 /** Opens, keeps and saves projects. */
@@ -56,6 +59,14 @@ export class ProjectRoom {
     return file === null ? refused(UNKNOWN_FILE) : this.#openFile(file);
   }
 
+  /** What another project is compared with; nothing else is done with it. */
+  async lookAtEdition(handle: FileHandle): Promise<Reply<EarlierEdition>> {
+    const file = this.#parts.handles.find(handle);
+    if (file === null) return refused(UNKNOWN_FILE);
+    const read = await readProject(file.path);
+    return read.ok ? answered(earlierEdition(file.name, read)) : read;
+  }
+
   async openSample(): Promise<Reply<OpenedProject>> {
     const { sample } = this.#parts;
     const opened = await this.#openFile({ path: sample, name: basename(sample), standing: 'copy', fingerprint: null });
@@ -71,7 +82,7 @@ export class ProjectRoom {
     const cohort = path === null ? null : await this.#cohortBeside(path, project);
     return {
       ok: true,
-      value: { draft, project, handle, file: path === null ? null : basename(path), cohort },
+      value: { draft, project, handle, file: path === null ? null : basename(path), cohort, earlier: null },
     };
   }
 
@@ -98,7 +109,7 @@ export class ProjectRoom {
     if (!text.ok) return text;
     const known = ask.handle === null ? null : this.#parts.handles.find(ask.handle);
     if (ask.handle !== null && known === null) return refused(UNKNOWN_FILE);
-    const own = known?.standing === 'own' ? known : null;
+    const own = known?.standing === 'own' && !known.path.toLowerCase().endsWith(EDITION_ENDING) ? known : null;
     const kept = await this.keepDraft({
       draft: ask.draft,
       handle: own === null ? null : ask.handle,
@@ -119,8 +130,9 @@ export class ProjectRoom {
   async #openFile(file: KnownFile): Promise<Reply<OpenedProject>> {
     const read = await readProject(file.path);
     if (!read.ok) return read;
-    const { project, fingerprint } = read;
-    const own = file.standing === 'own';
+    const { fingerprint, edition } = read;
+    const project = edition === null ? read.project : nextEdition(edition);
+    const own = file.standing === 'own' && edition === null;
     // Being on the list of recent projects is a convenience; a list that cannot be written stops no one from working.
     if (own) await this.#parts.recents.add(file.path, project.title).catch(() => undefined);
     return {
@@ -129,8 +141,9 @@ export class ProjectRoom {
         draft: randomUUID(),
         project,
         handle: own ? this.#parts.handles.give(file.path, { fingerprint }) : null,
-        file: file.name,
+        file: edition === null ? file.name : null,
         cohort: await this.#cohortBeside(file.path, project),
+        earlier: edition === null ? null : earlierEdition(file.name, read),
       },
     };
   }
@@ -143,6 +156,12 @@ export class ProjectRoom {
     const found = await stat(cohort).catch(() => null);
     return found?.isFile() === true && found.size === source.bytes ? this.#parts.handles.give(cohort) : null;
   }
+}
+
+function earlierEdition(file: string, { project, edition }: StoredRead): EarlierEdition {
+  if (edition === null) return { file, project, released: null };
+  const { check, program, analyst, checker } = edition;
+  return { file, project, released: { check, version: program.version, analyst, checker } };
 }
 
 function draftFile(file: KnownFile | null): { readonly path: string; readonly fingerprint: string } | null {

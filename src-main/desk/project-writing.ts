@@ -1,10 +1,11 @@
 import { basename, dirname, extname, join } from 'node:path';
 import type { FileHandle, Reply } from '../../shared-core/desk.ts';
+import { PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
 import type { Dialogs } from '../dialogs.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
 import { cleanFileName } from '../project-file/file-name.ts';
 import type { ProjectSaver } from '../project-file/project-saver.ts';
-import { fingerprintAt, fingerprintOf, PROJECT_EXTENSION } from '../project-file/project-store.ts';
+import { fingerprintAt, fingerprintOf } from '../project-file/project-store.ts';
 import type { FileHandles, KnownFile } from './file-handles.ts';
 import { answered, refused } from './reply.ts';
 
@@ -55,20 +56,20 @@ export async function writeNew(
   name: string,
   text: string,
 ): Promise<Reply<Written | null>> {
-  const ending = name.toLowerCase().endsWith(PROJECT_EXTENSION) ? PROJECT_EXTENSION.length : 0;
+  const ending = name.toLowerCase().endsWith(PROJECT_ENDING) ? PROJECT_ENDING.length : 0;
   const clean = cleanFileName(name.slice(0, name.length - ending), 'Norm project');
   const written = (path: string): Reply<Written> =>
     answered({ handle: handles.give(path, { fingerprint: fingerprintOf(text) }), path, remark: null });
   try {
-    if (dialogs === null) return written(await saver.createBeside(projectsFolder, clean, PROJECT_EXTENSION, text));
-    const chosen = await dialogs.chooseSave(join(projectsFolder, `${clean}${PROJECT_EXTENSION}`));
+    if (dialogs === null) return written(await saver.createBeside(projectsFolder, clean, PROJECT_ENDING, text));
+    const chosen = await dialogs.chooseSave(join(projectsFolder, `${clean}${PROJECT_ENDING}`));
     if (chosen === null) return answered(null);
-    if (extname(chosen).toLowerCase() === PROJECT_EXTENSION) {
+    if (extname(chosen).toLowerCase() === PROJECT_ENDING) {
       await saver.replace(chosen, text);
       return written(chosen);
     }
     // The dialog asked about another name than the one with its ending, so nothing of that name may be replaced.
-    return written(await saver.createBeside(dirname(chosen), basename(chosen), PROJECT_EXTENSION, text));
+    return written(await saver.createBeside(dirname(chosen), basename(chosen), PROJECT_ENDING, text));
   } catch (error) {
     return refused(diskTrouble('The project', 'saved', error));
   }

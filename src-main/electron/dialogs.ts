@@ -1,27 +1,33 @@
 import { existsSync } from 'node:fs';
 import { dialog } from 'electron';
 import type { BrowserWindow, FileFilter } from 'electron';
+import type { FileKind } from '../../shared-core/desk.ts';
+import { PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
 import type { Dialogs } from '../dialogs.ts';
-import { openedKind } from './opened-file.ts';
 
-const FILTERS: Readonly<Record<'cohort' | 'project', FileFilter[]>> = {
-  cohort: [
-    { name: 'Cohort files', extensions: ['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls'] },
-    { name: 'All files', extensions: ['*'] },
-  ],
-  project: [{ name: 'Normloom projects', extensions: ['normloom'] }],
+const TABLES = ['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls'];
+const ALL: FileFilter = { name: 'All files', extensions: ['*'] };
+const PROJECTS: FileFilter = { name: 'Normloom projects', extensions: ['normloom'] };
+const EDITIONS: FileFilter = { name: 'Released editions', extensions: ['normedition'] };
+const EITHER: FileFilter = { name: 'Projects and released editions', extensions: ['normloom', 'normedition'] };
+
+const FILTERS: Readonly<Record<FileKind, FileFilter[]>> = {
+  cohort: [{ name: 'Cohort files', extensions: TABLES }, ALL],
+  project: [EITHER, PROJECTS, EDITIONS],
+  edition: [EITHER, EDITIONS, PROJECTS],
+  roster: [{ name: 'Lists of people', extensions: TABLES }, ALL],
 };
 
 const askWhereToSave = async (holder: BrowserWindow, suggested: string): Promise<string | null> => {
   const answer = await dialog.showSaveDialog(holder, {
     defaultPath: suggested,
-    filters: FILTERS.project,
+    filters: [PROJECTS],
     properties: ['createDirectory', 'showOverwriteConfirmation'],
   });
   if (answer.canceled || answer.filePath === '') return null;
-  if (openedKind(answer.filePath) === 'project') return answer.filePath;
+  if (answer.filePath.toLowerCase().endsWith(PROJECT_ENDING)) return answer.filePath;
   // Some systems leave the ending off. Where the full name is taken, the dialog asks again, and about the right file.
-  const path = `${answer.filePath}.normloom`;
+  const path = `${answer.filePath}${PROJECT_ENDING}`;
   return existsSync(path) ? askWhereToSave(holder, path) : path;
 };
 

@@ -1,5 +1,6 @@
 import { statSync } from 'node:fs';
-import { extname, resolve } from 'node:path';
+import { resolve } from 'node:path';
+import { opensAsProject } from '../../shared-core/norms/file-endings.ts';
 
 const isFile = (path: string): boolean => statSync(path, { throwIfNoEntry: false })?.isFile() ?? false;
 
@@ -12,6 +13,5 @@ export const fileToOpen = (words: readonly string[], folder: string): string | n
   return paths.findLast(isFile) ?? null;
 };
 
-/** Projects are known by their ending; every other file is taken for a cohort file. */
-export const openedKind = (path: string): 'project' | 'cohort' =>
-  extname(path).toLowerCase() === '.normloom' ? 'project' : 'cohort';
+/** Projects and released editions are known by their endings; every other file is taken for a cohort file. */
+export const openedKind = (path: string): 'project' | 'cohort' => (opensAsProject(path) ? 'project' : 'cohort');

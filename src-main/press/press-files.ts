@@ -2,9 +2,11 @@ import { createHash } from 'node:crypto';
 import { mkdir, readFile, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import writeFileAtomic from 'write-file-atomic';
-import type { DrawnPages, Pressed, Reply } from '../../shared-core/desk.ts';
+import type { DrawnPages, Pressed, PressedFile, Reply } from '../../shared-core/desk.ts';
+import { editionToText, type FrozenEdition } from '../../shared-core/norms/edition-file.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import { buildNormSet, pressProblem, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
+import { buildNormSet, pressProblem, type NormSet, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
+import { releaseProblem } from '../../shared-core/norms/release-gaps.ts';
 import { compareEngines, engineProblem } from '../../shared-core/second-engine/compare-engines.ts';
 import { programVersion } from '../program-version.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
@@ -13,6 +15,7 @@ import { normSetJson } from './norm-set-json.ts';
 import { certificateJson, certificateOf } from './read-back/certificate.ts';
 import { certificatePdf } from './read-back/certificate-page.ts';
 import { readBack, readBackProblem } from './read-back/read-back.ts';
+import { editionFileName, harmedBy, harmProblem, releasedIn } from './released-editions.ts';
 import { tablesCsv } from './tables-csv.ts';
 import { tablesWorkbook } from './workbook.ts';
 
@@ -47,8 +50,10 @@ interface PressedSet {
 export async function pressFiles(project: NormProject, onProgress: PressProgress = silent): Promise<Reply<PressedSet>> {
   onProgress(0, 'Working out the tables');
   const built = printableNormSet(project);
-  if (!built.ok) return built;
-  const { normSet } = built;
+  return built.ok ? filesOf(built.normSet, onProgress) : built;
+}
+
+async function filesOf(normSet: NormSet, onProgress: PressProgress): Promise<Reply<PressedSet>> {
   const atOdds = engineProblem(compareEngines(normSet));
   if (atOdds !== null) return { ok: false, problem: atOdds };
   const { pdf } = await bookletPdf(normSet, (share) => onProgress(share * AFTER_BOOKLET, 'Drawing the booklet'));
@@ -87,7 +92,8 @@ export async function pressFiles(project: NormProject, onProgress: PressProgress
 /**
  * Presses a project into a folder, which is made where it is missing. Each file is replaced whole or not at all, and
  * only after all of them were made and read back; then the disk is asked whether it holds the same bytes. A certificate
- * of an earlier press is taken away first, so that none stands beside files it does not speak of.
+ * of an earlier press is taken away first, so that none stands beside files it does not speak of. A folder that holds a
+ * released edition takes no other files.
  */
 export async function pressInto(
   project: NormProject,
@@ -96,24 +102,78 @@ export async function pressInto(
 ): Promise<Reply<Pressed>> {
   const made = await pressFiles(project, onProgress);
   if (!made.ok) return made;
+  const problem = await writeFiles(made.value.files, folder);
+  if (problem !== null) return { ok: false, problem };
+  onProgress(1, 'Done');
+  return { ok: true, value: pressedInto(folder, made.value, null) };
+}
+
+/**
+ * Presses a project and freezes it: the same files, and beside them, written last, the edition file. Refused while
+ * something is missing that a release needs.
+ */
+export async function releaseInto(
+  project: NormProject,
+  folder: string,
+  onProgress: PressProgress = silent,
+): Promise<Reply<Pressed>> {
+  onProgress(0, 'Working out the tables');
+  const built = printableNormSet(project);
+  if (!built.ok) return built;
+  const missing = releaseProblem(built.normSet);
+  if (missing !== null) return { ok: false, problem: missing };
+  const made = await filesOf(built.normSet, onProgress);
+  if (!made.ok) return made;
+  const { edition } = project.release;
+  const text = editionToText(frozenEdition(built.normSet, made.value));
+  const file = { file: editionFileName(edition), bytes: new TextEncoder().encode(text) };
+  const released = { ...made.value, files: [...made.value.files, file] };
+  const problem = await writeFiles(released.files, folder);
+  if (problem !== null) return { ok: false, problem };
+  onProgress(1, 'Done');
+  return { ok: true, value: pressedInto(folder, released, file.file) };
+}
+
+/** Writes files into a folder and reads them again; the problem is a sentence, or null where all is well. */
+async function writeFiles(files: readonly FileToWrite[], folder: string): Promise<string | null> {
+  const released = await releasedIn(folder);
+  const harmed = harmedBy(released, files.map(named));
+  if (harmed !== null) return harmProblem(harmed);
   try {
     await mkdir(folder, { recursive: true });
-    await rm(join(folder, CERTIFICATE_FILE), { force: true });
-    for (const { file, bytes } of made.value.files) {
+    if (released.length === 0) await rm(join(folder, CERTIFICATE_FILE), { force: true });
+    for (const { file, bytes } of files) {
       const path = join(folder, file);
       await writeFileAtomic(path, Buffer.from(bytes), { fsync: true });
-      if (!(await readFile(path)).equals(bytes)) return { ok: false, problem: wrongOnDisk(file) };
+      if (!(await readFile(path)).equals(bytes)) return wrongOnDisk(file);
     }
+    return null;
   } catch (error) {
-    return { ok: false, problem: diskTrouble('The pressed files', 'written', error) };
+    return diskTrouble('The pressed files', 'written', error);
   }
-  onProgress(1, 'Done');
-  const files = made.value.files.map(({ file, bytes }) => ({
-    file,
-    bytes: bytes.length,
-    sha256: createHash('sha256').update(bytes).digest('hex'),
-  }));
-  return { ok: true, value: { folder, files, readBack: made.value.readBack } };
+}
+
+function pressedInto(folder: string, { files, readBack }: PressedSet, editionFile: string | null): Pressed {
+  return { folder, files: files.map(named), readBack, editionFile };
+}
+
+function frozenEdition({ project, check }: NormSet, { files, readBack }: PressedSet): FrozenEdition {
+  const { edition, date, analyst, checker } = project.release;
+  return {
+    program: { name: 'Normloom', version: programVersion() },
+    edition,
+    date,
+    check,
+    analyst,
+    checker,
+    files: files.map(named),
+    readBack: { cellsCompared: readBack.cells, cellsRecomputed: readBack.recomputed },
+    project,
+  };
+}
+
+function named({ file, bytes }: FileToWrite): PressedFile {
+  return { file, bytes: bytes.length, sha256: createHash('sha256').update(bytes).digest('hex') };
 }
 
 function wrongOnDisk(file: string): string {

@@ -4,7 +4,7 @@ import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 /** What a press worker is started with; plain JSON. */
 export type PressRequest =
   | { readonly kind: 'draw'; readonly project: NormProject }
-  | { readonly kind: 'press'; readonly project: NormProject; readonly folder: string };
+  | { readonly kind: 'press' | 'release'; readonly project: NormProject; readonly folder: string };
 
 /** What a press worker reports; plain JSON. */
 export type PressReport =

@@ -1,6 +1,6 @@
 import { parentPort, workerData } from 'node:worker_threads';
 import type { JobResult, Reply } from '../../shared-core/desk.ts';
-import { drawPages, pressInto, type PressProgress } from './press-files.ts';
+import { drawPages, pressInto, releaseInto, type PressProgress } from './press-files.ts';
 import { isPressRequest, type PressReport, type PressRequest } from './press-message.ts';
 
 /** Runs in a worker thread: draws or presses the project it was started with, reports progress, and answers. */
@@ -26,8 +26,10 @@ async function answer(request: PressRequest, onProgress: PressProgress): Promise
       const drawn = await drawPages(request.project, onProgress);
       return drawn.ok ? { ok: true, value: { kind: 'drawn', drawn: drawn.value } } : drawn;
     }
-    case 'press': {
-      const pressed = await pressInto(request.project, request.folder, onProgress);
+    case 'press':
+    case 'release': {
+      const press = request.kind === 'press' ? pressInto : releaseInto;
+      const pressed = await press(request.project, request.folder, onProgress);
       return pressed.ok ? { ok: true, value: { kind: 'pressed', pressed: pressed.value } } : pressed;
     }
   }

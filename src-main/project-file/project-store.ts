@@ -1,20 +1,29 @@
 import { createHash } from 'node:crypto';
 import { open } from 'node:fs/promises';
 import { basename } from 'node:path';
+import { projectOrEditionFromText, type FrozenEdition } from '../../shared-core/norms/edition-file.ts';
+import { EDITION_ENDING, PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import { projectFromText, projectToText } from '../../shared-core/norms/project-text.ts';
+import { projectToText } from '../../shared-core/norms/project-text.ts';
 import { codeOf, diskTrouble } from './disk-trouble.ts';
 
 /** Largest project file, in bytes of UTF-8. */
 export const MAX_PROJECT_BYTES = 64 * 1024 * 1024;
-export const PROJECT_EXTENSION = '.normloom';
+/** The same for an edition file: the project in it is set one blank deeper. */
+const MAX_EDITION_BYTES = 2 * MAX_PROJECT_BYTES;
 
-/** A project file as it was read: its project and the fingerprint (SHA-256, hexadecimal) of its bytes. */
+/** A file as it was read: its project, and the fingerprint (SHA-256, hexadecimal) of its bytes. */
 export type StoredProject =
-  | { readonly ok: true; readonly project: NormProject; readonly fingerprint: string }
+  | {
+      readonly ok: true;
+      readonly project: NormProject;
+      readonly fingerprint: string;
+      /** The released edition that the file holds; null for a project file. */
+      readonly edition: FrozenEdition | null;
+    }
   | { readonly ok: false; readonly problem: string };
 
-/** Reads a project file. Whatever is wrong with it comes back as a sentence; the file is never touched. */
+/** Reads a project or edition file. Whatever is wrong with it comes back as a sentence; the file is never touched. */
 export async function readProject(path: string): Promise<StoredProject> {
   const bytes = await readBytes(path, basename(path));
   if (!bytes.ok) return bytes;
@@ -24,8 +33,8 @@ export async function readProject(path: string): Promise<StoredProject> {
   } catch {
     return refused('The project file is damaged (it is not text in UTF-8). Open a backup; the file was not touched.');
   }
-  const read = projectFromText(text);
-  return read.ok ? { ok: true, project: read.project, fingerprint: fingerprintOf(bytes.value) } : read;
+  const read = projectOrEditionFromText(text);
+  return read.ok ? { ...read, fingerprint: fingerprintOf(bytes.value) } : read;
 }
 
 /** The text of a project, or why it cannot be written. */
@@ -36,7 +45,7 @@ export function projectText(
   return Buffer.byteLength(text) <= MAX_PROJECT_BYTES
     ? { ok: true, text }
     : refused(
-        `The project takes more than ${megabytes()} MB. Group by fewer columns, or use a larger step of the scale.`,
+        `The project takes more than ${megabytes(MAX_PROJECT_BYTES)} MB. Group by fewer columns, or use a larger step of the scale.`,
       );
 }
 
@@ -71,9 +80,10 @@ async function readBytes(
     const file = await open(path, 'r');
     try {
       const found = await file.stat();
-      if (!found.isFile()) return refused(`${name} is not a file. Choose a project file (*${PROJECT_EXTENSION}).`);
-      if (found.size > MAX_PROJECT_BYTES) {
-        return refused(`${name} is larger than ${megabytes()} MB, more than any project. Choose another file.`);
+      if (!found.isFile()) return refused(`${name} is not a file. Choose a project file (*${PROJECT_ENDING}).`);
+      const most = path.toLowerCase().endsWith(EDITION_ENDING) ? MAX_EDITION_BYTES : MAX_PROJECT_BYTES;
+      if (found.size > most) {
+        return refused(`${name} is larger than ${megabytes(most)} MB, more than any project. Choose another file.`);
       }
       return { ok: true, value: await file.readFile() };
     } finally {
@@ -88,6 +98,6 @@ function refused(problem: string): { readonly ok: false; readonly problem: strin
   return { ok: false, problem };
 }
 
-function megabytes(): number {
-  return MAX_PROJECT_BYTES / 1024 / 1024;
+function megabytes(bytes: number): number {
+  return bytes / 1024 / 1024;
 }

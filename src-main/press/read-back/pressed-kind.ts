@@ -1,10 +1,11 @@
+import { EDITION_FORMAT } from '../../../shared-core/norms/edition-file.ts';
 import { NORM_SET_FORMAT } from '../norm-set-json.ts';
 import { CERTIFICATE_FORMAT } from './certificate.ts';
 
 /** A pressed file as its content tells it. */
 export type PressedContent =
   | { readonly kind: 'booklet' | 'workbook' }
-  | { readonly kind: 'csv'; readonly text: string }
+  | { readonly kind: 'csv' | 'edition'; readonly text: string }
   | { readonly kind: 'norm-set' | 'certificate'; readonly content: unknown };
 
 /** What kind of pressed file the bytes are, by their content; null for anything that Normloom does not press. */
@@ -16,6 +17,7 @@ export function pressedContent(bytes: Uint8Array): PressedContent | null {
   if (/^[^\r\n]*\braw-score,n,count\b/.test(text)) return { kind: 'csv', text };
   const content = jsonIn(text);
   const format = typeof content === 'object' && content !== null && 'format' in content ? content.format : null;
+  if (format === EDITION_FORMAT) return { kind: 'edition', text };
   if (format === NORM_SET_FORMAT) return { kind: 'norm-set', content };
   return format === CERTIFICATE_FORMAT ? { kind: 'certificate', content } : null;
 }

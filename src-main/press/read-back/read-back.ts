@@ -6,6 +6,7 @@ import { pressedContent } from './pressed-kind.ts';
 import { readBooklet } from './read-booklet.ts';
 import { isCertificatePage, readCertificate, readCertificatePage } from './read-certificate.ts';
 import { readCsv } from './read-csv.ts';
+import { readEdition } from './read-edition.ts';
 import { readNormSet } from './read-norm-set.ts';
 import { readWorkbook } from './read-workbook.ts';
 
@@ -80,6 +81,8 @@ async function readOne(
         return { ok: true, value: readNormSet(file, found.content, normSet) };
       case 'certificate':
         return { ok: true, value: readCertificate(file, found.content, normSet, files) };
+      case 'edition':
+        return { ok: true, value: readEdition(file, found.text, normSet, files) };
     }
   } catch (error) {
     const why = error instanceof Error ? error.message : String(error);

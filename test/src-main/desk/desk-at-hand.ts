@@ -1,10 +1,13 @@
 import { createHash } from 'node:crypto';
-import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdir, mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import type { DeskRequest, DeskRequests, JobState, Reply } from '../../../shared-core/desk.ts';
+import type { DeskRequest, DeskRequests, JobState, PressedFile, Reply } from '../../../shared-core/desk.ts';
+import { editionToText } from '../../../shared-core/norms/edition-file.ts';
+import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
 import { openDesk, type DeskHost, type DeskOptions } from '../../../src-main/desk/desk-host.ts';
+import { editionFileName } from '../../../src-main/press/released-editions.ts';
 import type { DeskWork } from '../../../src-main/desk/desk-work.ts';
 
 export const READING: Reading = {
@@ -33,16 +36,37 @@ export const PLAIN_WORK: DeskWork = {
     hooks.onProgress(0.5, 'Drawing pages');
     if (request.kind === 'draw')
       return { ok: true, value: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, sections: [], remarks: [] } } };
-    const files = [];
+    const files: PressedFile[] = [];
     for (const file of ['booklet.pdf', 'tables.csv']) {
-      const text = `${file} of ${request.project.title}`;
-      await writeFile(join(request.folder, file), text);
-      files.push({ file, bytes: text.length, sha256: createHash('sha256').update(text).digest('hex') });
+      await writeFile(join(request.folder, file), `${file} of ${request.project.title}${request.project.sheet.notes}`);
+      files.push(await pressedFile(request.folder, file));
     }
     const readBack = { cells: 2, recomputed: 1 };
-    return { ok: true, value: { kind: 'pressed', pressed: { folder: request.folder, files, readBack } } };
+    const editionFile =
+      request.kind === 'release' ? await standInEdition(request.project, request.folder, [...files]) : null;
+    if (editionFile !== null) files.push(await pressedFile(request.folder, editionFile));
+    return { ok: true, value: { kind: 'pressed', pressed: { folder: request.folder, files, readBack, editionFile } } };
   },
 };
+
+async function pressedFile(folder: string, file: string): Promise<PressedFile> {
+  const bytes = await readFile(join(folder, file));
+  return { file, bytes: bytes.length, sha256: createHash('sha256').update(bytes).digest('hex') };
+}
+
+/** An edition file as the press writes it. */
+async function standInEdition(project: NormProject, folder: string, files: readonly PressedFile[]): Promise<string> {
+  const { edition, date, analyst, checker } = project.release;
+  const frozen = {
+    program: { name: 'Normloom', version: '0.0.1' } as const,
+    ...{ edition, date, analyst, checker, files, project },
+    check: '0000-0000',
+    readBack: { cellsCompared: 2, cellsRecomputed: 1 },
+  };
+  const file = editionFileName(edition);
+  await writeFile(join(folder, file), editionToText(frozen));
+  return file;
+}
 
 export interface DeskAtHand {
   readonly folder: string;

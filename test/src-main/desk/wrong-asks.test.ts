@@ -12,6 +12,7 @@ const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>
   'list-projects': [7],
   'choose-file': [{}, { kind: 'folder' }],
   'open-project': [{}, { handle: 3 }, { handle: 'x'.repeat(65) }, { handle: null }],
+  'look-at-edition': [{}, { handle: 3 }],
   'open-draft': [{}, { draft: '../../secret' }, { draft: 'short' }, { draft: 'CAPITALS-HERE' }],
   'open-sample': [false],
   'forget-draft': [{}, { draft: '..' }, { draft: 'a/../../b-c-d-e' }],
@@ -33,6 +34,7 @@ const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>
   ],
   'draw-pages': [{}, { project: { ...project, title: 7 } }],
   press: [{ project }, { project: { ...project, sheet: null }, name: 'x' }],
+  release: [{ project }, { project: { ...project, release: null }, name: 'x' }],
   'job-state': [{}, { job: {} }],
   'cancel-job': [{}, { job: 'x'.repeat(65) }],
   'show-pressed': ['x'],
@@ -61,6 +63,7 @@ describe('what a desk is asked is checked when it is asked', () => {
     const handle = 'AAAAAAAAAAAAAAAAAAAAAA';
     const unknown = /no longer knows this file/;
     expect(await hand.problem('open-project', { handle })).toMatch(unknown);
+    expect(await hand.problem('look-at-edition', { handle })).toMatch(unknown);
     expect(await hand.problem('look-at-cohort', { handle, reading: null })).toMatch(unknown);
     expect(await hand.problem('tally-cohort', { handle, reading: READING })).toMatch(unknown);
     expect(await hand.problem('keep-draft', { draft, handle, project })).toMatch(unknown);

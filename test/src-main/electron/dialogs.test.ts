@@ -35,8 +35,18 @@ describe('native dialogs', () => {
 
     electron.dialog.showOpenDialog.mockResolvedValueOnce({ canceled: false, filePaths: ['/surveys/grade-4.normloom'] });
     expect(await dialogs.chooseFile('project')).toBe('/surveys/grade-4.normloom');
-    expect(electron.dialog.showOpenDialog.mock.calls[1]?.[1].filters?.[0]?.extensions).toEqual(['normloom']);
+    expect(electron.dialog.showOpenDialog.mock.calls[1]?.[1].filters?.[0]?.extensions).toEqual([
+      'normloom',
+      'normedition',
+    ]);
     expect(chosen.mock.calls).toEqual([['/surveys/grade-4.normloom']]);
+
+    electron.dialog.showOpenDialog.mockResolvedValue({ canceled: false, filePaths: ['/surveys/old.normedition'] });
+    expect(await dialogs.chooseFile('edition')).toBe('/surveys/old.normedition');
+    expect(await dialogs.chooseFile('roster')).toBe('/surveys/old.normedition');
+    const names = electron.dialog.showOpenDialog.mock.calls.slice(2).map(([, asked]) => asked.filters?.[0]?.name);
+    expect(names).toEqual(['Projects and released editions', 'Lists of people']);
+    expect(chosen).toHaveBeenCalledTimes(1);
   });
 
   it('answer null when closed, and when there is no window to hold them', async () => {
@@ -60,6 +70,7 @@ describe('native dialogs', () => {
     const options = electron.dialog.showSaveDialog.mock.calls[0]?.[1];
     expect(options?.defaultPath).toBe('/surveys/grade-4.normloom');
     expect(options?.properties).toContain('showOverwriteConfirmation');
+    expect(options?.filters?.map(({ extensions }) => extensions)).toEqual([['normloom']]);
     expect(chosen.mock.calls).toEqual([['/surveys/grade-5.normloom']]);
   });
 

@@ -31,6 +31,7 @@ describe('the file to open', () => {
 
   it('is a project by its ending and a cohort otherwise', () => {
     expect(openedKind('/surveys/Grade 4.NORMLOOM')).toBe('project');
+    expect(openedKind('/surveys/edition-1.0.NormEdition')).toBe('project');
     expect(openedKind('/surveys/scores.csv')).toBe('cohort');
     expect(openedKind('/surveys/normloom')).toBe('cohort');
   });

@@ -1,0 +1,81 @@
+import type { DeskRequests, JobResult, PressedFile, Reply } from '../../shared-core/desk.ts';
+import { codeOf, diskTrouble } from '../project-file/disk-trouble.ts';
+import { cleanFileName } from '../project-file/file-name.ts';
+import { asCalledHere } from './called-here.ts';
+import type { DeskWork } from './desk-work.ts';
+import type { JobHooks } from './jobs.ts';
+import type { PressedFor, PressFolders } from './press-folders.ts';
+import { answered, refused } from './reply.ts';
+
+/** Files that some work made in a hidden folder. */
+interface Made {
+  readonly files: readonly PressedFile[];
+  readonly editionFile: string | null;
+}
+
+/** Presses and releases into folders named after the project, and shows the last one. */
+export class PressRoom {
+  readonly #work: DeskWork;
+  readonly #folders: PressFolders;
+  readonly #showFolder: ((folder: string) => Promise<void>) | null;
+  #last: string | null = null;
+
+  constructor(work: DeskWork, folders: PressFolders, showFolder: ((folder: string) => Promise<void>) | null) {
+    this.#work = work;
+    this.#folders = folders;
+    this.#showFolder = showFolder;
+  }
+
+  async press(
+    kind: 'press' | 'release',
+    { project, name }: DeskRequests['press']['ask'],
+    hooks: JobHooks,
+    signal: AbortSignal,
+  ): Promise<Reply<JobResult>> {
+    const { title, subtitle, release } = project;
+    const shown = name.trim() === '' ? title : name.replace(/\.normloom$/i, '');
+    const folder = cleanFileName(`${shown} – edition ${release.edition}`, 'Normloom');
+    const pressedFor = { name: folder, title, subtitle, edition: release.edition };
+    const pressed = await this.#inOwnFolder(pressedFor, signal, async (staged) => {
+      const reply = await this.#work.press({ kind, project, folder: staged }, hooks, signal);
+      if (!reply.ok) return reply;
+      if (reply.value.kind !== 'pressed') throw new TypeError('the press answered with something else');
+      return answered(reply.value.pressed);
+    });
+    return pressed.ok ? answered({ kind: 'pressed', pressed: pressed.value }) : pressed;
+  }
+
+  /** Opens the folder that was last written to, where the host can. */
+  async show(): Promise<Reply<null>> {
+    if (this.#last === null) return refused('Nothing was pressed yet. Press the project first.');
+    if (this.#showFolder === null) {
+      return refused(`The files lie in ${asCalledHere(this.#last)}. Open that folder.`);
+    }
+    await this.#showFolder(this.#last);
+    return answered(null);
+  }
+
+  /** Lets work write into a hidden folder, then puts its files where they belong; a failure leaves nothing behind. */
+  async #inOwnFolder<T extends Made>(
+    pressedFor: PressedFor,
+    signal: AbortSignal,
+    work: (staged: string) => Promise<Reply<T>>,
+  ): Promise<Reply<T & { readonly folder: string }>> {
+    let staged: string | null = null;
+    try {
+      staged = await this.#folders.stage();
+      const made = await work(staged);
+      if (!made.ok) return made;
+      if (signal.aborted) return refused('The work was stopped.');
+      const settled = await this.#folders.settle(staged, made.value, pressedFor);
+      if (!settled.ok) return settled;
+      this.#last = settled.value;
+      return answered({ ...made.value, folder: asCalledHere(settled.value) });
+    } catch (error) {
+      if (codeOf(error) === null) throw error;
+      return refused(diskTrouble('The pressed files', 'written', error));
+    } finally {
+      if (staged !== null) await this.#folders.discard(staged);
+    }
+  }
+}
