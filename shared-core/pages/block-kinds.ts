@@ -4,6 +4,9 @@ import type { NormProject } from '../norms/norm-project.ts';
 import type { BlockBody, BlockContext } from './block-pages.ts';
 import { say, type BlockWord, type BlockWords } from './block-words.ts';
 import { cautionsPages } from './cautions-pages.ts';
+import { cutScoresPages } from './cut-scores-pages.ts';
+import { groupsAcrossPages } from './groups-across-pages.ts';
+import { inversePages } from './inverse-pages.ts';
 
 /** The heading of a block as it is printed. */
 export function blockHeading({ kind, heading }: BookletBlock, project: NormProject, words: BlockWords): string {
@@ -20,12 +23,15 @@ export function blockBody(context: BlockContext): BlockBody {
   switch (kind) {
     case 'cautions':
       return cautionsPages(context);
+    case 'groups-across':
+      return groupsAcrossPages(context);
+    case 'inverse':
+      return inversePages(context);
+    case 'cut-scores':
+      return cutScoresPages(context);
     case 'title-page':
     case 'norm-group':
     case 'how-to-read':
-    case 'groups-across':
-    case 'inverse':
-    case 'cut-scores':
     case 'pictures':
     case 'technical-notes':
     case 'change-list':

@@ -17,6 +17,36 @@ export const BLOCK_WORDS = {
   'block.continued': '{heading} (continued)',
   'block.blank': 'This page is left blank.',
 
+  'across.how-to-read':
+    'Find the raw score in the first column. In its line, under the name of the group, stands the percentile rank in that ' +
+    'group; n\u00a0is the number of its {people}.',
+  'across.n': 'n {count}',
+  'across.part': 'Groups {first} to {last} of {all}',
+  'across.part-of-one': 'Group {first} of {all}',
+  'across.note': '{group}: {note}',
+  'across.all-smoothed': 'The percentile ranks of all groups are smoothed.',
+  'across.some-smoothed': 'Smoothed are the percentile ranks of {groups}.',
+
+  'inverse.lowest':
+    'Find the percentile rank in the first column. In its line, under the name of the group, stands the lowest raw score ' +
+    'whose percentile rank in that group, before rounding, reaches it; a dash where none does. n\u00a0is the number of its ' +
+    '{people}.',
+  'inverse.highest':
+    'Find the percentile rank in the first column. In its line, under the name of the group, stands the highest raw ' +
+    'score whose percentile rank in that group, before rounding, reaches it; a dash where none does. n\u00a0is the number of ' +
+    'its {people}.',
+
+  'cuts.heading': '{name}: raw score {score}',
+  'cuts.heading-nameless': 'Raw score {score}',
+  'cuts.how-to-read':
+    'At each cut: the percentile rank of its score, as in the table of the group, and how many per cent of the group have ' +
+    'that score or a better one, counted as they were observed. n\u00a0is the number of {people} in the group.',
+  'cuts.how-to-read-weighted':
+    'At each cut: the percentile rank of its score, as in the table of the group, and how many per cent of the group, by ' +
+    'weight, have that score or a better one, counted as they were observed. n\u00a0is the number of {people} in the group.',
+  'cuts.group': 'Group',
+  'cuts.n': 'n',
+  'cuts.share': 'Per cent\nat or better',
   'cuts.rule': 'A rule marks the cut {cut}.',
   'cuts.rules': 'Rules mark the cuts {cuts}.',
   'cuts.named': '“{name}” at {score}',

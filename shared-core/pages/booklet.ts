@@ -101,7 +101,7 @@ export interface TableColumnBlock {
 }
 
 /** Tables that are set in columns of rows. In a conversion table each raw score of its group stands once. */
-export type ColumnTable = 'conversion' | 'groups-across' | 'inverse-across' | 'cuts';
+export type ColumnTable = 'conversion' | 'groups-across' | 'inverse-across' | `cuts ${number}`;
 
 export interface TableHead {
   /** Which column of its whole table it heads, 0 for the heads of rows; further parts of a table have other columns. */

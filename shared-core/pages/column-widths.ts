@@ -55,18 +55,39 @@ export function scaledColumns(natural: readonly NaturalColumn[], scale: number):
 
 /** The least width that the columns can be set in; `behind` is kept free behind the last. */
 export function leastWidth(natural: readonly NaturalColumn[], type: TableType, behind: number): number {
-  return sumOf(natural) + natural.length * gapIn(type, LEAST_GAP) + behind;
+  return sumOf(natural) + natural.length * leastGap(type) + behind;
+}
+
+/** What is shared out between columns of figures, and what stays free behind the last. */
+export interface WidthShare {
+  readonly width: number;
+  /** True for a table that stands alone, whose columns do not drift apart. */
+  readonly alone: boolean;
+  readonly behind: number;
 }
 
 /** Shares the room left between the columns of figures, half a share before the first. */
-export function sharedWidth(
+export function sharedWidth(natural: readonly NaturalColumn[], type: TableType, share: WidthShare): PlacedHeads {
+  return placedHeads(natural, sharedGap(natural, type, share), share.behind);
+}
+
+/** The room between two columns when all that is left is shared between them. */
+export function sharedGap(
   natural: readonly NaturalColumn[],
-  width: number,
   type: TableType,
-  { alone, behind }: { readonly alone: boolean; readonly behind: number },
-): { readonly width: number; readonly heads: readonly TableHead[] } {
+  { width, alone, behind }: WidthShare,
+): number {
   const share = (width - behind - sumOf(natural)) / (natural.length - 0.5);
-  const gap = alone ? Math.min(share, gapIn(type, WIDEST_GAP)) : share;
+  return alone ? Math.min(share, gapIn(type, WIDEST_GAP)) : share;
+}
+
+export interface PlacedHeads {
+  readonly width: number;
+  readonly heads: readonly TableHead[];
+}
+
+/** Columns with so much room between them. */
+export function placedHeads(natural: readonly NaturalColumn[], gap: number, behind: number): PlacedHeads {
   let right = -gap / 2;
   const heads = natural.map((column, index) => {
     const before = index === 0 ? gap / 2 : gap;
@@ -74,6 +95,11 @@ export function sharedWidth(
     return { ...column.head, right, width: column.width + before };
   });
   return { width: right + behind, heads };
+}
+
+/** The least room between two columns. */
+export function leastGap(type: TableType): number {
+  return gapIn(type, LEAST_GAP);
 }
 
 function gapIn({ row }: TableType, usual: number): number {

@@ -23,6 +23,11 @@ export function tableOverhead({ heads, type }: TableMeasure): number {
   return headHeight(heads, type.head) + ABOVE_ROWS + BELOW_ROWS;
 }
 
+/** Height of a table in one column of rows, in points. */
+export function tableHeight(rows: RowColumn, measure: TableMeasure): number {
+  return tableOverhead(measure) + columnHeight(rows, rowMeasure(measure));
+}
+
 function headHeight(heads: readonly TableHead[], { leading }: TypeSize): number {
   return Math.max(...heads.map((head) => linesIn(head).length)) * leading + 2 * HEAD_PADDING;
 }

@@ -17,7 +17,7 @@ import {
 import { isRangeColumn } from './range-cell.ts';
 import { cellText } from './sheet-texts.ts';
 import { spokenHead } from './spoken-text.ts';
-import { chosenType, rowHeightRemark, scaledType, type TableType } from './table-type.ts';
+import { chosenType, paperName, rowHeightRemark, scaledType, smallerRemark, type TableType } from './table-type.ts';
 import { textWidth } from './text-width.ts';
 import { GUTTER } from './type-sizes.ts';
 
@@ -33,7 +33,7 @@ export interface TableMeasure {
 }
 
 /** Tried in turn where even one column of rows is too wide. */
-const TYPE_SCALES = [1, 0.92, 0.85, 0.78, 0.71, 0.64, 0.57] as const;
+export const TYPE_SCALES = [1, 0.92, 0.85, 0.78, 0.71, 0.64, 0.57] as const;
 
 /**
  * Sets the columns of the conversion tables in the width of the page, the same for every group, and says in sentences
@@ -57,7 +57,8 @@ export function measureTables(
     measure: {
       columns,
       type: scaled,
-      ...sharedWidth(scaledColumns(natural, scale), columnWidth(columns), scaled, {
+      ...sharedWidth(scaledColumns(natural, scale), scaled, {
+        width: columnWidth(columns),
         alone: columns === 1,
         behind: behind * scale,
       }),
@@ -98,24 +99,16 @@ function roomBehind({ project, groups }: NormSet, { row }: TableType): number {
 }
 
 const COUNT_WORDS = ['no', 'one', 'two', 'three', 'four'] as const;
-const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
-
 function remarksOn(sheet: SheetChoices, columns: number, scale: number): readonly string[] {
-  const paper = `${PAPER_NAMES[sheet.paper]} ${sheet.orientation}`;
   const remarks: string[] = [];
   if (columns < sheet.tableColumns) {
     remarks.push(
-      `The chosen figures are too wide to stand ${COUNT_WORDS[sheet.tableColumns]} times across ${paper}; the tables ` +
+      `The chosen figures are too wide to stand ${COUNT_WORDS[sheet.tableColumns]} times across ${paperName(sheet)}; the tables ` +
         `are set in ${COUNT_WORDS[columns]} ${columns === 1 ? 'column' : 'columns'}. ` +
         'Choose fewer or smaller figures, or turn or enlarge the paper.',
     );
   }
-  if (scale < 1) {
-    remarks.push(
-      `The chosen figures are too wide for ${paper} at the chosen size of type; they are set smaller. ` +
-        'Choose fewer or smaller figures, or turn or enlarge the paper.',
-    );
-  }
+  if (scale < 1) remarks.push(smallerRemark(sheet));
   const height = rowHeightRemark(sheet);
   return height === null ? remarks : [...remarks, height];
 }

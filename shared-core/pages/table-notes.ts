@@ -1,3 +1,8 @@
+import { wordsOf } from '../languages/phrases.ts';
+import { adjustmentNote } from '../norms/adjustment-words.ts';
+import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormSet } from '../norms/norm-set.ts';
+import { say, type BlockWords } from './block-words.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import { paragraph } from './text-role.ts';
@@ -20,4 +25,19 @@ export function layTableNote(flow: SheetFlow, name: string, note: string | null)
   const height = heightOf(across, SMALL_PROSE);
   flow.need(height);
   flow.place(placeLines(across, SMALL_PROSE, { x: flow.left, top: flow.y, width: flow.width }), height);
+}
+
+/** Which ranks of a table of several groups were changed by hand, and why, group by group. */
+export function layAdjustmentNotes(
+  flow: SheetFlow,
+  { project }: NormSet,
+  groups: readonly GroupNorms[],
+  words: BlockWords,
+): void {
+  for (const norms of groups) {
+    const note = adjustmentNote(norms, wordsOf(project));
+    const { key, title } = norms.group;
+    const text = note === null ? null : say(words, 'across.note', { group: title, note });
+    layTableNote(flow, `adjustments ${key}`, text);
+  }
 }

@@ -45,6 +45,21 @@ export function rowHeightRemark({ rowType, rowHeight }: SheetChoices): string | 
   );
 }
 
+/** That the figures had to be set smaller than asked, as a sentence that tells what to do. */
+export function smallerRemark(sheet: SheetChoices): string {
+  return (
+    `The chosen figures are too wide for ${paperName(sheet)} at the chosen size of type; they are set smaller. ` +
+    'Choose fewer or smaller figures, or turn or enlarge the paper.'
+  );
+}
+
+const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
+
+/** "A4 landscape". */
+export function paperName({ paper, orientation }: SheetChoices): string {
+  return `${PAPER_NAMES[paper]} ${orientation}`;
+}
+
 function leastHeight(rowType: number): number {
   const tenths = rowType * LEAST_LEADING * 10;
   return Math.ceil(tenths - 1e-9) / 10;

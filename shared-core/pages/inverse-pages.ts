@@ -1,0 +1,45 @@
+import { wordsOf } from '../languages/phrases.ts';
+import { INVERSE_PERCENTILES } from '../norms/inverse-table.ts';
+import type { NormSet } from '../norms/norm-set.ts';
+import { rankColumn } from '../norms/table-columns.ts';
+import { layAcross } from './across-pages.ts';
+import type { AcrossTable } from './across-table.ts';
+import { layIntroduction } from './block-introduction.ts';
+import { openBlock } from './block-opening.ts';
+import type { BlockPages } from './block-pages.ts';
+import { say, type BlockWords } from './block-words.ts';
+import { figureCell } from './table-cells.ts';
+import { groupHeads } from './groups-across-pages.ts';
+
+/** One table of all groups: percentile ranks down, groups across, in each cell the raw score that reaches the rank. */
+export const inversePages: BlockPages = (context) => {
+  const { normSet, words } = context;
+  const flow = openBlock(context);
+  const good = normSet.project.tally?.scale.direction !== 'low-is-good';
+  layIntroduction(
+    flow,
+    context,
+    say(words, good ? 'inverse.lowest' : 'inverse.highest', { people: normSet.project.people }),
+  );
+  return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
+};
+
+function inverseAcross({ groups, project }: NormSet, words: BlockWords): AcrossTable {
+  const print = wordsOf(project);
+  return {
+    table: 'inverse-across',
+    rowHead: rankColumn(print).heading,
+    groups: groupHeads(groups, words, print),
+    scale: null,
+    rows: INVERSE_PERCENTILES.map((percentile, position) => ({
+      row: percentile,
+      scores: [],
+      head: figureCell(print, String(percentile)),
+      cells: groups.map(({ inverse }) => {
+        const row = inverse[position];
+        if (row?.percentile !== percentile) throw new RangeError('inverse tables list the same percentiles');
+        return figureCell(print, row.scoreText);
+      }),
+    })),
+  };
+}
