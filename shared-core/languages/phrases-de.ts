@@ -2,7 +2,14 @@ import { GERMAN_COLUMNS } from './german/columns.ts';
 import { GERMAN_FIT } from './german/fit.ts';
 import { GERMAN_METHOD } from './german/method.ts';
 import { GERMAN_SHEET } from './german/sheet.ts';
+import { GERMAN_WORKBOOK } from './german/workbook.ts';
 import type { Phrases } from './phrases.ts';
 
 /** Printed words in German. */
-export const GERMAN_PHRASES: Phrases = { ...GERMAN_SHEET, ...GERMAN_COLUMNS, ...GERMAN_METHOD, ...GERMAN_FIT };
+export const GERMAN_PHRASES: Phrases = {
+  ...GERMAN_SHEET,
+  ...GERMAN_COLUMNS,
+  ...GERMAN_METHOD,
+  ...GERMAN_FIT,
+  ...GERMAN_WORKBOOK,
+};

@@ -2,9 +2,16 @@ import { ENGLISH_COLUMNS } from './english/columns.ts';
 import { ENGLISH_FIT } from './english/fit.ts';
 import { ENGLISH_METHOD } from './english/method.ts';
 import { ENGLISH_SHEET } from './english/sheet.ts';
+import { ENGLISH_WORKBOOK } from './english/workbook.ts';
 
 /**
  * Every printed word, as templates. A key is named by where the words stand; `:one` and `:many` are chosen by a count.
  * What stands in braces is put in when the words are printed and stands in every language.
  */
-export const ENGLISH_PHRASES = { ...ENGLISH_SHEET, ...ENGLISH_COLUMNS, ...ENGLISH_METHOD, ...ENGLISH_FIT } as const;
+export const ENGLISH_PHRASES = {
+  ...ENGLISH_SHEET,
+  ...ENGLISH_COLUMNS,
+  ...ENGLISH_METHOD,
+  ...ENGLISH_FIT,
+  ...ENGLISH_WORKBOOK,
+} as const;

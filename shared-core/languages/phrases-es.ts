@@ -2,7 +2,14 @@ import { SPANISH_COLUMNS } from './spanish/columns.ts';
 import { SPANISH_FIT } from './spanish/fit.ts';
 import { SPANISH_METHOD } from './spanish/method.ts';
 import { SPANISH_SHEET } from './spanish/sheet.ts';
+import { SPANISH_WORKBOOK } from './spanish/workbook.ts';
 import type { Phrases } from './phrases.ts';
 
 /** Printed words in Spanish. */
-export const SPANISH_PHRASES: Phrases = { ...SPANISH_SHEET, ...SPANISH_COLUMNS, ...SPANISH_METHOD, ...SPANISH_FIT };
+export const SPANISH_PHRASES: Phrases = {
+  ...SPANISH_SHEET,
+  ...SPANISH_COLUMNS,
+  ...SPANISH_METHOD,
+  ...SPANISH_FIT,
+  ...SPANISH_WORKBOOK,
+};

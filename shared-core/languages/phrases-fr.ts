@@ -2,6 +2,7 @@ import { FRENCH_COLUMNS } from './french/columns.ts';
 import { FRENCH_FIT } from './french/fit.ts';
 import { FRENCH_METHOD } from './french/method.ts';
 import { FRENCH_SHEET } from './french/sheet.ts';
+import { FRENCH_WORKBOOK } from './french/workbook.ts';
 import { frenchSpaces } from './french/spaces.ts';
 import type { Phrases } from './phrases.ts';
 
@@ -11,4 +12,5 @@ export const FRENCH_PHRASES: Phrases = frenchSpaces({
   ...FRENCH_COLUMNS,
   ...FRENCH_METHOD,
   ...FRENCH_FIT,
+  ...FRENCH_WORKBOOK,
 });

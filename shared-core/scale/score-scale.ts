@@ -1,3 +1,4 @@
+import { ENGLISH_WORDS, figure, say } from '../languages/phrases.ts';
 import { decimalOf, unitsAt, type Decimal } from './decimal.ts';
 
 /** Whether a high raw score is the good end (number right) or the low one (seconds, errors). */
@@ -90,7 +91,9 @@ export function placeOnGrid(grid: ScaleGrid, score: Decimal): PlaceOnScale {
 }
 
 /** The scale in a few words: "0 to 40" or "0 to 20 in steps of 0.5". */
-export function scaleInWords(scale: ScoreScale): string {
-  const ends = `${scale.min} to ${scale.max}`;
-  return scale.step === 1 ? ends : `${ends} in steps of ${scale.step}`;
+export function scaleInWords(scale: ScoreScale, words = ENGLISH_WORDS): string {
+  const ends = { low: figure(words, String(scale.min)), high: figure(words, String(scale.max)) };
+  return scale.step === 1
+    ? say(words, 'scale.range', ends)
+    : say(words, 'scale.range-in-steps', { ...ends, step: figure(words, String(scale.step)) });
 }

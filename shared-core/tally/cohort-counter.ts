@@ -1,5 +1,5 @@
 import type { Reply } from '../desk.ts';
-import { LEFT_OUT_WORDS, type LeftOutRule, type Reading } from '../norms/reading.ts';
+import { leftOutInWords, type LeftOutRule, type Reading } from '../norms/reading.ts';
 import { parseDecimal, type DecimalMark } from '../scale/decimal.ts';
 import { scaleGrid, scaleProblems } from '../scale/score-scale.ts';
 import { countedColumns, type CountedColumns } from './cohort-counter-columns.ts';
@@ -179,7 +179,7 @@ function tallyCell(cell: GroupCell, placed: PlacedSlots, length: number, cluster
 function nothingKept({ rowsRead, leftOut }: RowFlow, reading: Reading): string {
   const [most] = leftOut.toSorted((left, right) => right.count - left.count);
   if (most === undefined) return 'The file has no rows below the heading.';
-  const words = LEFT_OUT_WORDS[most.rule];
+  const words = leftOutInWords(most.rule);
   const why =
     rowsRead === 1
       ? `The only row cannot be counted: it has ${words}.`

@@ -1,5 +1,5 @@
 import type { CohortSource } from '../../shared-core/norms/norm-project.ts';
-import { LEFT_OUT_WORDS } from '../../shared-core/norms/reading.ts';
+import { leftOutInWords } from '../../shared-core/norms/reading.ts';
 
 const ROWS_NAMED = 10;
 
@@ -11,7 +11,7 @@ export function leftOutLines({ rowsRead, rowsKept, leftOut }: CohortSource): rea
     ...leftOut.map(({ rule, count, rows }) => {
       const named = rows.slice(0, ROWS_NAMED).join(', ');
       const where = count === 1 ? `row ${named}` : `rows ${named}${count > ROWS_NAMED ? ' …' : ''}`;
-      return `  ${count}: ${LEFT_OUT_WORDS[rule]} (${where})`;
+      return `  ${count}: ${leftOutInWords(rule)} (${where})`;
     }),
   ];
 }

@@ -1,11 +1,14 @@
 import type { Worksheet } from 'exceljs';
+import { dateInLanguage } from '../../shared-core/languages/number-format.ts';
+import { say, sayCounted, wordsOf, type PrintWords } from '../../shared-core/languages/phrases.ts';
+import type { LeftOut } from '../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { adjustmentNote } from '../../shared-core/norms/adjustment-words.ts';
-import { LEFT_OUT_WORDS } from '../../shared-core/norms/reading.ts';
+import { leftOutInWords } from '../../shared-core/norms/reading.ts';
 import { methodText } from '../../shared-core/norms/statements.ts';
 import { fitFacts } from '../../shared-core/pages/fit-notes.ts';
 import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
-import { draftTitle } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, printedTitle } from '../../shared-core/pages/sheet-texts.ts';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
 import { asBold, asProse, asTitle, linesIn, ruleBelow } from './workbook-look.ts';
 import { rangeText, type NamedRange } from './workbook-names.ts';
@@ -21,9 +24,9 @@ const ROW_NUMBERS_SHOWN = 20;
  */
 export function fillAboutSheet(sheet: Worksheet, normSet: NormSet, ranges: readonly NamedRange[]): void {
   sheet.columns = WIDTHS.map((width) => ({ width }));
-  sheet.getCell(1, 1).value = draftTitle(normSet, 'About these tables');
+  sheet.getCell(1, 1).value = draftTitle(normSet, say(wordsOf(normSet.project), 'about.title'));
   asTitle(sheet.getCell(1, 1));
-  [...aboutLines(normSet), ...checkLines(ranges)].forEach(([name, value], index) => {
+  [...aboutLines(normSet), ...checkLines(wordsOf(normSet.project), ranges)].forEach(([name, value], index) => {
     const [left, right] = [sheet.getCell(index + 3, 1), sheet.getCell(index + 3, 2)];
     left.value = name;
     right.value = value;
@@ -43,59 +46,58 @@ function aboutLines({
   status,
   groups: norms,
 }: NormSet): readonly (readonly [string, string | number])[] {
+  const words = wordsOf(project);
   const { source, tally, release, groups } = project;
   const { population, sampling, participation, testDates, weighting } = groups.documentation;
   const lines: readonly (readonly [string, string | number])[] = [
-    ['Survey', project.title],
-    ['Subtitle', project.subtitle],
-    ['Edition', release.edition],
-    ['Date', release.date],
-    ['Check', check],
-    ['Status', status],
-    ['Scale', tally === null ? '' : scaleInWords(tally.scale)],
-    ['Method', methodText(project)],
+    [say(words, 'about.survey'), project.title],
+    [say(words, 'about.subtitle'), project.subtitle],
+    [say(words, 'about.edition'), release.edition],
+    [say(words, 'about.date'), dateInLanguage(release.date, words.numbers)],
+    [say(words, 'about.check'), check],
+    [say(words, 'about.status'), say(words, `about.status-${status}`)],
+    [say(words, 'about.scale'), tally === null ? '' : scaleInWords(tally.scale, words)],
+    [say(words, 'about.method'), methodText(project, words)],
     ...norms.flatMap((group): readonly (readonly [string, string])[] => [
-      [`Smoothing: ${group.group.title}`, smoothingSentence(project, group)],
-      [`Fit: ${group.group.title}`, fitFacts(project, group)],
-      [`Adjusted: ${group.group.title}`, adjustmentNote(group) ?? ''],
+      [say(words, 'about.smoothing', { group: printedTitle(project, group.group) }), smoothingSentence(project, group)],
+      [say(words, 'about.fit', { group: printedTitle(project, group.group) }), fitFacts(project, group)],
+      [say(words, 'about.adjusted', { group: printedTitle(project, group.group) }), adjustmentNote(group, words) ?? ''],
     ]),
-    ['How to read', project.sheet.howToRead],
-    ['Cautions', cautionsOf(project)],
-    ['Notes', project.sheet.notes],
-    ['Population', population],
-    ['Sampling', sampling],
-    ['Participation', participation],
-    ['Tested', testDates],
-    ['Weighting', weighting],
+    [say(words, 'about.how-to-read'), project.sheet.howToRead],
+    [say(words, 'about.cautions'), cautionsOf(project)],
+    [say(words, 'about.notes'), project.sheet.notes],
+    [say(words, 'about.population'), population],
+    [say(words, 'about.sampling'), sampling],
+    [say(words, 'about.participation'), participation],
+    [say(words, 'about.test-dates'), testDates],
+    [say(words, 'about.weighting'), weighting],
     ...(source === null
       ? []
       : ([
-          ['Source', source.kind === 'typed' ? 'counts typed in' : source.file],
-          ['SHA-256 of the source', source.sha256],
-          ['Rows read', source.rowsRead],
-          ['Rows kept', source.rowsKept],
-          ...source.leftOut.map(({ rule, count, rows }): readonly [string, string] => [
-            'Left out',
-            `${count} for ${LEFT_OUT_WORDS[rule]}${rowNumbers(rows, count)}`,
+          [say(words, 'about.source'), source.kind === 'typed' ? say(words, 'workbook.typed-in') : source.file],
+          [say(words, 'about.fingerprint'), source.sha256],
+          [say(words, 'about.rows-read'), source.rowsRead],
+          [say(words, 'about.rows-kept'), source.rowsKept],
+          ...source.leftOut.map((leftOut): readonly [string, string] => [
+            say(words, 'about.left-out'),
+            leftOutLine(words, leftOut),
           ]),
         ] as const)),
   ];
   return lines.filter(([, value]) => String(value).trim() !== '');
 }
 
-function checkLines(ranges: readonly NamedRange[]): readonly (readonly [string, string])[] {
+function checkLines(words: PrintWords, ranges: readonly NamedRange[]): readonly (readonly [string, string])[] {
   return [
-    [
-      'Workings',
-      'Each group has a sheet of workings, in which formulas make its printed ranks anew and compare them with the ' +
-        'table. Change a count there and they follow; the tables themselves hold values.',
-    ],
-    ['Names', ranges.map((range) => `${range.name} = ${rangeText(range)}`).join('\n')],
+    [say(words, 'about.workings'), say(words, 'about.workings-text')],
+    [say(words, 'about.names'), ranges.map((range) => `${range.name} = ${rangeText(range)}`).join('\n')],
   ];
 }
 
-function rowNumbers(rows: readonly number[], count: number): string {
-  if (rows.length === 0) return '';
+function leftOutLine(words: PrintWords, { rule, count, rows }: LeftOut): string {
+  const leftOut = say(words, 'about.left-out-for', { count: String(count), rule: leftOutInWords(rule, words) });
+  if (rows.length === 0) return leftOut;
   const shown = rows.slice(0, ROW_NUMBERS_SHOWN);
-  return `: ${shown.length === 1 ? 'row' : 'rows'} ${shown.join(', ')}${count > shown.length ? ' …' : ''}`;
+  const numbers = `${shown.join(', ')}${count > shown.length ? ' …' : ''}`;
+  return sayCounted(words, 'about.left-out-rows', String(shown.length), { 'left-out': leftOut, rows: numbers });
 }

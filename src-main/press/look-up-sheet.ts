@@ -1,10 +1,10 @@
 import type { Worksheet } from 'exceljs';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
-import { ENGLISH_WORDS } from '../../shared-core/languages/phrases.ts';
+import { ENGLISH_WORDS, say, wordsOf } from '../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { tableColumns } from '../../shared-core/norms/table-columns.ts';
+import { printedColumns } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf } from '../../shared-core/pages/group-method.ts';
-import { draftTitle, markedText, surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, markedText, printedTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { printCount } from '../../shared-core/scores/printed-number.ts';
 import { distinctTitles } from './sheet-names.ts';
 import { asBold, asHead, asLabel, asTitle, linesIn, proseRow, ruleBelow } from './workbook-look.ts';
@@ -31,8 +31,9 @@ const CHOICE_FILL = { type: 'pattern', pattern: 'solid', fgColor: { argb: 'FFF1E
  */
 export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet): void {
   const { project, groups } = normSet;
-  const titles = distinctTitles(groups.map(({ group }) => group.title));
-  const columns = tableColumns(project).filter(({ key }) => key !== 'score');
+  const titles = distinctTitles(groups.map(({ group }) => printedTitle(project, group)));
+  const words = wordsOf(project);
+  const columns = printedColumns(project).filter(({ key }) => key !== 'score');
   const example = groups[0];
   if (example === undefined) throw new RangeError('a norm set without groups');
   const exampleAt = Math.floor(example.rows.length / 2);
@@ -46,12 +47,12 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
   };
 
   sheet.columns = WIDTHS.map((width) => ({ width }));
-  sheet.getCell('A1').value = draftTitle(normSet, 'Look up a raw score');
+  sheet.getCell('A1').value = draftTitle(normSet, say(words, 'look-up.title'));
   asTitle(sheet.getCell('A1'));
   proseRow(sheet, 2, surveyName(project), 2, WIDTHS[0] + WIDTHS[1]);
-  sheet.getCell('A4').value = 'Group';
+  sheet.getCell('A4').value = say(words, 'look-up.group');
   sheet.getCell('A4').alignment = { vertical: 'top' };
-  sheet.getCell('A5').value = 'Raw score';
+  sheet.getCell('A5').value = say(words, 'look-up.raw-score');
   const group = sheet.getCell(GROUP_CELL);
   group.value = titles[0] ?? '';
   group.dataValidation = {
@@ -59,8 +60,8 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     allowBlank: false,
     formulae: [places.titles],
     showErrorMessage: true,
-    errorTitle: 'Group',
-    error: 'Choose a group from the list.',
+    errorTitle: say(words, 'look-up.group'),
+    error: say(words, 'look-up.choose-group'),
   };
   const score = sheet.getCell(SCORE_CELL);
   score.value = exampleRow.score;
@@ -70,8 +71,8 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     allowBlank: false,
     formulae: [example.rows[0]?.score ?? 0, example.rows.at(-1)?.score ?? 0],
     showErrorMessage: true,
-    errorTitle: 'Raw score',
-    error: 'Type a raw score of the scale.',
+    errorTitle: say(words, 'look-up.raw-score'),
+    error: say(words, 'look-up.type-score'),
   };
   for (const cell of [group, score]) {
     cell.fill = CHOICE_FILL;
@@ -94,7 +95,9 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     for (const part of [name, cell]) ruleBelow(part, index === columns.length - 1 ? 'strong' : 'fine');
   });
   const people = FIRST_RESULT_ROW + columns.length;
-  sheet.getCell(people, 1).value = `Number of ${project.people} in the group`;
+  sheet.getCell(people, 1).value = say(words, 'look-up.people', {
+    people: say(words, `people.${project.people}`),
+  });
   sheet.getCell(people, 2).value = {
     formula: `IFERROR(INDEX(${places.counts},${groupFormula(titles.length, places)}),"")`,
     result: printCount(example.summary.n),
@@ -117,8 +120,17 @@ interface ListPlaces {
 
 function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]): ListPlaces {
   const { groups } = normSet;
-  const columns = tableColumns(normSet.project).filter(({ key }) => key !== 'score');
-  const heads = ['Group', 'Raw score', ...columns.map(({ name }) => name), '', 'Groups', 'n', 'Row found'];
+  const words = wordsOf(normSet.project);
+  const columns = printedColumns(normSet.project).filter(({ key }) => key !== 'score');
+  const heads = [
+    say(words, 'look-up.group'),
+    say(words, 'look-up.raw-score'),
+    ...columns.map(({ name }) => name),
+    '',
+    say(words, 'look-up.groups'),
+    'n',
+    say(words, 'look-up.row-found'),
+  ];
   heads.forEach((head, index) => {
     list.getCell(1, index + 1).value = head;
     if (head !== '') asHead(list.getCell(1, index + 1));
@@ -184,8 +196,10 @@ function onList(cell: string): string {
 }
 
 function notFound({ project }: NormSet): string {
-  const scores = project.tally === null ? '' : ` from ${scaleInWords(project.tally.scale)}`;
-  return `Not in the table. Choose a group from the list and type a raw score${scores}.`;
+  const words = wordsOf(project);
+  return say(words, 'look-up.not-found', {
+    scale: project.tally === null ? '' : scaleInWords(project.tally.scale, words),
+  });
 }
 
 function textInFormula(text: string): string {

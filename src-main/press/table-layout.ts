@@ -1,7 +1,8 @@
+import { wordsOf } from '../../shared-core/languages/phrases.ts';
 import { adjustmentNote } from '../../shared-core/norms/adjustment-words.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { tableColumns, type TableColumn } from '../../shared-core/norms/table-columns.ts';
+import { printedColumns, type TableColumn } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf, smoothingSentence } from '../../shared-core/pages/group-method.ts';
 import { editionLine, sampleFacts, sheetSubtitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { unroundedColumns, type UnroundedColumn } from './unrounded-columns.ts';
@@ -33,7 +34,7 @@ export interface TablePlaces {
 /** The one description of a table sheet: the press fills the sheet by it, and whoever reads the sheet finds cells by it. */
 export function tableSheetLayout(normSet: NormSet, norms: GroupNorms): TableSheetLayout {
   const { project } = normSet;
-  const columns = tableColumns(project);
+  const columns = printedColumns(project);
   const unrounded = unroundedColumns(project, norms);
   const prose = [
     surveyName(project),
@@ -44,7 +45,7 @@ export function tableSheetLayout(normSet: NormSet, norms: GroupNorms): TableShee
     project.sheet.howToRead,
     cautionsOf(project),
     project.sheet.notes,
-    adjustmentNote(norms) ?? '',
+    adjustmentNote(norms, wordsOf(project)) ?? '',
   ].filter((text) => text.trim() !== '');
   const headRow = prose.length + 3;
   return {

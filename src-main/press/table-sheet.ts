@@ -2,6 +2,7 @@ import type { Worksheet } from 'exceljs';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { cellText, draftTitle, editionLine, sheetTitle } from '../../shared-core/pages/sheet-texts.ts';
+import { headInOneLine } from '../../shared-core/pages/spoken-text.ts';
 import { inFives } from '../../shared-core/pages/row-blocks.ts';
 import type { TableSheetLayout } from './table-layout.ts';
 import { rankCell, typedCell } from './typed-cell.ts';
@@ -27,10 +28,7 @@ export function fillTableSheet(
   sheet.columns = Array.from({ length: proseColumns }, () => ({ width: COLUMN_WIDTH }));
   titleRow(sheet, draftTitle(normSet, sheetTitle(project, norms)), proseColumns, across);
   prose.forEach((text, index) => proseRow(sheet, index + 2, text, proseColumns, across));
-  const heads = [
-    ...columns.map(({ heading }) => heading.join(' ').replace('- ', '')),
-    ...unrounded.map(({ head }) => head),
-  ];
+  const heads = [...columns.map(({ heading }) => headInOneLine(heading)), ...unrounded.map(({ head }) => head)];
   heads.forEach((head, index) => {
     const cell = sheet.getCell(headRow, index + 1);
     cell.value = head;

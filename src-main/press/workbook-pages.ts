@@ -1,4 +1,6 @@
 import type { Worksheet } from 'exceljs';
+import { dateInLanguage } from '../../shared-core/languages/number-format.ts';
+import { printWords, say, wordsOf } from '../../shared-core/languages/phrases.ts';
 import type { SheetChoices } from '../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { draftTitle } from '../../shared-core/pages/sheet-texts.ts';
@@ -27,6 +29,7 @@ const SEPARATOR = ' \u00b7 ';
  * page across. The foot tells the edition and, in a line of its own, the page, so that the two cannot run together.
  */
 export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string, across: number): void {
+  const page = say(printWords(choices.language), 'workbook.page', { page: '&P', pages: '&N' });
   const { number, sides } = PAPER[choices.paper];
   const room = (side: number): number => side - (MARGINS.left + MARGINS.right) * POINTS_IN_AN_INCH;
   const needed = across * CHARACTER * SMALLEST_SCALE;
@@ -41,7 +44,7 @@ export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string
   });
   const lines = footLines(foot, Math.floor(room(sides[landscape ? 1 : 0]) / FOOT_CHARACTER));
   // A space keeps the size of the type apart from a text that begins with a digit.
-  sheet.headerFooter.oddFooter = [...lines.map((line) => line.replaceAll('&', '&&')), 'Page &P of &N']
+  sheet.headerFooter.oddFooter = [...lines.map((line) => line.replaceAll('&', '&&')), page]
     .map((line, index) => `${index === 0 ? '&L' : ''}&${FOOT_SIZE} ${line}`)
     .join('\n');
 }
@@ -49,9 +52,13 @@ export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string
 /** The foot of a sheet that is of no single group. */
 export function editionFoot(normSet: NormSet): string {
   const edition = normSet.project.release.edition.trim();
+  const words = wordsOf(normSet.project);
   return draftTitle(
     normSet,
-    [...(edition === '' ? [] : [`Edition ${edition}`]), `check ${normSet.check}`].join(SEPARATOR),
+    [
+      ...(edition === '' ? [] : [say(words, 'foot.edition', { edition })]),
+      say(words, 'foot.check', { check: normSet.check }),
+    ].join(SEPARATOR),
   );
 }
 
@@ -79,15 +86,19 @@ export function colophonRow(sheet: Worksheet, row: number, normSet: NormSet, col
 
 function colophonText({ project, check }: NormSet): string {
   const { release, source } = project;
+  const words = wordsOf(project);
+  const edition = release.edition.trim();
   const origin =
     source === null
       ? []
-      : [`${source.kind === 'typed' ? 'counts typed in' : `source ${source.file}`}, SHA-256 ${source.sha256}`];
+      : [
+          `${source.kind === 'typed' ? say(words, 'workbook.typed-in') : say(words, 'workbook.source', { file: source.file })}, SHA-256 ${source.sha256}`,
+        ];
   return [
-    'Made with Normloom',
-    ...(release.edition.trim() === '' ? [] : [`edition ${release.edition.trim()}`]),
-    ...(release.date === '' ? [] : [release.date]),
-    `check ${check}`,
+    say(words, 'workbook.made-with'),
+    ...(edition === '' ? [] : [say(words, 'workbook.edition', { edition })]),
+    ...(release.date === '' ? [] : [dateInLanguage(release.date, words.numbers)]),
+    say(words, 'foot.check', { check }),
     ...origin,
   ].join(SEPARATOR);
 }

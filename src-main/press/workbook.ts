@@ -1,7 +1,7 @@
 import ExcelJS from 'exceljs';
 import JSZip from 'jszip';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
-import { draftTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
+import { draftTitle, printedTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { ABOUT, fillAboutSheet } from './about-sheet.ts';
 import { fillLookUp, LOOK_UP, LOOK_UP_ROWS } from './look-up-sheet.ts';
 import { releaseDay } from './release-day.ts';
@@ -21,8 +21,8 @@ export interface GroupSheets {
   readonly workings: string;
 }
 
-export function groupSheets({ groups }: NormSet): readonly GroupSheets[] {
-  const titles = groups.map(({ group }) => group.title);
+export function groupSheets({ groups, project }: NormSet): readonly GroupSheets[] {
+  const titles = groups.map(({ group }) => printedTitle(project, group));
   const standing = [LOOK_UP, LOOK_UP_ROWS, ABOUT];
   const tables = sheetNames(titles, standing);
   const workings = sheetNames(

@@ -2,7 +2,7 @@ import type { Workbook } from 'exceljs';
 import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
-import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
+import { markedText, printedTitle } from '../../../shared-core/pages/sheet-texts.ts';
 import { FIRST_RESULT_ROW, GROUP_CELL, LOOK_UP, LOOK_UP_ROWS, SCORE_CELL } from '../look-up-sheet.ts';
 import { distinctTitles } from '../sheet-names.ts';
 import type { CellComparison } from './cell-differences.ts';
@@ -17,7 +17,7 @@ export function readLookUp(comparison: CellComparison, workbook: Workbook, normS
     comparison.compare({ where: 'workbook', group: '', score: '', column: 'sheet' }, name, '');
   if (sheet === undefined || list === undefined) return;
   const { groups, project } = normSet;
-  const titles = distinctTitles(groups.map(({ group }) => group.title));
+  const titles = distinctTitles(groups.map(({ group }) => printedTitle(project, group)));
   const columns = tableColumns(project).filter(({ key }) => key !== 'score');
   let at = 1;
   groups.forEach(({ rows, group }, index) => {

@@ -1,7 +1,8 @@
 import ExcelJS, { type Cell, type Worksheet } from 'exceljs';
 import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
-import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
+import { printedColumns, tableColumns } from '../../../shared-core/norms/table-columns.ts';
+import { headInOneLine } from '../../../shared-core/pages/spoken-text.ts';
 import { draftTitle, markedText, sheetTitle } from '../../../shared-core/pages/sheet-texts.ts';
 import { unroundedColumns } from '../unrounded-columns.ts';
 import { CellComparison, type CellPlace, type FileReadBack } from './cell-differences.ts';
@@ -38,7 +39,7 @@ function readTable(comparison: CellComparison, sheet: Worksheet, normSet: NormSe
   const columns = tableColumns(normSet.project);
   const unrounded = unroundedColumns(normSet.project, norms);
   const heads = [
-    ...columns.map(({ heading }) => heading.join(' ').replace('- ', '')),
+    ...printedColumns(normSet.project).map(({ heading }) => headInOneLine(heading)),
     ...unrounded.map(({ head }) => head),
   ];
   const headRow = headRowOf(sheet, heads);
