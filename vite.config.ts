@@ -12,6 +12,7 @@ const PROGRAMS = {
   'command-line': 'src-main/command-line/main.ts',
   'tally-worker': 'src-main/cohort-file/tally-worker.ts',
   'press-worker': 'src-main/press/press-worker.ts',
+  'erratum-worker': 'src-main/erratum/erratum-worker.ts',
 } as const;
 
 const programs = Object.fromEntries(

@@ -106,10 +106,51 @@ export interface DrawnPages {
   readonly remarks: readonly string[];
 }
 
+/** People of a roster whom a new edition concerns: rows = unchanged + changed + unplaced. */
+export interface ErratumPeople {
+  readonly rows: number;
+  readonly unchanged: number;
+  readonly changed: number;
+  /** Not found in both editions. */
+  readonly unplaced: number;
+  /** Of the changed ones: those who now stand on another side of a cut. */
+  readonly crossing: number;
+  /** The first of them, in the order of the roster. */
+  readonly changedFirst: readonly {
+    readonly row: number;
+    readonly person: string;
+    readonly group: string;
+    readonly score: string;
+    readonly changes: readonly string[];
+  }[];
+  readonly unplacedFirst: readonly { readonly row: number; readonly person: string; readonly problem: string }[];
+}
+
+export interface Erratum {
+  /** Null where no roster was given. */
+  readonly people: ErratumPeople | null;
+  /** Where its files lie; null where it was only looked at. */
+  readonly written: { readonly folder: string; readonly files: readonly PressedFile[] } | null;
+}
+
+/** A list of people and the columns that are read of it. It is never kept with a project. */
+export interface RosterChoice {
+  readonly handle: FileHandle;
+  readonly reading: Reading;
+  readonly columns: {
+    readonly score: string;
+    /** Names or codes; null where people are told by their row. */
+    readonly person: string | null;
+    /** One column for each grouping column of the project, in that order. */
+    readonly by: readonly string[];
+  };
+}
+
 export type JobResult =
   | { readonly kind: 'tallied'; readonly tallied: TalliedCohort }
   | { readonly kind: 'pressed'; readonly pressed: Pressed }
-  | { readonly kind: 'drawn'; readonly drawn: DrawnPages };
+  | { readonly kind: 'drawn'; readonly drawn: DrawnPages }
+  | { readonly kind: 'erratum'; readonly erratum: Erratum };
 
 export type JobState =
   | { readonly state: 'running'; /** 0–1 */ readonly progress: number; readonly doing: string }
@@ -193,6 +234,18 @@ export interface DeskRequests {
   press: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
   /** The same, and the edition is frozen: refused while something is missing, or where its number was used before. */
   release: { ask: { readonly project: NormProject; readonly name: string }; answer: { readonly job: string } };
+  /** The erratum of an earlier edition; with `write`, its files go into a folder of their own. */
+  'make-erratum': {
+    ask: {
+      readonly before: NormProject;
+      readonly after: NormProject;
+      readonly roster: RosterChoice | null;
+      /** Percentile rank that decides something, as it was typed; empty for none. */
+      readonly cut: string;
+      readonly write: boolean;
+    };
+    answer: { readonly job: string };
+  };
   'job-state': { ask: { readonly job: string }; answer: JobState };
   'cancel-job': { ask: { readonly job: string }; answer: null };
   /** Shows the folder of the last press in the file manager, where the host can. */
@@ -217,6 +270,7 @@ export const DESK_REQUESTS = [
   'draw-pages',
   'press',
   'release',
+  'make-erratum',
   'job-state',
   'cancel-job',
   'show-pressed',

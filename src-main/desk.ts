@@ -1,6 +1,7 @@
 import { lookAtCohort } from './cohort-file/look-at-cohort.ts';
 import { startTallyJob } from './cohort-file/tally-job.ts';
 import { openDesk, type DeskHost, type DeskOptions } from './desk/desk-host.ts';
+import { startErratumJob } from './erratum/erratum-job.ts';
 import { startPressJob } from './press/press-job.ts';
 
 export type { DeskHost, DeskOptions } from './desk/desk-host.ts';
@@ -14,6 +15,7 @@ export function createDesk(options: DeskOptions): DeskHost {
       const reply = await startTallyJob(workers.tally, path, file, reading, hooks, signal);
       return reply.ok ? { ok: true, value: { kind: 'tallied', tallied: reply.value } } : reply;
     },
+    erratum: (request, hooks, signal) => startErratumJob(request, hooks, signal, workers.erratum),
     press: (request, hooks, signal) => startPressJob(request, hooks, signal, workers.press),
   });
 }

@@ -101,7 +101,7 @@ function rowInWords(row: RowChange): string {
 }
 
 /** "percentile rank 24 → 25; stanine 4 → 5" */
-export function cellsInWords(cells: readonly CellChange[]): string {
+function cellsInWords(cells: readonly CellChange[]): string {
   return cells.map(namedCell).join('; ');
 }
 

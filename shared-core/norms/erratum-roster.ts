@@ -1,9 +1,10 @@
-import { compareRatios, type ExactRatio } from '../percentile/exact-ratio.ts';
-import { parseDecimal, type DecimalMark } from '../scale/decimal.ts';
+import { compareRatios, compareToWhole, ratio, type ExactRatio } from '../percentile/exact-ratio.ts';
+import { parseDecimal, powerOfTen, type DecimalMark } from '../scale/decimal.ts';
 import { placeOnGrid, scaleGrid, scaleInWords, type PlaceOnScale } from '../scale/score-scale.ts';
 import type { ConversionRow } from './conversion-table.ts';
 import { groupAlike } from './edition-compare-pairs.ts';
 import { changedCells, comparedColumns, type CellChange } from './edition-compare.ts';
+import { crossedCuts, type CrossedCut } from './erratum-cuts.ts';
 import { groupKey } from './norm-groups.ts';
 import type { NormSet } from './norm-set.ts';
 
@@ -29,6 +30,14 @@ export interface Cut {
   readonly rank: ExactRatio;
 }
 
+/** A percentile rank from 0 to 100 as it is typed; null for anything else. */
+export function cutFromText(text: string): Cut | null {
+  const decimal = parseDecimal(text);
+  const rank = decimal === null ? null : ratio(decimal.units, powerOfTen(decimal.decimals));
+  if (rank === null || compareToWhole(rank, 0n) < 0 || compareToWhole(rank, 100n) > 0) return null;
+  return { text: text.trim(), rank };
+}
+
 export type SideOfCut = 'at or below' | 'above';
 
 export interface ChangedPerson {
@@ -38,10 +47,12 @@ export interface ChangedPerson {
   readonly scoreText: string;
   /** Printed percentile ranks, changed or not. */
   readonly ranks: { readonly before: string; readonly after: string };
-  /** Printed rank and derived scores that differ; empty where only the side of the cut does. */
+  /** Printed rank and derived scores that differ; empty where only the side of a cut does. */
   readonly cells: readonly CellChange[];
   /** Null where there is no cut or the side stays. */
   readonly side: { readonly before: SideOfCut; readonly after: SideOfCut } | null;
+  /** Cut scores of both editions on whose other side the person stands now. */
+  readonly crossed: readonly CrossedCut[];
 }
 
 /** Everybody of a roster: people = unchanged + changed + unplaced. */
@@ -61,8 +72,8 @@ export type RosterFollowed =
 const OF_A_PERSON: ReadonlySet<string> = new Set(['rank', 'z', 't', 'nce', 'deviation', 'sten', 'stanine']);
 
 /**
- * The people whose printed rank or derived scores differ between two editions, or whose unrounded rank lies on another
- * side of a cut, in the order of the roster. Refused where the editions group people by different columns.
+ * The people whose printed rank or derived scores differ between two editions, whose unrounded rank lies on another side
+ * of a cut, or whose raw score lies on another side of a cut score that was moved, in the order of the roster. Refused where the editions group people by different columns.
  */
 export function followRoster(before: NormSet, after: NormSet, roster: Roster, cut: Cut | null): RosterFollowed {
   if (!groupAlike(before, after)) {
@@ -88,9 +99,10 @@ export function followRoster(before: NormSet, after: NormSet, roster: Roster, cu
     }
     const cells = changedCells(old.row, now.row, columns);
     const side = cut === null ? null : changedSide(old.row, now.row, cut);
-    if (cells.length === 0 && side === null) continue;
+    const crossed = crossedCuts(before.project, after.project, old.key, old.row.score);
+    if (cells.length === 0 && side === null && crossed.length === 0) continue;
     const ranks = { before: old.row.printed, after: now.row.printed };
-    changed.push({ of, group: now.group, scoreText: now.row.scoreText, ranks, cells, side });
+    changed.push({ of, group: now.group, scoreText: now.row.scoreText, ranks, cells, side, crossed });
   }
   const people = roster.people.length;
   const unchanged = people - changed.length - unplaced.length;
@@ -98,7 +110,7 @@ export function followRoster(before: NormSet, after: NormSet, roster: Roster, cu
 }
 
 type Found =
-  | { readonly ok: true; readonly group: string; readonly row: ConversionRow }
+  | { readonly ok: true; readonly group: string; readonly key: string; readonly row: ConversionRow }
   | { readonly ok: false; readonly problem: string };
 
 /** Finds the row of a person in an edition; the problem goes on after "in the old edition". */
@@ -114,7 +126,7 @@ function finder(set: NormSet, mark: DecimalMark): (person: RosterPerson) => Foun
     }
     const place = placeOnGrid(scaleGrid(scale), decimal);
     const row = typeof place === 'number' ? norms.rows[place] : undefined;
-    if (row !== undefined) return { ok: true, group: norms.group.title, row };
+    if (row !== undefined) return { ok: true, group: norms.group.title, key: norms.group.key, row };
     return { ok: false, problem: `${score} ${PLACE_WORDS[place]}, ${scaleInWords(scale)}` };
   };
 }

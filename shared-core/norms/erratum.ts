@@ -1,13 +1,13 @@
 import { printCount } from '../scores/printed-number.ts';
 import { COHORT_FINGERPRINT, type TextChange } from './edition-compare-choices.ts';
 import {
-  cellsInWords,
   changeInWords,
   columnLines,
   counted,
   differencesInWords,
   editionInWords,
   groupLines,
+  namedCell,
 } from './edition-compare-words.ts';
 import { printsTheSame, type EditionComparison } from './edition-compare.ts';
 import type { ChangedPerson, FollowedRoster, RosterPerson } from './erratum-roster.ts';
@@ -65,6 +65,9 @@ function cautionsOf(comparison: EditionComparison, roster: FollowedRoster | null
     ...(changed(({ what }) => what === COHORT_FINGERPRINT)
       ? ['The new edition was made from another file: the numbers may differ because the people do.']
       : []),
+    ...(changed(({ what }) => what.startsWith('cut score '))
+      ? ['Cut scores changed: look again at every decision that was taken by one of them.']
+      : []),
     ...(changed(({ what }) => OTHER_QUESTION.has(what))
       ? ['Definition, direction or scale changed: a new rank beside an old one is no gain or loss of anybody.']
       : []),
@@ -86,10 +89,13 @@ function rosterLines({ people, cut, unchanged, changed, unplaced }: FollowedRost
     `${printCount(unplaced.length)} not found in both editions`,
   ];
   const crossing = changed.filter(({ side }) => side !== null).length;
+  const moved = changed.filter(({ crossed }) => crossed.length > 0).length;
   const verb = crossing === 1 ? 'changes' : 'change';
   const crossed = cut === null ? '' : `; ${printCount(crossing)} ${verb} the side of ${cut.text}`;
+  const atCuts =
+    moved === 0 ? '' : `; ${printCount(moved)} ${moved === 1 ? 'changes' : 'change'} the side of a cut score`;
   return [
-    ...headed('People of the roster', [`${counted(people, 'row')}: ${parts.join(', ')}${crossed}.`]),
+    ...headed('People of the roster', [`${counted(people, 'row')}: ${parts.join(', ')}${crossed}${atCuts}.`]),
     ...headed(
       'Changed for',
       changed.map((person) => changedInWords(person, cut?.text ?? '')),
@@ -101,18 +107,27 @@ function rosterLines({ people, cut, unchanged, changed, unplaced }: FollowedRost
   ];
 }
 
-function changedInWords({ of, group, scoreText, ranks, cells, side }: ChangedPerson, cut: string): string {
+function changedInWords(person: ChangedPerson, cut: string): string {
+  const { of, group, scoreText } = person;
+  return `${personInWords(of)} (${group}, raw score ${scoreText}): ${changesOf(person, cut).join('; ')}`;
+}
+
+/** What changes for a person, each change in a few words; `cut` is the text of the rank that decides. */
+export function changesOf({ ranks, cells, side, crossed }: ChangedPerson, cut: string): readonly string[] {
   const rankStays = !cells.some(({ column }) => column === 'rank');
-  const parts = [
+  return [
     ...(rankStays ? [`percentile rank stays ${ranks.after}`] : []),
-    ...(cells.length === 0 ? [] : [cellsInWords(cells)]),
+    ...cells.map(namedCell),
     ...(side === null ? [] : [`${side.before} ${cut} → ${side.after} ${cut}`]),
+    ...crossed.map(
+      ({ name, before, after, nowGood }) =>
+        `cut ${name} ${before} → ${after}: now on its ${nowGood ? 'good side' : 'other side'}`,
+    ),
   ];
-  return `${personInWords(of)} (${group}, raw score ${scoreText}): ${parts.join('; ')}`;
 }
 
 /** The person's name or code in one line, or the row where there is none. */
-function personInWords({ person, row }: RosterPerson): string {
+export function personInWords({ person, row }: RosterPerson): string {
   return person.replace(/\s+/g, ' ').trim() || `row ${row}`;
 }
 

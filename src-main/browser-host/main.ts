@@ -21,7 +21,11 @@ async function run(words: StartWords): Promise<void> {
     dataFolder: data,
     projectsFolder: words.folder ?? projectsFolder(process.env),
     assetsFolder: join(ROOT, 'assets'),
-    workers: { tally: builtFile('tally-worker.js'), press: builtFile('press-worker.js') },
+    workers: {
+      tally: builtFile('tally-worker.js'),
+      press: builtFile('press-worker.js'),
+      erratum: builtFile('erratum-worker.js'),
+    },
     dialogs: null,
     showFolder: display ? showFolder : null,
     openedWith: words.file,

@@ -1,7 +1,5 @@
 import type { Reply } from '../../shared-core/desk.ts';
-import type { Cut } from '../../shared-core/norms/erratum-roster.ts';
-import { compareToWhole, ratio } from '../../shared-core/percentile/exact-ratio.ts';
-import { parseDecimal, powerOfTen } from '../../shared-core/scale/decimal.ts';
+import { cutFromText, type Cut } from '../../shared-core/norms/erratum-roster.ts';
 import { cohortOptions, type CohortOptions } from './cohort-options.ts';
 import { readOrSay, textGiven, WrongOption, type OptionValues } from './option-values.ts';
 
@@ -39,10 +37,7 @@ export function erratumOptions(values: OptionValues): Reply<ErratumOptions> {
 }
 
 function readCut(text: string): Cut {
-  const decimal = parseDecimal(text);
-  const rank = decimal === null ? null : ratio(decimal.units, powerOfTen(decimal.decimals));
-  if (rank === null || compareToWhole(rank, 0n) < 0 || compareToWhole(rank, 100n) > 0) {
-    throw new WrongOption(`--cut is a percentile rank from 0 to 100, such as 25, not "${text}".`);
-  }
-  return { text: text.trim(), rank };
+  const cut = cutFromText(text);
+  if (cut === null) throw new WrongOption(`--cut is a percentile rank from 0 to 100, such as 25, not "${text}".`);
+  return cut;
 }

@@ -30,6 +30,19 @@ export const ASK_SCHEMAS: AskSchemas = {
   'draw-pages': v.object({ project: normProjectSchema }),
   press: v.object({ project: normProjectSchema, name }),
   release: v.object({ project: normProjectSchema, name }),
+  'make-erratum': v.object({
+    before: normProjectSchema,
+    after: normProjectSchema,
+    roster: v.nullable(
+      v.object({
+        handle,
+        reading: reading.wrapped,
+        columns: v.object({ score: name, person: v.nullable(name), by: v.array(name) }),
+      }),
+    ),
+    cut: v.pipe(v.string(), v.maxLength(40)),
+    write: v.boolean(),
+  }),
   'job-state': v.object({ job }),
   'cancel-job': v.object({ job }),
   'show-pressed': nothing,

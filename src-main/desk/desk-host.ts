@@ -42,7 +42,7 @@ export interface DeskOptions {
   /** Where new projects and pressed files go; made on the first save. */
   readonly projectsFolder: string;
   readonly assetsFolder: string;
-  readonly workers: { readonly tally: URL; readonly press: URL };
+  readonly workers: { readonly tally: URL; readonly press: URL; readonly erratum: URL };
   readonly dialogs: Dialogs | null;
   readonly showFolder: ((folder: string) => Promise<void>) | null;
   /** A project or cohort file the program was opened with. */
@@ -116,6 +116,15 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
       answered({ job: jobs.start((hooks, signal) => work.press({ kind: 'draw', project }, hooks, signal)) }),
     press: (ask) => answered({ job: jobs.start((hooks, signal) => pressRoom.press('press', ask, hooks, signal)) }),
     release: (ask) => answered({ job: jobs.start((hooks, signal) => pressRoom.press('release', ask, hooks, signal)) }),
+    'make-erratum': (ask) => {
+      const { roster } = ask;
+      const file = roster === null ? null : handles.find(roster.handle);
+      if (roster !== null && file === null) return refused(UNKNOWN_FILE);
+      const people = roster === null || file === null ? null : { ...roster, path: file.path, file: file.name };
+      return answered({
+        job: jobs.start((hooks, signal) => pressRoom.erratum(ask, people, hooks, signal)),
+      });
+    },
     'job-state': ({ job }) => {
       const state = jobs.collect(job);
       return state === null

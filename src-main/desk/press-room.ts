@@ -2,6 +2,7 @@ import type { DeskRequests, JobResult, PressedFile, Reply } from '../../shared-c
 import { codeOf, diskTrouble } from '../project-file/disk-trouble.ts';
 import { cleanFileName } from '../project-file/file-name.ts';
 import { asCalledHere } from './called-here.ts';
+import type { ErratumRequest } from '../erratum/make-erratum.ts';
 import type { DeskWork } from './desk-work.ts';
 import type { JobHooks } from './jobs.ts';
 import type { PressedFor, PressFolders } from './press-folders.ts';
@@ -43,6 +44,34 @@ export class PressRoom {
       return answered(reply.value.pressed);
     });
     return pressed.ok ? answered({ kind: 'pressed', pressed: pressed.value }) : pressed;
+  }
+
+  /** Follows the people of a roster, and writes the erratum into a folder that is none of a release. */
+  async erratum(
+    { before, after, cut, write }: DeskRequests['make-erratum']['ask'],
+    roster: ErratumRequest['roster'],
+    hooks: JobHooks,
+    signal: AbortSignal,
+  ): Promise<Reply<JobResult>> {
+    const asked = { before, after, roster, cut } as const;
+    if (!write) {
+      const looked = await this.#work.erratum({ ...asked, folder: null }, hooks, signal);
+      return looked.ok
+        ? answered({ kind: 'erratum', erratum: { people: looked.value.people, written: null } })
+        : looked;
+    }
+    const { title, subtitle } = before;
+    const { edition } = before.release;
+    // What can be handed out and what holds people lie apart.
+    const people = roster === null ? '' : ', people';
+    const name = cleanFileName(`${title} – erratum of edition ${edition}${people}`, 'Erratum');
+    const written = await this.#inOwnFolder({ name, title, subtitle, edition }, signal, async (staged) => {
+      const made = await this.#work.erratum({ ...asked, folder: staged }, hooks, signal);
+      return made.ok ? answered({ ...made.value, editionFile: null }) : made;
+    });
+    if (!written.ok) return written;
+    const { files, folder } = written.value;
+    return answered({ kind: 'erratum', erratum: { people: written.value.people, written: { folder, files } } });
   }
 
   /** Opens the folder that was last written to, where the host can. */

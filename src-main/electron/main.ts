@@ -65,6 +65,7 @@ const start = async (): Promise<void> => {
     workers: {
       tally: new URL('./tally-worker.js', import.meta.url),
       press: new URL('./press-worker.js', import.meta.url),
+      erratum: new URL('./erratum-worker.js', import.meta.url),
     },
     dialogs: nativeDialogs(() => window, remember),
     showFolder,

@@ -1,5 +1,6 @@
-import type { JobResult, Reply } from '../../shared-core/desk.ts';
+import type { JobResult } from '../../shared-core/desk.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
+import type { ThreadReport } from '../thread-job.ts';
 
 /** What a press worker is started with; plain JSON. */
 export type PressRequest =
@@ -7,9 +8,7 @@ export type PressRequest =
   | { readonly kind: 'press' | 'release'; readonly project: NormProject; readonly folder: string };
 
 /** What a press worker reports; plain JSON. */
-export type PressReport =
-  | { readonly kind: 'progress'; readonly progress: number; readonly doing: string }
-  | { readonly kind: 'result'; readonly reply: Reply<JobResult> };
+export type PressReport = ThreadReport<JobResult>;
 
 export function isPressRequest(value: unknown): value is PressRequest {
   return typeof value === 'object' && value !== null && 'kind' in value && 'project' in value;

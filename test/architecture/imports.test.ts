@@ -38,7 +38,7 @@ const RULES: readonly (readonly [string, Rule])[] = [
         'valibot',
         '@expo-google-fonts/*',
       ],
-      ['src-main/project-file', 'src-main/program-version.ts'],
+      ['src-main/project-file', 'src-main/program-version.ts', 'src-main/thread-job.ts'],
     ),
   ],
   ['src-main/project-file', host(['write-file-atomic', 'valibot'], [])],

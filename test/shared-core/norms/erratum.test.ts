@@ -68,6 +68,7 @@ describe('the people of a roster', () => {
         ranks: { before: '20', after: '25' },
         cells: [{ column: 'rank', name: 'percentile rank', before: '20', after: '25' }],
         side: null,
+        crossed: [],
       },
     ]);
   });

@@ -25,6 +25,7 @@ export async function buildHost(): Promise<string> {
           'browser-host': here('../../../src-main/browser-host/main.ts'),
           'tally-worker': here('../../../src-main/cohort-file/tally-worker.ts'),
           'press-worker': here('../../../src-main/press/press-worker.ts'),
+          'erratum-worker': here('../../../src-main/erratum/erratum-worker.ts'),
         },
         output: { entryFileNames: '[name].js', chunkFileNames: '[name]-[hash].js' },
       },

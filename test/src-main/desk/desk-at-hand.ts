@@ -7,6 +7,7 @@ import { editionToText } from '../../../shared-core/norms/edition-file.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
 import { openDesk, type DeskHost, type DeskOptions } from '../../../src-main/desk/desk-host.ts';
+import { makeErratum } from '../../../src-main/erratum/make-erratum.ts';
 import { editionFileName } from '../../../src-main/press/released-editions.ts';
 import type { DeskWork } from '../../../src-main/desk/desk-work.ts';
 
@@ -32,6 +33,7 @@ export const PLAIN_WORK: DeskWork = {
   tally(_path, file) {
     return Promise.resolve({ ok: false, problem: `${file} holds no scores. Choose another file.` });
   },
+  erratum: (request) => makeErratum(request),
   async press(request, hooks) {
     hooks.onProgress(0.5, 'Drawing pages');
     if (request.kind === 'draw')

@@ -1,13 +1,13 @@
 import { mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { basename, join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import type { JobState } from '../../../shared-core/desk.ts';
+import type { JobState, RosterChoice } from '../../../shared-core/desk.ts';
 import { editionFromText } from '../../../shared-core/norms/edition-file.ts';
 import { nextEdition } from '../../../shared-core/norms/next-edition.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { projectToText } from '../../../shared-core/norms/project-text.ts';
 import { settledProject } from '../../shared-core/norms/small-projects.ts';
-import { deskAtHand, type DeskAtHand } from './desk-at-hand.ts';
+import { deskAtHand, READING, type DeskAtHand } from './desk-at-hand.ts';
 
 const project = { ...settledProject(), title: 'Ostrey Vale' };
 const EDITION = 'edition-1.0.normedition';
@@ -106,6 +106,43 @@ describe('a release', () => {
     await mkdir(projects('Ostrey Vale – edition 7'));
     await writeFile(projects('Ostrey Vale – edition 7', 'edition-7.normedition'), '{}');
     expect((await done('release', numbered('7')))[0]).toBe('Ostrey Vale – edition 7 (2)');
+  });
+});
+
+describe('an erratum', () => {
+  const after = numbered('1.1', withNotes('Another note.'));
+
+  async function made(roster: RosterChoice | null, write: boolean) {
+    const { job } = await hand.ask('make-erratum', { before: project, after, roster, cut: '', write });
+    const state = await hand.endOf(job);
+    if (state.state !== 'done' || state.result.kind !== 'erratum') throw new Error(JSON.stringify(state));
+    return state.result.erratum;
+  }
+
+  it('is looked at without leaving anything, and written apart from the releases, people apart from all else', async () => {
+    const path = join(hand.folder, 'roster.csv');
+    await writeFile(path, 'name,grade,score\nAnn,4,3\nBen,10,x\n');
+    const reading = { ...READING, roles: [], decisions: { ...READING.decisions, raggedRow: 'keep-readable' as const } };
+    const columns = { score: 'score', person: 'name', by: ['grade'] };
+    const roster = { handle: hand.desk.giveHandle(path), reading, columns };
+    const seen = await made(roster, false);
+    expect(seen).toMatchObject({ people: { rows: 2, unchanged: 1, changed: 0, unplaced: 1 }, written: null });
+    expect(await readdir(projects()).catch(() => [])).toEqual([]);
+    const written = await made(roster, true);
+    expect(written.people).toEqual(seen.people);
+    expect(written.written?.folder).toBe(projects('Ostrey Vale – erratum of edition 1.0, people'));
+    expect((await made(null, true)).written?.files.map(({ file }) => file)).toEqual(['erratum.txt', 'erratum.csv']);
+    expect((await made(null, true)).people).toBeNull();
+    const folders = ['Ostrey Vale – erratum of edition 1.0', 'Ostrey Vale – erratum of edition 1.0, people'];
+    expect((await readdir(projects())).sort()).toEqual(folders);
+    expect(Object.keys(await contents(folders[1] ?? ''))).toEqual(['erratum-people.csv', 'erratum.csv', 'erratum.txt']);
+  });
+
+  it('that cannot be made ends with a sentence and leaves no folder', async () => {
+    const bare = { ...project, tally: null };
+    const { job } = await hand.ask('make-erratum', { before: bare, after, roster: null, cut: '', write: true });
+    expect(await hand.endOf(job)).toMatchObject({ state: 'failed' });
+    expect(await readdir(projects())).toEqual([]);
   });
 });
 

@@ -35,6 +35,11 @@ const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>
   'draw-pages': [{}, { project: { ...project, title: 7 } }],
   press: [{ project }, { project: { ...project, sheet: null }, name: 'x' }],
   release: [{ project }, { project: { ...project, release: null }, name: 'x' }],
+  'make-erratum': [
+    { before: project, after: project, roster: null, cut: '' },
+    { before: project, after: { ...project, title: 7 }, roster: null, cut: '', write: true },
+    { before: project, after: project, roster: { handle: 'x' }, cut: '', write: true },
+  ],
   'job-state': [{}, { job: {} }],
   'cancel-job': [{}, { job: 'x'.repeat(65) }],
   'show-pressed': ['x'],
@@ -68,6 +73,9 @@ describe('what a desk is asked is checked when it is asked', () => {
     expect(await hand.problem('tally-cohort', { handle, reading: READING })).toMatch(unknown);
     expect(await hand.problem('keep-draft', { draft, handle, project })).toMatch(unknown);
     expect(await hand.problem('save-project', { draft, handle, name: 'x', project })).toMatch(unknown);
+    const roster = { handle, reading: READING, columns: { score: 'score', person: null, by: [] } };
+    const erratum = { before: project, after: project, roster, cut: '', write: false };
+    expect(await hand.problem('make-erratum', erratum)).toMatch(unknown);
     expect(await hand.problem('open-draft', { draft })).toMatch(/no longer there/);
     expect(await hand.problem('job-state', { job: 'x' })).toMatch(/Start it again/);
     expect(await hand.problem('show-pressed', {})).toMatch(/Nothing was pressed/);
