@@ -1,4 +1,5 @@
 import * as v from 'valibot';
+import { LANGUAGE_TAG } from '../languages/language-tag.ts';
 import { ENGLISH_NUMBERS } from '../languages/number-format.ts';
 import { BLOCK_KINDS, DEFAULT_BLOCKS } from './booklet-blocks.ts';
 import { SHEET_LENGTHS } from './sheet-lengths.ts';
@@ -41,7 +42,7 @@ const numbers = v.pipe(
 const language = v.pipe(
   v.object({
     /** Tag of the language of the booklet (BCP 47): it decides how a screen reader speaks. */
-    tag: v.pipe(v.string(), v.regex(/^[A-Za-z]{2,3}(-[A-Za-z0-9]{2,8})*$/)),
+    tag: v.pipe(v.string(), v.regex(LANGUAGE_TAG)),
     /** The words that ship with the program and are printed where no others are given. */
     words: v.picklist(['en', 'de', 'es', 'fr']),
     numbers,
