@@ -154,6 +154,7 @@ export function alternatives(
         ),
       ];
     case 'booklet':
+    case 'language':
     case 'paper':
     case 'orientation':
     case 'fours':

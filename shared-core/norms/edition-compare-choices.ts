@@ -61,6 +61,7 @@ const CHOICE_NAMES: Readonly<Record<Exclude<ChoiceKey, 'scale' | NamesEdition>, 
   'z-source': 'z scores',
   'z-ends': 'ends of the z scores',
   booklet: 'booklet',
+  language: 'language of the booklet',
   paper: 'paper',
   orientation: 'orientation',
   margin: 'margins',
@@ -107,7 +108,6 @@ function choicesOf(project: NormProject): readonly NamedText[] {
     ...Object.entries(CHOICE_NAMES).map(([choice, what]) => ({ what, text: phrases.get(choice) ?? null })),
     ...textsOf(project),
     ...cutsOf(project),
-    { what: 'language of the booklet', text: project.sheet.language.tag },
   ];
 }
 

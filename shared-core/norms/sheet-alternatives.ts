@@ -1,11 +1,23 @@
+import { dateInLanguage, inLanguage, usualNumbers } from '../languages/number-format.ts';
+import { LANGUAGE_NAMES, type ShippedWords } from '../languages/shipped-words.ts';
 import type { Alternative } from './alternatives.ts';
 import { bookletExtent, withExtent } from './booklet-choice.ts';
 import type { NormProject, SheetChoices } from './norm-project.ts';
+import { withLanguage } from './sheet-language.ts';
 import { COLUMN_WORDS, PAPER_NAMES } from './sheet-statement.ts';
 
 /** Choices of the Sheet station that are made from a list. */
 export type ListedSheetChoice =
-  'booklet' | 'paper' | 'orientation' | 'fours' | 'table-columns' | 'fives' | 'range-rows' | 'ogive' | 'inverse';
+  | 'booklet'
+  | 'language'
+  | 'paper'
+  | 'orientation'
+  | 'fours'
+  | 'table-columns'
+  | 'fives'
+  | 'range-rows'
+  | 'ogive'
+  | 'inverse';
 
 /** All alternatives of a choice of the Sheet station, the present one marked. */
 export function sheetAlternatives(project: NormProject, choice: ListedSheetChoice): readonly Alternative[] {
@@ -22,6 +34,8 @@ export function sheetAlternatives(project: NormProject, choice: ListedSheetChoic
   switch (choice) {
     case 'booklet':
       return bookletAlternatives(project);
+    case 'language':
+      return languageAlternatives(project);
     case 'paper':
       return [
         offer({ paper: 'a4' }, PAPER_NAMES.a4, '210 × 297 mm.'),
@@ -51,7 +65,7 @@ export function sheetAlternatives(project: NormProject, choice: ListedSheetChoic
       ];
     case 'fives':
       return [
-        offer({ fives: true }, 'set in fives', 'A little room after every fifth score keeps the eye on its row.'),
+        offer({ fives: true }, 'in fives', 'A little room after every fifth score keeps the eye on its row.'),
         offer({ fives: false }, 'evenly spaced', 'All rows alike, for tables that must be short.'),
       ];
     case 'range-rows':
@@ -78,6 +92,27 @@ export function sheetAlternatives(project: NormProject, choice: ListedSheetChoic
         ),
       ];
   }
+}
+
+const OWN_NAMES: Readonly<Record<ShippedWords, string>> = {
+  en: 'English',
+  de: 'Deutsch',
+  es: 'Español',
+  fr: 'Français',
+};
+
+function languageAlternatives(project: NormProject): readonly Alternative[] {
+  const now = project.sheet.language.words;
+  return (['en', 'de', 'es', 'fr'] as const).map((words) => {
+    const numbers = usualNumbers(words);
+    const example = `${inLanguage('12\u202f345.6', numbers)} and ${dateInLanguage('2026-06-15', numbers)}`;
+    return {
+      label: LANGUAGE_NAMES[words],
+      explanation: `${OWN_NAMES[words]}. Numbers and dates as ${example}. What you wrote yourself stays as it is.`,
+      chosen: words === now,
+      project: words === now ? project : withLanguage(project, words),
+    };
+  });
 }
 
 /** Ticks are set in the list of blocks; it is named as an alternative only where they differ from both others. */

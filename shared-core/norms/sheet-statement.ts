@@ -1,3 +1,4 @@
+import { LANGUAGE_NAMES } from '../languages/shipped-words.ts';
 import { prints } from './booklet-blocks.ts';
 import { bookletExtent, printedBlocks } from './booklet-choice.ts';
 import type { NormProject, SheetChoices } from './norm-project.ts';
@@ -14,13 +15,20 @@ export const COLUMN_WORDS: Readonly<Record<SheetChoices['tableColumns'], string>
 
 /** The whole statement of the Sheet station. */
 export function sheetStatement({ sheet }: NormProject): readonly StatementPart[] {
-  return [...bookletSentence(sheet), ...rowsSentence(sheet), ...(prints(sheet, 'tables') ? besideSentence(sheet) : [])];
+  return [
+    ...bookletSentence(sheet),
+    ...rowsSentence(sheet),
+    ...(prints(sheet, 'tables') ? besideSentence(sheet) : []),
+    words('.'),
+  ];
 }
 
 function bookletSentence(sheet: SheetChoices): readonly StatementPart[] {
   return [
     words('The booklet is '),
     phrase('booklet', extentInWords(sheet)),
+    words(', in '),
+    phrase('language', languageInWords(sheet.language)),
     words(', on '),
     phrase('paper', PAPER_NAMES[sheet.paper]),
     words(', '),
@@ -52,28 +60,31 @@ function extentInWords(sheet: SheetChoices): string {
   }
 }
 
+/** "German", "German (de-CH)" */
+function languageInWords({ words: shipped, tag }: SheetChoices['language']): string {
+  return tag === shipped ? LANGUAGE_NAMES[shipped] : `${LANGUAGE_NAMES[shipped]} (${tag})`;
+}
+
 function rowsSentence(sheet: SheetChoices): readonly StatementPart[] {
   return [
     words(' Tables stand in '),
     phrase('table-columns', COLUMN_WORDS[sheet.tableColumns]),
     words(', figures of '),
-    phrase('row-type', `${sheet.rowType} points`),
+    phrase('row-type', String(sheet.rowType)),
     words(' on rows of '),
     phrase('row-height', `${sheet.rowHeight} points`),
     words(', '),
-    phrase('fives', sheet.fives ? 'set in fives' : 'evenly spaced'),
-    words(', with '),
+    phrase('fives', sheet.fives ? 'in fives' : 'evenly spaced'),
+    words(', '),
     phrase('range-rows', sheet.rangeRows ? 'one row for scores that print alike' : 'a row for each score'),
-    words('.'),
   ];
 }
 
 function besideSentence({ ogive, inverse }: SheetChoices): readonly StatementPart[] {
   return [
-    words(' Each comes '),
+    words('; each comes '),
     phrase('ogive', ogive ? 'with its ogive' : 'without a picture'),
     words(' and '),
     phrase('inverse', inverse ? 'with the lowest score for each percentile' : 'without an inverse table'),
-    words('.'),
   ];
 }

@@ -33,6 +33,7 @@ export type ChoiceKey =
   | 'z-source'
   | 'z-ends'
   | 'booklet'
+  | 'language'
   | 'paper'
   | 'orientation'
   | 'margin'

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { alternatives } from '../../../shared-core/norms/alternatives.ts';
 import { withBlock, withExtent } from '../../../shared-core/norms/booklet-choice.ts';
 import type { NormProject, SheetChoices } from '../../../shared-core/norms/norm-project.ts';
+import { withLanguage } from '../../../shared-core/norms/sheet-language.ts';
 import { sheetStatement } from '../../../shared-core/norms/sheet-statement.ts';
 import { statementText } from '../../../shared-core/norms/statements.ts';
 import { stationContents } from '../../../shared-core/norms/station-contents.ts';
@@ -29,19 +30,39 @@ describe('the statement of the sheet', () => {
       inverse: false,
     });
     expect(text).toBe(
-      'The booklet is a whole booklet, on A5, landscape, with margins of 14 mm, 10 mm more at the binding edge and ' +
-        'blank pages to a multiple of four. Tables stand in four columns, figures of 7.5 points on rows of 10 points, ' +
-        'evenly spaced, with one row for scores that print alike. Each comes without a picture and without an inverse table.',
+      'The booklet is a whole booklet, in English, on A5, landscape, with margins of 14 mm, 10 mm more at the binding edge and ' +
+        'blank pages to a multiple of four. Tables stand in four columns, figures of 7.5 on rows of 10 points, ' +
+        'evenly spaced, one row for scores that print alike; each comes without a picture and without an inverse table.',
     );
   });
 
   it('counts blocks of one’s own choice, and speaks of sheets only where they are printed', () => {
     const some = withBlock(settled.sheet, 'colophon', { printed: true });
-    expect(told(some)).toContain('The booklet is 2 blocks of your own choice, on A4');
+    expect(told(some)).toContain('The booklet is 2 blocks of your own choice, in English, on A4');
     const colophon = withBlock(some, 'tables', { printed: false });
-    expect(told(colophon)).toContain('The booklet is one block of your own choice, on A4');
-    expect(told(colophon)).not.toContain('Each comes');
-    expect(told(withBlock(colophon, 'colophon', { printed: false }))).toContain('as no block is ticked, on A4');
+    expect(told(colophon)).toContain('The booklet is one block of your own choice, in English, on A4');
+    expect(told(colophon)).not.toContain('each comes');
+    expect(told(withBlock(colophon, 'colophon', { printed: false }))).toContain(
+      'as no block is ticked, in English, on A4',
+    );
+  });
+
+  it('tells the language, and its tag where it is another one', () => {
+    const swiss = withLanguage(settled, 'de').sheet;
+    expect(told(swiss)).toContain('a sheet for each table, in German, on A4');
+    const language = { ...swiss.language, tag: 'de-CH' };
+    expect(told({ ...swiss, language })).toContain('in German (de-CH), on A4');
+    const offered = alternatives({ ...settled, sheet: { ...swiss, language } }, 'language');
+    expect(offered.map(({ label, chosen }) => `${label}${chosen ? ' *' : ''}`)).toEqual([
+      'English',
+      'German *',
+      'Spanish',
+      'French',
+    ]);
+    expect(offered[1]?.explanation).toBe(
+      'Deutsch. Numbers and dates as 12\u202f345,6 and 15.06.2026. What you wrote yourself stays as it is.',
+    );
+    expect(offered[0]?.project.sheet).toEqual(settled.sheet);
   });
 
   it('offers one’s own choice of blocks only where it is the present one', () => {

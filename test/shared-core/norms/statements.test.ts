@@ -42,6 +42,7 @@ const LISTED = [
   'z-source',
   'z-ends',
   'booklet',
+  'language',
   'paper',
   'orientation',
   'fours',
@@ -150,9 +151,9 @@ describe('statements', () => {
         'z scores are normal deviates of the ranks; they are held between −3 and 3.',
     );
     expect(statementText(sheetStatement(settled))).toBe(
-      'The booklet is a sheet for each table, on A4, portrait, with the usual margins, no gutter and no blank pages. ' +
-        'Tables stand in three columns, figures of 8.7 points on rows of 12.4 points, set in fives, with a row for each ' +
-        'score. Each comes with its ogive and with the lowest score for each percentile.',
+      'The booklet is a sheet for each table, in English, on A4, portrait, with the usual margins, no gutter and no blank pages. ' +
+        'Tables stand in three columns, figures of 8.7 on rows of 12.4 points, in fives, a row for each ' +
+        'score; each comes with its ogive and with the lowest score for each percentile.',
     );
     expect(statementText(releaseStatement(settled))).toBe(
       'This is edition 1.0, dated 2026-06-15, prepared by A. Weir, checked by J. Lund.',
