@@ -1,3 +1,4 @@
+import { ENGLISH_BLOCKS } from '../languages/english/blocks.ts';
 import { ENGLISH_WORDS, figure, say, sayCounted } from '../languages/phrases.ts';
 import { tablesByGroup, type FrequencyTable } from '../tally/frequency-table.ts';
 import type { Documentation, NormProject, PeopleNoun } from './norm-project.ts';
@@ -64,22 +65,32 @@ export function columnInWords(column: string): string {
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
-const DOCUMENTATION_WORDS: Readonly<Record<keyof Documentation, string>> = {
-  population: 'the population the group stands for',
-  sampling: 'how people were chosen',
-  participation: 'how many of those asked took part',
-  testDates: 'when they were tested',
-  weighting: 'whether and how they were weighted',
-};
+/** What a description of the norm group tells, in print order; each with the key under which phrases name it. */
+const DOCUMENTATION = [
+  ['population', 'population'],
+  ['sampling', 'sampling'],
+  ['participation', 'participation'],
+  ['testDates', 'test-dates'],
+  ['weighting', 'weighting'],
+] as const satisfies readonly (readonly [keyof Documentation, string])[];
+
+export type DocumentationField = (typeof DOCUMENTATION)[number][1];
+
+/** What is told of the norm group, and null where nothing is, in print order. */
+export function documentationFields(
+  documentation: Documentation,
+): readonly { readonly field: DocumentationField; readonly text: string | null }[] {
+  return DOCUMENTATION.map(([key, field]) => ({ field, text: documentation[key].trim() || null }));
+}
 
 /**
  * What is missing before a reader can tell whom the table speaks of, in words. A report of a norming study gives
  * population, sampling, participation, weighting and dates (common practice in testing standards).
  */
 export function missingDocumentation(documentation: Documentation): readonly string[] {
-  return Object.entries(DOCUMENTATION_WORDS)
-    .filter(([field]) => documentation[field as keyof Documentation].trim() === '')
-    .map(([, words]) => words);
+  return documentationFields(documentation).flatMap(({ field, text }) =>
+    text === null ? [ENGLISH_BLOCKS[`untold.${field}`]] : [],
+  );
 }
 
 /** "norm group" when its documentation is complete, otherwise "sample". */

@@ -2,7 +2,14 @@ import type { BookletBlock } from '../norms/booklet-blocks.ts';
 import { groupNoun } from '../norms/norm-groups.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import type { BlockBody, BlockContext } from './block-pages.ts';
-import { say, type BlockWord, type BlockWords } from './block-words.ts';
+import { say, type BlockWords } from './block-words.ts';
+import { changeListPages } from './change-list-pages.ts';
+import { colophonPages } from './colophon-pages.ts';
+import { howToReadPages } from './how-to-read-pages.ts';
+import { normGroupPages } from './norm-group-pages.ts';
+import { picturesPages } from './pictures-pages.ts';
+import { technicalNotesPages } from './technical-notes-pages.ts';
+import { titlePage } from './title-page.ts';
 import { cautionsPages } from './cautions-pages.ts';
 import { cutScoresPages } from './cut-scores-pages.ts';
 import { groupsAcrossPages } from './groups-across-pages.ts';
@@ -12,9 +19,16 @@ import { inversePages } from './inverse-pages.ts';
 export function blockHeading({ kind, heading }: BookletBlock, project: NormProject, words: BlockWords): string {
   const own = heading.trim();
   if (own !== '') return own;
-  const noun = groupNoun(project.groups.documentation);
-  const key: BlockWord = kind === 'norm-group' && noun === 'sample' ? 'block.sample' : `block.${kind}`;
-  return say(words, key);
+  switch (kind) {
+    case 'title-page':
+      return project.title.trim() || say(words, 'block.tables');
+    case 'norm-group': {
+      const norms = groupNoun(project.groups.documentation) === 'norm group';
+      return say(words, norms ? 'block.norm-group' : 'block.sample');
+    }
+    default:
+      return say(words, `block.${kind}`);
+  }
 }
 
 /** The pages of a block other than the contents and the tables, which need to know the other blocks. */
@@ -30,13 +44,19 @@ export function blockBody(context: BlockContext): BlockBody {
     case 'cut-scores':
       return cutScoresPages(context);
     case 'title-page':
+      return titlePage(context);
     case 'norm-group':
+      return normGroupPages(context);
     case 'how-to-read':
+      return howToReadPages(context);
     case 'pictures':
+      return picturesPages(context);
     case 'technical-notes':
+      return technicalNotesPages(context);
     case 'change-list':
+      return changeListPages(context);
     case 'colophon':
-      return { pages: [], remarks: [] };
+      return colophonPages(context);
     case 'contents':
     case 'tables':
       throw new RangeError(`${kind} are not a block of their own`);

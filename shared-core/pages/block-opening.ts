@@ -13,18 +13,23 @@ const BELOW_HEADING = 13;
 const BELOW_CONTINUED = 10;
 
 /** The first page of a block with its heading on it; further pages repeat the heading. */
-export function openBlock({ heading, frame, words }: BlockContext): SheetFlow {
-  const continued = headingLines(say(words, 'block.continued', { heading }), CONTINUED, frame.width, REPEATED);
-  const flow = new SheetFlow(frame, (top) => ({
-    blocks: placeLines(continued, CONTINUED, { x: frame.left, top, width: frame.width }),
-    bottom: top + heightOf(continued, CONTINUED) + BELOW_CONTINUED,
-  }));
-  const lines = headingLines(heading, TITLE, frame.width, { kind: 'heading', level: 1, name: 'title' });
+export function openBlock(context: BlockContext): SheetFlow {
+  const flow = blockFlow(context);
+  const lines = headingLines(context.heading, TITLE, flow.width, { kind: 'heading', level: 1, name: 'title' });
   flow.place(
     placeLines(lines, TITLE, { x: flow.left, top: flow.y, width: flow.width }),
     heightOf(lines, TITLE) + BELOW_HEADING,
   );
   return flow;
+}
+
+/** The first page of a block, still white; further pages begin with the heading. */
+export function blockFlow({ heading, frame, words }: BlockContext): SheetFlow {
+  const continued = headingLines(say(words, 'block.continued', { heading }), CONTINUED, frame.width, REPEATED);
+  return new SheetFlow(frame, (top) => ({
+    blocks: placeLines(continued, CONTINUED, { x: frame.left, top, width: frame.width }),
+    bottom: top + heightOf(continued, CONTINUED) + BELOW_CONTINUED,
+  }));
 }
 
 function headingLines(text: string, { size }: TypeSize, width: number, role: TextRole): readonly LooseLine[] {

@@ -1,7 +1,8 @@
 import type { SheetFlow } from './sheet-flow.ts';
 import { countThatFits, heightOf, linesOf, placeLines, plainParagraphs, type LooseLine } from './text-lines.ts';
 import { paragraph, type ProseRole } from './text-role.ts';
-import { GUTTER, READING, type TypeSize } from './type-sizes.ts';
+import { textWidth } from './text-width.ts';
+import { CONTINUED, GUTTER, READING, SMALL_PROSE, type TypeSize } from './type-sizes.ts';
 
 /** Where the text of a block stands: heads at the side where the page is wide enough for them, otherwise above it. */
 export interface TextGrid {
@@ -21,9 +22,16 @@ const WIDEST_SIDE = 150;
 const WIDEST_TEXT = 390;
 const BETWEEN_PARTS = 9;
 const BELOW_HEAD = 1.5;
+const ABOVE_HEADING = 9;
+const BELOW_HEADING = 5;
 /** From a number of a list to its text, and what of it stays white. */
 const HANGING = 19;
 const AFTER_NUMBER = 5;
+/** Share of a narrow page for the heads of facts, and the room behind them. */
+const MOST_FOR_HEADS = 0.3;
+const AFTER_HEAD = 12;
+/** Points by which sums of widths may differ in their last digits. */
+const TRACE = 1e-9;
 /** Of a paragraph that is divided, so many lines stand on either side. */
 const KEPT_TOGETHER = 2;
 
@@ -42,6 +50,16 @@ export function numberedGrid(flow: SheetFlow): TextGrid {
   return { side: { x: x - HANGING, width: HANGING - AFTER_NUMBER }, main: { x, width: main.width - indent } };
 }
 
+/** The grid of a list of facts: their heads stand at the side on every page. */
+export function factGrid(flow: SheetFlow, parts: readonly TextPart[], type: TypeSize): TextGrid {
+  const grid = textGrid(flow);
+  if (grid.side !== null) return grid;
+  const { x, width } = grid.main;
+  const natural = Math.max(0, ...parts.map(({ head }) => textWidth(head, 'sans-bold', type.size)));
+  const side = Math.min(natural + TRACE, width * MOST_FOR_HEADS);
+  return { side: { x, width: side }, main: { x: x + side + AFTER_HEAD, width: width - side - AFTER_HEAD } };
+}
+
 /** A passage with its head: a heading of its own, or the first words of what it says, such as a number or a name. */
 export interface TextPart {
   /** Unique in its block. */
@@ -49,6 +67,16 @@ export interface TextPart {
   readonly head: string;
   readonly headIs: 'heading' | 'words';
   readonly paragraphs: readonly string[];
+}
+
+/** The passages of a numbered list. */
+export function numberedParts(name: string, texts: readonly string[]): readonly TextPart[] {
+  return texts.map((text, index) => ({
+    name: `${name} ${index + 1}`,
+    head: `${index + 1}`,
+    headIs: 'words',
+    paragraphs: [text],
+  }));
 }
 
 /** Passages one below the other, over as many pages as they take. */
@@ -63,6 +91,20 @@ export function layParts(
   }
 }
 
+/** Height of passages where they all stand on one page, in points. */
+export function heightOfParts(
+  flow: SheetFlow,
+  parts: readonly TextPart[],
+  { grid = textGrid(flow), type = READING, between = BETWEEN_PARTS }: PartsLook = {},
+): number {
+  const { side, main } = grid;
+  return parts.reduce((sum, { name, head, paragraphs }) => {
+    const text = heightOf(plainParagraphs(paragraphs, 'sans', type, main.width, name), type);
+    const heads = heightOf(linesOf(head, 'sans-bold', type, (side ?? main).width, paragraph(name)), type);
+    return sum + between + (side === null ? heads + BELOW_HEAD + text : Math.max(heads, text));
+  }, 0);
+}
+
 export interface PartsLook {
   readonly grid?: TextGrid;
   readonly type?: TypeSize;
@@ -71,20 +113,30 @@ export interface PartsLook {
 }
 
 /** Paragraphs in the column of the text, without a head. */
-export function layText(flow: SheetFlow, name: string, paragraphs: readonly string[], type: TypeSize = READING): void {
+export function layText(flow: SheetFlow, name: string, paragraphs: readonly string[]): void {
   const { main } = textGrid(flow);
-  const lines = plainParagraphs(paragraphs, 'sans', type, main.width, name);
+  layParagraphs(flow, plainParagraphs(paragraphs, 'sans', READING, main.width, name), READING, main);
+}
+
+/** Small paragraphs below a table or a picture, which begins at the left as they do. */
+export function layNote(flow: SheetFlow, name: string, paragraphs: readonly string[]): void {
+  const column = { x: flow.left, width: Math.min(flow.width, WIDEST_TEXT) };
+  layParagraphs(flow, plainParagraphs(paragraphs, 'sans', SMALL_PROSE, column.width, name), SMALL_PROSE, column);
+}
+
+function layParagraphs(flow: SheetFlow, lines: readonly LooseLine[], type: TypeSize, column: Column): void {
   if (lines.length === 0) return;
-  layLines(flow, lines, type, main);
+  layLines(flow, lines, type, column);
   flow.skip(BETWEEN_PARTS);
 }
 
-/** A heading within a block; it stands on the page of what follows, which takes `following` points at least. */
+/** A heading within a block, on the page of what follows it, which takes `following` points at least. */
 export function layHeading(flow: SheetFlow, name: string, text: string, following: number): void {
-  const lines = linesOf(text, 'sans-bold', READING, flow.width, { kind: 'heading', level: 2, name });
-  const height = heightOf(lines, READING) + 2 * BELOW_HEAD;
+  const lines = linesOf(text, 'serif-bold', CONTINUED, flow.width, { kind: 'heading', level: 2, name });
+  const height = heightOf(lines, CONTINUED) + BELOW_HEADING;
+  flow.skip(ABOVE_HEADING);
   flow.need(height + following);
-  flow.place(placeLines(lines, READING, { x: flow.left, top: flow.y, width: flow.width }), height);
+  flow.place(placeLines(lines, CONTINUED, { x: flow.left, top: flow.y, width: flow.width }), height);
 }
 
 function layPart(flow: SheetFlow, part: TextPart, { side, main }: TextGrid, type: TypeSize): void {

@@ -1,8 +1,10 @@
 import { say, wordsOf } from '../languages/phrases.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { BLOCK_WORDS } from './block-words.ts';
+import { filledToFours } from './blank-pages.ts';
 import type { Block, Booklet, BookletPage, Paper } from './booklet.ts';
-import { bookletParts, type BookletPart } from './booklet-parts.ts';
+import { withContents } from './booklet-contents.ts';
+import { plannedParts, type BookletPart } from './booklet-parts.ts';
+import { blockFrame } from './page-frame.ts';
 import { paperOf, paperRemarks } from './paper.ts';
 import { draftTitle, surveyName } from './sheet-texts.ts';
 import { missingCharacters } from './text-width.ts';
@@ -14,10 +16,15 @@ import { missingCharacters } from './text-width.ts';
  */
 export function composeBooklet(normSet: NormSet, programVersion: string | null = null): Booklet {
   const paper = paperOf(normSet.project.sheet);
-  const { parts, remarks } = bookletParts({ normSet, paper, words: BLOCK_WORDS, programVersion });
-  const pages = numbered(parts, paper);
+  const words = wordsOf(normSet.project);
+  const { parts: planned, remarks } = plannedParts({ normSet, paper, words, programVersion });
+  const parts = withContents(planned);
+  const filled = normSet.project.sheet.fillToFours
+    ? filledToFours(parts, blockFrame(normSet, '', paper), words)
+    : parts;
+  const pages = numbered(filled, paper);
   return {
-    title: draftTitle(normSet, surveyName(normSet.project) || say(wordsOf(normSet.project), 'booklet.title')),
+    title: draftTitle(normSet, surveyName(normSet.project) || say(words, 'booklet.title')),
     language: normSet.project.sheet.language.tag,
     paper,
     pages,

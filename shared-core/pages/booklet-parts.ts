@@ -1,7 +1,9 @@
 import { blocksIn, DEFAULT_BLOCKS, type BlockKind, type BookletBlock } from '../norms/booklet-blocks.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { blockBody, blockHeading } from './block-kinds.ts';
+import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext } from './block-pages.ts';
+import { layText } from './block-text.ts';
 import type { BlockWords } from './block-words.ts';
 import type { Block, Paper } from './booklet.ts';
 import { blockFrame, bodyWidth, groupFrame, type PageFrame } from './page-frame.ts';
@@ -11,17 +13,23 @@ import { measureTables } from './table-measure.ts';
 
 /** Pages that follow each other under one heading: a block, or the sheet of a group. */
 export interface BookletPart {
+  /** Null for pages left blank. */
   readonly block: BlockKind | null;
   /** Position of the group in the norm set, for its sheet. */
   readonly group: number | null;
   /** The heading under which it is found; null where there is none. */
   readonly name: string | null;
+  /** The heading of all tables, for the sheet of a group. */
+  readonly under: string | null;
   readonly frame: PageFrame;
   readonly pages: readonly (readonly Block[])[];
 }
 
-export interface BookletParts {
-  readonly parts: readonly BookletPart[];
+/** A part, or the place of the contents, which are made when all other parts are. */
+export type PlannedPart = BookletPart | { readonly block: 'contents'; readonly context: BlockContext };
+
+export interface PlannedParts {
+  readonly parts: readonly PlannedPart[];
   readonly remarks: readonly string[];
 }
 
@@ -34,39 +42,66 @@ export interface PartsBasis {
 
 const NOTHING_CHOSEN = 'No block of the booklet is chosen; the tables are printed. Choose what is to be printed.';
 
+/** The parts of the booklet in print order. */
+export function plannedParts(basis: PartsBasis): PlannedParts {
+  const { blocks, remarks } = printedBlocks(basis.normSet);
+  const made = blocks.map((block) => partsOf(block, basis));
+  return { parts: made.flatMap(({ parts }) => parts), remarks: [...remarks, ...made.flatMap((each) => each.remarks)] };
+}
+
 /** The blocks that are printed, in print order: the tables where nothing is. */
-function printedBlocks({ project }: NormSet): { readonly blocks: readonly BookletBlock[]; readonly remarks: string[] } {
+function printedBlocks({ project }: NormSet): {
+  readonly blocks: readonly BookletBlock[];
+  readonly remarks: readonly string[];
+} {
   const blocks = blocksIn(project.sheet).filter(({ printed }) => printed);
   if (blocks.length > 0) return { blocks, remarks: [] };
   return { blocks: DEFAULT_BLOCKS.filter(({ printed }) => printed), remarks: [NOTHING_CHOSEN] };
 }
 
-/** The parts of the booklet in print order. */
-export function bookletParts(basis: PartsBasis): BookletParts {
-  const { normSet, words, paper, programVersion } = basis;
-  const { blocks, remarks } = printedBlocks(normSet);
-  const made = blocks.map((block): BookletParts => {
-    const heading = blockHeading(block, normSet.project, words);
-    switch (block.kind) {
-      case 'tables':
-        return tableParts(basis);
-      case 'contents':
-        return { parts: [], remarks: [] };
-      default: {
-        const frame = blockFrame(normSet, heading, paper);
-        const context: BlockContext = { normSet, block, heading, frame, words, programVersion };
-        const { pages, remarks } = blockBody(context);
-        return { parts: [{ block: block.kind, group: null, name: heading, frame, pages }], remarks };
-      }
+function partsOf(block: BookletBlock, basis: PartsBasis): PlannedParts {
+  const context = contextOf(block, basis);
+  const { kind } = block;
+  switch (kind) {
+    case 'contents':
+      return { parts: [{ block: kind, context }], remarks: [] };
+    case 'tables': {
+      const tables = tableParts(basis, context.heading);
+      return { parts: [...openingPart(context), ...tables.parts], remarks: tables.remarks };
     }
-  });
-  return {
-    parts: made.flatMap(({ parts }) => parts).filter(({ pages }) => pages.length > 0),
-    remarks: [...remarks, ...made.flatMap((each) => each.remarks)],
-  };
+    default: {
+      const { frame, heading } = context;
+      const { pages, remarks } = blockBody(context);
+      if (pages.length === 0) return { parts: [], remarks };
+      return { parts: [{ block: kind, group: null, name: heading, under: null, frame, pages }], remarks };
+    }
+  }
 }
 
-function tableParts({ normSet, paper }: PartsBasis): BookletParts {
+function contextOf(block: BookletBlock, { normSet, paper, words, programVersion }: PartsBasis): BlockContext {
+  const heading = blockHeading(block, normSet.project, words);
+  // The title stands on its page already, and at the left of the head.
+  const frame = blockFrame(normSet, block.kind === 'title-page' ? '' : heading, paper);
+  return { normSet, block, heading, frame, words, programVersion };
+}
+
+/** The page with what the user wrote above the tables; none where nothing was written. */
+function openingPart(context: BlockContext): readonly BookletPart[] {
+  const text = ownText(context.block);
+  if (text.length === 0) return [];
+  const { heading, frame } = context;
+  const flow = openBlock(context);
+  layText(flow, 'own', text);
+  return [{ block: 'tables', group: null, name: heading, under: null, frame, pages: flow.pages }];
+}
+
+function tableParts(
+  { normSet, paper }: PartsBasis,
+  under: string,
+): {
+  readonly parts: readonly BookletPart[];
+  readonly remarks: readonly string[];
+} {
   const { measure, remarks } = measureTables(normSet, bodyWidth(paper));
   const sheets = normSet.groups.map((norms, group) => {
     const frame = groupFrame(normSet, group, norms, paper);
@@ -78,7 +113,7 @@ function tableParts({ normSet, paper }: PartsBasis): BookletParts {
     };
   });
   return {
-    parts: sheets.map(({ group, name, frame, pages }) => ({ block: 'tables', group, name, frame, pages })),
+    parts: sheets.map(({ group, name, frame, pages }) => ({ block: 'tables', group, name, under, frame, pages })),
     remarks: [
       ...remarks,
       ...sheets

@@ -1,21 +1,10 @@
+import { say as sayPhrase } from '../languages/phrases.ts';
 import { onePerson } from '../norms/norm-groups.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { openBlock, ownText } from './block-opening.ts';
-import { layParts, layText, numberedGrid, type TextPart } from './block-text.ts';
-import { say, type BlockWord } from './block-words.ts';
+import { layParts, layText, numberedGrid, numberedParts, type TextPart } from './block-text.ts';
+import { say } from './block-words.ts';
 import { surveyName } from './sheet-texts.ts';
-
-const CAUTIONS: readonly BlockWord[] = [
-  'cautions.place',
-  'cautions.steps',
-  'cautions.average',
-  'cautions.valid',
-  'cautions.measurement',
-  'cautions.sampling',
-  'cautions.decision',
-  'cautions.rules',
-  'cautions.age',
-];
 
 /** The cautions as a numbered list, fuller than beside the tables; a text of the user's own stands in its place. */
 export const cautionsPages: BlockPages = (context) => {
@@ -27,15 +16,17 @@ export const cautionsPages: BlockPages = (context) => {
 };
 
 function standing({ normSet: { project }, words }: BlockContext): readonly TextPart[] {
-  const values = {
-    survey: surveyName(project) || say(words, 'cautions.this-test'),
-    person: onePerson(project.people),
-    people: project.people,
-  };
-  return CAUTIONS.map((key, index) => ({
-    name: `caution ${index + 1}`,
-    head: `${index + 1}`,
-    headIs: 'words',
-    paragraphs: [say(words, key, values)],
-  }));
+  const people = sayPhrase(words, `people.${project.people}`);
+  const texts = [
+    say(words, 'cautions.place'),
+    say(words, 'cautions.steps'),
+    say(words, 'cautions.average'),
+    say(words, 'cautions.valid', { survey: surveyName(project) || say(words, 'cautions.this-test') }),
+    say(words, 'cautions.measurement', { person: onePerson(project.people, words) }),
+    say(words, 'cautions.sampling', { people }),
+    say(words, 'cautions.decision'),
+    say(words, 'cautions.rules'),
+    say(words, 'cautions.age'),
+  ];
+  return numberedParts('caution', texts);
 }

@@ -5,6 +5,12 @@ import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, paragraphLines, placeLines } from './text-lines.ts';
 import { CONTINUED, SMALL_PROSE } from './type-sizes.ts';
 
+/** How notes are headed, and what tells their tables and texts from those of other groups under the same heading. */
+export interface FitNotesHead {
+  readonly title: string;
+  readonly prefix: string;
+}
+
 const BELOW_TITLE = 5;
 const BETWEEN_PARTS = 7;
 /** Width of a table that has the whole page, in points, where it needs no more. */
@@ -14,13 +20,20 @@ const WIDEST_TABLE = 300;
  * The technical notes: the first table on the left, what else there is on the right, on one page where they fit on any;
  * otherwise one part below the other.
  */
-export function layFitNotes(flow: SheetFlow, { degrees, moments, paragraphs }: FitNotes, words: PrintWords): void {
-  const [first, second] = degrees === null ? [moments, null] : [degrees, moments];
-  const lines = paragraphLines(paragraphs, SMALL_PROSE, flow.halfWidth, 'technical notes');
-  const title = linesOf(say(words, 'fit.title'), 'serif-bold', CONTINUED, flow.width, {
+export function layFitNotes(
+  flow: SheetFlow,
+  notes: FitNotes,
+  words: PrintWords,
+  { title: head, prefix }: FitNotesHead = { title: say(words, 'fit.title'), prefix: '' },
+): void {
+  const named = (table: NoteTable): NoteTable => ({ ...table, name: `${prefix}${table.name}` });
+  const moments = named(notes.moments);
+  const [first, second] = notes.degrees === null ? [moments, null] : [named(notes.degrees), moments];
+  const lines = paragraphLines(notes.paragraphs, SMALL_PROSE, flow.halfWidth, `${prefix}technical notes`);
+  const title = linesOf(head, 'serif-bold', CONTINUED, flow.width, {
     kind: 'heading',
     level: 2,
-    name: 'technical title',
+    name: `${prefix}technical title`,
   });
   const titleHeight = heightOf(title, CONTINUED) + BELOW_TITLE;
   const aboveLines = second === null ? 0 : noteTableHeight(second) + BETWEEN_PARTS;

@@ -37,7 +37,7 @@ export function smoothingSentence(project: NormProject, { group, smoothing }: Gr
 }
 
 /** What the printed columns of errors hold, a sentence each. */
-function errorSentences(project: NormProject, norms: GroupNorms, words: PrintWords): readonly string[] {
+export function errorSentences(project: NormProject, norms: GroupNorms, words: PrintWords): readonly string[] {
   const { smoothing, precision, sampling } = norms;
   const { columns } = project.table;
   const smoothed = smoothing.state === 'smoothed';

@@ -19,7 +19,7 @@ export const inversePages: BlockPages = (context) => {
   layIntroduction(
     flow,
     context,
-    say(words, good ? 'inverse.lowest' : 'inverse.highest', { people: normSet.project.people }),
+    say(words, good ? 'inverse-block.lowest' : 'inverse-block.highest', { people: normSet.project.people }),
   );
   return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
 };

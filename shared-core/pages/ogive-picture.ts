@@ -3,9 +3,9 @@ import type { GroupNorms } from '../norms/group-norms.ts';
 import { levelInWords } from '../norms/table-columns.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
-import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';
 import { ogiveLabels, type OgiveLabel, type PlacedLabels } from './ogive-labels.ts';
+import { scoreTicks } from './score-ticks.ts';
 import { area, dot, fixed, horizontal, path, words, type Point } from './svg-marks.ts';
 
 export interface OgiveColours {
@@ -108,7 +108,7 @@ export function ogivePicture(
       gridLine(y(tick), size.width - EDGE.right, placed.box, tick === 0 ? colours.soft : colours.grid),
     ),
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
-    ...scoreTicks(scale, size.width).flatMap((tick) => [
+    ...scoreTicks(scale, size.width - EDGE.left - EDGE.right).flatMap((tick) => [
       `<path d="M${fixed(x(tick))} ${fixed(y(0))}v2.5" fill="none" stroke="${colours.soft}" stroke-width="0.5"/>`,
       words(
         figure(language, printNumber(tick, decimalOf(tick).decimals)),
@@ -172,15 +172,4 @@ function steps(norms: GroupNorms, plot: Plot): readonly Point[] {
     if (index === norms.rows.length - 1) add({ x: plot.x(row.score + scale.step / 2), y: after });
   });
   return corners;
-}
-
-/** Round scores about 28 points apart or more, never closer than the scale's step: 0, 5, 10 … */
-function scoreTicks({ min, max, step: scaleStep }: ScoreScale, width: number): readonly number[] {
-  const least = (max - min) / Math.max(2, Math.floor((width - EDGE.left - EDGE.right) / 28));
-  const power = 10 ** Math.floor(Math.log10(least));
-  const round = [1, 2, 5].map((factor) => factor * power).find((candidate) => candidate >= least * 0.999) ?? 10 * power;
-  const step = Math.max(round, scaleStep);
-  const first = Math.ceil(min / step - 1e-9);
-  const last = Math.floor(max / step + 1e-9);
-  return Array.from({ length: last - first + 1 }, (_, index) => Number(((first + index) * step).toPrecision(12)));
 }

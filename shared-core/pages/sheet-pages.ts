@@ -1,8 +1,8 @@
 import { say, wordsOf } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
+import { prints } from '../norms/booklet-blocks.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { BLOCK_WORDS } from './block-words.ts';
 import type { Block, TextRun } from './booklet.ts';
 import { conversionLines } from './conversion-rows.ts';
 import { cutNote } from './cut-note.ts';
@@ -72,7 +72,7 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   introduce(flow, normSet);
   layConversion(flow, normSet, norms, measure);
   layTableNote(flow, 'adjustments', adjustmentNote(norms, wordsOf(normSet.project)));
-  layTableNote(flow, 'cuts', cutNote(normSet.project, norms, BLOCK_WORDS));
+  layTableNote(flow, 'cuts', cutNote(normSet.project, norms, wordsOf(normSet.project)));
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
   layTechnicalNotes(flow, normSet, norms);
@@ -199,7 +199,7 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
 }
 
 function layTechnicalNotes(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
-  const notes = fitNotesOf(project, norms);
+  const notes = prints(project.sheet, 'technical-notes') ? null : fitNotesOf(project, norms);
   if (notes === null) return;
   flow.skip(BELOW_TABLE);
   layFitNotes(flow, notes, wordsOf(project));

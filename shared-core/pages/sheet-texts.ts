@@ -2,15 +2,18 @@ import { dateInLanguage } from '../languages/number-format.ts';
 import { figure, say, sayCounted, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import { asSentence, inSentence } from '../languages/sentence.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
+import { prints } from '../norms/booklet-blocks.ts';
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
 import { namedFiveNumbers, quarterWord } from '../norms/five-numbers.ts';
 import {
   columnInWords,
   countedPeople,
+  documentationFields,
   groupNoun,
   standingTitle,
   valueInWords,
+  type DocumentationField,
   type NormGroup,
 } from '../norms/norm-groups.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
@@ -129,19 +132,24 @@ function footLine(
   ].join(' · ');
 }
 
-/** The paragraphs beside the picture, in order; those without text are left out. */
+/**
+ * The paragraphs beside the picture, in order; those without text are left out, and those that a block of the booklet
+ * tells for all groups.
+ */
 export function notesOf({ project }: NormSet, norms: GroupNorms): readonly Paragraph[] {
+  const { sheet } = project;
   const words = wordsOf(project);
   const noun = groupNoun(project.groups.documentation);
+  const documentation = prints(sheet, 'norm-group') ? [] : documentationSentences(project);
   return [
     {
       lead: say(words, noun === 'sample' ? 'notes.sample' : 'notes.norm-group'),
-      text: [sampleFacts(project, norms), ...documentationSentences(project)].join(' '),
+      text: [sampleFacts(project, norms), ...documentation].join(' '),
     },
-    { lead: say(words, 'notes.method'), text: groupMethod(project, norms) },
-    ...(project.sheet.notes.trim() === ''
+    ...(prints(sheet, 'technical-notes')
       ? []
-      : [{ lead: say(words, 'notes.notes'), text: project.sheet.notes.trim() }]),
+      : [{ lead: say(words, 'notes.method'), text: groupMethod(project, norms) }]),
+    ...(sheet.notes.trim() === '' ? [] : [{ lead: say(words, 'notes.notes'), text: sheet.notes.trim() }]),
   ];
 }
 
@@ -200,17 +208,16 @@ function fiveInWords(norms: GroupNorms, words: PrintWords): string {
 }
 
 function documentationSentences(project: NormProject): readonly string[] {
-  const { population, sampling, participation, testDates, weighting } = project.groups.documentation;
-  const given = [
-    ['population', population],
-    ['sampling', sampling],
-    ['participation', participation],
-    ['test-dates', testDates],
-    ['weighting', weighting],
-  ] as const;
-  return given
-    .filter(([, text]) => text.trim() !== '')
-    .map(([field, text]) => say(wordsOf(project), `documentation.${field}`, { text: closed(text.trim()) }));
+  return documentationOf(project).map(({ field, text }) => say(wordsOf(project), `documentation.${field}`, { text }));
+}
+
+/** What is told of the norm group, as sentences; what is not told is left out. */
+export function documentationOf(
+  project: NormProject,
+): readonly { readonly field: DocumentationField; readonly text: string }[] {
+  return documentationFields(project.groups.documentation).flatMap(({ field, text }) =>
+    text === null ? [] : [{ field, text: closed(text) }],
+  );
 }
 
 function closed(sentence: string): string {

@@ -6,9 +6,18 @@ export interface TypeSize {
 
 export const RUNNING: TypeSize = { size: 7, leading: 8.8 };
 export const TITLE: TypeSize = { size: 15.5, leading: 18.5 };
+/** Titles of title pages, from the largest down. */
+export const DISPLAY_SIZES: readonly TypeSize[] = [
+  { size: 27, leading: 32 },
+  { size: 23, leading: 27.5 },
+  { size: 19, leading: 23 },
+  TITLE,
+];
+export const DISPLAY_SUBTITLE: TypeSize = { size: 13, leading: 16.5 };
 export const SUBTITLE: TypeSize = { size: 10, leading: 12.5 };
 export const CONTINUED: TypeSize = { size: 10.5, leading: 13 };
 export const PROSE: TypeSize = { size: 8.3, leading: 10.7 };
+export const CONTENTS: TypeSize = { size: 9.6, leading: 15.4 };
 /** Text that is read through, as in the technical notes. */
 export const READING: TypeSize = { size: 9.2, leading: 12.9 };
 export const SMALL_PROSE: TypeSize = { size: 7.2, leading: 9 };
