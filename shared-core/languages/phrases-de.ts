@@ -1,3 +1,4 @@
+import { GERMAN_BLOCKS } from './german/blocks.ts';
 import { GERMAN_COLUMNS } from './german/columns.ts';
 import { GERMAN_FIT } from './german/fit.ts';
 import { GERMAN_METHOD } from './german/method.ts';
@@ -12,4 +13,5 @@ export const GERMAN_PHRASES: Phrases = {
   ...GERMAN_METHOD,
   ...GERMAN_FIT,
   ...GERMAN_WORKBOOK,
+  ...GERMAN_BLOCKS,
 };

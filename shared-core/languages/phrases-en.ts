@@ -1,3 +1,4 @@
+import { ENGLISH_BLOCKS } from './english/blocks.ts';
 import { ENGLISH_COLUMNS } from './english/columns.ts';
 import { ENGLISH_FIT } from './english/fit.ts';
 import { ENGLISH_METHOD } from './english/method.ts';
@@ -14,4 +15,5 @@ export const ENGLISH_PHRASES = {
   ...ENGLISH_METHOD,
   ...ENGLISH_FIT,
   ...ENGLISH_WORKBOOK,
+  ...ENGLISH_BLOCKS,
 } as const;

@@ -1,3 +1,4 @@
+import { SPANISH_BLOCKS } from './spanish/blocks.ts';
 import { SPANISH_COLUMNS } from './spanish/columns.ts';
 import { SPANISH_FIT } from './spanish/fit.ts';
 import { SPANISH_METHOD } from './spanish/method.ts';
@@ -12,4 +13,5 @@ export const SPANISH_PHRASES: Phrases = {
   ...SPANISH_METHOD,
   ...SPANISH_FIT,
   ...SPANISH_WORKBOOK,
+  ...SPANISH_BLOCKS,
 };

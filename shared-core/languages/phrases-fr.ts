@@ -1,3 +1,4 @@
+import { FRENCH_BLOCKS } from './french/blocks.ts';
 import { FRENCH_COLUMNS } from './french/columns.ts';
 import { FRENCH_FIT } from './french/fit.ts';
 import { FRENCH_METHOD } from './french/method.ts';
@@ -13,4 +14,5 @@ export const FRENCH_PHRASES: Phrases = frenchSpaces({
   ...FRENCH_METHOD,
   ...FRENCH_FIT,
   ...FRENCH_WORKBOOK,
+  ...FRENCH_BLOCKS,
 });

@@ -1,4 +1,3 @@
-import { ENGLISH_BLOCKS } from '../languages/english/blocks.ts';
 import { ENGLISH_WORDS, figure, say, sayCounted } from '../languages/phrases.ts';
 import { tablesByGroup, type FrequencyTable } from '../tally/frequency-table.ts';
 import type { Documentation, NormProject, PeopleNoun } from './norm-project.ts';
@@ -89,7 +88,7 @@ export function documentationFields(
  */
 export function missingDocumentation(documentation: Documentation): readonly string[] {
   return documentationFields(documentation).flatMap(({ field, text }) =>
-    text === null ? [ENGLISH_BLOCKS[`untold.${field}`]] : [],
+    text === null ? [say(ENGLISH_WORDS, `untold.${field}`)] : [],
   );
 }
 

@@ -1,7 +1,7 @@
+import { type PrintWords, say } from '../languages/phrases.ts';
 import { measureAcross, type AcrossMeasure, type AcrossPart } from './across-measure.ts';
 import { acrossRows, type AcrossTable } from './across-table.ts';
 import type { BlockContext } from './block-pages.ts';
-import { say, type BlockWords } from './block-words.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { tableHeight } from './table-blocks.ts';
 import { heightOfCaption, layTable, type TableCaption } from './table-pages.ts';
@@ -36,7 +36,7 @@ export function layAcross(flow: SheetFlow, context: BlockContext, table: AcrossT
 }
 
 /** "Groups 1 to 8 of 12". */
-function captionOf({ span: { first, count } }: AcrossPart, groups: number, words: BlockWords): TableCaption {
+function captionOf({ span: { first, count } }: AcrossPart, groups: number, words: PrintWords): TableCaption {
   const part = { first: String(first + 1), last: String(first + count), all: String(groups) };
   const text = say(words, count === 1 ? 'across.part-of-one' : 'across.part', part);
   return { text, face: 'sans', type: PROSE, role: paragraph(text) };

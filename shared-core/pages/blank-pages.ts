@@ -1,5 +1,5 @@
+import { type PrintWords, say } from '../languages/phrases.ts';
 import type { BookletPart } from './booklet-parts.ts';
-import { say, type BlockWords } from './block-words.ts';
 import type { PageFrame } from './page-frame.ts';
 import { linesOf, placeLines } from './text-lines.ts';
 import { REPEATED } from './text-role.ts';
@@ -15,7 +15,7 @@ const ON_A_SHEET = 4;
 export function filledToFours(
   parts: readonly BookletPart[],
   frame: PageFrame,
-  words: BlockWords,
+  words: PrintWords,
 ): readonly BookletPart[] {
   const pages = parts.reduce((sum, part) => sum + part.pages.length, 0);
   const missing = (ON_A_SHEET - (pages % ON_A_SHEET)) % ON_A_SHEET;

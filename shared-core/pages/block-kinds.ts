@@ -1,8 +1,8 @@
+import { type PrintWords, say } from '../languages/phrases.ts';
 import type { BookletBlock } from '../norms/booklet-blocks.ts';
 import { groupNoun } from '../norms/norm-groups.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import type { BlockBody, BlockContext } from './block-pages.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { changeListPages } from './change-list-pages.ts';
 import { colophonPages } from './colophon-pages.ts';
 import { howToReadPages } from './how-to-read-pages.ts';
@@ -16,7 +16,7 @@ import { groupsAcrossPages } from './groups-across-pages.ts';
 import { inversePages } from './inverse-pages.ts';
 
 /** The heading of a block as it is printed. */
-export function blockHeading({ kind, heading }: BookletBlock, project: NormProject, words: BlockWords): string {
+export function blockHeading({ kind, heading }: BookletBlock, project: NormProject, words: PrintWords): string {
   const own = heading.trim();
   if (own !== '') return own;
   switch (kind) {

@@ -1,6 +1,6 @@
+import { say } from '../languages/phrases.ts';
 import type { BookletBlock } from '../norms/booklet-blocks.ts';
 import type { BlockContext } from './block-pages.ts';
-import { say } from './block-words.ts';
 import { firstLines } from './prose.ts';
 import { SheetFlow } from './sheet-flow.ts';
 import { heightOf, placeLines, type LooseLine } from './text-lines.ts';

@@ -1,7 +1,7 @@
+import type { PrintWords } from '../languages/phrases.ts';
 import type { BookletBlock } from '../norms/booklet-blocks.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { Block } from './booklet.ts';
-import type { BlockWords } from './block-words.ts';
 import type { PageFrame } from './page-frame.ts';
 
 /** What a block of the booklet is made from. */
@@ -12,7 +12,7 @@ export interface BlockContext {
   /** The heading as it is printed. */
   readonly heading: string;
   readonly frame: PageFrame;
-  readonly words: BlockWords;
+  readonly words: PrintWords;
   /** Version of the program that presses; null where it is not told. */
   readonly programVersion: string | null;
 }

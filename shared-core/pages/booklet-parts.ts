@@ -1,10 +1,10 @@
+import type { PrintWords } from '../languages/phrases.ts';
 import { blocksIn, DEFAULT_BLOCKS, type BlockKind, type BookletBlock } from '../norms/booklet-blocks.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { blockBody, blockHeading } from './block-kinds.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext } from './block-pages.ts';
 import { layText } from './block-text.ts';
-import type { BlockWords } from './block-words.ts';
 import type { Block, Paper } from './booklet.ts';
 import { blockFrame, bodyWidth, groupFrame, type PageFrame } from './page-frame.ts';
 import { sheetPages } from './sheet-pages.ts';
@@ -36,7 +36,7 @@ export interface PlannedParts {
 export interface PartsBasis {
   readonly normSet: NormSet;
   readonly paper: Paper;
-  readonly words: BlockWords;
+  readonly words: PrintWords;
   readonly programVersion: string | null;
 }
 

@@ -1,9 +1,8 @@
-import { figure, type PrintWords } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { inSeries } from '../languages/series.ts';
 import { printScore } from '../scores/printed-number.ts';
 import type { BlockContext } from './block-pages.ts';
 import { layHeading, layNote, type Column } from './block-text.ts';
-import { say } from './block-words.ts';
 import type { Block, TextLine } from './booklet.ts';
 import { AXIS_HEIGHT, boxPlotsPicture } from './box-plots-picture.ts';
 import { layFactTable, type FactTable } from './fact-table.ts';

@@ -1,9 +1,8 @@
-import { say as sayPhrase } from '../languages/phrases.ts';
+import { say } from '../languages/phrases.ts';
 import { onePerson } from '../norms/norm-groups.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import { layParts, layText, numberedGrid, numberedParts, type TextPart } from './block-text.ts';
-import { say } from './block-words.ts';
 import { surveyName } from './sheet-texts.ts';
 
 /** The cautions as a numbered list, fuller than beside the tables; a text of the user's own stands in its place. */
@@ -16,7 +15,7 @@ export const cautionsPages: BlockPages = (context) => {
 };
 
 function standing({ normSet: { project }, words }: BlockContext): readonly TextPart[] {
-  const people = sayPhrase(words, `people.${project.people}`);
+  const people = say(words, `people.${project.people}`);
   const texts = [
     say(words, 'cautions.place'),
     say(words, 'cautions.steps'),

@@ -1,9 +1,9 @@
+import { type PrintWords, say } from '../languages/phrases.ts';
 import { dateInLanguage } from '../languages/number-format.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
 import { layLines, layText, textGrid } from './block-text.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { linesOf, type LooseLine } from './text-lines.ts';
 import { paragraph } from './text-role.ts';
 import { PARAGRAPH_GAP, READING } from './type-sizes.ts';
@@ -44,7 +44,7 @@ function changeLines(line: string, index: number, width: number): readonly Loose
   return linesOf(line, 'sans', READING, width, paragraph(`change ${index}`));
 }
 
-function since({ edition, date, check }: Changes, words: BlockWords): string {
+function since({ edition, date, check }: Changes, words: PrintWords): string {
   const named = edition.trim();
   return [
     named === ''

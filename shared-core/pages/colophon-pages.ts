@@ -1,5 +1,5 @@
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { dateInLanguage } from '../languages/number-format.ts';
-import { figure } from '../languages/phrases.ts';
 import { definitionName } from '../norms/definitions.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { methodText } from '../norms/statements.ts';
@@ -7,7 +7,6 @@ import { printCount } from '../scores/printed-number.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { factGrid, layParts, layText } from './block-text.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { surveyName } from './sheet-texts.ts';
 import { PROSE } from './type-sizes.ts';
 
@@ -58,7 +57,7 @@ function facts({ normSet, words, programVersion }: BlockContext): readonly Fact[
   ];
 }
 
-function sourceFacts({ source }: NormProject, words: BlockWords): readonly Fact[] {
+function sourceFacts({ source }: NormProject, words: PrintWords): readonly Fact[] {
   if (source === null) return [[say(words, 'colophon.source'), say(words, 'colophon.source-none')]];
   const { kind, file, bytes, sha256, rowsRead, rowsKept } = source;
   return [

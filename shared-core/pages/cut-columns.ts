@@ -1,8 +1,7 @@
-import { wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import type { CutRow } from '../norms/cut-table.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { columnOf, rankColumn } from '../norms/table-columns.ts';
-import { say, type BlockWords } from './block-words.ts';
 import type { PlacedCell, TableHead } from './booklet.ts';
 import {
   headRoom,
@@ -32,7 +31,7 @@ const HEAD_ROOM = 48;
 const LEAST_TITLE = 70;
 
 /** The figures of each group at a cut: n, percentile rank, its interval where there is one, and the share. */
-export function cutColumns(project: NormProject, rows: readonly CutRow[], words: BlockWords): readonly CutColumn[] {
+export function cutColumns(project: NormProject, rows: readonly CutRow[], words: PrintWords): readonly CutColumn[] {
   const print = wordsOf(project);
   const share = brokenLines(say(words, 'cuts.share'), 'sans-bold', TABLE_HEAD.size, HEAD_ROOM);
   const figures = (lines: readonly string[], textOf: (row: CutRow) => string, ranges = false): CutColumn => ({

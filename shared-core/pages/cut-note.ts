@@ -1,11 +1,10 @@
-import { figure, wordsOf } from '../languages/phrases.ts';
+import { figure, type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import { cutScoreText, cutsOfGroup, firstOnGoodSide } from '../norms/cuts.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { Cut, NormProject } from '../norms/norm-project.ts';
-import { say, type BlockWords } from './block-words.ts';
 
 /** What the rules between the rows of a group's table mark; null where no cut stands in it. */
-export function cutNote(project: NormProject, { group }: GroupNorms, words: BlockWords): string | null {
+export function cutNote(project: NormProject, { group }: GroupNorms, words: PrintWords): string | null {
   const { scale } = group.table;
   const named = cutsOfGroup(project, group.key)
     .filter(({ score }) => firstOnGoodSide(scale, score) !== null)
@@ -15,7 +14,7 @@ export function cutNote(project: NormProject, { group }: GroupNorms, words: Bloc
   return named.length === 1 ? say(words, 'cuts.rule', { cut }) : say(words, 'cuts.rules', { cuts: named.join(', ') });
 }
 
-function cutInWords({ name }: Cut, score: string, words: BlockWords): string {
+function cutInWords({ name }: Cut, score: string, words: PrintWords): string {
   const given = name.trim();
   return given === '' ? say(words, 'cuts.nameless', { score }) : say(words, 'cuts.named', { name: given, score });
 }

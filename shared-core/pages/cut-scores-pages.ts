@@ -1,9 +1,8 @@
-import { figure, wordsOf, type PrintWords } from '../languages/phrases.ts';
+import { figure, type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import { cutTables, type CutRow, type CutTable } from '../norms/cut-table.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { brokenLines, cutColumns, measureCuts, type CutColumn } from './cut-columns.ts';
 import { inCountedFives } from './row-blocks.ts';
 import { wordsCell } from './table-cells.ts';
@@ -55,7 +54,7 @@ export const cutScoresPages: BlockPages = (context) => {
   };
 };
 
-function headingOf({ cut, scoreText }: CutTable, words: BlockWords, print: PrintWords): string {
+function headingOf({ cut, scoreText }: CutTable, words: PrintWords, print: PrintWords): string {
   const [name, score] = [cut.name.trim(), figure(print, scoreText)];
   return name === '' ? say(words, 'cuts.heading-nameless', { score }) : say(words, 'cuts.heading', { name, score });
 }

@@ -1,10 +1,9 @@
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { namedFiveNumbers, quarterWord } from '../norms/five-numbers.ts';
-import { figure } from '../languages/phrases.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { scaleGrid } from '../scale/score-scale.ts';
 import { printCount, printNumber, printShare } from '../scores/printed-number.ts';
-import { say, type BlockWords } from './block-words.ts';
 import type { FactTable } from './fact-table.ts';
 import { printedTitle } from './sheet-texts.ts';
 
@@ -22,7 +21,7 @@ export function groupTable(
   name: string,
   { project, groups }: NormSet,
   facts: readonly GroupFact[],
-  words: BlockWords,
+  words: PrintWords,
 ): FactTable {
   return {
     name,
@@ -35,7 +34,7 @@ export function groupTable(
 }
 
 /** n, what n is worth, mean, SD, quarters and shares at the ends of the scale. */
-export function sizeAndSpread(groups: readonly GroupNorms[], words: BlockWords): readonly GroupFact[] {
+export function sizeAndSpread(groups: readonly GroupNorms[], words: PrintWords): readonly GroupFact[] {
   const decimals = ({ group }: GroupNorms): number => scaleGrid(group.table.scale).decimals + 1;
   return [
     { head: inLines(say(words, 'norm-group.n')), text: ({ summary }) => printCount(summary.n) },
@@ -60,7 +59,7 @@ export function isDrawnInClusters({ sampling }: GroupNorms): boolean {
   return sampling.clusters !== null;
 }
 
-function clusterFacts(words: BlockWords): readonly GroupFact[] {
+function clusterFacts(words: PrintWords): readonly GroupFact[] {
   return [
     { head: inLines(say(words, 'norm-group.clusters')), text: ({ sampling }) => orDash(sampling.clusters, printCount) },
     {
@@ -74,7 +73,7 @@ function clusterFacts(words: BlockWords): readonly GroupFact[] {
   ];
 }
 
-function effectiveFact(words: BlockWords): GroupFact {
+function effectiveFact(words: PrintWords): GroupFact {
   return {
     head: inLines(say(words, 'norm-group.effective-n')),
     text: ({ summary }) => printNumber(summary.effectiveN, 1),
@@ -82,7 +81,7 @@ function effectiveFact(words: BlockWords): GroupFact {
 }
 
 /** The five numbers; quarters are called quartiles where a group has no hinges. */
-export function fiveFacts(groups: readonly GroupNorms[], words: BlockWords): readonly GroupFact[] {
+export function fiveFacts(groups: readonly GroupNorms[], words: PrintWords): readonly GroupFact[] {
   const quarter = quarterOf(groups);
   const keys = ['lowest', `lower-${quarter}`, 'median', `upper-${quarter}`, 'highest'] as const;
   return keys.map((key, index) => ({

@@ -1,4 +1,4 @@
-import { figure, wordsOf, type PrintWords } from '../languages/phrases.ts';
+import { figure, type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { scoreColumn } from '../norms/table-columns.ts';
 import { printCount } from '../scores/printed-number.ts';
@@ -7,7 +7,6 @@ import type { AcrossGroup, AcrossTable } from './across-table.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { figureCell, rankCell } from './table-cells.ts';
 import { layAdjustmentNotes, layTableNote } from './table-notes.ts';
 
@@ -22,7 +21,7 @@ export const groupsAcrossPages: BlockPages = (context) => {
   return { pages: flow.pages, remarks };
 };
 
-function groupsAcross({ groups, project }: NormSet, words: BlockWords): AcrossTable {
+function groupsAcross({ groups, project }: NormSet, words: PrintWords): AcrossTable {
   const print = wordsOf(project);
   const [first] = groups;
   const scores = first?.rows ?? [];
@@ -45,7 +44,7 @@ function groupsAcross({ groups, project }: NormSet, words: BlockWords): AcrossTa
 }
 
 /** The groups as heads: their titles, and under each how many people it has. */
-export function groupHeads(groups: NormSet['groups'], words: BlockWords, print: PrintWords): readonly AcrossGroup[] {
+export function groupHeads(groups: NormSet['groups'], words: PrintWords, print: PrintWords): readonly AcrossGroup[] {
   return groups.map(({ group, summary }) => ({
     title: group.title,
     note: say(words, 'across.n', { count: figure(print, printCount(summary.n)) }),

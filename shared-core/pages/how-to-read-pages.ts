@@ -1,4 +1,4 @@
-import { figure } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { asSentence } from '../languages/sentence.ts';
 import { inSeries } from '../languages/series.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
@@ -11,7 +11,6 @@ import { printCount } from '../scores/printed-number.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { factGrid, layHeading, layParts, layText, type TextPart } from './block-text.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { endsHead, endsText } from './rank-ends.ts';
 import { printedCell, tableName } from './sheet-texts.ts';
 import { READING } from './type-sizes.ts';
@@ -61,7 +60,7 @@ function exampleRow({ rows }: GroupNorms): ConversionRow | null {
   );
 }
 
-function example(normSet: NormSet, norms: GroupNorms, row: ConversionRow, words: BlockWords): readonly string[] {
+function example(normSet: NormSet, norms: GroupNorms, row: ConversionRow, words: PrintWords): readonly string[] {
   const { project } = normSet;
   const direction = project.tally?.scale.direction ?? 'high-is-good';
   const [score, rank] = [figure(words, row.scoreText), figure(words, row.printed)];
@@ -90,12 +89,12 @@ function example(normSet: NormSet, norms: GroupNorms, row: ConversionRow, words:
   ];
 }
 
-function named(row: ConversionRow, words: BlockWords): (column: TableColumn) => string {
+function named(row: ConversionRow, words: PrintWords): (column: TableColumn) => string {
   return (column) => say(words, 'how.cell', { name: column.name, text: printedCell(words, row, column) });
 }
 
 /** How many had a poorer score and the same; nothing where people do not weigh alike. */
-function counts({ project }: NormSet, norms: GroupNorms, row: ConversionRow, words: BlockWords): readonly string[] {
+function counts({ project }: NormSet, norms: GroupNorms, row: ConversionRow, words: PrintWords): readonly string[] {
   if (norms.group.table.weighted) return [];
   const { below, at, all } = row.provenance.percentileRank;
   const lowIsGood = project.tally?.scale.direction === 'low-is-good';
@@ -109,7 +108,7 @@ function counts({ project }: NormSet, norms: GroupNorms, row: ConversionRow, wor
 }
 
 /** Where the same score stands in the last group. */
-function otherGroup({ groups, project }: NormSet, { score }: ConversionRow, words: BlockWords): readonly string[] {
+function otherGroup({ groups, project }: NormSet, { score }: ConversionRow, words: PrintWords): readonly string[] {
   const last = groups.length - 1;
   const other = groups[last];
   const rank = other?.rows.find((row) => row.score === score)?.printed;
@@ -118,7 +117,7 @@ function otherGroup({ groups, project }: NormSet, { score }: ConversionRow, word
 }
 
 /** Two steps of one point with the longest and the shortest way of the rank among those that print as numbers. */
-function unequalSteps({ project }: NormSet, norms: GroupNorms, words: BlockWords): readonly string[] {
+function unequalSteps({ project }: NormSet, norms: GroupNorms, words: PrintWords): readonly string[] {
   const steps = norms.rows.slice(1).flatMap((to, index) => {
     const from = norms.rows[index];
     if (from === undefined || [from, to].some(({ provenance }) => provenance.printed.end !== null)) return [];

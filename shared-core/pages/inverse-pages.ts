@@ -1,4 +1,4 @@
-import { wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import { INVERSE_PERCENTILES } from '../norms/inverse-table.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { rankColumn } from '../norms/table-columns.ts';
@@ -7,7 +7,6 @@ import type { AcrossTable } from './across-table.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { figureCell } from './table-cells.ts';
 import { groupHeads } from './groups-across-pages.ts';
 
@@ -24,7 +23,7 @@ export const inversePages: BlockPages = (context) => {
   return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
 };
 
-function inverseAcross({ groups, project }: NormSet, words: BlockWords): AcrossTable {
+function inverseAcross({ groups, project }: NormSet, words: PrintWords): AcrossTable {
   const print = wordsOf(project);
   return {
     table: 'inverse-across',

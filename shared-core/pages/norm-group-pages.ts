@@ -1,4 +1,4 @@
-import { figure } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { inSeries } from '../languages/series.ts';
 import { documentationFields } from '../norms/norm-groups.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
@@ -7,7 +7,6 @@ import { printCount, printScore } from '../scores/printed-number.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { layHeading, layNote, layParts, layText, type TextPart } from './block-text.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { factTableStart, layFactTable, type FactRow, type FactTable } from './fact-table.ts';
 import { groupTable, isDrawnInClusters, isWeighted, quarterOf, sizeAndSpread } from './group-facts.ts';
 import { documentationOf } from './sheet-texts.ts';
@@ -31,7 +30,7 @@ function layTable(
   heading: string,
   table: FactTable,
   notes: readonly string[],
-  words: BlockWords,
+  words: PrintWords,
 ): void {
   layHeading(flow, `${table.name} heading`, heading, factTableStart(table, flow.width));
   layFactTable(flow, table, words);

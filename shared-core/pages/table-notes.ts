@@ -1,8 +1,7 @@
-import { wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { say, type BlockWords } from './block-words.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import { paragraph } from './text-role.ts';
@@ -32,7 +31,7 @@ export function layAdjustmentNotes(
   flow: SheetFlow,
   { project }: NormSet,
   groups: readonly GroupNorms[],
-  words: BlockWords,
+  words: PrintWords,
 ): void {
   for (const norms of groups) {
     const note = adjustmentNote(norms, wordsOf(project));

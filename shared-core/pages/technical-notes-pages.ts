@@ -1,4 +1,4 @@
-import { figure, say as sayPhrase } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { inSeries } from '../languages/series.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
@@ -19,7 +19,6 @@ import {
   numberedParts,
   type TextPart,
 } from './block-text.ts';
-import { say, type BlockWords } from './block-words.ts';
 import { layFitNotes } from './fit-notes-blocks.ts';
 import { fitNotesOf } from './fit-notes.ts';
 import { errorSentences, smoothingSentence } from './group-method.ts';
@@ -77,7 +76,7 @@ function parts({ normSet, words }: BlockContext): readonly TextPart[] {
     .map(([head, paragraphs], index) => ({ name: `part ${index}`, head, headIs: 'heading', paragraphs }));
 }
 
-function scaleText({ min, max, step, direction }: ScoreScale, words: BlockWords): string {
+function scaleText({ min, max, step, direction }: ScoreScale, words: PrintWords): string {
   const printed = (score: number): string => figure(words, printNumber(score, decimalOf(score).decimals));
   const scale = {
     lowest: printed(min),
@@ -93,7 +92,7 @@ function scaleText({ min, max, step, direction }: ScoreScale, words: BlockWords)
 /** A text once where it is that of all groups, otherwise behind the names of the groups that it is of. */
 function byGroup(
   { project, groups }: NormSet,
-  words: BlockWords,
+  words: PrintWords,
   textOf: (norms: GroupNorms) => string,
 ): readonly string[] {
   const texts = [...new Set(groups.map(textOf))].filter((text) => text !== '');
@@ -107,7 +106,7 @@ function byGroup(
 
 function sampling({ normSet, words }: Pick<BlockContext, 'normSet' | 'words'>): readonly string[] {
   const { project, groups } = normSet;
-  const people = sayPhrase(words, `people.${project.people}`);
+  const people = say(words, `people.${project.people}`);
   const weighted = groups.some(({ group }) => group.table.weighted) ? [say(words, 'technical.weighted')] : [];
   if (!isClustered(project)) return [[say(words, 'technical.one-by-one', { people }), ...weighted].join(' ')];
   const list = groups.map(({ group, sampling: design }) =>

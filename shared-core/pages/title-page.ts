@@ -1,9 +1,9 @@
+import { say } from '../languages/phrases.ts';
 import { dateInLanguage } from '../languages/number-format.ts';
 import { groupNoun } from '../norms/norm-groups.ts';
 import { blockFlow, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { layLines } from './block-text.ts';
-import { say } from './block-words.ts';
 import { printedTitle } from './sheet-texts.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, plainParagraphs, type LooseLine } from './text-lines.ts';
