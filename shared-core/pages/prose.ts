@@ -56,8 +56,8 @@ interface Word {
   readonly pieces: readonly Piece[];
 }
 
-/** Behind spaces, and behind a hyphen, dash or slash that a letter follows. */
-const BREAKS = /(?<= )(?=[^ ])|(?<=[-–—/])(?=\p{L})/u;
+/** Behind spaces that no per cent sign follows, and behind a hyphen, dash or slash that a letter follows. */
+const BREAKS = /(?<= )(?=[^ %])|(?<=[-–—/])(?=\p{L})/u;
 
 function wordsOf(runs: readonly TextRun[]): readonly Word[] {
   const words: { breakBefore: boolean; pieces: Piece[] }[] = [];

@@ -1,7 +1,7 @@
 import type { ENGLISH_COLUMNS } from '../english/columns.ts';
 
 export const SPANISH_COLUMNS: Readonly<Record<keyof typeof ENGLISH_COLUMNS, string>> = {
-  'column.score.heading': 'Puntuación\ndirecta',
+  'column.score.heading': 'Punt.\ndirecta',
   'column.score.name': 'puntuación directa',
   'column.score.explanation': 'La puntuación tal como se cuenta en la prueba.',
   'column.rank.heading': 'Rango\npercentil',
@@ -56,13 +56,13 @@ export const SPANISH_COLUMNS: Readonly<Record<keyof typeof ENGLISH_COLUMNS, stri
   'column.nce.heading': 'NCE',
   'column.nce.name': 'equivalente de la curva normal',
   'column.nce.explanation': '50 + {factor} z: pasos iguales que coinciden con el rango percentil en 1, 50 y 99.',
-  'column.deviation.heading': 'Puntuación\nde desviación',
+  'column.deviation.heading': 'Punt. de\ndesviación',
   'column.deviation.name': 'puntuación de desviación',
   'column.deviation.explanation': '100 + 15 z.',
-  'column.sten.heading': 'Decatipo',
+  'column.sten.heading': 'Deca-\ntipo',
   'column.sten.name': 'decatipo',
   'column.sten.explanation': 'Diez bandas, de media desviación típica cada una.',
-  'column.stanine.heading': 'Eneatipo',
+  'column.stanine.heading': 'Enea-\ntipo',
   'column.stanine.name': 'eneatipo',
   'column.stanine.explanation.normalised': 'Nueve bandas con el 4, 7, 12, 17, 20, 17, 12, 7 y 4 por ciento.',
   'column.stanine.explanation.linear': 'Nueve bandas, de media desviación típica cada una.',

@@ -46,14 +46,12 @@ describe('the check code', () => {
 
   it('covers what a block prints, where it is printed', () => {
     const changes = { edition: '0.9', date: '2025-06-01', check: 'AAAA-BBBB', lines: ['A row changed.'] };
-    const cuts = [{ name: 'Support', score: 10, values: null }];
     const { source } = project;
     const cases: readonly (readonly [BlockKind, (from: NormProject) => NormProject])[] = [
       ['change-list', (from) => withRelease(from, { changes })],
       ['colophon', (from) => withRelease(from, { analyst: 'Ida Vale' })],
       ['colophon', (from) => withRelease(from, { checker: 'Ida Vale' })],
       ['colophon', (from) => ({ ...from, source: source && { ...source, bytes: source.bytes + 1 } })],
-      ['cut-scores', (from) => ({ ...from, cuts })],
       [
         'norm-group',
         (from) => ({
@@ -72,6 +70,11 @@ describe('the check code', () => {
       expect([kind, checkOf(change(printed))]).not.toEqual([kind, checkOf(printed)]);
       expect([kind, checkOf(change(project))]).toEqual([kind, checkOf(project)]);
     }
+  });
+
+  it('covers the cuts, which stand as rules between the rows of the tables', () => {
+    const cuts = [{ name: 'Support', score: 10, values: null }];
+    expect(checkOf({ ...project, cuts })).not.toBe(BEFORE);
   });
 
   it('differs with the language of the booklet', () => {

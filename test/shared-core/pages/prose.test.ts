@@ -12,6 +12,7 @@ describe('lines of prose', () => {
     expect(asTexts('half-hearted', 40)).toEqual(['half-', 'hearted']);
     expect(asTexts('one\n\ntwo', 100)).toEqual(['one', 'two']);
     expect(asTexts('4–22 May', 30)).toEqual(['4–22', 'May']);
+    expect(asTexts('at 95 %', 25)).toEqual(['at', '95 %']);
     expect(asTexts('', 100)).toEqual([]);
   });
 
