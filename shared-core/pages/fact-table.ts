@@ -40,6 +40,8 @@ const MOST_LINES = 8;
 const TRACE = 1e-9;
 /** A page is not turned before or behind fewer rows. */
 const ROWS_TOGETHER = 2;
+/** A table of at most this share of a page is not divided. */
+const WHOLE_ON_PAGE = 0.6;
 
 /** The table over as many pages as it takes; columns that do not find room stand in a second table below. */
 export function layFactTable(flow: SheetFlow, table: FactTable, words: PrintWords): void {
@@ -51,11 +53,19 @@ export function layFactTable(flow: SheetFlow, table: FactTable, words: PrintWord
   layRows(flow, table, setting, words);
 }
 
-/** Height of the head and the rows that stand on its page at least, for a heading above them. */
-export function factTableStart(table: FactTable, width: number): number {
+/**
+ * Height of what stands at least on the page where a table begins, for a heading above it: a table of a part of a page
+ * whole, a longer one with its head and first rows.
+ */
+export function factTableStart(table: FactTable, { width, freshRoom }: SheetFlow): number {
   const setting = settingOf(table, width) ?? settingOf(halves(table)[0], width);
   if (setting === null) return 0;
-  const rows = setting.rows.slice(0, ROWS_TOGETHER);
+  const whole = startHeight(table, setting, setting.rows.length);
+  return whole <= freshRoom * WHOLE_ON_PAGE ? whole : startHeight(table, setting, ROWS_TOGETHER);
+}
+
+function startHeight(table: FactTable, setting: Setting, count: number): number {
+  const rows = setting.rows.slice(0, count);
   return headHeight(table, setting) + 2 * AROUND_ROWS + rows.reduce((sum, row) => sum + rowHeight(row, setting), 0);
 }
 

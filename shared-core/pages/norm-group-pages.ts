@@ -32,7 +32,7 @@ function layTable(
   notes: readonly string[],
   words: PrintWords,
 ): void {
-  layHeading(flow, `${table.name} heading`, heading, factTableStart(table, flow.width));
+  layHeading(flow, `${table.name} heading`, heading, factTableStart(table, flow));
   layFactTable(flow, table, words);
   layNote(flow, `${table.name} notes`, notes);
 }

@@ -40,6 +40,7 @@ const BETWEEN_HEAD_LINES = 2;
 const BELOW_TABLE = 22;
 /** Height of the picture against its width. */
 const PICTURE_SHAPE = 0.47;
+const FLATTEST_PICTURE = 0.3;
 const BELOW_PICTURE = 5;
 const LEAST_NOTE_LINES = 6;
 
@@ -164,15 +165,16 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
     flow.inTwoColumns(lines, PROSE);
     return;
   }
-  const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
   const words = wordsOf(project);
   const figureLead = {
     lead: say(words, 'caption.lead', { number: String(index + 1) }),
     text: figureCaption(project, norms),
   };
   const caption = paragraphLines([figureLead], SMALL_PROSE, flow.halfWidth, 'caption');
-  const figure = picture.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
   const whole = heightOf(lines, PROSE);
+  const below = BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
+  const picture = { width: flow.halfWidth, height: pictureHeight(flow, below, whole) };
+  const figure = picture.height + below;
   flow.need(Math.max(figure, whole <= flow.freshRoom ? whole : LEAST_NOTE_LINES * PROSE.leading));
   const beside = countThatFits(lines, PROSE, flow.room);
   const top = flow.y;
@@ -196,6 +198,13 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
     Math.max(figure, heightOf(lines.slice(0, beside), PROSE)),
   );
   flow.inTwoColumns(lines.slice(beside), PROSE);
+}
+
+/** A picture that finds no room below its table is drawn somewhat flatter, rather than on a page of its own. */
+function pictureHeight(flow: SheetFlow, below: number, notes: number): number {
+  const [usual, flattest] = [flow.halfWidth * PICTURE_SHAPE, flow.halfWidth * FLATTEST_PICTURE];
+  const left = flow.room - below;
+  return !flow.fresh && left < usual && left >= flattest && notes <= flow.room ? left : usual;
 }
 
 function layTechnicalNotes(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
