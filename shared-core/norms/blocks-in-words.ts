@@ -62,6 +62,27 @@ function cutsInWords(count: number): string {
     : `${count} raw scores that decide, with their ranks.`;
 }
 
+/** What the user's text does in a block: it stands in place of the standing text, or before what the block holds. */
+export function ownTextIn(kind: BlockKind): 'instead' | 'before' {
+  switch (kind) {
+    case 'title-page':
+    case 'how-to-read':
+    case 'groups-across':
+    case 'inverse':
+    case 'cut-scores':
+    case 'cautions':
+    case 'change-list':
+      return 'instead';
+    case 'contents':
+    case 'norm-group':
+    case 'tables':
+    case 'pictures':
+    case 'technical-notes':
+    case 'colophon':
+      return 'before';
+  }
+}
+
 /** The printed blocks in print order, as a list of their names; empty for none. */
 export function blocksInWords(project: NormProject): string {
   return project.sheet.blocks

@@ -1,7 +1,3 @@
-import { type PrintWords, say } from '../languages/phrases.ts';
-import type { BookletBlock } from '../norms/booklet-blocks.ts';
-import { groupNoun } from '../norms/norm-groups.ts';
-import type { NormProject } from '../norms/norm-project.ts';
 import type { BlockBody, BlockContext } from './block-pages.ts';
 import { changeListPages } from './change-list-pages.ts';
 import { colophonPages } from './colophon-pages.ts';
@@ -14,22 +10,6 @@ import { cautionsPages } from './cautions-pages.ts';
 import { cutScoresPages } from './cut-scores-pages.ts';
 import { groupsAcrossPages } from './groups-across-pages.ts';
 import { inversePages } from './inverse-pages.ts';
-
-/** The heading of a block as it is printed. */
-export function blockHeading({ kind, heading }: BookletBlock, project: NormProject, words: PrintWords): string {
-  const own = heading.trim();
-  if (own !== '') return own;
-  switch (kind) {
-    case 'title-page':
-      return project.title.trim() || say(words, 'block.tables');
-    case 'norm-group': {
-      const norms = groupNoun(project.groups.documentation) === 'norm group';
-      return say(words, norms ? 'block.norm-group' : 'block.sample');
-    }
-    default:
-      return say(words, `block.${kind}`);
-  }
-}
 
 /** The pages of a block other than the contents and the tables, which need to know the other blocks. */
 export function blockBody(context: BlockContext): BlockBody {

@@ -1,7 +1,8 @@
 import type { PrintWords } from '../languages/phrases.ts';
 import { blocksIn, DEFAULT_BLOCKS, type BlockKind, type BookletBlock } from '../norms/booklet-blocks.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { blockBody, blockHeading } from './block-kinds.ts';
+import { blockHeading } from './block-heading.ts';
+import { blockBody } from './block-kinds.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext } from './block-pages.ts';
 import { layText } from './block-text.ts';

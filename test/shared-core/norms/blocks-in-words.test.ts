@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
-import { blockHolds, BLOCK_NAMES, blocksInWords } from '../../../shared-core/norms/blocks-in-words.ts';
-import { BLOCK_KINDS } from '../../../shared-core/norms/booklet-blocks.ts';
-import { withBlock, withBlockAt } from '../../../shared-core/norms/booklet-choice.ts';
+import { blockHolds, BLOCK_NAMES, blocksInWords, ownTextIn } from '../../../shared-core/norms/blocks-in-words.ts';
+import { BLOCK_KINDS, type BlockKind } from '../../../shared-core/norms/booklet-blocks.ts';
+import { withBlock, withBlockAt, withExtent } from '../../../shared-core/norms/booklet-choice.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
-import { settledProject } from './small-projects.ts';
+import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
+import { builtSet, settledProject } from './small-projects.ts';
 
 const settled = settledProject();
 
@@ -32,6 +33,27 @@ describe('what a block holds', () => {
     const changes = { edition: '0.9', date: '2025-06-15', check: 'ABCD-1234', lines: ['Grade 4: 3 ranks'] };
     const compared = { ...settled, release: { ...settled.release, changes } };
     expect(blockHolds(compared, 'change-list')).toBe('What changed since edition 0.9.');
+  });
+});
+
+describe('a text of one’s own', () => {
+  const shown = (kind: BlockKind, text: string): string => {
+    const sheet = withBlock(withExtent(settled.sheet, 'whole'), kind, { text });
+    const cuts = [{ name: 'Support', score: 7, values: null }];
+    const { pages } = composeBooklet(builtSet({ ...settled, cuts, sheet }));
+    return pages
+      .filter(({ block }) => block === kind)
+      .flatMap(({ blocks }) => blocks.flatMap((block) => (block.kind === 'text' ? block.runs : [])))
+      .map((run) => run.text)
+      .join(' ');
+  };
+
+  it.each(BLOCK_KINDS)('stands in place of the standing text or before it, as is told: %s', (kind) => {
+    const [without, own] = [shown(kind, ''), shown(kind, 'Wordofmyown.')];
+    expect(without).not.toContain('Wordofmyown.');
+    expect(own).toContain('Wordofmyown.');
+    const kept = without.split(' ').filter((word) => !own.split(' ').includes(word));
+    expect(kept.length > 3 ? 'instead' : 'before').toBe(ownTextIn(kind));
   });
 });
 
