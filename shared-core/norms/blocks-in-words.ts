@@ -48,7 +48,7 @@ export function blockHolds(project: NormProject, kind: BlockKind): string {
       return 'What the tables must not be used for.';
     case 'change-list':
       return project.release.changes === null
-        ? 'Prints nothing yet: no edition was compared.'
+        ? 'Says so far that no edition was compared.'
         : `What changed since edition ${project.release.changes.edition}.`;
     case 'colophon':
       return 'Fingerprint, versions and the check code.';

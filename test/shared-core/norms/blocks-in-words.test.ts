@@ -29,11 +29,23 @@ describe('what a block holds', () => {
     expect(blockHolds(settled, 'cut-scores')).toBe('Prints nothing yet: no cut score is named.');
     expect(blockHolds({ ...settled, cuts: [cut] }, 'cut-scores')).toContain('One raw score');
     expect(blockHolds({ ...settled, cuts: [cut, cut] }, 'cut-scores')).toContain('2 raw scores');
-    expect(blockHolds(settled, 'change-list')).toMatch(/^Prints nothing yet/);
+    expect(blockHolds(settled, 'change-list')).toBe('Says so far that no edition was compared.');
     const changes = { edition: '0.9', date: '2025-06-15', check: 'ABCD-1234', lines: ['Grade 4: 3 ranks'] };
     const compared = { ...settled, release: { ...settled.release, changes } };
     expect(blockHolds(compared, 'change-list')).toBe('What changed since edition 0.9.');
   });
+});
+
+describe('a block that would print nothing', () => {
+  it.each([[], [{ name: 'Support', score: 7, values: null }]])(
+    'says so, and takes no page: with cuts %j',
+    (...cuts) => {
+      const project = { ...settled, cuts, sheet: withExtent(settled.sheet, 'whole') };
+      const taken = new Set(composeBooklet(builtSet(project)).pages.map(({ block }) => block));
+      const silent = BLOCK_KINDS.filter((kind) => blockHolds(project, kind).startsWith('Prints nothing'));
+      expect(silent).toEqual(BLOCK_KINDS.filter((kind) => !taken.has(kind)));
+    },
+  );
 });
 
 describe('a text of one’s own', () => {
