@@ -11,3 +11,8 @@ export function programVersion(): string {
   if (typeof version !== 'string') throw new Error('package.json names no version');
   return version;
 }
+
+/** How the program names itself in the PDFs that it makes: "Normloom 1.2.0". */
+export function producerName(version: string): string {
+  return `Normloom ${version}`;
+}

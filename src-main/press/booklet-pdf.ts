@@ -4,7 +4,7 @@ import type { Block, Booklet, Picture, Rule, TextLine } from '../../shared-core/
 import { composeBooklet } from '../../shared-core/pages/booklet-pages.ts';
 import { bookletSections, type BookletSection } from '../../shared-core/pages/booklet-sections.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
-import { programVersion } from '../program-version.ts';
+import { producerName, programVersion } from '../program-version.ts';
 import { PICTURE_FONTS } from './fonts.ts';
 import { housePrinter } from './house-printer.ts';
 import { drawPicture, drawRule, drawText } from './page-drawing.ts';
@@ -27,8 +27,10 @@ export async function bookletPdf(
   normSet: NormSet,
   onProgress: (share: number) => void = () => {},
 ): Promise<DrawnBooklet> {
-  const booklet = composeBooklet(normSet, programVersion());
-  const made = housePrinter(PICTURE_FONTS).createPdf(definition(booklet, releaseDay(normSet.project)));
+  const version = programVersion();
+  const booklet = composeBooklet(normSet, version);
+  const facts = { day: releaseDay(normSet.project), producer: producerName(version) };
+  const made = housePrinter(PICTURE_FONTS).createPdf(definition(booklet, facts));
   const document = await made.getStream();
   drawBooklet(document, booklet, onProgress);
   const { start, count } = document.bufferedPageRange();
@@ -44,13 +46,16 @@ export async function bookletPdf(
 }
 
 /** The document with its first page, still white. */
-function definition({ title, paper, language }: Booklet, day: Date): TDocumentDefinitions {
+function definition(
+  { title, paper, language }: Booklet,
+  { day, producer }: { readonly day: Date; readonly producer: string },
+): TDocumentDefinitions {
   return {
     version: '1.7',
     language,
     tagged: true,
     displayTitle: true,
-    info: { title, creator: 'Normloom', producer: 'Normloom', creationDate: day, modDate: day },
+    info: { title, creator: 'Normloom', producer, creationDate: day, modDate: day },
     pageSize: { width: paper.width, height: paper.height },
     pageMargins: 0,
     defaultStyle: { font: 'Source Sans 3' },

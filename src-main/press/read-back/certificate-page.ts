@@ -48,13 +48,15 @@ export async function certificatePdf(certificate: Certificate, { project }: Norm
 
 function contentOf(certificate: Certificate): Content[] {
   const { survey, programVersion, cells, recomputed, notRecomputed, recipes } = certificate;
+  const lines = certificate.files.reduce((sum, file) => sum + file.lines, 0);
   const differ = certificate.files.reduce((sum, { differences }) => sum + differences, 0);
   return [
     { text: CERTIFICATE_TITLE, outline: true, font: 'serif-bold', fontSize: TITLE.size },
     { text: survey, font: 'serif-italic', fontSize: SUBTITLE.size, margin: [0, 2, 0, 12] },
     paragraph(
       `Normloom ${programVersion} opened the files below again after they were made and compared every printed cell ` +
-        `with the norm set: ${printCount(cells)} cells, ${differences(differ)}.`,
+        `with the norm set: ${printCount(cells)} cells. Every line of text of the booklet, ${printCount(lines)} of them, was ` +
+        `compared with its pages placed anew. There is ${differences(differ)}.`,
     ),
     paragraph(
       'Tables that are not smoothed were worked out a second time from the tally, by another way of counting and of ' +

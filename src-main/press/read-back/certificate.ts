@@ -14,6 +14,8 @@ export interface CertifiedFile {
   readonly bytes: number;
   readonly sha256: string;
   readonly cells: number;
+  /** Lines of text compared with the pages placed anew; 0 for files that have none. */
+  readonly lines: number;
   readonly differences: number;
 }
 
@@ -61,6 +63,7 @@ export function certificateOf(
       bytes: bytes.length,
       sha256: createHash('sha256').update(bytes).digest('hex'),
       cells: read[index]?.cells ?? 0,
+      lines: read[index]?.lines ?? 0,
       differences: read[index]?.differences.length ?? 0,
     })),
     cells: read.reduce((sum, { cells }) => sum + cells, 0),
@@ -98,6 +101,7 @@ export function certificateJson(certificate: Certificate): Uint8Array {
         bytes: file.bytes,
         sha256: file.sha256,
         'cells-compared': file.cells,
+        'lines-compared': file.lines,
         differences: file.differences,
       })),
     },

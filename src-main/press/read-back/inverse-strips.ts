@@ -1,4 +1,6 @@
-import { squeezed, type PdfCell, type PdfLine } from './pdf-text.ts';
+import { say, type PrintWords } from '../../../shared-core/languages/phrases.ts';
+import type { PdfCell, PdfLine } from './pdf-text.ts';
+import { squeezed } from './read-text.ts';
 
 /** A percentile of the inverse table with the raw score below it. */
 interface InverseCell {
@@ -13,14 +15,16 @@ const NEXT_LINE = 16;
 const EDGE = 1;
 
 /** The inverse tables on a page: a line of percentiles, and below each the raw score that ends at the same edge. */
-export function inverseOn(lines: readonly PdfLine[]): readonly InverseCell[] {
+export function inverseOn(lines: readonly PdfLine[], words: PrintWords): readonly InverseCell[] {
+  const rank = squeezed(say(words, 'inverse.percentile-rank'));
+  const labels = [say(words, 'inverse.lowest'), say(words, 'inverse.highest')].map(squeezed);
   const cells = lines.flatMap((line) => line.cells);
   return cells
-    .filter(({ text }) => squeezed(text) === 'Percentilerank')
+    .filter(({ text }) => squeezed(text) === rank)
     .flatMap((label) => {
       const below = cells.find(
         ({ text, left, baseline }) =>
-          /^(?:Low|High)estrawscore$/.test(squeezed(text)) &&
+          labels.includes(squeezed(text)) &&
           Math.abs(left - label.left) <= EDGE &&
           label.baseline - baseline > SAME_LINE &&
           label.baseline - baseline < NEXT_LINE,

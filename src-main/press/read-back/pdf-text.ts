@@ -1,5 +1,6 @@
 import { createRequire } from 'node:module';
 import { pathToFileURL } from 'node:url';
+import { BOX } from './read-text.ts';
 import type * as pdfjs from 'pdfjs-dist/legacy/build/pdf.mjs';
 
 /** Words that stand together on a page; points from the left and from the bottom of the paper. */
@@ -24,9 +25,18 @@ export type PdfPages = readonly (readonly PdfLine[])[];
 const WORD_GAP = 0.12;
 const CELL_GAP = 0.35;
 const SAME_LINE = 0.6;
+/** What a reader is told where a box is drawn. */
+const NO_GLYPH = '\0';
 
-/** The lines of every page of a PDF, from the top, as another program reads them. Throws on a file that is no PDF. */
-export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
+/** A PDF as another program reads it. */
+export interface PdfRead {
+  readonly pages: PdfPages;
+  /** The program that made it, as it names itself; empty where it does not. */
+  readonly producer: string;
+}
+
+/** Reads the lines of every page of a PDF, from the top. Throws on a file that is no PDF. */
+export async function readPdf(bytes: Uint8Array): Promise<PdfRead> {
   const { getDocument } = await pdfReader();
   const task = getDocument({
     data: Uint8Array.from(bytes),
@@ -44,20 +54,17 @@ export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
         if (!('str' in item) || item.str.trim() === '') return [];
         const [size, slant, , , left, baseline] = item.transform.map(Number);
         if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
-        return [{ text: item.str, left, right: left + item.width, baseline, size }];
+        return [{ text: item.str.replaceAll(NO_GLYPH, BOX), left, right: left + item.width, baseline, size }];
       });
       pages.push(linesOf(parts));
       page.cleanup();
     }
-    return pages;
+    const { info } = await document.getMetadata();
+    const producer: unknown = Reflect.get(info, 'Producer');
+    return { pages, producer: typeof producer === 'string' ? producer : '' };
   } finally {
     await task.destroy();
   }
-}
-
-/** Without any space: line breaks and the width of spaces say nothing about a text. */
-export function squeezed(text: string): string {
-  return text.replace(/\s+/g, '');
 }
 
 function linesOf(parts: readonly PdfCell[]): readonly PdfLine[] {

@@ -1,7 +1,7 @@
 import type { Reply } from '../../../shared-core/desk.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { differenceLine, type CellDifference, type FileReadBack } from './cell-differences.ts';
-import { pdfPages, type PdfPages } from './pdf-text.ts';
+import { readPdf, type PdfRead } from './pdf-text.ts';
 import { pressedContent } from './pressed-kind.ts';
 import { readBooklet } from './read-booklet.ts';
 import { isCertificatePage, readCertificate, readCertificatePage } from './read-certificate.ts';
@@ -72,7 +72,7 @@ async function readOne(
   try {
     switch (found.kind) {
       case 'booklet':
-        return { ok: true, value: readPages(file, await pdfPages(bytes), normSet) };
+        return { ok: true, value: readPdfFile(file, await readPdf(bytes), normSet) };
       case 'workbook':
         return { ok: true, value: await readWorkbook(file, bytes, normSet) };
       case 'csv':
@@ -90,6 +90,8 @@ async function readOne(
   }
 }
 
-function readPages(file: string, pages: PdfPages, normSet: NormSet): FileReadBack {
-  return isCertificatePage(pages) ? readCertificatePage(file, pages, normSet) : readBooklet(file, pages, normSet);
+function readPdfFile(file: string, read: PdfRead, normSet: NormSet): FileReadBack {
+  return isCertificatePage(read.pages)
+    ? readCertificatePage(file, read.pages, normSet)
+    : readBooklet(file, read, normSet);
 }

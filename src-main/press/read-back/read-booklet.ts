@@ -1,121 +1,86 @@
 import type { GroupNorms } from '../../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
-import { editionLine, tableName } from '../../../shared-core/pages/sheet-texts.ts';
+import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
+import { bookletLine, editionLine, tableName } from '../../../shared-core/pages/sheet-texts.ts';
+import { producerName, programVersion } from '../../program-version.ts';
+import { AcrossRows, groupsAcrossExpected, inverseAcrossExpected } from './across-rows.ts';
+import { BookletPlaces, pageTotal, saysHead, type BookletFoot } from './booklet-place.ts';
 import { BookletRows } from './booklet-rows.ts';
-import { CellComparison, type FileReadBack } from './cell-differences.ts';
-import { squeezed, type PdfLine, type PdfPages } from './pdf-text.ts';
-
-const PAGE_NUMBER = /^page (\d+) of (\d+)$/;
-const TABLE_NAME = /^Table (\d+) ·/;
-/** The running head stands within so many points of the first line; its own lines lie closer than so many. */
-const HEAD_DEPTH = 40;
-const HEAD_LEADING = 11;
+import { CellComparison, type CellPlace, type FileReadBack } from './cell-differences.ts';
+import { comparePages } from './compare-pages.ts';
+import { CutRows } from './cut-rows.ts';
+import type { PdfRead } from './pdf-text.ts';
+import { squeezed } from './read-text.ts';
 
 /**
- * Reads a booklet by its text: the running head tells the group of a page, the heads the columns, the places the rows.
- * Every cell of every table, each percentile of the inverse table, and head, foot and number of every page are compared
- * with the set; each group and raw score must stand there exactly once, in order, and no page may be missing.
+ * Reads a booklet by its text. First what it says is compared with the norm set: the running head tells the group of a
+ * page, the heads the columns, the places the rows. Every cell of every table, and head, foot and number of every page
+ * are compared; each group and raw score must stand in the conversion tables exactly once, in order, and once more in
+ * the table of all groups where that is printed; no page may be missing. Then every line of text is compared with the
+ * booklet placed anew, so that nothing else on its pages can differ either; one that another version of the program
+ * placed may break its lines elsewhere, and is left out of that.
  */
-export function readBooklet(file: string, pages: PdfPages, normSet: NormSet): FileReadBack {
+export function readBooklet(file: string, { pages, producer }: PdfRead, normSet: NormSet): FileReadBack {
   const comparison = new CellComparison(file);
   const rows = new BookletRows(normSet, comparison);
-  const total = pageTotal(pages);
-  const numbers: number[] = [];
-  let group = 0;
+  const blocks = [
+    new AcrossRows(normSet, comparison, groupsAcrossExpected(normSet)),
+    new AcrossRows(normSet, comparison, inverseAcrossExpected(normSet)),
+    new CutRows(normSet, comparison),
+  ];
+  const reader = new BookletPlaces(normSet);
+  const places = pages.map((lines) => reader.of(lines));
+  const total = pageTotal(places, pages);
   pages.forEach((lines, index) => {
     const where = `page ${index + 1}`;
-    const foot = footOf(lines);
-    group = groupOn(lines) ?? group;
-    const norms = normSet.groups[group];
-    if (norms === undefined) {
-      comparison.compare({ where, group: '', score: '', column: 'running head' }, '', `Table ${group + 1}`);
+    const { sheet, foot } = places[index] ?? { sheet: null, foot: null };
+    const norms = sheet === null ? undefined : normSet.groups[sheet.group];
+    const place = { where, group: norms?.group.title ?? '', score: '', column: '' };
+    const number = reader.pageNumber(index + 1, total);
+    if (foot !== null || norms !== undefined) {
+      comparison.compare({ ...place, column: 'page number' }, number, foot?.number ?? '');
+      compareFoot(comparison, place, normSet, norms, foot);
+    }
+    if (sheet === null || norms === undefined) {
+      for (const block of blocks) block.take(where, lines);
       return;
     }
-    const place = { where, group: norms.group.title, score: '' };
-    comparison.compare({ ...place, column: 'page number' }, `page ${index + 1} of ${total}`, foot.number);
-    numbers.push(Number(PAGE_NUMBER.exec(foot.number)?.[1] ?? index + 1));
-    compareHead(comparison, place, tableName(normSet.project, group, norms), headText(lines));
-    compareFoot(comparison, place, normSet, norms, foot.text);
-    rows.take(group, where, lines);
+    const name = tableName(normSet.project, sheet.group, norms);
+    comparison.compare({ ...place, column: 'running head' }, name, saysHead(name, sheet.head) ? name : sheet.head);
+    rows.take(sheet.group, where, lines);
   });
+  const numbers = new Set(places.map(({ foot }, index) => foot?.page ?? index + 1));
   for (let number = 1; number <= total; number += 1) {
-    if (numbers.includes(number)) continue;
+    if (numbers.has(number)) continue;
     const place = { where: `page ${number}`, group: '', score: '', column: 'page' };
-    comparison.compare(place, `page ${number} of ${total}`, '');
+    comparison.compare(place, reader.pageNumber(number, total), '');
   }
   rows.finish();
+  for (const block of blocks) block.finish();
+  const version = programVersion();
+  if (producer === producerName(version)) {
+    comparePages(comparison, composeBooklet(normSet, version), pages);
+  } else {
+    comparison.remark(
+      `${file} was not made by this version of the program (${producerName(version)}); its tables, heads and feet were ` +
+        'compared, its other texts were not. Read it back with the version that made it.',
+    );
+  }
   return comparison.result('booklet');
-}
-
-type PagePlace = { readonly where: string; readonly group: string; readonly score: string };
-
-function compareHead(comparison: CellComparison, place: PagePlace, expected: string, found: string): void {
-  const cut = found.endsWith('…') && squeezed(expected).startsWith(squeezed(found.slice(0, -1)));
-  const same = cut || squeezed(expected) === squeezed(found);
-  comparison.compare({ ...place, column: 'running head' }, expected, same ? expected : found);
 }
 
 function compareFoot(
   comparison: CellComparison,
-  place: PagePlace,
+  place: CellPlace,
   normSet: NormSet,
-  norms: GroupNorms,
-  text: string,
+  norms: GroupNorms | undefined,
+  foot: BookletFoot | null,
 ): void {
-  const found = /check([0-9A-F]{4}-[0-9A-F]{4})/.exec(squeezed(text))?.[1] ?? '';
+  const text = foot?.text ?? '';
+  const found = /(?<![0-9A-F])[0-9A-F]{4}-[0-9A-F]{4}(?![0-9A-F])/.exec(squeezed(text))?.[0] ?? '';
   comparison.compare({ ...place, column: 'check code' }, normSet.check, found);
   if (found !== normSet.check) return;
-  const expected = editionLine(normSet, norms);
+  const expected = norms === undefined ? bookletLine(normSet) : editionLine(normSet, norms);
   const same = squeezed(expected) === squeezed(text);
   comparison.compare({ ...place, column: 'foot' }, expected, same ? expected : text);
-}
-
-/** "page 2 of 3" and everything beside and below it. */
-function footOf(lines: readonly PdfLine[]): { readonly number: string; readonly text: string } {
-  const at = lines.findLastIndex(({ cells }) => PAGE_NUMBER.test(cells.at(-1)?.text ?? ''));
-  const foot = at < 0 ? lines.slice(-1) : lines.slice(at);
-  const cells = foot.flatMap((line) => line.cells);
-  const number = at < 0 ? '' : (foot[0]?.cells.at(-1)?.text ?? '');
-  const text = cells.map((cell) => cell.text).filter((each) => each !== number);
-  return { number, text: text.join(' ') };
-}
-
-/** Pages as the booklet counts them: what most of its pages say. */
-function pageTotal(pages: PdfPages): number {
-  const said = pages.flatMap((lines) => {
-    const found = PAGE_NUMBER.exec(footOf(lines).number);
-    return found === null ? [] : [Number(found[2])];
-  });
-  const times = (total: number): number => said.filter((other) => other === total).length;
-  return said.reduce((best, total) => (times(total) > times(best) ? total : best), said[0] ?? pages.length);
-}
-
-function headCell(
-  lines: readonly PdfLine[],
-): { readonly line: number; readonly right: number; readonly text: string } | null {
-  const [top] = lines;
-  if (top === undefined) return null;
-  const line = lines.findIndex(({ cells }) => TABLE_NAME.test(cells.at(-1)?.text ?? ''));
-  const cell = lines[line]?.cells.at(-1);
-  if (cell === undefined || top.baseline - cell.baseline > HEAD_DEPTH) return null;
-  return { line, right: cell.right, text: cell.text };
-}
-
-function groupOn(lines: readonly PdfLine[]): number | null {
-  const number = TABLE_NAME.exec(headCell(lines)?.text ?? '')?.[1];
-  return number === undefined ? null : Number(number) - 1;
-}
-
-/** The name of the table with the lines it goes on in, all ending at the right margin. */
-function headText(lines: readonly PdfLine[]): string {
-  const head = headCell(lines);
-  if (head === null) return lines[0]?.cells.at(-1)?.text ?? '';
-  const texts = [head.text];
-  for (let at = head.line + 1; at < lines.length; at += 1) {
-    const cell = lines[at]?.cells.at(-1);
-    const above = lines[at - 1]?.baseline ?? 0;
-    if (cell === undefined || above - cell.baseline > HEAD_LEADING || Math.abs(cell.right - head.right) > 1) break;
-    texts.push(cell.text);
-  }
-  return texts.join(' ');
 }

@@ -3,8 +3,9 @@ import * as v from 'valibot';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { CellComparison, type FileReadBack } from './cell-differences.ts';
 import { CERTIFICATE_TITLE } from './certificate-page.ts';
-import { squeezed, type PdfPages } from './pdf-text.ts';
+import type { PdfPages } from './pdf-text.ts';
 import type { FileFound } from './read-back.ts';
+import { squeezed } from './read-text.ts';
 
 const certificateSchema = v.object({
   edition: v.string(),

@@ -23,7 +23,7 @@ describe('read-back', () => {
     expect([ran.exit, ran.stderr]).toEqual([0, '']);
     const lines = ran.stdout.trimEnd().split('\n');
     expect(lines.map((line) => line.split(':')[0])).toEqual(FILES);
-    expect(lines.every((line) => /, \d+ cells compared, no difference$/.test(line))).toBe(true);
+    expect(lines.every((line) => /, \d+ cells( and \d+ lines)? compared, no difference$/.test(line))).toBe(true);
     const renamed = fileForTest('old tables', readFileSync(join(folder, 'tables.xlsx')));
     expect(normloom(['read-back', renamed, '--against', SAMPLE_PROJECT]).stdout).toMatch(
       /^old tables: workbook, \d+ cells/,
@@ -37,7 +37,7 @@ describe('read-back', () => {
     expect(ran.exit).toBe(3);
     const [first = '', second = ''] = ran.stdout.split('\n');
     expect(first).toBe('tables.csv, line 2: Grade 4, raw score 0, raw-score: expected "0", found "O"');
-    expect(second).toMatch(/^booklet\.pdf: booklet, \d+ cells compared, no difference$/);
+    expect(second).toMatch(/^booklet\.pdf: booklet, \d+ cells and \d+ lines compared, no difference$/);
     expect(ran.stderr).toBe('normloom: one cell differs from the project.\n');
     const json = normloom(['read-back', altered, '--against', SAMPLE_PROJECT, '--format', 'json']);
     expect(json.exit).toBe(3);

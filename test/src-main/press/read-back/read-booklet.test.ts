@@ -7,7 +7,7 @@ import type { Booklet } from '../../../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../../../shared-core/pages/booklet-pages.ts';
 import { bookletPdf } from '../../../../src-main/press/booklet-pdf.ts';
 import { differenceLine } from '../../../../src-main/press/read-back/cell-differences.ts';
-import { pdfPages } from '../../../../src-main/press/read-back/pdf-text.ts';
+import { readPdf } from '../../../../src-main/press/read-back/pdf-text.ts';
 import { readBooklet } from '../../../../src-main/press/read-back/read-booklet.ts';
 import {
   KERNEL,
@@ -28,7 +28,7 @@ const allColumns = (project: NormProject): NormProject => ({
 async function differences(printed: NormSet, against: NormSet): Promise<readonly string[]> {
   const { bookletPdf: draw } = await import('../../../../src-main/press/booklet-pdf.ts');
   const { pdf } = await draw(printed);
-  return readBooklet('booklet.pdf', await pdfPages(pdf), against).differences.map(differenceLine);
+  return readBooklet('booklet.pdf', await readPdf(pdf), against).differences.map(differenceLine);
 }
 
 /** With a booklet that was composed wrongly in the place of the right one. */
@@ -87,11 +87,13 @@ describe('readBooklet', () => {
   it.each(CASES)('finds no difference with %s', async (_, cohort, change) => {
     const set = sampleNormSet(cohort, change);
     const { pdf } = await bookletPdf(set);
-    const read = readBooklet('booklet.pdf', await pdfPages(pdf), set);
+    const read = readBooklet('booklet.pdf', await readPdf(pdf), set);
     expect(read.differences.map(differenceLine)).toEqual([]);
     const columns = set.project.table.columns.length + 2;
     const cells = set.groups.reduce((sum, { rows }) => sum + rows.length * columns, 0);
     expect(read.cells).toBeGreaterThan(cells);
+    expect(read.lines).toBeGreaterThan(20);
+    expect(read.remarks).toEqual([]);
   });
 
   it('finds one changed glyph in the table of the pdf, in a rank, a score or a further column', async () => {
@@ -116,10 +118,12 @@ describe('readBooklet', () => {
     expect(await differences(printing({ scoreText: '2E' }), set)).toEqual([
       'booklet.pdf, page 2: Grade 5, raw score 2E, raw score: expected nothing, found "2E"',
       'booklet.pdf, no page: Grade 5, raw score 23, raw score: expected "23", found nothing',
+      expect.stringMatching(/^booklet\.pdf, page 2: line: expected ".* 23 51 .*", found ".* 2E 51 .*"$/),
     ]);
     expect(await differences(printing({ scoreText: '22' }), set)).toEqual([
       'booklet.pdf, page 2: Grade 5, raw score 22, raw score: expected nothing, found "22, a second time"',
       'booklet.pdf, no page: Grade 5, raw score 23, raw score: expected "23", found nothing',
+      expect.stringMatching(/^booklet\.pdf, page 2: line: expected ".* 23 51 .*", found ".* 22 51 .*"$/),
     ]);
   });
 
@@ -182,6 +186,7 @@ describe('readBooklet', () => {
     }));
     expect(await withBooklet({ ...booklet, pages }, () => differences(set, set))).toEqual([
       `booklet.pdf, no page: Grade 4, raw score ${last}, raw score: expected "${last}", found nothing`,
+      expect.stringMatching(new RegExp(`^booklet\\.pdf, page 1: line: expected ".* ${last} .*", found "`)),
     ]);
   });
 });
