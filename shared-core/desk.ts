@@ -54,8 +54,6 @@ export interface EarlierEdition {
   /** Null for a project file that was never released. */
   readonly released: {
     readonly check: string;
-    /** Version of the program that released it. */
-    readonly version: string;
     readonly analyst: string;
     readonly checker: string;
   } | null;

@@ -8,7 +8,12 @@ const LONGEST = 40;
  * The project that goes on from a released edition: its choices and its tally, a number above the released one, nobody's
  * signature, and the released edition named as the one that changes are told against.
  */
-export function nextEdition({ project, edition, date, check }: FrozenEdition): NormProject {
+export function nextEdition({
+  project,
+  edition,
+  date,
+  check,
+}: Pick<FrozenEdition, 'project' | 'edition' | 'date' | 'check'>): NormProject {
   return {
     ...project,
     release: {

@@ -1,16 +1,21 @@
-import type { NormSet } from './norm-set.ts';
+import { pressProblem, type NormSet } from './norm-set.ts';
 import { openMustQueries, type Query } from './queries.ts';
 import { signedByOne } from './signatures.ts';
 
 /** What an edition still lacks before it can be released, with where it is put right. */
 export type ReleaseGap =
   | { readonly kind: 'query'; readonly query: Query }
-  | { readonly kind: 'edition' | 'analyst' | 'checker' | 'same-person'; readonly problem: string };
+  | { readonly kind: 'tables' | 'edition' | 'analyst' | 'checker' | 'same-person'; readonly problem: string };
 
 /** Everything that stands in the way of a release, in the order in which it is best done; nothing where it is ready. */
-export function releaseGaps({ project, queries }: NormSet): readonly ReleaseGap[] {
+export function releaseGaps(normSet: NormSet): readonly ReleaseGap[] {
+  const { project, queries } = normSet;
   const { edition, analyst, checker } = project.release;
-  const gaps: ReleaseGap[] = openMustQueries(queries).map((query) => ({ kind: 'query', query }));
+  const unfit = pressProblem(normSet);
+  const gaps: ReleaseGap[] = [
+    ...(unfit === null ? [] : [{ kind: 'tables', problem: unfit } as const]),
+    ...openMustQueries(queries).map((query) => ({ kind: 'query', query }) as const),
+  ];
   if (edition.trim() === '') gaps.push({ kind: 'edition', problem: 'The edition has no number. Give it one.' });
   if (analyst.trim() === '') {
     gaps.push({ kind: 'analyst', problem: 'Nobody has signed as analyst. Name who prepared the tables.' });

@@ -160,8 +160,8 @@ export class ProjectRoom {
 
 function earlierEdition(file: string, { project, edition }: StoredRead): EarlierEdition {
   if (edition === null) return { file, project, released: null };
-  const { check, program, analyst, checker } = edition;
-  return { file, project, released: { check, version: program.version, analyst, checker } };
+  const { check, analyst, checker } = edition;
+  return { file, project, released: { check, analyst, checker } };
 }
 
 function draftFile(file: KnownFile | null): { readonly path: string; readonly fingerprint: string } | null {

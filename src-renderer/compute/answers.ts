@@ -1,3 +1,5 @@
+import { changeLines } from '../../shared-core/norms/change-list.ts';
+import { comparedProjects } from '../../shared-core/norms/compared-projects.ts';
 import { printRanges } from '../../shared-core/norms/group-norms.ts';
 import { smoothGroup } from '../../shared-core/norms/group-smoothing.ts';
 import { normGroups, type NormGroup } from '../../shared-core/norms/norm-groups.ts';
@@ -12,7 +14,7 @@ import { countedRank } from '../../shared-core/precision/counted-rank.ts';
 import { samplingDesign } from '../../shared-core/precision/sampling-design.ts';
 import { printScore } from '../../shared-core/scores/printed-number.ts';
 import { summarise } from '../../shared-core/tally/cohort-summary.ts';
-import type { DifferAnswer } from './compute-message.ts';
+import type { ComparedForPage, DifferAnswer } from './compute-message.ts';
 
 /** The group of a key; throws when the project has none such, which is a programmer's mistake. */
 function groupOf(project: NormProject, key: string): NormGroup {
@@ -50,6 +52,13 @@ export function differOf(project: NormProject, key: string, text: string): Diffe
           }))
         : [],
   };
+}
+
+export function comparisonOf(before: NormProject, after: NormProject): ComparedForPage {
+  const compared = comparedProjects(before, after);
+  if (!compared.ok) return compared;
+  const { comparison } = compared;
+  return { ok: true, comparison, lines: changeLines(comparison) };
 }
 
 /** The samples of a group, step by step; refuses at once where the definition counts nobody. */

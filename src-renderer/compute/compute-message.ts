@@ -1,3 +1,4 @@
+import type { EditionComparison } from '../../shared-core/norms/edition-compare.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import type { PrintRange } from '../../shared-core/norms/print-range.ts';
@@ -9,6 +10,7 @@ export type ComputeAsk =
   | { readonly kind: 'norm-set'; readonly project: NormProject }
   | { readonly kind: 'print-ranges'; readonly project: NormProject; readonly group: string }
   | { readonly kind: 'differ'; readonly project: NormProject; readonly group: string; readonly text: string }
+  | { readonly kind: 'comparison'; readonly before: NormProject; readonly after: NormProject }
   | { readonly kind: 'bootstrap'; readonly project: NormProject; readonly group: string };
 
 /** Why somebody's column differs, ready to be shown. */
@@ -20,10 +22,16 @@ export interface DifferAnswer {
   readonly rows: readonly { readonly scoreText: string; readonly theirs: string; readonly ours: string }[];
 }
 
+/** Two editions compared, with the sentences of a change list. */
+export type ComparedForPage =
+  | { readonly ok: true; readonly comparison: EditionComparison; readonly lines: readonly string[] }
+  | { readonly ok: false; readonly problem: string };
+
 export type ComputeAnswer =
   | { readonly kind: 'norm-set'; readonly built: NormSetBuilt }
   | { readonly kind: 'print-ranges'; readonly ranges: readonly PrintRange[] }
   | { readonly kind: 'differ'; readonly answer: DifferAnswer }
+  | { readonly kind: 'comparison'; readonly compared: ComparedForPage }
   | { readonly kind: 'bootstrap'; readonly result: BootstrapResult };
 
 export type ToWorker = { readonly id: number; readonly ask: ComputeAsk } | { readonly id: number; readonly stop: true };

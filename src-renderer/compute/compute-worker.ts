@@ -1,5 +1,5 @@
 import { buildNormSet } from '../../shared-core/norms/norm-set.ts';
-import { bootstrapOf, differOf, rangesOf } from './answers.ts';
+import { bootstrapOf, comparisonOf, differOf, rangesOf } from './answers.ts';
 import type { ComputeAsk, FromWorker, ToWorker } from './compute-message.ts';
 
 /** Samples are drawn for so long before other questions get their turn. */
@@ -23,6 +23,9 @@ async function answer(id: number, ask: ComputeAsk): Promise<void> {
       break;
     case 'differ':
       say({ id, answer: { kind: 'differ', answer: differOf(ask.project, ask.group, ask.text) } });
+      break;
+    case 'comparison':
+      say({ id, answer: { kind: 'comparison', compared: comparisonOf(ask.before, ask.after) } });
       break;
     case 'bootstrap':
       await drawSamples(id, ask);

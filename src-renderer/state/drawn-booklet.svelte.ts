@@ -1,19 +1,10 @@
-import type { DrawnPages, JobResult } from '../../shared-core/desk.ts';
+import type { DrawnPages } from '../../shared-core/desk.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-import type { DeskWire } from '../desk/desk-wire.ts';
-
-/** What drawing needs of the open project. */
-export interface DrawingFor {
-  readonly wire: DeskWire;
-  readonly project: () => NormProject;
-  /** Shows a job until it ends; null when it failed, which has then been told, or was stopped. */
-  readonly follow: (job: string, doing: string) => Promise<JobResult | null>;
-  readonly fail: (problem: string) => void;
-}
+import type { WorkFor } from './work-for.ts';
 
 /** The booklet as the press would draw it, and the page of it that is looked at. */
 export class DrawnBooklet {
-  readonly #for: DrawingFor;
+  readonly #for: WorkFor;
   #drawing: string | null = null;
 
   drawn = $state.raw<DrawnPages | null>(null);
@@ -24,8 +15,8 @@ export class DrawnBooklet {
   /** Whether pages that face each other are shown side by side. */
   facing = $state(false);
 
-  constructor(drawingFor: DrawingFor) {
-    this.#for = drawingFor;
+  constructor(workFor: WorkFor) {
+    this.#for = workFor;
   }
 
   get page(): number {

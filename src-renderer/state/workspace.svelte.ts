@@ -1,4 +1,4 @@
-import type { CohortPreview, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
+import type { CohortPreview, FileHandle, OpenedProject } from '../../shared-core/desk.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { Station } from '../../shared-core/norms/queries.ts';
@@ -8,11 +8,16 @@ import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { BuiltNorms } from './built-norms.svelte.ts';
 import { DrawnBooklet } from './drawn-booklet.svelte.ts';
+import { EarlierEditions } from './earlier-editions.svelte.ts';
+import { ErratumWork } from './erratum-work.svelte.ts';
 import { ProjectHistory } from './history.svelte.ts';
+import { PressWork } from './press-work.svelte.ts';
 import { ReadStates } from './read-states.ts';
 import { followJob } from './run-job.ts';
 import { nounFrom, titleFrom } from './names-from-file.ts';
+import { takenFile } from './taken-file.ts';
 import { withTally } from './with-tally.ts';
+import type { WorkFor } from './work-for.ts';
 
 export interface RunningWork {
   readonly job: string;
@@ -30,6 +35,7 @@ const AUTOSAVE_AFTER_MS = 400;
 /** One open project: its choices and their history, where it is saved, and the work that runs for it. */
 export class Workspace {
   readonly #wire: DeskWire;
+  readonly #workFor: WorkFor;
   readonly #draft: string;
   readonly #history: ProjectHistory;
   #autosave: ReturnType<typeof setTimeout> | null = null;
@@ -42,7 +48,6 @@ export class Workspace {
   work = $state.raw<RunningWork | null>(null);
   problem = $state<string | null>(null);
   preview = $state.raw<CohortPreview | null>(null);
-  pressed = $state.raw<Pressed | null>(null);
   cohort = $state<FileHandle | null>(null);
   readonly #states = new ReadStates();
   #handle: FileHandle | null;
@@ -54,18 +59,25 @@ export class Workspace {
   /** The numbers of the project, or of the one before it while the new ones are being worked out. */
   readonly norms = new BuiltNorms();
   readonly booklet: DrawnBooklet;
+  readonly presses: PressWork;
+  readonly earlier: EarlierEditions;
+  readonly erratum: ErratumWork;
   readonly group: GroupNorms | null = $derived(
     this.norms.groups.find(({ group }) => group.key === this.groupKey) ?? this.norms.groups[0] ?? null,
   );
 
   constructor(wire: DeskWire, opened: OpenedProject) {
     this.#wire = wire;
-    this.booklet = new DrawnBooklet({
+    this.#workFor = {
       wire,
       project: () => this.project,
       follow: (job, doing) => this.#follow(job, doing),
       fail: (problem) => (this.problem = problem),
-    });
+    };
+    this.booklet = new DrawnBooklet(this.#workFor);
+    this.presses = new PressWork(this.#workFor);
+    this.earlier = new EarlierEditions(this.#workFor, opened.earlier);
+    this.erratum = new ErratumWork(this.#workFor);
     this.#draft = opened.draft;
     this.#history = new ProjectHistory(opened.project);
     this.#handle = opened.handle;
@@ -115,7 +127,7 @@ export class Workspace {
 
   /** Opens the host's dialog, or takes what the page's file field or the host gave. */
   async takeCohort(file: File | FileHandle | null): Promise<void> {
-    const handle = await this.#handleOf(file);
+    const handle = await takenFile(this.#workFor, file, 'cohort');
     if (handle === null) return;
     const seen = await this.#wire.ask('look-at-cohort', { handle, reading: null });
     if (!seen.ok) {
@@ -270,26 +282,6 @@ export class Workspace {
     }
   }
 
-  async press(): Promise<void> {
-    const { project } = this;
-    this.pressed = null;
-    const started = await this.#wire.ask('press', {
-      project,
-      name: project.title === '' ? 'Untitled norms' : project.title,
-    });
-    if (!started.ok) {
-      this.problem = started.problem;
-      return;
-    }
-    const result = await this.#follow(started.value.job, 'Pressing');
-    if (result?.kind === 'pressed') this.pressed = result.pressed;
-  }
-
-  async showPressed(): Promise<void> {
-    const shown = await this.#wire.ask('show-pressed', {});
-    if (!shown.ok) this.problem = shown.problem;
-  }
-
   /** Before the project is closed: what is not yet kept is kept now. */
   async settle(): Promise<void> {
     if (this.#autosave === null) return;
@@ -314,25 +306,6 @@ export class Workspace {
     if (this.work?.job === job) this.work = null;
   }
 
-  async #handleOf(file: File | FileHandle | null): Promise<FileHandle | null> {
-    if (typeof file === 'string') return file;
-    return file === null ? this.#chooseHandle() : this.#received(file);
-  }
-
-  async #chooseHandle(): Promise<FileHandle | null> {
-    const chosen = await this.#wire.ask('choose-file', { kind: 'cohort' });
-    if (chosen.ok) return chosen.value?.handle ?? null;
-    this.problem = chosen.problem;
-    return null;
-  }
-
-  async #received(file: File): Promise<FileHandle | null> {
-    const received = await this.#wire.receiveFile(file);
-    if (received.ok) return received.value;
-    this.problem = received.problem;
-    return null;
-  }
-
   #push(project: NormProject, waits: boolean): void {
     this.#states.note(project, this.cohort, waits);
     this.#history.push(project);
@@ -347,7 +320,6 @@ export class Workspace {
 
   #changed(): void {
     void this.norms.build(this.project);
-    this.pressed = null;
     if (this.saved.kind === 'saved') this.saved = { kind: 'unsaved' };
     if (this.#autosave !== null) clearTimeout(this.#autosave);
     this.#autosave = setTimeout(() => {

@@ -72,7 +72,7 @@ test('from the sample through the six stations to the booklet, workbook and csv 
   await expect(page.getByText(/^page 2 of 3$/)).toBeVisible();
 
   await goTo(page, 'Release');
-  await page.getByRole('button', { name: 'Press edition 1.0' }).click();
+  await page.getByRole('button', { name: 'Press a proof' }).click();
   await expect(page.getByText('Pressed.')).toBeVisible({ timeout: 60_000 });
 
   const [folder] = readdirSync(program.projects).map((name) => join(program.projects, name));

@@ -66,7 +66,7 @@ test('smoothed ranks with their intervals, from the Curve station to print', asy
   await expect(page.getByRole('heading', { name: 'What else could be printed?' })).toBeVisible();
 
   await goTo(page, 'Release');
-  await page.getByRole('button', { name: 'Press edition 1.0' }).click();
+  await page.getByRole('button', { name: 'Press a proof' }).click();
   await expect(page.getByText('Pressed.')).toBeVisible({ timeout: 60_000 });
   await expect(page.getByText(/Smoothed tables are not worked out a second time\./)).toBeVisible();
   const [folder = ''] = readdirSync(program.projects).map((name) => join(program.projects, name));
@@ -109,7 +109,7 @@ test('ranks made by another rule are recognised, and a group that cannot be smoo
   await page.getByRole('radio', { name: /^9 / }).click();
   await expect(page.getByRole('button', { name: /^Take what works nearest/ })).toBeVisible();
   await goTo(page, 'Release');
-  await page.getByRole('button', { name: /^Press edition/ }).click();
+  await page.getByRole('button', { name: 'Press a proof' }).click();
   await expect(page.getByRole('alert')).toContainText('cannot be smoothed as chosen');
   await page.getByRole('button', { name: 'Close' }).click();
   await goTo(page, 'Curve');

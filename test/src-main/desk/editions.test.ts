@@ -160,7 +160,7 @@ describe('an edition file', () => {
     expect(opened.earlier).toEqual({
       file: EDITION,
       project,
-      released: { check: '0000-0000', version: '0.0.1', analyst: 'A. Weir', checker: 'J. Lund' },
+      released: { check: '0000-0000', analyst: 'A. Weir', checker: 'J. Lund' },
     });
     expect((await hand.ask('list-projects', {})).recent).toEqual([]);
     const ask = { draft: opened.draft, name: 'Next', project: opened.project };
