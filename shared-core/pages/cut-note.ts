@@ -1,4 +1,4 @@
-import { figure, type PrintWords, say, wordsOf } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { cutScoreText, cutsOfGroup, firstOnGoodSide } from '../norms/cuts.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { Cut, NormProject } from '../norms/norm-project.ts';
@@ -8,7 +8,7 @@ export function cutNote(project: NormProject, { group }: GroupNorms, words: Prin
   const { scale } = group.table;
   const named = cutsOfGroup(project, group.key)
     .filter(({ score }) => firstOnGoodSide(scale, score) !== null)
-    .map((cut) => cutInWords(cut, figure(wordsOf(project), cutScoreText(scale, cut.score)), words));
+    .map((cut) => cutInWords(cut, figure(words, cutScoreText(scale, cut.score)), words));
   const [cut] = named;
   if (cut === undefined) return null;
   return named.length === 1 ? say(words, 'cuts.rule', { cut }) : say(words, 'cuts.rules', { cuts: named.join(', ') });

@@ -1,12 +1,10 @@
 import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { cutTables, type CutRow, type CutTable } from '../norms/cut-table.ts';
-import type { NormSet } from '../norms/norm-set.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
 import { brokenLines, cutColumns, measureCuts, type CutColumn } from './cut-columns.ts';
 import { inCountedFives } from './row-blocks.ts';
-import { printedTitle } from './sheet-texts.ts';
 import { wordsCell } from './table-cells.ts';
 import { layAdjustmentNotes } from './table-notes.ts';
 import { layTable } from './table-pages.ts';
@@ -20,7 +18,7 @@ const BETWEEN_TABLES = 18;
 export const cutScoresPages: BlockPages = (context) => {
   const { normSet, words } = context;
   const { project, groups } = normSet;
-  const tables = printedCuts(normSet);
+  const tables = cutTables(project, groups).filter(({ rows }) => rows.length > 0);
   if (tables.length === 0) return { pages: [], remarks: [] };
   const weighted = groups.some(({ group }) => group.table.weighted);
   const flow = openBlock(context);
@@ -47,7 +45,6 @@ export const cutScoresPages: BlockPages = (context) => {
   });
   layAdjustmentNotes(
     flow,
-    normSet,
     groups.filter((_, group) => rows.some((row) => row.group === group && row.row?.adjusted)),
     words,
   );
@@ -56,17 +53,6 @@ export const cutScoresPages: BlockPages = (context) => {
     remarks: [rowHeightRemark(sheet), smaller ? smallerRemark(sheet) : null].filter((remark) => remark !== null),
   };
 };
-
-/** The cuts that stand in a group, with the titles of the groups as they are printed. */
-function printedCuts({ project, groups }: NormSet): readonly CutTable[] {
-  const titles = groups.map(({ group }) => printedTitle(project, group));
-  return cutTables(project, groups)
-    .filter(({ rows }) => rows.length > 0)
-    .map((table) => ({
-      ...table,
-      rows: table.rows.map((row) => ({ ...row, title: titles[row.group] ?? row.title })),
-    }));
-}
 
 function headingOf({ cut, scoreText }: CutTable, words: PrintWords): string {
   const [name, score] = [cut.name.trim(), figure(words, scoreText)];

@@ -7,7 +7,6 @@ import type { AcrossGroup, AcrossTable } from './across-table.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
-import { printedTitle } from './sheet-texts.ts';
 import { figureCell, rankCell } from './table-cells.ts';
 import { layAdjustmentNotes, layTableNote } from './table-notes.ts';
 
@@ -22,17 +21,17 @@ export const groupsAcrossPages: BlockPages = (context) => {
   );
   const remarks = layAcross(flow, context, groupsAcross(normSet, words));
   layTableNote(flow, 'smoothed', smoothedNote(context));
-  layAdjustmentNotes(flow, normSet, normSet.groups, words);
+  layAdjustmentNotes(flow, normSet.groups, words);
   return { pages: flow.pages, remarks };
 };
 
-function groupsAcross({ groups, project }: NormSet, words: PrintWords): AcrossTable {
+function groupsAcross({ groups }: NormSet, words: PrintWords): AcrossTable {
   const [first] = groups;
   const scores = first?.rows ?? [];
   return {
     table: 'groups-across',
     rowHead: scoreColumn(words).heading,
-    groups: groupHeads({ groups, project }, words),
+    groups: groupHeads(groups, words),
     scale: first?.group.table.scale ?? null,
     rows: scores.map(({ score, scoreText }, position) => ({
       row: score,
@@ -48,22 +47,17 @@ function groupsAcross({ groups, project }: NormSet, words: PrintWords): AcrossTa
 }
 
 /** The groups as heads: their titles, and under each how many people it has. */
-export function groupHeads(
-  { groups, project }: Pick<NormSet, 'groups' | 'project'>,
-  words: PrintWords,
-): readonly AcrossGroup[] {
+export function groupHeads(groups: NormSet['groups'], words: PrintWords): readonly AcrossGroup[] {
   return groups.map(({ group, summary }) => ({
-    title: printedTitle(project, group),
+    title: group.title,
     note: say(words, 'across.n', { count: figure(words, printCount(summary.n)) }),
   }));
 }
 
 /** Which groups are smoothed; null where none is. */
-function smoothedNote({ normSet: { groups, project }, words }: BlockContext): string | null {
+function smoothedNote({ normSet: { groups }, words }: BlockContext): string | null {
   const smoothed = groups.filter(({ smoothing }) => smoothing.state === 'smoothed');
   if (smoothed.length === 0) return null;
   if (smoothed.length === groups.length) return say(words, 'across.all-smoothed');
-  return say(words, 'across.some-smoothed', {
-    groups: smoothed.map(({ group }) => printedTitle(project, group)).join('; '),
-  });
+  return say(words, 'across.some-smoothed', { groups: smoothed.map(({ group }) => group.title).join('; ') });
 }

@@ -25,11 +25,11 @@ export const inversePages: BlockPages = (context) => {
   return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
 };
 
-function inverseAcross({ groups, project }: NormSet, words: PrintWords): AcrossTable {
+function inverseAcross({ groups }: NormSet, words: PrintWords): AcrossTable {
   return {
     table: 'inverse-across',
     rowHead: rankColumn(words).heading,
-    groups: groupHeads({ groups, project }, words),
+    groups: groupHeads(groups, words),
     scale: null,
     rows: INVERSE_PERCENTILES.map((percentile, position) => ({
       row: percentile,

@@ -2,7 +2,6 @@ import { figure, wordsOf } from '../../../shared-core/languages/phrases.ts';
 import { prints, type BlockKind } from '../../../shared-core/norms/booklet-blocks.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { rankColumn, scoreColumn } from '../../../shared-core/norms/table-columns.ts';
-import { BLOCK_WORDS } from '../../../shared-core/pages/block-words.ts';
 import type { AcrossGroup } from '../../../shared-core/pages/across-table.ts';
 import { groupHeads } from '../../../shared-core/pages/groups-across-pages.ts';
 import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
@@ -76,7 +75,7 @@ export class AcrossRows {
     this.#normSet = normSet;
     this.#comparison = comparison;
     this.#expected = expected;
-    this.#groups = groupHeads(normSet.groups, BLOCK_WORDS, wordsOf(normSet.project));
+    this.#groups = groupHeads(normSet.groups, wordsOf(normSet.project));
   }
 
   /** Compares the columns of the table on a page. */

@@ -1,10 +1,9 @@
-import { figure, wordsOf, type PrintWords } from '../../../shared-core/languages/phrases.ts';
+import { figure, say, wordsOf, type PrintWords } from '../../../shared-core/languages/phrases.ts';
 import { ADJUSTED_MARK } from '../../../shared-core/norms/adjustment-words.ts';
 import { prints } from '../../../shared-core/norms/booklet-blocks.ts';
 import { cutTables, type CutRow } from '../../../shared-core/norms/cut-table.ts';
 import { cutName } from '../../../shared-core/norms/cuts.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
-import { BLOCK_WORDS, say } from '../../../shared-core/pages/block-words.ts';
 import type { CellComparison, CellPlace } from './cell-differences.ts';
 import { EDGE, endOf, SAME_SIZE } from './column-rows.ts';
 import type { PdfCell, PdfLine } from './pdf-text.ts';
@@ -35,8 +34,9 @@ export class CutRows {
 
   /** Compares the tables of cuts on a page: found by a line of heads, read downwards. */
   take(where: string, lines: readonly PdfLine[]): void {
+    const words = wordsOf(this.#normSet.project);
     const columns = 1 + (this.#expected[0]?.figures.length ?? 0);
-    const heads = [say(BLOCK_WORDS, 'cuts.group'), say(BLOCK_WORDS, 'cuts.n')].map(squeezed);
+    const heads = [say(words, 'cuts.group'), say(words, 'cuts.n')].map(squeezed);
     lines.forEach(({ cells }, at) => {
       const [title, n] = cells;
       if (cells.length !== columns || title === undefined || n === undefined) return;
