@@ -1,9 +1,11 @@
 import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { cutTables, type CutRow, type CutTable } from '../norms/cut-table.ts';
+import type { NormSet } from '../norms/norm-set.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
 import { brokenLines, cutColumns, measureCuts, type CutColumn } from './cut-columns.ts';
+import { printedTitle } from './sheet-texts.ts';
 import { inCountedFives } from './row-blocks.ts';
 import { wordsCell } from './table-cells.ts';
 import { layAdjustmentNotes } from './table-notes.ts';
@@ -18,7 +20,7 @@ const BETWEEN_TABLES = 18;
 export const cutScoresPages: BlockPages = (context) => {
   const { normSet, words } = context;
   const { project, groups } = normSet;
-  const tables = cutTables(project, groups).filter(({ rows }) => rows.length > 0);
+  const tables = printedCuts(normSet);
   if (tables.length === 0) return { pages: [], remarks: [] };
   const weighted = groups.some(({ group }) => group.table.weighted);
   const flow = openBlock(context);
@@ -53,6 +55,19 @@ export const cutScoresPages: BlockPages = (context) => {
     remarks: [rowHeightRemark(sheet), smaller ? smallerRemark(sheet) : null].filter((remark) => remark !== null),
   };
 };
+
+/** The cuts that stand in a group, with its title as it is printed. */
+export function printedCuts({ project, groups }: NormSet): readonly CutTable[] {
+  return cutTables(project, groups)
+    .filter(({ rows }) => rows.length > 0)
+    .map((table) => ({
+      ...table,
+      rows: table.rows.map((row) => {
+        const norms = groups[row.group];
+        return norms === undefined ? row : { ...row, title: printedTitle(project, norms.group) };
+      }),
+    }));
+}
 
 function headingOf({ cut, scoreText }: CutTable, words: PrintWords): string {
   const [name, score] = [cut.name.trim(), figure(words, scoreText)];

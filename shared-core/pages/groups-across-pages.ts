@@ -7,6 +7,7 @@ import type { AcrossGroup, AcrossTable } from './across-table.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
+import { printedTitle } from './sheet-texts.ts';
 import { figureCell, rankCell } from './table-cells.ts';
 import { layAdjustmentNotes, layTableNote } from './table-notes.ts';
 
@@ -25,13 +26,14 @@ export const groupsAcrossPages: BlockPages = (context) => {
   return { pages: flow.pages, remarks };
 };
 
-function groupsAcross({ groups }: NormSet, words: PrintWords): AcrossTable {
+function groupsAcross(normSet: NormSet, words: PrintWords): AcrossTable {
+  const { groups } = normSet;
   const [first] = groups;
   const scores = first?.rows ?? [];
   return {
     table: 'groups-across',
     rowHead: scoreColumn(words).heading,
-    groups: groupHeads(groups, words),
+    groups: groupHeads(normSet, words),
     scale: first?.group.table.scale ?? null,
     rows: scores.map(({ score, scoreText }, position) => ({
       row: score,
@@ -47,17 +49,19 @@ function groupsAcross({ groups }: NormSet, words: PrintWords): AcrossTable {
 }
 
 /** The groups as heads: their titles, and under each how many people it has. */
-export function groupHeads(groups: NormSet['groups'], words: PrintWords): readonly AcrossGroup[] {
+export function groupHeads({ groups, project }: NormSet, words: PrintWords): readonly AcrossGroup[] {
   return groups.map(({ group, summary }) => ({
-    title: group.title,
+    title: printedTitle(project, group),
     note: say(words, 'across.n', { count: figure(words, printCount(summary.n)) }),
   }));
 }
 
 /** Which groups are smoothed; null where none is. */
-function smoothedNote({ normSet: { groups }, words }: BlockContext): string | null {
+function smoothedNote({ normSet: { groups, project }, words }: BlockContext): string | null {
   const smoothed = groups.filter(({ smoothing }) => smoothing.state === 'smoothed');
   if (smoothed.length === 0) return null;
   if (smoothed.length === groups.length) return say(words, 'across.all-smoothed');
-  return say(words, 'across.some-smoothed', { groups: smoothed.map(({ group }) => group.title).join('; ') });
+  return say(words, 'across.some-smoothed', {
+    groups: smoothed.map(({ group }) => printedTitle(project, group)).join('; '),
+  });
 }

@@ -25,11 +25,12 @@ export const inversePages: BlockPages = (context) => {
   return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
 };
 
-function inverseAcross({ groups }: NormSet, words: PrintWords): AcrossTable {
+function inverseAcross(normSet: NormSet, words: PrintWords): AcrossTable {
+  const { groups } = normSet;
   return {
     table: 'inverse-across',
     rowHead: rankColumn(words).heading,
-    groups: groupHeads(groups, words),
+    groups: groupHeads(normSet, words),
     scale: null,
     rows: INVERSE_PERCENTILES.map((percentile, position) => ({
       row: percentile,

@@ -75,7 +75,7 @@ export class AcrossRows {
     this.#normSet = normSet;
     this.#comparison = comparison;
     this.#expected = expected;
-    this.#groups = groupHeads(normSet.groups, wordsOf(normSet.project));
+    this.#groups = groupHeads(normSet, wordsOf(normSet.project));
   }
 
   /** Compares the columns of the table on a page. */

@@ -1,12 +1,13 @@
 import { figure, say, wordsOf, type PrintWords } from '../../../shared-core/languages/phrases.ts';
 import { ADJUSTED_MARK } from '../../../shared-core/norms/adjustment-words.ts';
 import { prints } from '../../../shared-core/norms/booklet-blocks.ts';
-import { cutTables, type CutRow } from '../../../shared-core/norms/cut-table.ts';
+import type { CutRow } from '../../../shared-core/norms/cut-table.ts';
 import { cutName } from '../../../shared-core/norms/cuts.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { CellComparison, CellPlace } from './cell-differences.ts';
 import { EDGE, endOf, SAME_SIZE } from './column-rows.ts';
 import type { PdfCell, PdfLine } from './pdf-text.ts';
+import { printedCuts } from '../../../shared-core/pages/cut-scores-pages.ts';
 import { squeezed, withPlainSpaces } from './read-text.ts';
 
 interface ExpectedCut {
@@ -112,9 +113,9 @@ function placeOf(where: string, { title, score, cut }: ExpectedCut, column: stri
   return { where, group: title, score, column: `${column} at the cut ${cut}` };
 }
 
-function expectedCuts({ project, groups }: NormSet): readonly ExpectedCut[] {
-  const words = wordsOf(project);
-  const tables = cutTables(project, groups);
+function expectedCuts(normSet: NormSet): readonly ExpectedCut[] {
+  const words = wordsOf(normSet.project);
+  const tables = printedCuts(normSet);
   const intervals = tables.some(({ rows }) => rows.some(({ interval }) => interval !== null));
   return tables.flatMap(({ cut, scoreText, rows }) =>
     rows.map((row) => ({

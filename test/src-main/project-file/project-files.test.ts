@@ -31,7 +31,12 @@ describe('reading a project file', () => {
     const project = projectWithTally('Ostrey Vale', 3);
     const text = projectToText(project);
     await writeFile(at('a.normloom'), text);
-    expect(await readProject(at('a.normloom'))).toEqual({ ok: true, project, fingerprint: fingerprintOf(text) });
+    expect(await readProject(at('a.normloom'))).toEqual({
+      ok: true,
+      project,
+      edition: null,
+      fingerprint: fingerprintOf(text),
+    });
   });
 
   it('explains a damaged file, a newer one, a folder, a missing one and one that is too large, and touches none', async () => {

@@ -5,6 +5,7 @@ import type { NormProject } from '../../../../shared-core/norms/norm-project.ts'
 import type { NormSet } from '../../../../shared-core/norms/norm-set.ts';
 import type { Booklet, TableColumnBlock } from '../../../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../../../shared-core/pages/booklet-pages.ts';
+import { programVersion } from '../../../../src-main/program-version.ts';
 import { bookletPdf } from '../../../../src-main/press/booklet-pdf.ts';
 import { differenceLine } from '../../../../src-main/press/read-back/cell-differences.ts';
 import { readPdf } from '../../../../src-main/press/read-back/pdf-text.ts';
@@ -166,7 +167,7 @@ describe('a fault planted in a booklet', () => {
   let press: Misprinter;
 
   beforeAll(async () => {
-    booklet = composeBooklet(set);
+    booklet = composeBooklet(set, programVersion());
     press = await misprinter();
   });
 
@@ -301,7 +302,7 @@ describe('a fault planted in a booklet', () => {
       { groups: ['4'], scale: { min: 0, max: 12, step: 1 } },
       { blocks: WHOLE_BOOKLET, inverse: true },
     );
-    const right = composeBooklet(small);
+    const right = composeBooklet(small, programVersion());
     const places = right.pages.flatMap((page, number) =>
       page.blocks.flatMap((block, at) => (block.kind === 'rule' ? [] : [{ number, at, block }])),
     );
