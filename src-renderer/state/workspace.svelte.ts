@@ -320,7 +320,7 @@ export class Workspace {
 
   #changed(): void {
     void this.norms.build(this.project);
-    if (this.saved.kind === 'saved') this.saved = { kind: 'unsaved' };
+    this.saved = { kind: 'unsaved' };
     if (this.#autosave !== null) clearTimeout(this.#autosave);
     this.#autosave = setTimeout(() => {
       this.#autosave = null;
