@@ -2,6 +2,7 @@ import { GERMAN_BLOCKS } from './german/blocks.ts';
 import { GERMAN_COLUMNS } from './german/columns.ts';
 import { GERMAN_FIT } from './german/fit.ts';
 import { GERMAN_METHOD } from './german/method.ts';
+import { GERMAN_RECIPE } from './german/recipe.ts';
 import { GERMAN_SHEET } from './german/sheet.ts';
 import { GERMAN_WORKBOOK } from './german/workbook.ts';
 import type { Phrases } from './phrases.ts';
@@ -13,5 +14,6 @@ export const GERMAN_PHRASES: Phrases = {
   ...GERMAN_METHOD,
   ...GERMAN_FIT,
   ...GERMAN_WORKBOOK,
+  ...GERMAN_RECIPE,
   ...GERMAN_BLOCKS,
 };

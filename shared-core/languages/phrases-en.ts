@@ -2,6 +2,7 @@ import { ENGLISH_BLOCKS } from './english/blocks.ts';
 import { ENGLISH_COLUMNS } from './english/columns.ts';
 import { ENGLISH_FIT } from './english/fit.ts';
 import { ENGLISH_METHOD } from './english/method.ts';
+import { ENGLISH_RECIPE } from './english/recipe.ts';
 import { ENGLISH_SHEET } from './english/sheet.ts';
 import { ENGLISH_WORKBOOK } from './english/workbook.ts';
 
@@ -15,5 +16,6 @@ export const ENGLISH_PHRASES = {
   ...ENGLISH_METHOD,
   ...ENGLISH_FIT,
   ...ENGLISH_WORKBOOK,
+  ...ENGLISH_RECIPE,
   ...ENGLISH_BLOCKS,
 } as const;

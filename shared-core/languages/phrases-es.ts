@@ -2,6 +2,7 @@ import { SPANISH_BLOCKS } from './spanish/blocks.ts';
 import { SPANISH_COLUMNS } from './spanish/columns.ts';
 import { SPANISH_FIT } from './spanish/fit.ts';
 import { SPANISH_METHOD } from './spanish/method.ts';
+import { SPANISH_RECIPE } from './spanish/recipe.ts';
 import { SPANISH_SHEET } from './spanish/sheet.ts';
 import { SPANISH_WORKBOOK } from './spanish/workbook.ts';
 import type { Phrases } from './phrases.ts';
@@ -13,5 +14,6 @@ export const SPANISH_PHRASES: Phrases = {
   ...SPANISH_METHOD,
   ...SPANISH_FIT,
   ...SPANISH_WORKBOOK,
+  ...SPANISH_RECIPE,
   ...SPANISH_BLOCKS,
 };

@@ -2,6 +2,7 @@ import { FRENCH_BLOCKS } from './french/blocks.ts';
 import { FRENCH_COLUMNS } from './french/columns.ts';
 import { FRENCH_FIT } from './french/fit.ts';
 import { FRENCH_METHOD } from './french/method.ts';
+import { FRENCH_RECIPE } from './french/recipe.ts';
 import { FRENCH_SHEET } from './french/sheet.ts';
 import { FRENCH_WORKBOOK } from './french/workbook.ts';
 import { frenchSpaces } from './french/spaces.ts';
@@ -14,5 +15,6 @@ export const FRENCH_PHRASES: Phrases = frenchSpaces({
   ...FRENCH_METHOD,
   ...FRENCH_FIT,
   ...FRENCH_WORKBOOK,
+  ...FRENCH_RECIPE,
   ...FRENCH_BLOCKS,
 });

@@ -1,4 +1,4 @@
-import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say } from '../languages/phrases.ts';
 import type { CutRow } from '../norms/cut-table.ts';
 import type { NormProject } from '../norms/norm-project.ts';
 import { columnOf, rankColumn } from '../norms/table-columns.ts';
@@ -32,22 +32,21 @@ const LEAST_TITLE = 70;
 
 /** The figures of each group at a cut: n, percentile rank, its interval where there is one, and the share. */
 export function cutColumns(project: NormProject, rows: readonly CutRow[], words: PrintWords): readonly CutColumn[] {
-  const print = wordsOf(project);
   const share = brokenLines(say(words, 'cuts.share'), 'sans-bold', TABLE_HEAD.size, HEAD_ROOM);
   const figures = (lines: readonly string[], textOf: (row: CutRow) => string, ranges = false): CutColumn => ({
     lines,
     ranges,
-    cellOf: (row) => figureCell(print, textOf(row)),
+    cellOf: (row) => figureCell(words, textOf(row)),
   });
   return [
     figures([say(words, 'cuts.n')], ({ n }) => n),
     {
-      lines: rankColumn(print).heading,
+      lines: rankColumn(words).heading,
       ranges: false,
-      cellOf: ({ rank, row }) => rankCell(print, rank, row !== null && row.adjusted !== null),
+      cellOf: ({ rank, row }) => rankCell(words, rank, row !== null && row.adjusted !== null),
     },
     ...(rows.some(({ interval }) => interval !== null)
-      ? [figures(columnOf('interval', project, print).heading, ({ interval }) => interval ?? '', true)]
+      ? [figures(columnOf('interval', project, words).heading, ({ interval }) => interval ?? '', true)]
       : []),
     figures(share, ({ shareText }) => shareText),
   ];

@@ -1,10 +1,12 @@
-import { figure, type PrintWords, say, wordsOf } from '../languages/phrases.ts';
+import { figure, type PrintWords, say } from '../languages/phrases.ts';
 import { cutTables, type CutRow, type CutTable } from '../norms/cut-table.ts';
+import type { NormSet } from '../norms/norm-set.ts';
 import { layIntroduction } from './block-introduction.ts';
 import { openBlock } from './block-opening.ts';
 import type { BlockPages } from './block-pages.ts';
 import { brokenLines, cutColumns, measureCuts, type CutColumn } from './cut-columns.ts';
 import { inCountedFives } from './row-blocks.ts';
+import { printedTitle } from './sheet-texts.ts';
 import { wordsCell } from './table-cells.ts';
 import { layAdjustmentNotes } from './table-notes.ts';
 import { layTable } from './table-pages.ts';
@@ -18,11 +20,12 @@ const BETWEEN_TABLES = 18;
 export const cutScoresPages: BlockPages = (context) => {
   const { normSet, words } = context;
   const { project, groups } = normSet;
-  const tables = cutTables(project, groups).filter(({ rows }) => rows.length > 0);
+  const tables = printedCuts(normSet);
   if (tables.length === 0) return { pages: [], remarks: [] };
   const weighted = groups.some(({ group }) => group.table.weighted);
   const flow = openBlock(context);
-  const { people, sheet } = project;
+  const { sheet } = project;
+  const people = say(words, `people.${project.people}`);
   layIntroduction(flow, context, say(words, weighted ? 'cuts.how-to-read-weighted' : 'cuts.how-to-read', { people }));
   const rows = tables.flatMap((table) => table.rows);
   const columns = cutColumns(project, rows, words);
@@ -37,7 +40,7 @@ export const cutScoresPages: BlockPages = (context) => {
     brokenLines(title, 'sans-bold', measure.type.row.size, titleRoom);
   tables.forEach((table, index) => {
     if (index > 0) flow.skip(BETWEEN_TABLES);
-    const text = headingOf(table, words, wordsOf(project));
+    const text = headingOf(table, words);
     const role = { kind: 'heading', level: 2, name: `cut ${index}` } as const;
     const blocks = cutBlocks(table, columns, linesOf, sheet.fives);
     layTable(flow, `cuts ${index}`, blocks, measure, { text, face: 'sans-bold', type: READING, role });
@@ -54,8 +57,19 @@ export const cutScoresPages: BlockPages = (context) => {
   };
 };
 
-function headingOf({ cut, scoreText }: CutTable, words: PrintWords, print: PrintWords): string {
-  const [name, score] = [cut.name.trim(), figure(print, scoreText)];
+/** The cuts that stand in a group, with the titles of the groups as they are printed. */
+function printedCuts({ project, groups }: NormSet): readonly CutTable[] {
+  const titles = groups.map(({ group }) => printedTitle(project, group));
+  return cutTables(project, groups)
+    .filter(({ rows }) => rows.length > 0)
+    .map((table) => ({
+      ...table,
+      rows: table.rows.map((row) => ({ ...row, title: titles[row.group] ?? row.title })),
+    }));
+}
+
+function headingOf({ cut, scoreText }: CutTable, words: PrintWords): string {
+  const [name, score] = [cut.name.trim(), figure(words, scoreText)];
   return name === '' ? say(words, 'cuts.heading-nameless', { score }) : say(words, 'cuts.heading', { name, score });
 }
 

@@ -1,4 +1,4 @@
-import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say } from '../languages/phrases.ts';
 import { INVERSE_PERCENTILES } from '../norms/inverse-table.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { rankColumn } from '../norms/table-columns.ts';
@@ -18,26 +18,27 @@ export const inversePages: BlockPages = (context) => {
   layIntroduction(
     flow,
     context,
-    say(words, good ? 'inverse-block.lowest' : 'inverse-block.highest', { people: normSet.project.people }),
+    say(words, good ? 'inverse-block.lowest' : 'inverse-block.highest', {
+      people: say(words, `people.${normSet.project.people}`),
+    }),
   );
   return { remarks: layAcross(flow, context, inverseAcross(normSet, words)), pages: flow.pages };
 };
 
 function inverseAcross({ groups, project }: NormSet, words: PrintWords): AcrossTable {
-  const print = wordsOf(project);
   return {
     table: 'inverse-across',
-    rowHead: rankColumn(print).heading,
-    groups: groupHeads(groups, words, print),
+    rowHead: rankColumn(words).heading,
+    groups: groupHeads({ groups, project }, words),
     scale: null,
     rows: INVERSE_PERCENTILES.map((percentile, position) => ({
       row: percentile,
       scores: [],
-      head: figureCell(print, String(percentile)),
+      head: figureCell(words, String(percentile)),
       cells: groups.map(({ inverse }) => {
         const row = inverse[position];
         if (row?.percentile !== percentile) throw new RangeError('inverse tables list the same percentiles');
-        return figureCell(print, row.scoreText);
+        return figureCell(words, row.scoreText);
       }),
     })),
   };

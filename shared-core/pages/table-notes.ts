@@ -1,7 +1,8 @@
-import { type PrintWords, say, wordsOf } from '../languages/phrases.ts';
+import { type PrintWords, say } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
+import { printedTitle } from './sheet-texts.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import { paragraph } from './text-role.ts';
@@ -34,9 +35,9 @@ export function layAdjustmentNotes(
   words: PrintWords,
 ): void {
   for (const norms of groups) {
-    const note = adjustmentNote(norms, wordsOf(project));
-    const { key, title } = norms.group;
+    const note = adjustmentNote(norms, words);
+    const title = printedTitle(project, norms.group);
     const text = note === null ? null : say(words, 'across.note', { group: title, note });
-    layTableNote(flow, `adjustments ${key}`, text);
+    layTableNote(flow, `adjustments ${norms.group.key}`, text);
   }
 }

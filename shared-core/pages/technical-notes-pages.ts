@@ -128,7 +128,10 @@ function layRecipe(flow: SheetFlow, { normSet, words }: BlockContext): void {
   const norms = normSet.groups[index];
   if (norms === undefined) return;
   const introduction = say(words, 'technical.recipe-of', { table: tableName(normSet.project, index, norms) });
-  const steps = numberedParts('step', recipeOf(normSet, index, recipeScore(norms)));
+  const steps = numberedParts(
+    'step',
+    recipeOf(normSet, index, recipeScore(norms), words, printedTitle(normSet.project, norms.group)),
+  );
   const look = { grid: numberedGrid(flow), between: 3 };
   const whole = heightOfParts(flow, steps, look) + 3 * READING.leading;
   layHeading(flow, 'recipe heading', say(words, 'technical.recipe'), Math.min(whole, flow.freshRoom * MOST_OF_PAGE));

@@ -2,16 +2,26 @@ import { countedRanks, scoresInClass, type CountedRank } from './counted-ranks.t
 import { rankText } from './counted-texts.ts';
 import { withPoint, type Fraction } from './fraction.ts';
 import { groupCounts, type GroupCounts } from './group-counts.ts';
+import { ENGLISH_WORDS, figure, say, sayCounted, type PrintWords } from '../languages/phrases.ts';
+import type { ConversionRow } from '../norms/conversion-table.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormProject } from '../norms/norm-project.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 
 const DECIMALS_SHOWN = 4;
 
 /**
  * How a stranger redoes the percentile rank of one row by hand: sentences with the numbers, counted from the tally.
- * `group` is the position of the group in the set, `score` a raw score of its table. Throws where there is no such row.
+ * `group` is the position of the group in the set, `score` a raw score of its table, `title` what the group is called in
+ * print. Throws where there is no such row.
  */
-export function recipeOf(normSet: NormSet, group: number, score: number): readonly string[] {
+export function recipeOf(
+  normSet: NormSet,
+  group: number,
+  score: number,
+  words = ENGLISH_WORDS,
+  title = normSet.groups[group]?.group.title ?? '',
+): readonly string[] {
   const { project } = normSet;
   const norms = normSet.groups[group];
   const place = norms?.rows.findIndex((row) => row.score === score) ?? -1;
@@ -20,15 +30,22 @@ export function recipeOf(normSet: NormSet, group: number, score: number): readon
   const counts = groupCounts(project.tally, project.groups.by, norms.group.values);
   const counted = countedRanks(counts, project.tally.scale, project.curve.definition)[place];
   if (counted === undefined) throw new RangeError('no such score');
-  const redone = rankText(counted.rank, project.table);
   return [
-    ...countingSentences(normSet, norms, counts, row.scoreText, counted),
-    ...rankSentences(normSet, norms, counts, place, counted),
-    `${roundingSentence(normSet, counted.rank)} That gives ${redone}.`,
-    norms.smoothing.state === 'smoothed'
-      ? `The table prints ${row.printed}: its ranks are smoothed, and smoothing cannot be redone by hand.`
-      : `The table prints ${row.printed}${row.adjusted === null ? '' : `: it was adjusted by hand from ${row.adjusted.from}`}.`,
+    ...countingSentences(project, words, counts, counted, { title, scoreText: row.scoreText }),
+    ...rankSentences(project, norms, words, counts, place, counted),
+    say(words, 'recipe.gives', {
+      rounding: roundingSentence(project, counted.rank, words),
+      rank: figure(words, rankText(counted.rank, project.table)),
+    }),
+    printedSentence(norms, row, words),
   ];
+}
+
+function printedSentence({ smoothing }: GroupNorms, row: ConversionRow, words: PrintWords): string {
+  const rank = figure(words, row.printed);
+  if (smoothing.state === 'smoothed') return say(words, 'recipe.prints-smoothed', { rank });
+  if (row.adjusted === null) return say(words, 'recipe.prints', { rank });
+  return say(words, 'recipe.prints-adjusted', { rank, from: figure(words, row.adjusted.from) });
 }
 
 /** The row that is shown: the score that most people obtained, the lowest of several. Throws on a group without rows. */
@@ -40,58 +57,66 @@ export function recipeScore({ rows }: GroupNorms): number {
 }
 
 function countingSentences(
-  { project }: NormSet,
-  { group }: GroupNorms,
+  project: NormProject,
+  words: PrintWords,
   counts: GroupCounts,
-  scoreText: string,
   { worse, at }: CountedRank,
+  { title: group, scoreText }: { readonly title: string; readonly scoreText: string },
 ): readonly string[] {
   const side = project.tally?.scale.direction === 'low-is-good' ? 'higher' : 'lower';
-  const weight = (units: bigint): string => exactly({ top: units, bottom: counts.unit });
-  const people = sum(counts.people);
-  if (project.tally?.weightDecimals === null) {
-    return [
-      `Take the ${people} ${project.people} of ${group.title} and the raw score ${scoreText}.`,
-      `Count those with a ${side} score: ${worse}. Count those with this score: ${at}.`,
-    ];
-  }
-  return [
-    `Take the ${people} ${project.people} of ${group.title}, whose weights add up to ${weight(sum(counts.weights))}, and the raw score ${scoreText}.`,
-    `Add up the weights of those with a ${side} score: ${weight(worse)}; and of those with this score: ${weight(at)}.`,
-  ];
+  const weight = (units: bigint): string => figure(words, exactly({ top: units, bottom: counts.unit }));
+  const count = String(sum(counts.people));
+  const people = sayCounted(words, `counted.${project.people}`, count, { count });
+  const score = figure(words, scoreText);
+  const told = { worse: weight(worse), same: weight(at) };
+  return project.tally?.weightDecimals === null
+    ? [say(words, 'recipe.take', { people, group, score }), say(words, `recipe.count-${side}`, told)]
+    : [
+        say(words, 'recipe.take-weighted', { people, group, score, weight: weight(sum(counts.weights)) }),
+        say(words, `recipe.weigh-${side}`, told),
+      ];
 }
 
 function rankSentences(
-  { project }: NormSet,
+  project: NormProject,
   { rows }: GroupNorms,
+  words: PrintWords,
   counts: GroupCounts,
   place: number,
   { worse, at, rank }: CountedRank,
 ): readonly string[] {
   const { definition } = project.curve;
-  const all = exactly({ top: sum(counts.weights), bottom: counts.unit });
-  const weight = (units: bigint): string => exactly({ top: units, bottom: counts.unit });
-  const divided = ended(`Divide by ${all} and multiply by 100: ${decimalText(rank)}`);
+  const exact = (number: Fraction): string => figure(words, exactly(number));
+  const weight = (units: bigint): string => exact({ top: units, bottom: counts.unit });
+  const all = weight(sum(counts.weights));
+  const printed = figure(words, decimalText(rank));
+  const divided = ended(say(words, 'recipe.divide', { all, rank: printed }));
   switch (definition.kind) {
     case 'midpoint':
       return [
-        `Add half of the second number to the first: ${exactly({ top: 2n * worse + at, bottom: 2n * counts.unit })}.`,
+        say(words, 'recipe.add-half', { sum: exact({ top: 2n * worse + at, bottom: 2n * counts.unit }) }),
         divided,
       ];
     case 'at-or-below':
-      return [`Add both numbers: ${weight(worse + at)}.`, divided];
+      return [say(words, 'recipe.add-both', { sum: weight(worse + at) }), divided];
     case 'below':
-      return [`Keep the first number only: ${weight(worse)}.`, divided];
+      return [say(words, 'recipe.keep-first', { sum: weight(worse) }), divided];
     case 'plotting-position': {
       const people = sum(counts.people);
       const total = sum(counts.weights);
       const meanRank: Fraction = { top: people * (2n * worse + at) + total, bottom: 2n * total };
-      const scaled = counts.people === counts.weights ? '' : `, multiply by ${people}/${all}`;
+      const mean = figure(words, decimalText(meanRank));
       return [
         ended(
-          `Add half of the second number to the first${scaled} and add 1/2: the mean rank r is ${decimalText(meanRank)}`,
+          counts.people === counts.weights
+            ? say(words, 'recipe.mean-rank', { mean })
+            : say(words, 'recipe.mean-rank-scaled', { mean, factor: `${people}/${all}` }),
         ),
-        `With a = ${definition.offset}, 100 (r − a)/(${people} + 1 − 2a) is ${decimalText(rank)} (held between 0 and 100).`,
+        say(words, 'recipe.plotting-position', {
+          offset: figure(words, definition.offset),
+          count: String(people),
+          rank: printed,
+        }),
       ];
     }
     case 'grouped': {
@@ -103,25 +128,30 @@ function rankSentences(
       const poorFirst = mirrored ? counts.weights.toReversed() : counts.weights;
       const [below, within] = [sum(poorFirst.slice(0, first)), sum(poorFirst.slice(first, first + size))];
       return [
-        `Classes of ${size} scores are laid from the poor end of the scale; this score is number ${fromPoor - first + 1} ` +
-          `in its class, and its middle lies ${2 * (fromPoor - first) + 1}/${2 * size} of the way through it.`,
-        `In poorer classes stand ${weight(below)}, in this class ${weight(within)}: add that part of the second to the first.`,
+        say(words, 'recipe.classes', {
+          size: String(size),
+          number: String(fromPoor - first + 1),
+          part: `${2 * (fromPoor - first) + 1}/${2 * size}`,
+        }),
+        say(words, 'recipe.in-classes', { poorer: weight(below), own: weight(within) }),
         divided,
       ];
     }
   }
 }
 
-function roundingSentence({ project }: NormSet, rank: Fraction): string {
-  const { decimals, rounding, ends } = project.table;
-  const unit = decimals === 0 ? 'a whole number' : 'one decimal';
-  const half = rounding === 'half-up' ? 'upwards' : 'to the even digit';
-  const least = withPoint(1n, decimals);
-  const most = withPoint(decimals === 0 ? 99n : 999n, decimals);
-  const printed = rankText(rank, project.table);
-  if (ends === 'signs' && /^[<>]/.test(printed))
-    return `Below ${least} prints as <${least}, above ${most} as >${most}.`;
-  return `Round to ${unit}, a half ${half}${ends === 'held' ? `, held between ${least} and ${most}` : ''}.`;
+function roundingSentence({ table }: NormProject, rank: Fraction, words: PrintWords): string {
+  const { decimals, rounding, ends } = table;
+  const [least, most] = [withPoint(1n, decimals), withPoint(decimals === 0 ? 99n : 999n, decimals)];
+  const told = { least: figure(words, least), most: figure(words, most) };
+  if (ends === 'signs' && /^[<>]/.test(rankText(rank, table))) {
+    return say(words, 'recipe.ends', { ...told, low: figure(words, `<${least}`), high: figure(words, `>${most}`) });
+  }
+  return say(words, 'recipe.round', {
+    unit: say(words, decimals === 0 ? 'recipe.whole-number' : 'recipe.one-decimal'),
+    half: say(words, `recipe.${rounding}`),
+    held: ends === 'held' ? say(words, 'recipe.held', told) : '',
+  });
 }
 
 function sum(numbers: readonly bigint[]): bigint {
@@ -138,8 +168,9 @@ function exactly({ top, bottom }: Fraction): string {
   return withPoint(units / bottom, decimals);
 }
 
+/** Dots that stand for further decimals close a sentence as well. */
 function ended(sentence: string): string {
-  return sentence.endsWith('…') ? sentence : `${sentence}.`;
+  return sentence.replace(/…\.$/, '…');
 }
 
 /** The first decimals, cut off, with dots where more would follow. */

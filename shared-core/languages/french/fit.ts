@@ -17,7 +17,7 @@ export const FRENCH_FIT: Readonly<Record<keyof typeof ENGLISH_FIT, string>> = {
   'fit.observed': 'Observé',
   'fit.smoothed': 'Lissé',
   'fit.mean': 'Moyenne',
-  'fit.sd': 'Écart type, divisé par n',
+  'fit.sd': 'Écart-type, divisé par n',
   'fit.skewness': 'Asymétrie',
   'fit.excess-kurtosis': 'Excès d’aplatissement',
   'fit.moment-pair': '{moment} : {observed} observé, {smoothed} lissé',

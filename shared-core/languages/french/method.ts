@@ -30,7 +30,7 @@ export const FRENCH_METHOD: Readonly<Record<keyof typeof ENGLISH_METHOD, string>
   'columns.none': 'rien d’autre',
   'columns.some': '{columns}',
   'z-source.normalised': 'les écarts normaux des rangs',
-  'z-source.linear': 'linéaires, d’après la moyenne et l’écart type',
+  'z-source.linear': 'linéaires, d’après la moyenne et l’écart-type',
   'z-ends.limits': 'ils sont bornés entre {low} et {high}',
   'z-ends.half-person': 'aux rangs 0 et 100, une demi-personne en tient lieu',
   'interval.wilson': 'intervalle de Wilson',

@@ -37,20 +37,20 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
   'norm-group.numbers': 'Die Gruppen in Zahlen',
   'norm-group.group': 'Gruppe',
   'norm-group.n': 'n',
-  'norm-group.effective-n': 'Effektives n',
+  'norm-group.effective-n': 'Effek-\ntives n',
   'norm-group.clusters': 'Klumpen',
-  'norm-group.design-effect': 'Design-Effekt',
-  'norm-group.mean': 'Mittelwert',
+  'norm-group.design-effect': 'Design-\neffekt',
+  'norm-group.mean': 'Mittel-\nwert',
   'norm-group.sd': 'SD',
-  'norm-group.at-lowest': 'Am unteren Ende',
-  'norm-group.at-highest': 'Am oberen Ende',
+  'norm-group.at-lowest': 'Am unte-\nren Ende',
+  'norm-group.at-highest': 'Am obe-\nren Ende',
   'norm-group.numbers-note':
     'Am unteren, am oberen Ende: der Anteil der Gruppe mit dem niedrigsten und mit dem höchsten erreichbaren Rohwert, {lowest} und {highest}.',
   'norm-group.hinges':
     'Mittelwert, SD, Median und Angelpunkte sind Rohwertpunkte; Angelpunkte sind die Mediane der unteren und der oberen Hälfte.',
   'norm-group.quartiles': 'Mittelwert, SD, Median und Quartile sind Rohwertpunkte.',
   'norm-group.effective': 'Das effektive n sagt, wie viele Personen gleichen Gewichts die Gruppe wert ist.',
-  'norm-group.for-intervals': 'n für Intervalle',
+  'norm-group.for-intervals': 'n für\nIntervalle',
   'norm-group.intervals': 'Das n für Intervalle sagt, wie viele einzeln gezogene Personen die Klumpen wert sind.',
   'five-head.lowest': 'Niedrigster',
   'five-head.lower-hinge': 'Unterer\nAngelpunkt',
@@ -63,7 +63,7 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
   'norm-group.rows-head': 'Zeilen',
   'norm-group.rows-count': 'Anzahl',
   'norm-group.read': 'Gelesen aus {file}',
-  'norm-group.read-typed': 'Eingetippt',
+  'norm-group.read-typed': 'Von Hand eingegeben',
   'norm-group.left-out': 'Ausgelassen: {rule}',
   'norm-group.kept': 'Behalten',
   'norm-group.without-table': 'Von den behaltenen stehen {count} in Gruppen, die hier keine Tabelle haben.',
@@ -127,7 +127,7 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
   'technical.clustered': '{people} wurden in Klumpen gezogen, und Fehler sind zwischen diesen berechnet: {list}.',
   'technical.clusters-of': '{group}, {facts}',
   'technical.effective-clustered':
-    'Bei Klumpen zählen Intervalle n geteilt durch den Design-Effekt als Personen, nie aber mehr als das effektive n.',
+    'Bei Klumpen zählen Intervalle n geteilt durch den Designeffekt als Personen, nie aber mehr als das effektive n.',
   'technical.precision': 'Genauigkeit',
   'technical.no-errors': 'Keine Spalte der Tabellen sagt etwas über Fehler.',
   'technical.smoothing': 'Glättung',
@@ -168,11 +168,11 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
     'Prozentränge dürfen nicht addiert, subtrahiert oder gemittelt werden, weder über Personen noch über Tests. Mitteln Sie Rohwerte oder Werte, die dafür gemacht sind.',
   'cautions.valid':
     'Jede Tabelle gilt für die Testform, den Zeitpunkt und die Gruppe, aus denen sie gewonnen wurde: {survey}. Für eine andere Form, zu einer anderen Jahreszeit oder für andere Personen sind ihre Ränge falsch.',
-  'cautions.this-test': 'diesen Test',
+  'cautions.this-test': 'dieser Test',
   'cautions.measurement':
     'Ein Rohwert ist mit einem Fehler gemessen. Das Ergebnis {person} hätte an einem anderen Tag einige Punkte höher oder niedriger ausfallen können, und mit ihm der Rang.',
   'cautions.sampling':
-    'Die Ränge stammen von {people}, die getestet wurden. Wären andere gezogen worden, wären die Ränge etwas anders; je kleiner die Gruppe, desto mehr.',
+    'Die Ränge stammen von einer Auswahl: {people}, die getestet wurden. Wären andere gezogen worden, so wären die Ränge etwas anders, und das umso mehr, je kleiner die Gruppe ist.',
   'cautions.decision':
     'Keine Entscheidung über einen Menschen darf auf einem einzelnen Wert beruhen. Andere Belege gehören dazu, und was über die Umstände der Testung bekannt ist.',
   'cautions.rules':
@@ -201,7 +201,7 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
   'colophon.method': 'Verfahren',
   'colophon.source': 'Quelle',
   'colophon.source-file': '{file}, {bytes} Bytes',
-  'colophon.source-typed': 'Eingetippte Zählungen',
+  'colophon.source-typed': 'Von Hand eingegebene Häufigkeiten',
   'colophon.source-none': 'nicht mitgeteilt',
   'colophon.fingerprint': 'SHA-256',
   'colophon.rows': 'Zeilen',

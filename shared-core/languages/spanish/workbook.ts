@@ -42,7 +42,7 @@ export const SPANISH_WORKBOOK: Readonly<Record<keyof typeof ENGLISH_WORKBOOK, st
   'about.fingerprint': 'SHA-256 de la fuente',
   'about.rows-read': 'Filas leídas',
   'about.rows-kept': 'Filas conservadas',
-  'about.left-out': 'Excluidas',
+  'about.left-out': 'Descartadas',
   'about.left-out-for': '{count}: {rule}',
   'about.left-out-rows:one': '{left-out}; fila {rows}',
   'about.left-out-rows:many': '{left-out}; filas {rows}',

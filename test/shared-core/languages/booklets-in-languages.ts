@@ -1,8 +1,10 @@
 import { inLanguage } from '../../../shared-core/languages/number-format.ts';
 import type { ShippedWords } from '../../../shared-core/languages/shipped-words.ts';
+import { WHOLE_BOOKLET } from '../../../shared-core/norms/booklet-blocks.ts';
 import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { buildNormSet, type NormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
+import { LEFT_OUT_RULES } from '../../../shared-core/norms/reading.ts';
 import { withLanguage } from '../../../shared-core/norms/sheet-language.ts';
 import type { Booklet } from '../../../shared-core/pages/booklet.ts';
 import { KERNEL, LOG_LINEAR, sampleProject } from '../pages/sample-norm-set.ts';
@@ -13,8 +15,23 @@ export function wordlessSet(words: ShippedWords, change: (project: NormProject) 
     ...made,
     title: 'Ostrey',
     subtitle: '',
-    release: { ...made.release, edition: '2' },
-    sheet: { ...made.sheet, inverse: true, notes: 'Ostrey 12.5.' },
+    source: {
+      kind: 'people',
+      file: 'ostrey.csv',
+      sha256: 'a'.repeat(64),
+      bytes: 123_456,
+      rowsRead: 6794,
+      rowsKept: 6691,
+      leftOut: LEFT_OUT_RULES.map((rule, index) => ({ rule, count: index === 0 ? 91 : 1, rows: [] })),
+      scaleInferred: false,
+    },
+    release: {
+      ...made.release,
+      edition: '2',
+      changes: { edition: '1', date: '2025-06-01', check: '7F3A-91C2', lines: ['Ostrey'] },
+    },
+    cuts: [{ name: 'Ostrey', score: 9.5, values: null }],
+    sheet: { ...made.sheet, inverse: true, notes: 'Ostrey 12.5.', blocks: WHOLE_BOOKLET },
   }));
   const built = buildNormSet(withLanguage(change(project), words));
   if (!built.ok) throw new Error(built.problem);
@@ -109,11 +126,13 @@ export function textsOf({ title, pages }: Booklet): readonly string[] {
 
 const PRINTED_KEYS = new Set(['text', 'lines', 'note', 'said', 'svg', 'alt', 'opens']);
 
-/** Text of each cell of the tables, in order. */
+/** Text of each cell of the conversion tables, in order. */
 export function cellsOf({ pages }: Booklet): readonly string[] {
   return pages.flatMap(({ blocks }) =>
     blocks.flatMap((block) =>
-      block.kind === 'table-column' ? block.rows.flatMap(({ cells }) => cells.map(({ text }) => text)) : [],
+      block.kind === 'table-column' && block.table === 'conversion'
+        ? block.rows.flatMap(({ cells }) => cells.map(({ text }) => text))
+        : [],
     ),
   );
 }
