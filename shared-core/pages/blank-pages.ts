@@ -1,5 +1,5 @@
 import { type PrintWords, say } from '../languages/phrases.ts';
-import type { BookletPart } from './booklet-parts.ts';
+import type { PlannedPart } from './booklet-parts.ts';
 import type { PageFrame } from './page-frame.ts';
 import { linesOf, placeLines } from './text-lines.ts';
 import { REPEATED } from './text-role.ts';
@@ -9,21 +9,21 @@ import { READING } from './type-sizes.ts';
 const ON_A_SHEET = 4;
 
 /**
- * The parts with blank pages that bring their number to a multiple of four, at the end, or before a colophon that stands
- * at the end, which so becomes the back page.
+ * The parts with blank pages that bring `pages`, their number, to a multiple of four: at the end, or before a colophon
+ * that stands at the end, which so becomes the back page.
  */
 export function filledToFours(
-  parts: readonly BookletPart[],
+  parts: readonly PlannedPart[],
+  pages: number,
   frame: PageFrame,
   words: PrintWords,
-): readonly BookletPart[] {
-  const pages = parts.reduce((sum, part) => sum + part.pages.length, 0);
+): readonly PlannedPart[] {
   const missing = (ON_A_SHEET - (pages % ON_A_SHEET)) % ON_A_SHEET;
   if (missing === 0) return parts;
   const last = parts.at(-1)?.block === 'colophon' ? parts.length - 1 : parts.length;
   const lines = linesOf(say(words, 'block.blank'), 'serif-italic', READING, frame.width, REPEATED);
   const blank = placeLines(lines, READING, { x: frame.left, top: frame.top, width: frame.width, colour: 'soft' });
-  const blanks: BookletPart = {
+  const blanks: PlannedPart = {
     block: null,
     group: null,
     name: null,

@@ -18,11 +18,10 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
   const paper = paperOf(normSet.project.sheet);
   const words = wordsOf(normSet.project);
   const { parts: planned, remarks } = plannedParts({ normSet, paper, words, programVersion });
-  const parts = withContents(planned);
   const filled = normSet.project.sheet.fillToFours
-    ? filledToFours(parts, blockFrame(normSet, '', paper), words)
-    : parts;
-  const pages = numbered(filled, paper);
+    ? filledToFours(planned, pagesIn(withContents(planned)), blockFrame(normSet, '', paper), words)
+    : planned;
+  const pages = numbered(withContents(filled), paper);
   return {
     title: draftTitle(normSet, surveyName(normSet.project) || say(words, 'booklet.title')),
     language: normSet.project.sheet.language.tag,
@@ -38,7 +37,7 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
 
 /** The parts one after the other, each page with its number, head and foot, moved to its side of the fold. */
 function numbered(parts: readonly BookletPart[], { gutter }: Paper): readonly BookletPage[] {
-  const total = parts.reduce((sum, { pages }) => sum + pages.length, 0);
+  const total = pagesIn(parts);
   let number = 0;
   return parts.flatMap(({ block, group, name, frame, pages }) =>
     pages.map((body, place): BookletPage => {
@@ -53,6 +52,10 @@ function numbered(parts: readonly BookletPart[], { gutter }: Paper): readonly Bo
       };
     }),
   );
+}
+
+function pagesIn(parts: readonly BookletPart[]): number {
+  return parts.reduce((sum, { pages }) => sum + pages.length, 0);
 }
 
 function missingRemark(blocks: readonly Block[]): readonly string[] {

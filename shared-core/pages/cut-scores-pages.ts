@@ -47,6 +47,7 @@ export const cutScoresPages: BlockPages = (context) => {
   });
   layAdjustmentNotes(
     flow,
+    normSet,
     groups.filter((_, group) => rows.some((row) => row.group === group && row.row?.adjusted)),
     words,
   );

@@ -1,8 +1,9 @@
 import { say, type PrintWords } from '../languages/phrases.ts';
 import type { FitNotes } from './fit-notes.ts';
 import { noteTableHeight, noteTableWidth, placeNoteTable, type NoteTable } from './note-table.ts';
+import { firstLines } from './prose.ts';
 import type { SheetFlow } from './sheet-flow.ts';
-import { heightOf, linesOf, paragraphLines, placeLines } from './text-lines.ts';
+import { heightOf, paragraphLines, placeLines, type LooseLine } from './text-lines.ts';
 import { CONTINUED, SMALL_PROSE } from './type-sizes.ts';
 
 /** How notes are headed, and what tells their tables and texts from those of other groups under the same heading. */
@@ -11,6 +12,8 @@ export interface FitNotesHead {
   readonly prefix: string;
 }
 
+/** A longer title is cut. */
+const MOST_TITLE_LINES = 2;
 const BELOW_TITLE = 5;
 const BETWEEN_PARTS = 7;
 /** Width of a table that has the whole page, in points, where it needs no more. */
@@ -30,11 +33,9 @@ export function layFitNotes(
   const moments = named(notes.moments);
   const [first, second] = notes.degrees === null ? [moments, null] : [named(notes.degrees), moments];
   const lines = paragraphLines(notes.paragraphs, SMALL_PROSE, flow.halfWidth, `${prefix}technical notes`);
-  const title = linesOf(head, 'serif-bold', CONTINUED, flow.width, {
-    kind: 'heading',
-    level: 2,
-    name: `${prefix}technical title`,
-  });
+  const role = { kind: 'heading', level: 2, name: `${prefix}technical title` } as const;
+  const cut = firstLines([{ text: head, face: 'serif-bold' }], CONTINUED.size, flow.width, MOST_TITLE_LINES);
+  const title = cut.lines.map((runs): LooseLine => ({ runs, before: 0, role }));
   const titleHeight = heightOf(title, CONTINUED) + BELOW_TITLE;
   const aboveLines = second === null ? 0 : noteTableHeight(second) + BETWEEN_PARTS;
   const height = Math.max(noteTableHeight(first), aboveLines + heightOf(lines, SMALL_PROSE));

@@ -22,7 +22,7 @@ export const groupsAcrossPages: BlockPages = (context) => {
   );
   const remarks = layAcross(flow, context, groupsAcross(normSet, words));
   layTableNote(flow, 'smoothed', smoothedNote(context));
-  layAdjustmentNotes(flow, normSet.groups, words);
+  layAdjustmentNotes(flow, normSet, normSet.groups, words);
   return { pages: flow.pages, remarks };
 };
 

@@ -10,13 +10,14 @@ import { tableColumns, type TableColumn } from '../norms/table-columns.ts';
 import { printCount } from '../scores/printed-number.ts';
 import { openBlock, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
-import { factGrid, layHeading, layParts, layText, type TextPart } from './block-text.ts';
+import { factGrid, heightOfParts, layHeading, layParts, layText, type TextPart } from './block-text.ts';
 import { endsHead, endsText } from './rank-ends.ts';
 import { printedCell, tableName } from './sheet-texts.ts';
 import { READING } from './type-sizes.ts';
 
 /** The example is the row whose rank lies nearest to this. */
 const EXAMPLE_RANK = 60;
+const BETWEEN_COLUMNS = 3;
 
 /** How the tables are read, by a row of the first of them, and what each of their columns means. */
 export const howToReadPages: BlockPages = (context) => {
@@ -24,9 +25,10 @@ export const howToReadPages: BlockPages = (context) => {
   const own = ownText(context.block);
   if (own.length > 0) layText(flow, 'own', own);
   else layParts(flow, standing(context));
-  layHeading(flow, 'columns heading', say(context.words, 'how.columns'), 2 * READING.leading);
   const parts = columns(context);
-  layParts(flow, parts, { grid: factGrid(flow, parts, READING), between: 3 });
+  const look = { grid: factGrid(flow, parts, READING), between: BETWEEN_COLUMNS };
+  layHeading(flow, 'columns heading', say(context.words, 'how.columns'), heightOfParts(flow, parts.slice(0, 2), look));
+  layParts(flow, parts, look);
   return { pages: flow.pages, remarks: [] };
 };
 

@@ -1,6 +1,8 @@
 import { type PrintWords, say } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
+import type { NormSet } from '../norms/norm-set.ts';
+import { printedTitle } from './sheet-texts.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import { paragraph } from './text-role.ts';
@@ -26,11 +28,16 @@ export function layTableNote(flow: SheetFlow, name: string, note: string | null)
 }
 
 /** Which ranks of a table of several groups were changed by hand, and why, group by group. */
-export function layAdjustmentNotes(flow: SheetFlow, groups: readonly GroupNorms[], words: PrintWords): void {
+export function layAdjustmentNotes(
+  flow: SheetFlow,
+  { project }: NormSet,
+  groups: readonly GroupNorms[],
+  words: PrintWords,
+): void {
   for (const norms of groups) {
     const note = adjustmentNote(norms, words);
-    const { key, title } = norms.group;
+    const title = printedTitle(project, norms.group);
     const text = note === null ? null : say(words, 'across.note', { group: title, note });
-    layTableNote(flow, `adjustments ${key}`, text);
+    layTableNote(flow, `adjustments ${norms.group.key}`, text);
   }
 }

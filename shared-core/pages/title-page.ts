@@ -1,14 +1,16 @@
-import { say } from '../languages/phrases.ts';
 import { dateInLanguage } from '../languages/number-format.ts';
+import { figure, say } from '../languages/phrases.ts';
 import { groupNoun } from '../norms/norm-groups.ts';
+import { printCount } from '../scores/printed-number.ts';
 import { blockFlow, ownText } from './block-opening.ts';
 import type { BlockContext, BlockPages } from './block-pages.ts';
 import { layLines } from './block-text.ts';
 import { printedTitle } from './sheet-texts.ts';
+import { firstLines } from './prose.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, placeLines, plainParagraphs, type LooseLine } from './text-lines.ts';
-import { paragraph } from './text-role.ts';
-import { textWidth } from './text-width.ts';
+import { paragraph, type TextRole } from './text-role.ts';
+import { textWidth, type FontFace } from './text-width.ts';
 import { DISPLAY_SIZES, DISPLAY_SUBTITLE, PROSE, READING, type TypeSize } from './type-sizes.ts';
 
 /** Share of the height that stays white above the title. */
@@ -24,47 +26,72 @@ const BELOW_SUBTITLE = 24;
 const BELOW_FACTS = 12;
 const AFTER_HEAD = 14;
 const LEAST_WHITE = 20;
+/** Share of the page that the title may take, and how many lines stand on its page behind it at least. */
+const MOST_FOR_TITLE = 0.55;
+const LINES_BELOW = 4;
+const TITLE_ROLE: TextRole = { kind: 'heading', level: 1, name: 'title' };
 /** White below all of it, points. */
 const ABOVE_FOOT = 22;
+
+const TITLE_CUT = 'The title of the booklet is too long for its title page and ends in “…”. Shorten it.';
 
 /** The title page: what the booklet is, of whom it tells, and at its foot which edition it is and whom it is for. */
 export const titlePage: BlockPages = (context) => {
   const flow = blockFlow(context);
-  flow.place([], flow.room * ABOVE_TITLE);
-  layTitle(flow, context);
+  const cut = layTitle(flow, context);
   layFoot(flow, context);
-  return { pages: flow.pages, remarks: [] };
+  return { pages: flow.pages, remarks: cut ? [TITLE_CUT] : [] };
 };
 
-function layTitle(flow: SheetFlow, { normSet, heading, words }: BlockContext): void {
-  const { project, groups, status } = normSet;
+/** True where the title had to be cut. */
+function layTitle(flow: SheetFlow, context: BlockContext): boolean {
+  const { normSet, heading, words } = context;
+  const { project, status } = normSet;
   const column = { x: flow.left, width: Math.min(flow.width, WIDEST_TITLE) };
-  const set = (text: string, face: 'sans' | 'sans-bold' | 'serif-italic', type: TypeSize, name: string): void =>
+  const title = displayLines(heading, column.width, flow.room * MOST_FOR_TITLE);
+  const set = (text: string, face: FontFace, type: TypeSize, name: string): void =>
     layLines(flow, linesOf(text, face, type, column.width, paragraph(name)), type, column);
+  const below = heightOf(title.lines, title.type) + BELOW_TITLE + BELOW_SUBTITLE + LINES_BELOW * READING.leading;
+  flow.place([], Math.max(0, Math.min(flow.room * ABOVE_TITLE, flow.room - below)));
   if (status === 'draft') {
     set(say(words, 'title-page.draft'), 'sans-bold', READING, 'draft');
     flow.skip(BELOW_TITLE);
   }
-  const title = displayLines(heading, column.width);
   layLines(flow, title.lines, title.type, column);
   flow.skip(BELOW_TITLE);
   set(project.subtitle.trim(), 'serif-italic', DISPLAY_SUBTITLE, 'subtitle');
   flow.skip(BELOW_SUBTITLE);
   const norms = groupNoun(project.groups.documentation) === 'norm group';
   set(say(words, norms ? 'title-page.norms' : 'title-page.sample'), 'sans-bold', READING, 'kind');
-  const names = groups.map(({ group }) => printedTitle(project, group)).join(' · ');
-  const lines = linesOf(names, 'sans', READING, column.width, paragraph('groups'));
-  if (lines.length <= MOST_GROUP_LINES) layLines(flow, lines, READING, column);
-  else set(say(words, 'title-page.groups', { count: String(groups.length) }), 'sans', READING, 'groups');
+  layLines(flow, groupLines(context, column.width), READING, column);
+  return title.cut;
 }
 
-/** The title in the largest size in which it is not too long. */
-function displayLines(text: string, width: number): { readonly lines: readonly LooseLine[]; readonly type: TypeSize } {
-  const set = DISPLAY_SIZES.map((type) => ({
-    type,
-    lines: linesOf(text, 'serif-bold', type, width, { kind: 'heading', level: 1, name: 'title' }),
-  }));
-  const fitting = set.find(({ lines }) => lines.length <= MOST_TITLE_LINES) ?? set.at(-1);
+/** The names of the groups, or how many there are. */
+function groupLines({ normSet: { project, groups }, words }: BlockContext, width: number): readonly LooseLine[] {
+  const names = groups.map(({ group }) => printedTitle(project, group)).join(' · ');
+  const lines = linesOf(names, 'sans', READING, width, paragraph('groups'));
+  if (groups.length === 1 || lines.length <= MOST_GROUP_LINES) return lines;
+  const count = say(words, 'title-page.groups', { count: figure(words, printCount(groups.length)) });
+  return linesOf(count, 'sans', READING, width, paragraph('groups'));
+}
+
+interface DisplayLines {
+  readonly lines: readonly LooseLine[];
+  readonly type: TypeSize;
+  readonly cut: boolean;
+}
+
+/** The title in the largest size in which it is neither too long nor taller than `height`; cut where none is. */
+function displayLines(text: string, width: number, height: number): DisplayLines {
+  const set = DISPLAY_SIZES.map((type, index): DisplayLines => {
+    const most = Math.floor(height / type.leading);
+    const smallest = index === DISPLAY_SIZES.length - 1;
+    const allowed = smallest ? most : Math.min(most, MOST_TITLE_LINES);
+    const { lines, cut } = firstLines([{ text, face: 'serif-bold' }], type.size, width, allowed);
+    return { type, cut, lines: lines.map((runs) => ({ runs, before: 0, role: TITLE_ROLE })) };
+  });
+  const fitting = set.find(({ cut }) => !cut) ?? set.at(-1);
   if (fitting === undefined) throw new RangeError('no size for titles');
   return fitting;
 }

@@ -1,12 +1,13 @@
 import { inLanguage } from '../../../shared-core/languages/number-format.ts';
 import type { ShippedWords } from '../../../shared-core/languages/shipped-words.ts';
-import { WHOLE_BOOKLET } from '../../../shared-core/norms/booklet-blocks.ts';
+import { DEFAULT_BLOCKS, WHOLE_BOOKLET } from '../../../shared-core/norms/booklet-blocks.ts';
 import { COLUMN_KEYS } from '../../../shared-core/norms/column-keys.ts';
 import { buildNormSet, type NormSet } from '../../../shared-core/norms/norm-set.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import { LEFT_OUT_RULES } from '../../../shared-core/norms/reading.ts';
 import { withLanguage } from '../../../shared-core/norms/sheet-language.ts';
 import type { Booklet } from '../../../shared-core/pages/booklet.ts';
+import { clustersOf } from '../norms/clustered-project.ts';
 import { KERNEL, LOG_LINEAR, sampleProject } from '../pages/sample-norm-set.ts';
 
 /** A set whose own texts are numbers and invented names, so that every other word is one of the program's. */
@@ -44,16 +45,16 @@ const withColumns = (project: NormProject, columns: NormProject['table']['column
   precision: { ...project.precision, reliability: 0.9 },
 });
 
+/** All columns beside the ranks, which have one decimal. */
+export function withEveryColumn(project: NormProject): NormProject {
+  const all = withColumns(project, COLUMN_KEYS);
+  return { ...all, table: { ...all.table, decimals: 1 }, sheet: { ...all.sheet, orientation: 'landscape' } };
+}
+
 /** Changes of a project that between them print every kind of sentence. */
 export const EVERY_KIND: readonly (readonly [string, (project: NormProject) => NormProject])[] = [
   ['as it comes', (project) => project],
-  [
-    'with every column and one decimal',
-    (project) => {
-      const all = withColumns(project, COLUMN_KEYS);
-      return { ...all, table: { ...all.table, decimals: 1 }, sheet: { ...all.sheet, orientation: 'landscape' } };
-    },
-  ],
+  ['with every column and one decimal', withEveryColumn],
   [
     'smoothed in three ways',
     (project) => ({
@@ -79,6 +80,43 @@ export const EVERY_KIND: readonly (readonly [string, (project: NormProject) => N
         scale: { ...project.tally.scale, direction: 'low-is-good' },
       },
       sheet: { ...project.sheet, cautions: '' },
+    }),
+  ],
+  [
+    'weighted, smoothed in two more ways',
+    (project) => ({
+      ...withColumns(project, ['cumulative', 'standard-error']),
+      curve: {
+        ...project.curve,
+        definition: { kind: 'at-or-below' },
+        smoothing: { kind: 'kernel', bandwidth: 1.5, after: { ...LOG_LINEAR, degree: 'aic' } },
+        exceptions: [
+          { values: ['4'], smoothing: { ...LOG_LINEAR, degree: 'likelihood-ratio' } },
+          { values: ['5'], smoothing: { kind: 'none' } },
+        ],
+      },
+      tally: project.tally && {
+        ...project.tally,
+        weightDecimals: 1,
+        cells: project.tally.cells.map((cell) => ({
+          ...cell,
+          weights: cell.counts.map((count) => String(count * 15)),
+          squares: cell.counts.map((count) => String(count * 225)),
+        })),
+      },
+    }),
+  ],
+  [
+    'drawn in clusters, tables alone',
+    (project) => ({
+      ...withColumns(project, ['interval', 'standard-error']),
+      people: 'students',
+      curve: { ...project.curve, definition: { kind: 'below' } },
+      tally: project.tally && {
+        ...project.tally,
+        cells: project.tally.cells.map((cell) => ({ ...cell, clusters: clustersOf(cell.counts, 12) })),
+      },
+      sheet: { ...project.sheet, blocks: DEFAULT_BLOCKS },
     }),
   ],
   [

@@ -16,7 +16,8 @@ export function clusteredProject(clusters: number): NormProject {
   };
 }
 
-function clustersOf(counts: readonly number[], clusters: number): CellClusters {
+/** People of a cell in so many clusters, each of people with nearly equal scores. */
+export function clustersOf(counts: readonly number[], clusters: number): CellClusters {
   const scores = counts.flatMap((count, position) => Array.from({ length: count }, () => position));
   const parts = Array.from({ length: clusters }, (_, cluster): ClusterPart => {
     const own = scores.filter((_, person) => Math.floor((person * clusters) / scores.length) === cluster);
