@@ -202,7 +202,8 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
 
 /** A picture that finds no room below its table is drawn somewhat flatter, rather than on a page of its own. */
 function pictureHeight(flow: SheetFlow, below: number, notes: number): number {
-  const [usual, flattest] = [flow.halfWidth * PICTURE_SHAPE, flow.halfWidth * FLATTEST_PICTURE];
+  const usual = Math.min(flow.halfWidth * PICTURE_SHAPE, flow.freshRoom - below);
+  const flattest = flow.halfWidth * FLATTEST_PICTURE;
   const left = flow.room - below;
   return !flow.fresh && left < usual && left >= flattest && notes <= flow.room ? left : usual;
 }

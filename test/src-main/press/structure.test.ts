@@ -3,9 +3,11 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, it } from 'vitest';
+import { WHOLE_BOOKLET } from '../../../shared-core/norms/booklet-blocks.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
+import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
 import { bookletPdf } from '../../../src-main/press/booklet-pdf.ts';
 import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 import { readStructure, type ReadElement, type ReadStructure } from './structure-reader.ts';
@@ -219,6 +221,62 @@ describe('the structure tree of a pressed booklet', () => {
       expect(read).toContain(`"${paragraph} "`);
     }
   });
+
+  it('has a section for each block and each table of a whole booklet, under its heading', async () => {
+    const normSet = sampleNormSet({ scale: WHOLE_SCALE, groups: ['4', '5'] }, (project) => ({
+      ...project,
+      cuts: [{ name: 'Goal', score: 12, values: null }],
+      curve: { ...project.curve, smoothing: LOG_LINEAR, exceptions: [{ values: ['5'], smoothing: { kind: 'none' } }] },
+      sheet: { ...project.sheet, blocks: WHOLE_BOOKLET, fillToFours: true, gutterMm: 5 },
+    }));
+    const { sheets, pages, root } = await pressedTree(normSet);
+    const opened = composeBooklet(normSet).pages.flatMap(({ opens }) => (opens === null ? [] : [opens]));
+    expect(opened).toHaveLength(14);
+    expect(pages.length % 4).toBe(0);
+    expect(sheets.map(({ type, title }) => [type, title])).toEqual(opened.map((title) => ['Sect', title]));
+    const sectionOf = (title: string): ReadElement => {
+      const found = sheets.find((sheet) => sheet.title === title);
+      if (found === undefined) throw new Error(`no section ${title}`);
+      return found;
+    };
+    for (const sheet of sheets) {
+      const [first] = elementsIn(sheet);
+      expect(first?.type).toBe('H1');
+      expect(findAll(sheet, 'H1')).toHaveLength(1);
+      if (!sheet.title.startsWith('Table ')) expect(printed(findOne(sheet, 'H1')).trim()).toBe(sheet.title);
+    }
+    const entries = elementsIn(sectionOf('Contents')).filter(({ type }) => type === 'P');
+    expect(
+      entries.map((entry) =>
+        printed(entry)
+          .trim()
+          .replace(/ +\d+$/, ''),
+      ),
+    ).toEqual([...opened.slice(2, 4), 'Conversion tables', ...opened.slice(4)]);
+    const counts = cellsHeard(findOne(sectionOf('The sample'), 'Table')).filter(({ columnHead }) => columnHead === 'n');
+    expect(counts.map(({ rowHead, spoken: heard }) => [rowHead, heard])).toEqual(
+      normSet.groups.map(({ group, summary }) => [group.title, String(summary.n)]),
+    );
+    const pictures = sectionOf('Pictures');
+    expect(findAll(pictures, 'Figure')).toHaveLength(3);
+    expect(cellsHeard(findOne(pictures, 'Table'))).toHaveLength(10);
+    const notes = findAll(sectionOf('Technical notes'), 'H2').map((heading) => printed(heading).trim());
+    expect(notes).toEqual([
+      'Method',
+      'Scale',
+      'Rounding and ends',
+      'Smoothing',
+      'Sampling design',
+      'Precision',
+      'Fit of the smoothing: Grade 4',
+      'One row worked out by hand',
+    ]);
+    const cautions = elementsIn(sectionOf('Cautions')).filter(({ type }) => type === 'P');
+    expect(cautions.map((caution) => printed(caution).slice(0, 2))).toEqual(
+      Array.from({ length: 9 }, (_, index) => `${index + 1} `),
+    );
+    expect(printed(root)).not.toContain('left blank');
+  }, 60_000);
 
   it('says in the catalogue that it is tagged, in which language, by what title and with which page numbers', async () => {
     const { catalogue, pages } = await pressedTree(sampleNormSet({ scale: WHOLE_SCALE, groups: ['4'] }));
