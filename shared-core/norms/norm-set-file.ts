@@ -1,5 +1,6 @@
 import type { PercentilePoint } from '../percentile/percentile-point.ts';
 import { bootstrapForFile, rowBootstrapForFile, type GroupBootstrap } from './bootstrap-file.ts';
+import { cutsForFile } from './cut-file.ts';
 import { definitionKey } from './definitions.ts';
 import { toFileKeys } from './file-keys.ts';
 import type { GroupSmoothing } from './group-smoothing.ts';
@@ -30,6 +31,7 @@ export function normSetForFile(
     scale: tally === null ? null : { min: tally.scale.min, max: tally.scale.max, step: tally.scale.step },
     definition: definitionKey(project.curve.definition),
     groups: groups.map((norms) => groupForFile(normSet, norms, pointsOf(norms), bootstrapOf(norms))),
+    ...(project.cuts.length === 0 ? {} : { cuts: cutsForFile(normSet) }),
   };
 }
 

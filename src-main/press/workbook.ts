@@ -3,6 +3,7 @@ import JSZip from 'jszip';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { draftTitle, printedTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { ABOUT, fillAboutSheet } from './about-sheet.ts';
+import { CUTS, fillCutsSheet } from './cuts-sheet.ts';
 import { fillLookUp, LOOK_UP, LOOK_UP_ROWS } from './look-up-sheet.ts';
 import { releaseDay } from './release-day.ts';
 import { sheetNames } from './sheet-names.ts';
@@ -23,7 +24,7 @@ export interface GroupSheets {
 
 export function groupSheets({ groups, project }: NormSet): readonly GroupSheets[] {
   const titles = groups.map(({ group }) => printedTitle(project, group));
-  const standing = [LOOK_UP, LOOK_UP_ROWS, ABOUT];
+  const standing = [LOOK_UP, LOOK_UP_ROWS, ABOUT, CUTS];
   const tables = sheetNames(titles, standing);
   const workings = sheetNames(
     tables.map((table) => `Workings ${table}`),
@@ -33,8 +34,8 @@ export function groupSheets({ groups, project }: NormSet): readonly GroupSheets[
 }
 
 /**
- * A workbook (xlsx): a look-up sheet, a table for each group, its workings in formulas, where they come from, and the
- * rows behind the look-up. A group's table, its number of people and its count of agreeing rows have names.
+ * A workbook (xlsx): a look-up sheet, a table for each group, its workings in formulas, the cuts where there are any,
+ * where they come from, and the rows behind the look-up. A group's table, its number of people and its count of agreeing rows have names.
  */
 export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   const day = releaseDay(normSet.project);
@@ -67,6 +68,7 @@ export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
       { name: `Agreement_${stem}`, sheetName: names.workings, address: cells.agreement },
     ];
   });
+  if (normSet.project.cuts.length > 0) fillCutsSheet(workbook.addWorksheet(CUTS), normSet);
   fillAboutSheet(workbook.addWorksheet(ABOUT), normSet, ranges);
   fillLookUp(lookUp, workbook.addWorksheet(LOOK_UP_ROWS), normSet);
   return finished(await workbook.xlsx.writeBuffer(), ranges, day < FIRST_ZIP_DAY ? FIRST_ZIP_DAY : day);

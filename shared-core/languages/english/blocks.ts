@@ -160,6 +160,7 @@ export const ENGLISH_BLOCKS = {
     'At each cut: the percentile rank of its score, as in the table of the group, and how many per cent of the group have that score or a better one, counted as they were observed. n\u00a0is the number of {people} in the group.',
   'cuts.how-to-read-weighted':
     'At each cut: the percentile rank of its score, as in the table of the group, and how many per cent of the group, by weight, have that score or a better one, counted as they were observed. n\u00a0is the number of {people} in the group.',
+  'cuts.name': 'Cut',
   'cuts.group': 'Group',
   'cuts.n': 'n',
   'cuts.share': 'Per cent\nat or better',

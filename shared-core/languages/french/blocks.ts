@@ -152,6 +152,7 @@ export const FRENCH_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
     'Pour chaque seuil : le rang centile de son score, comme dans le tableau du groupe, et le pourcentage du groupe qui a ce score ou un meilleur, compté tel qu’observé. n\u00a0est le nombre de {people} du groupe.',
   'cuts.how-to-read-weighted':
     'Pour chaque seuil : le rang centile de son score, comme dans le tableau du groupe, et le pourcentage du groupe, selon les poids, qui a ce score ou un meilleur, compté tel qu’observé. n\u00a0est le nombre de {people} du groupe.',
+  'cuts.name': 'Seuil',
   'cuts.group': 'Groupe',
   'cuts.n': 'n',
   'cuts.share': 'Pour cent à\nce score ou mieux',

@@ -153,6 +153,7 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
     'Zu jedem Grenzwert: der Prozentrang seines Rohwerts wie in der Tabelle der Gruppe, und wie viel Prozent der Gruppe diesen oder einen besseren Rohwert haben, gezählt wie beobachtet. n\u00a0ist die Zahl der Personen ({people}) in der Gruppe.',
   'cuts.how-to-read-weighted':
     'Zu jedem Grenzwert: der Prozentrang seines Rohwerts wie in der Tabelle der Gruppe, und wie viel Prozent der Gruppe, nach Gewicht, diesen oder einen besseren Rohwert haben, gezählt wie beobachtet. n\u00a0ist die Zahl der Personen ({people}) in der Gruppe.',
+  'cuts.name': 'Grenzwert',
   'cuts.group': 'Gruppe',
   'cuts.n': 'n',
   'cuts.share': 'Prozent\nso oder besser',

@@ -151,6 +151,7 @@ export const SPANISH_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string
     'Para cada corte: el rango percentil de su puntuación, como en la tabla del grupo, y qué porcentaje del grupo tiene esa puntuación o una mejor, contado tal como se observó. n\u00a0es el número de {people} del grupo.',
   'cuts.how-to-read-weighted':
     'Para cada corte: el rango percentil de su puntuación, como en la tabla del grupo, y qué porcentaje del grupo, según los pesos, tiene esa puntuación o una mejor, contado tal como se observó. n\u00a0es el número de {people} del grupo.',
+  'cuts.name': 'Corte',
   'cuts.group': 'Grupo',
   'cuts.n': 'n',
   'cuts.share': 'Por ciento\nigual o mejor',

@@ -6,6 +6,7 @@ import { headInOneLine } from '../../../shared-core/pages/spoken-text.ts';
 import { draftTitle, markedText, sheetTitle } from '../../../shared-core/pages/sheet-texts.ts';
 import { unroundedColumns } from '../unrounded-columns.ts';
 import { CellComparison, type CellPlace, type FileReadBack } from './cell-differences.ts';
+import { readCuts } from './read-cuts.ts';
 import { readLookUp } from './read-look-up.ts';
 import { isPrintedNumber, shownCell } from './shown-cell.ts';
 
@@ -14,7 +15,8 @@ const HEAD_REACH = 40;
 
 /**
  * Reads a workbook as a spreadsheet program shows it. For each group: the sheet with its title, every head, and every
- * cell in place, numbers as numbers and texts as texts; then the rows behind the look-up and what the look-up shows.
+ * cell in place, numbers as numbers and texts as texts; then the cuts, the rows behind the look-up and what the look-up
+ * shows.
  */
 export async function readWorkbook(file: string, bytes: Uint8Array, normSet: NormSet): Promise<FileReadBack> {
   const comparison = new CellComparison(file);
@@ -29,6 +31,7 @@ export async function readWorkbook(file: string, bytes: Uint8Array, normSet: Nor
     comparison.compare(place, title, sheet === undefined ? '' : title);
     if (sheet !== undefined) readTable(comparison, sheet, normSet, group);
   });
+  readCuts(comparison, workbook, normSet);
   readLookUp(comparison, workbook, normSet);
   return comparison.result('workbook');
 }

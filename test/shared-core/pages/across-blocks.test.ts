@@ -302,6 +302,20 @@ describe('the type of the rows', () => {
     expect(gaps?.every((gap) => gap % 5 === 0)).toBe(true);
   });
 
+  it('reads ranges of scores aloud as such, also of negative ones', () => {
+    const negative = { groups: ['4'], scale: { min: -60, max: 40, step: 1 } };
+    const booklet = composeBooklet(
+      setOf('tables', negative, { rangeRows: true }, (project) => ({
+        ...project,
+        table: { ...project.table, columns: [] },
+      })),
+    );
+    const heads = columnsOf(booklet, 'conversion').flatMap(({ rows }) => rows.map(({ cells }) => cells[0]));
+    const range = heads.find((head) => head?.text.includes('–'));
+    const [, low, high] = /^−(\d+)–−(\d+)$/.exec(range?.text ?? '') ?? [];
+    expect(range?.said).toBe(`minus ${low} to minus ${high}`);
+  });
+
   it('stands in four columns where the figures fit', () => {
     const booklet = composeBooklet(setOf('tables', { groups: ['4'] }, { tableColumns: 4 }));
     expect(columnsOf(booklet, 'conversion').map(({ rows }) => rows.length)).toEqual([10, 10, 10, 11]);

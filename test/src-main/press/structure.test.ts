@@ -3,7 +3,8 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, it } from 'vitest';
-import { WHOLE_BOOKLET } from '../../../shared-core/norms/booklet-blocks.ts';
+import { BLOCK_KINDS, WHOLE_BOOKLET, type BlockKind } from '../../../shared-core/norms/booklet-blocks.ts';
+import { cutTables } from '../../../shared-core/norms/cut-table.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
@@ -11,7 +12,7 @@ import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
 import { bookletPdf } from '../../../src-main/press/booklet-pdf.ts';
 import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 import { readStructure, type ReadElement, type ReadStructure } from './structure-reader.ts';
-import { cellsHeard, elementsIn, findAll, findOne, printed, spoken } from './structure-speech.ts';
+import { cellsHeard, type HeardCell, elementsIn, findAll, findOne, printed, spoken } from './structure-speech.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'normloom-structure-'));
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
@@ -189,6 +190,62 @@ describe('the structure tree of a pressed booklet', () => {
         expect(cell?.printed).toBe(String(df));
       }
     });
+  });
+
+  it('gives every cell of all groups side by side, of the inverse table and of the cuts its heads, part by part', async () => {
+    const kinds: readonly BlockKind[] = ['groups-across', 'inverse', 'cut-scores'];
+    const long = 'of the schools in the upper Ostrey Vale that begin after noon';
+    const normSet = sampleNormSet(
+      { scale: WHOLE_SCALE, groups: ['1', '2', '3', '4', '5', '6', '7', '8', long] },
+      (project) => ({
+        ...project,
+        cuts: [{ name: 'Reading support', score: 18, values: null }],
+        sheet: {
+          ...project.sheet,
+          paper: 'a5',
+          rangeRows: true,
+          blocks: BLOCK_KINDS.map((kind) => ({ kind, printed: kinds.includes(kind), heading: '', text: '' })),
+        },
+      }),
+    );
+    const { groups, project } = normSet;
+    const { sheets } = await pressedTree(normSet);
+    const [across = [], inverse = [], cuts = []] = sheets.map((sheet) => cellsHeard(findOne(sheet, 'Table')));
+    const heads = groups.map(({ group, summary }) => `${group.title}, n ${summary.n}`);
+    const cell = (rowHead: string, columnHead: string, text: string) => ({
+      rowHead,
+      columnHead,
+      spoken: saidOf(text),
+      printed: text,
+    });
+    expect(across).toEqual(
+      (groups[0]?.rows ?? []).flatMap(({ scoreText }, position) =>
+        groups.map(({ rows }, group) => cell(scoreText, heads[group] ?? '', rows[position]?.printed ?? '')),
+      ),
+    );
+    expect(inverse).toEqual(
+      (groups[0]?.inverse ?? []).flatMap(({ percentile }, position) =>
+        groups.map((norms, group) =>
+          cell(String(percentile), heads[group] ?? '', norms.inverse[position]?.scoreText ?? ''),
+        ),
+      ),
+    );
+    const [table] = cutTables(project, groups);
+    const plain = ({ columnHead, printed: text, ...others }: HeardCell): HeardCell => ({
+      ...others,
+      columnHead: columnHead.replace(/\s/g, ' '),
+      printed: text.replace(/\s/g, ' '),
+    });
+    expect(cuts.map(plain)).toEqual(
+      (table?.rows ?? []).flatMap(({ title, n, rank, interval, shareText }) =>
+        [
+          cell(title, 'n', n),
+          cell(title, 'Percentile rank', rank),
+          cell(title, '95 % interval', interval ?? ''),
+          cell(title, 'Per cent at or better', shareText),
+        ].map(plain),
+      ),
+    );
   });
 
   it('leaves out heads, feet and whatever is printed again on further pages', async () => {
