@@ -21,6 +21,8 @@ const programs = Object.fromEntries(
     .filter(([, path]) => existsSync(path)),
 );
 
+const WINDOW_TESTS = 'test/src-main/electron/**/*.test.ts';
+
 /** Three targets in one build: the page, the programs that run under Node, and the preload script of the window. */
 export default defineConfig({
   root: here('src-renderer'),
@@ -56,6 +58,7 @@ export default defineConfig({
     // Packages stay in node_modules: several of them find their own files there when they run.
     main: {
       consumer: 'server',
+      resolve: { noExternal: [/^@stdlib\//, /^@noble\//, 'valibot'] },
       build: {
         outDir: here('dist/main'),
         emptyOutDir: true,
@@ -89,10 +92,22 @@ export default defineConfig({
   test: {
     root: here('.'),
     environment: 'node',
-    include: ['test/**/*.test.ts'],
-    exclude: ['test/journey/**', 'node_modules/**', '.cache/**'],
+    maxWorkers: '100%',
     // Laws are tried on many drawn cases, on machines with few and slow processors.
     testTimeout: 30_000,
     hookTimeout: 60_000,
+    projects: [
+      {
+        extends: true,
+        test: {
+          name: 'program',
+          include: ['test/**/*.test.ts'],
+          exclude: ['test/journey/**', WINDOW_TESTS, 'node_modules/**', '.cache/**'],
+          isolate: false,
+        },
+      },
+      // They stand something else in place of Electron, each its own.
+      { extends: true, test: { name: 'window', include: [WINDOW_TESTS] } },
+    ],
   },
 });

@@ -60,7 +60,8 @@ describe('read-back', () => {
     const ran = normloom(['read-back', join(folder, 'booklet.pdf'), '--against', next]);
     expect(ran.exit).toBe(3);
     expect(ran.stdout.split('\n').filter((line) => line.includes('check code'))).toHaveLength(3);
-    expect(ran.stderr).toBe('normloom: 3 cells differ from the project.\n');
+    expect(ran.stdout.split('\n').filter((line) => line.includes('Edition 1.0'))).toHaveLength(3);
+    expect(ran.stderr).toBe('normloom: 6 cells differ from the project.\n');
   });
 
   it('tells wrong usage, and files that were never pressed', () => {
