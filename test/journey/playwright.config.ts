@@ -2,12 +2,12 @@ import { defineConfig } from 'playwright/test';
 
 const browser = process.env['BROWSER_PATH'];
 
-/** Journeys start the browser host themselves; each has the machine for itself, so that times mean something. */
+/** Journeys start the browser host themselves, each its own in a home of its own, so that two can walk side by side. */
 export default defineConfig({
   testDir: '.',
   testMatch: '**/*.spec.ts',
   outputDir: '../../.cache/journey',
-  workers: 1,
+  workers: 2,
   timeout: 120_000,
   expect: { timeout: 15_000 },
   forbidOnly: true,
