@@ -37,13 +37,13 @@ export const GERMAN_BLOCKS: Readonly<Record<keyof typeof ENGLISH_BLOCKS, string>
   'norm-group.numbers': 'Die Gruppen in Zahlen',
   'norm-group.group': 'Gruppe',
   'norm-group.n': 'n',
-  'norm-group.effective-n': 'Effek-\ntives n',
+  'norm-group.effective-n': 'n\neffektiv',
   'norm-group.clusters': 'Klumpen',
   'norm-group.design-effect': 'Design-\neffekt',
   'norm-group.mean': 'Mittel-\nwert',
   'norm-group.sd': 'SD',
-  'norm-group.at-lowest': 'Am unte-\nren Ende',
-  'norm-group.at-highest': 'Am obe-\nren Ende',
+  'norm-group.at-lowest': 'Unteres\nEnde',
+  'norm-group.at-highest': 'Oberes\nEnde',
   'norm-group.numbers-note':
     'Am unteren, am oberen Ende: der Anteil der Gruppe mit dem niedrigsten und mit dem höchsten erreichbaren Rohwert, {lowest} und {highest}.',
   'norm-group.hinges':
