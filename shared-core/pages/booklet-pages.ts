@@ -1,48 +1,49 @@
 import type { NormSet } from '../norms/norm-set.ts';
-import type { Block, Booklet, BookletPage } from './booklet.ts';
-import { pageFrame } from './page-frame.ts';
-import { paperOf } from './paper.ts';
-import { sheetPages } from './sheet-pages.ts';
-import { draftTitle, surveyName, tableName } from './sheet-texts.ts';
-import { measureTables } from './table-measure.ts';
+import { BLOCK_WORDS } from './block-words.ts';
+import type { Block, Booklet, BookletPage, Paper } from './booklet.ts';
+import { bookletParts, type BookletPart } from './booklet-parts.ts';
+import { paperOf, paperRemarks } from './paper.ts';
+import { draftTitle, surveyName } from './sheet-texts.ts';
 import { missingCharacters } from './text-width.ts';
 
 /**
- * Places every text, figure, rule and picture of a booklet: one sheet for each group of the set, in its order. Each
- * (group, raw score) stands in exactly one table column. Pure: the same set gives the same pages everywhere.
+ * Places every text, figure, rule and picture of a booklet: its blocks in their order, among them the tables with a
+ * sheet for each group of the set. Each (group, raw score) stands in exactly one table column. Pure: the same set and
+ * version of the program (for the colophon) give the same pages everywhere.
  */
-export function composeBooklet(normSet: NormSet): Booklet {
+export function composeBooklet(normSet: NormSet, programVersion: string | null = null): Booklet {
   const paper = paperOf(normSet.project.sheet);
-  const { measure, remarks } = measureTables(normSet, paper.width - 2 * paper.margin);
-  const sheets = normSet.groups.map((norms, group) => {
-    const frame = pageFrame(normSet, group, norms, paper);
-    return { group, norms, frame, ...sheetPages(normSet, group, frame, measure) };
-  });
-  const total = sheets.reduce((sum, { pages }) => sum + pages.length, 0);
-  let number = 0;
-  const pages = sheets.flatMap(({ group, norms, frame, pages: bodies }) =>
-    bodies.map((body, place): BookletPage => {
-      number += 1;
-      return {
-        number,
-        group,
-        opens: place === 0 ? tableName(group, norms) : null,
-        blocks: [...frame.blocks(number, total), ...body],
-      };
-    }),
-  );
+  const { parts, remarks } = bookletParts({ normSet, paper, words: BLOCK_WORDS, programVersion });
+  const pages = numbered(parts, paper);
   return {
     title: draftTitle(normSet, surveyName(normSet.project) || 'Conversion tables'),
     paper,
     pages,
     remarks: [
+      ...paperRemarks(normSet.project.sheet),
       ...remarks,
-      ...sheets
-        .filter(({ shortened, frame }) => shortened || frame.shortened)
-        .map(({ group }) => `The titles on table ${group + 1} are too long for the page and end in “…”. Shorten them.`),
       ...missingRemark(pages.flatMap(({ blocks }) => blocks)),
     ],
   };
+}
+
+/** The parts one after the other, each page with its number, head and foot, moved to its side of the fold. */
+function numbered(parts: readonly BookletPart[], { gutter }: Paper): readonly BookletPage[] {
+  const total = parts.reduce((sum, { pages }) => sum + pages.length, 0);
+  let number = 0;
+  return parts.flatMap(({ block, group, name, frame, pages }) =>
+    pages.map((body, place): BookletPage => {
+      number += 1;
+      const blocks = [...frame.blocks(number, total), ...body];
+      return {
+        number,
+        block,
+        group,
+        opens: place === 0 ? name : null,
+        blocks: number % 2 === 0 ? blocks.map((each) => ({ ...each, x: each.x - gutter })) : blocks,
+      };
+    }),
+  );
 }
 
 function missingRemark(blocks: readonly Block[]): readonly string[] {

@@ -1,3 +1,4 @@
+import type { BlockKind } from '../norms/booklet-blocks.ts';
 import type { ColumnKey } from '../norms/column-keys.ts';
 import type { TextRole } from './text-role.ts';
 import type { FontFace } from './text-width.ts';
@@ -17,16 +18,22 @@ export interface Booklet {
 export interface Paper {
   readonly width: number;
   readonly height: number;
-  /** White space at the edges: head and foot lines stand inside it. */
+  /** White space at the sides. */
   readonly margin: number;
+  /** White space above the head and below the foot. */
+  readonly edge: number;
+  /** More of it at the edge that is bound: left on odd pages, right on even ones. */
+  readonly gutter: number;
 }
 
 export interface BookletPage {
   /** 1 for the first. */
   readonly number: number;
-  /** Position of the group in the norm set. */
-  readonly group: number;
-  /** "Table 2 · Grade 5", where the sheet of a group begins; null on its further pages. */
+  /** The block of the booklet that it belongs to; null for a page left blank. */
+  readonly block: BlockKind | null;
+  /** Position of the group in the norm set; null where it belongs to no single one. */
+  readonly group: number | null;
+  /** "Table 2 · Grade 5", or the heading of a block, where one begins; null on its further pages. */
   readonly opens: string | null;
   readonly blocks: readonly Block[];
 }

@@ -2,14 +2,15 @@ import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { Block, Paper, TextRun } from './booklet.ts';
 import { firstLines } from './prose.ts';
-import { draftMark, editionLine, surveyName, tableName } from './sheet-texts.ts';
+import { bookletLine, draftMark, editionLine, surveyName, tableName } from './sheet-texts.ts';
 import { heightOf, linesOf, placeLines, type LooseLine } from './text-lines.ts';
 import type { PageRole } from './text-role.ts';
 import { textWidth } from './text-width.ts';
 import { GUTTER, RUNNING, STRONG_RULE } from './type-sizes.ts';
 
-/** What stands at head and foot of every page of a group, and the room between them. */
+/** What stands at head and foot of every page of a group or a block, and the room between them. */
 export interface PageFrame {
+  /** As on odd pages. */
   readonly left: number;
   readonly width: number;
   /** The body of the page stands between these. */
@@ -17,13 +18,11 @@ export interface PageFrame {
   readonly bottom: number;
   /** Head, foot and their rules for one page. */
   readonly blocks: (page: number, pages: number) => readonly Block[];
-  /** True where the title of the survey or of the group was too long for the head. */
+  /** True where the title of the survey, the group or the block was too long for the head. */
   readonly shortened: boolean;
 }
 
 const MOST_HEAD_LINES = 4;
-/** The head stands this much above the margin, the foot this much below it. */
-const OUTSIDE = 6;
 const ROOM_AT_RULE = 4;
 const ROOM_TO_BODY = 13;
 /** Share of the width that the survey's name may take. */
@@ -32,16 +31,31 @@ const WIDEST_PAGE_NUMBER = 'page 9999 of 9999';
 const HEAD: PageRole = { kind: 'running', edge: 'top' };
 const FOOT: PageRole = { kind: 'running', edge: 'bottom' };
 
-export function pageFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
-  const left = paper.margin;
-  const width = paper.width - 2 * paper.margin;
+/** Width between the margins, points. */
+export function bodyWidth({ width, margin, gutter }: Paper): number {
+  return width - 2 * margin - gutter;
+}
+
+/** The pages of one group. */
+export function groupFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
+  return pageFrame(normSet, tableName(index, norms), editionLine(normSet, norms), paper);
+}
+
+/** Pages that belong to no single group; `place` stands at the right of their head. */
+export function blockFrame(normSet: NormSet, place: string, paper: Paper): PageFrame {
+  return pageFrame(normSet, place, bookletLine(normSet), paper);
+}
+
+function pageFrame(normSet: NormSet, place: string, line: string, paper: Paper): PageFrame {
+  const left = paper.margin + paper.gutter;
+  const width = bodyWidth(paper);
   const survey = headLines(surveyRuns(normSet), (width - GUTTER) * LEFT_SHARE);
-  const table = headLines([{ text: tableName(index, norms), face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
-  const headTop = paper.margin - OUTSIDE - RUNNING.leading / 2;
+  const table = headLines([{ text: place, face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
+  const headTop = paper.edge;
   const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
   const numberWidth = textWidth(WIDEST_PAGE_NUMBER, 'sans', RUNNING.size);
-  const edition = linesOf(editionLine(normSet, norms), 'sans', RUNNING, width - numberWidth - GUTTER, FOOT);
-  const footTop = paper.height - paper.margin + OUTSIDE + RUNNING.leading / 2 - heightOf(edition, RUNNING);
+  const edition = linesOf(line, 'sans', RUNNING, width - numberWidth - GUTTER, FOOT);
+  const footTop = paper.height - paper.edge - heightOf(edition, RUNNING);
   const footRule = footTop - ROOM_AT_RULE;
   const rule = (y: number): Block => ({ kind: 'rule', x: left, y, width, weight: STRONG_RULE });
   const running = (lines: readonly LooseLine[], top: number, align: 'left' | 'right'): readonly Block[] =>

@@ -60,8 +60,28 @@ export function draftTitle(normSet: NormSet, title: string): string {
   return [draftMark(normSet), title].filter((part) => part !== '').join(' · ');
 }
 
-/** Left side of the foot: which edition this is and what its numbers are. */
+/** Left side of the foot of a group's page: which edition this is and what its numbers are. */
 export function editionLine(normSet: NormSet, { summary, smoothing }: GroupNorms): string {
+  return footLine(
+    normSet,
+    smoothing.state === 'smoothed' ? ', smoothed' : '',
+    countedPeople(printCount(summary.n), normSet.project.people),
+  );
+}
+
+/** The same of a page that belongs to no single group. */
+export function bookletLine(normSet: NormSet): string {
+  const { groups, project } = normSet;
+  const people = countedPeople(printCount(groups.reduce((sum, { summary }) => sum + summary.n, 0)), project.people);
+  const smoothed = groups.filter(({ smoothing }) => smoothing.state === 'smoothed').length;
+  return footLine(
+    normSet,
+    smoothed === 0 ? '' : smoothed === groups.length ? ', smoothed' : ', smoothed in part',
+    `${groups.length} ${groups.length === 1 ? 'group' : 'groups'}, ${people}`,
+  );
+}
+
+function footLine(normSet: NormSet, smoothed: string, people: string): string {
   const { project, check } = normSet;
   const { edition, date } = project.release;
   return [
@@ -69,8 +89,8 @@ export function editionLine(normSet: NormSet, { summary, smoothing }: GroupNorms
     ...(edition.trim() === '' ? [] : [`Edition ${edition.trim()}`]),
     ...(date === '' ? [] : [date]),
     `check ${check}`,
-    `definition: ${definitionName(project.curve.definition)}${smoothing.state === 'smoothed' ? ', smoothed' : ''}`,
-    countedPeople(printCount(summary.n), project.people),
+    `definition: ${definitionName(project.curve.definition)}${smoothed}`,
+    people,
   ].join(' · ');
 }
 

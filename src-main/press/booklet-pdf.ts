@@ -3,6 +3,7 @@ import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import type { Block, Booklet, Picture, Rule, TextLine } from '../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../shared-core/pages/booklet-pages.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
+import { programVersion } from '../program-version.ts';
 import { PICTURE_FONTS } from './fonts.ts';
 import { housePrinter } from './house-printer.ts';
 import { drawPicture, drawRule, drawText } from './page-drawing.ts';
@@ -24,7 +25,7 @@ export async function bookletPdf(
   normSet: NormSet,
   onProgress: (share: number) => void = () => {},
 ): Promise<DrawnBooklet> {
-  const booklet = composeBooklet(normSet);
+  const booklet = composeBooklet(normSet, programVersion());
   const made = housePrinter(PICTURE_FONTS).createPdf(definition(booklet, releaseDay(normSet.project)));
   const document = await made.getStream();
   drawBooklet(document, booklet, onProgress);

@@ -1,0 +1,14 @@
+import type { Phrases } from './phrases.ts';
+
+/** Printed words in German. */
+export const GERMAN_PHRASES: Phrases = {
+  'foot.page': 'Seite {page} von {pages}',
+  'foot.edition': 'Ausgabe {edition}',
+  'foot.check': 'Prüfcode {check}',
+  'foot.definition': 'Definition: {definition}',
+  'foot.definition-smoothed': 'Definition: {definition}, geglättet',
+  'head.draft': 'ENTWURF',
+  'head.table': 'Tabelle {number} · {title}',
+  'sheet.title-with-group': '{title}, {group}',
+  'sheet.continued': '{title} (Fortsetzung)',
+};

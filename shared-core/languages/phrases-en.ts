@@ -1,0 +1,15 @@
+/**
+ * Every printed word, as templates. A key is named by where the words stand; `:one` and `:many` are chosen by a count.
+ * What stands in braces is put in when the words are printed and stands in every language.
+ */
+export const ENGLISH_PHRASES = {
+  'foot.page': 'page {page} of {pages}',
+  'foot.edition': 'Edition {edition}',
+  'foot.check': 'check {check}',
+  'foot.definition': 'definition: {definition}',
+  'foot.definition-smoothed': 'definition: {definition}, smoothed',
+  'head.draft': 'DRAFT',
+  'head.table': 'Table {number} · {title}',
+  'sheet.title-with-group': '{title}, {group}',
+  'sheet.continued': '{title} (continued)',
+} as const;
