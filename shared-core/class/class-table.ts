@@ -86,6 +86,8 @@ export const classTableSchema = v.pipe(
     cited: longText,
     /** What a rank counts, to stand behind "the share of the group scoring"; empty where it is not known. */
     definition: shortText,
+    /** The same for sentences that are chosen by it: kind of a rank definition, or `unknown`. */
+    definitionKind: v.picklist(['midpoint', 'at-or-below', 'below', 'plotting-position', 'grouped', 'unknown']),
     /** What the people of the table may be called. */
     groupNoun: v.picklist(['norm group', 'sample']),
     groupColumns: texts,
