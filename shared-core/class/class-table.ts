@@ -56,13 +56,13 @@ const group = v.pipe(
     /** One value for each grouping column. */
     values: texts,
     /** "Grade 5". */
-    title: shortText,
+    title: longText,
     /** People that the table was made from; null where that is not known. */
     n: v.nullable(v.pipe(v.number(), v.safeInteger(), v.minValue(0))),
     /** Whom the group stands for, in words; may be empty. */
     population: longText,
     /** What is said under the table of ranks adjusted by hand; empty where there are none. */
-    note: longText,
+    note: v.string(),
     /** Lowest score first, without gaps on the steps of the scale. */
     rows: v.pipe(v.array(row), v.minLength(1), v.readonly()),
   }),

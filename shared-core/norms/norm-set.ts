@@ -1,9 +1,8 @@
-import { sha256 } from '@noble/hashes/sha2.js';
-import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import { definitionProblem } from '../percentile/percentile-rank.ts';
 import { printNumber } from '../scores/printed-number.ts';
 import type { CohortSummary } from '../tally/cohort-summary.ts';
 import { peopleIn } from '../tally/frequency-table.ts';
+import { checkCodeOf } from './check-code.ts';
 import { definitionKey } from './definitions.ts';
 import { normsOfGroup, type GroupNorms } from './group-norms.ts';
 import { adjustmentNote } from './adjustment-words.ts';
@@ -93,8 +92,7 @@ function checkCode(project: NormProject, groups: readonly GroupNorms[], status: 
     ...groups.map(adjustmentNote).filter((note) => note !== null),
     ...(status === 'draft' ? [status] : []),
   ];
-  const hash = bytesToHex(sha256(utf8ToBytes(JSON.stringify(printed)))).toUpperCase();
-  return `${hash.slice(0, 4)}-${hash.slice(4, 8)}`;
+  return checkCodeOf(printed);
 }
 
 /** Rounded, so that the last digit of a machine's square roots decides nothing. */

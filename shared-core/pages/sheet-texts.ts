@@ -1,4 +1,4 @@
-import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
+import { markedRank } from '../norms/adjustment-words.ts';
 import { namedFiveNumbers } from '../norms/five-numbers.ts';
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
@@ -171,6 +171,5 @@ export function cellText(row: ConversionRow, { key }: TableColumn): string {
 
 /** The same with the mark of a rank that was adjusted by hand, where one printed text holds both. */
 export function markedText(row: ConversionRow, column: TableColumn): string {
-  const text = cellText(row, column);
-  return column.key === 'rank' && row.adjusted !== null ? `${text}${ADJUSTED_MARK}` : text;
+  return column.key === 'rank' ? markedRank(row) : cellText(row, column);
 }
