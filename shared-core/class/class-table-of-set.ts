@@ -36,6 +36,7 @@ export function classTableOfSet(normSet: NormSet, source: 'project' | 'edition')
       draft: normSet.status === 'draft',
       cited: '',
       definition: definitionInWords(curve.definition, tally.scale.direction),
+      definitionKind: curve.definition.kind,
       groupNoun: groupNoun(project.groups.documentation),
       groupColumns: project.groups.by,
       groups: groups.map((norms) => groupOf(project, norms, columns)),

@@ -1,3 +1,4 @@
+import { definitionInWords } from '../norms/definitions.ts';
 import { DEFAULT_POLICY } from '../norms/policy.ts';
 import { standingTitle } from '../norms/norm-groups.ts';
 import type { PeopleNoun } from '../norms/norm-project.ts';
@@ -30,8 +31,8 @@ export interface PublishedFacts {
   readonly date: string;
   /** Where the table is printed. */
   readonly cited: string;
-  /** What a rank counts, to stand behind "the share of the group scoring"; may be empty. */
-  readonly definition: string;
+  /** What a rank counts, where the table says so. */
+  readonly definition: 'midpoint' | 'at-or-below' | 'below' | 'unknown';
   /** Whom the group stands for, and how many were tested; empty and null where it is not known. */
   readonly population: string;
   readonly n: number | null;
@@ -172,7 +173,8 @@ function tableOf(
     check: '',
     draft: false,
     cited,
-    definition,
+    definition: definition === 'unknown' ? '' : definitionInWords({ kind: definition }, scale.direction),
+    definitionKind: definition,
     groupNoun: 'norm group',
     groupColumns: [],
     groups: [

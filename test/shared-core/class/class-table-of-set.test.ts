@@ -33,6 +33,7 @@ describe('the class table of a norm set', () => {
       draft: false,
       cited: '',
       definition: 'below, plus half of those at the same score',
+      definitionKind: 'midpoint',
       groupNoun: 'norm group',
       groupColumns: ['grade'],
       reliability: null,

@@ -8,7 +8,7 @@ export const PUBLISHED_FACTS: PublishedFacts = {
   edition: '2',
   date: '2026-06-15',
   cited: 'Ostrey Vale handbook (invented), table 4',
-  definition: '',
+  definition: 'unknown',
   population: 'All pupils of the invented Ostrey Vale',
   n: 412,
   direction: null,

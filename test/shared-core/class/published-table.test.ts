@@ -105,6 +105,14 @@ describe('a published table', () => {
     expect(publishedTable('10 50\n11 50', { direction: 'low-is-good' }).scale.direction).toBe('low-is-good');
   });
 
+  it('says what a rank counts where that is known', () => {
+    expect(publishedTable('1 5\n2 6')).toMatchObject({ definition: '', definitionKind: 'unknown' });
+    expect(publishedTable('1 6\n2 5', { definition: 'at-or-below', direction: 'low-is-good' })).toMatchObject({
+      definition: 'at the same score or above',
+      definitionKind: 'at-or-below',
+    });
+  });
+
   it('knows its scale by its scores', () => {
     expect(publishedTable('10 5\n12 6\n14 7').scale).toEqual({ min: 10, max: 14, step: 2, direction: 'high-is-good' });
     expect(publishedTable('0-4.5 5\n5-9.5 6').scale.step).toBe(0.5);
