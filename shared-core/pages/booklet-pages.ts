@@ -1,10 +1,10 @@
 import type { NormSet } from '../norms/norm-set.ts';
 import { BLOCK_WORDS } from './block-words.ts';
-import type { Block, Booklet, BookletPage, Paper } from './booklet.ts';
+import type { Booklet, BookletPage, Paper } from './booklet.ts';
 import { bookletParts, type BookletPart } from './booklet-parts.ts';
+import { missingSignsRemark } from './missing-signs.ts';
 import { paperOf, paperRemarks } from './paper.ts';
 import { draftTitle, surveyName } from './sheet-texts.ts';
-import { missingCharacters } from './text-width.ts';
 
 /**
  * Places every text, figure, rule and picture of a booklet: its blocks in their order, among them the tables with a
@@ -19,11 +19,7 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
     title: draftTitle(normSet, surveyName(normSet.project) || 'Conversion tables'),
     paper,
     pages,
-    remarks: [
-      ...paperRemarks(normSet.project.sheet),
-      ...remarks,
-      ...missingRemark(pages.flatMap(({ blocks }) => blocks)),
-    ],
+    remarks: [...paperRemarks(normSet.project.sheet), ...remarks, ...missingSignsRemark(pages)],
   };
 }
 
@@ -44,17 +40,4 @@ function numbered(parts: readonly BookletPart[], { gutter }: Paper): readonly Bo
       };
     }),
   );
-}
-
-function missingRemark(blocks: readonly Block[]): readonly string[] {
-  const missing = new Set(
-    blocks.flatMap((block) =>
-      block.kind === 'text' ? block.runs.flatMap(({ text, face }) => missingCharacters(text, face)) : [],
-    ),
-  );
-  if (missing.size === 0) return [];
-  return [
-    `The typefaces have no sign for ${[...missing].slice(0, 12).join(' ')}; boxes print instead. ` +
-      'Write those words in Latin, Greek or Cyrillic letters.',
-  ];
 }

@@ -1,10 +1,10 @@
 import type { GroupNorms } from '../norms/group-norms.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
-import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';
+import { scoreTicks } from './score-ticks.ts';
 import { ogiveLabels, type OgiveLabel, type PlacedLabels } from './ogive-labels.ts';
-import { area, dot, fixed, horizontal, path, words, type Point } from './svg-marks.ts';
+import { area, dot, horizontal, path, picture, vertical, words, type Point } from './svg-marks.ts';
 
 export interface OgiveColours {
   readonly ink: string;
@@ -91,15 +91,14 @@ export function ogivePicture(
     rising: scale.direction === 'high-is-good',
   };
   const placed = ogiveLabels(labels, extreme(Math.min), extreme(Math.max), room);
-  return [
-    `<svg xmlns="http://www.w3.org/2000/svg" width="${fixed(size.width)}" height="${fixed(size.height)}" viewBox="0 0 ${fixed(size.width)} ${fixed(size.height)}">`,
+  return picture(size, [
     ...(band === null ? [] : [area([...band.upper, ...band.lower.toReversed()], colours.band)]),
     ...PER_CENT_TICKS.flatMap((tick) =>
       gridLine(y(tick), size.width - EDGE.right, placed.box, tick === 0 ? colours.soft : colours.grid),
     ),
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
-    ...scoreTicks(scale, size.width).flatMap((tick) => [
-      `<path d="M${fixed(x(tick))} ${fixed(y(0))}v2.5" fill="none" stroke="${colours.soft}" stroke-width="0.5"/>`,
+    ...scoreTicks(scale, size.width - EDGE.left - EDGE.right).flatMap((tick) => [
+      vertical(x(tick), y(0), y(0) + 2.5, colours.soft),
       words(printNumber(tick, decimalOf(tick).decimals), { x: x(tick), y: y(0) + 9.5 }, 'middle', colours.soft),
     ]),
     words('Raw score', { x: size.width - EDGE.right, y: y(0) + 18.5 }, 'end', colours.soft),
@@ -108,8 +107,7 @@ export function ogivePicture(
     path(ranks, colours.curve, 1),
     ...(dotted ? ranks.map((point) => dot(point, colours.curve)) : []),
     ...placed.marks,
-    '</svg>',
-  ].join('');
+  ]);
 }
 
 /** A line of the grid, which leaves the ground of the labels free. */
@@ -157,15 +155,4 @@ function steps(norms: GroupNorms, plot: Plot): readonly Point[] {
     if (index === norms.rows.length - 1) add({ x: plot.x(row.score + scale.step / 2), y: after });
   });
   return corners;
-}
-
-/** Round scores about 28 points apart or more, never closer than the scale's step: 0, 5, 10 … */
-function scoreTicks({ min, max, step: scaleStep }: ScoreScale, width: number): readonly number[] {
-  const least = (max - min) / Math.max(2, Math.floor((width - EDGE.left - EDGE.right) / 28));
-  const power = 10 ** Math.floor(Math.log10(least));
-  const round = [1, 2, 5].map((factor) => factor * power).find((candidate) => candidate >= least * 0.999) ?? 10 * power;
-  const step = Math.max(round, scaleStep);
-  const first = Math.ceil(min / step - 1e-9);
-  const last = Math.floor(max / step + 1e-9);
-  return Array.from({ length: last - first + 1 }, (_, index) => Number(((first + index) * step).toPrecision(12)));
 }

@@ -1,0 +1,20 @@
+/** People and how many they are. */
+export const ENGLISH_PEOPLE = {
+  'people.pupils': 'pupils',
+  'people.students': 'students',
+  'people.candidates': 'candidates',
+  'people.people': 'people',
+  'person.pupils': 'pupil',
+  'person.students': 'student',
+  'person.candidates': 'candidate',
+  'person.people': 'person',
+  'counted.pupils:one': '{count} pupil',
+  'counted.pupils:many': '{count} pupils',
+  'counted.students:one': '{count} student',
+  'counted.students:many': '{count} students',
+  'counted.candidates:one': '{count} candidate',
+  'counted.candidates:many': '{count} candidates',
+  'counted.people:one': '{count} person',
+  'counted.people:many': '{count} people',
+  'spoken.adjusted': '{figure}, adjusted by hand',
+} as const;
