@@ -1,5 +1,6 @@
 import type { CohortSource, NormProject } from './norms/norm-project.ts';
 import type { Reading } from './norms/reading.ts';
+import type { BookletSection } from './pages/booklet-sections.ts';
 import type { Tally } from './tally/tally.ts';
 
 /**
@@ -81,6 +82,8 @@ export interface DrawnPages {
   /** The PDF itself, base64. */
   readonly pdf: string;
   readonly pages: number;
+  /** What stands on which page, in print order. */
+  readonly sections: readonly BookletSection[];
   /** What the composer had to change to fit the page, in sentences. */
   readonly remarks: readonly string[];
 }

@@ -48,7 +48,8 @@ const DOCUMENTATION = {
 
 const NOTES =
   'Everything here is invented: no pupil, school or district stands behind these numbers. Forms A and B were handed out ' +
-  'in turn within each school and are tabled together; form B is about half a mark harder than form A.';
+  'in turn within each school and are tabled together; form B is about half a mark harder than form A. The reliability ' +
+  'of 0.89 and the spring goal of 20 are invented too.';
 
 async function projectText() {
   const { newProject } = await source('shared-core/norms/new-project.ts');
@@ -66,9 +67,12 @@ async function projectText() {
     reading: READING,
     tally: tallied.value.tally,
     groups: { by: ['grade'], choices: [], documentation: DOCUMENTATION },
+    precision: { ...bare.precision, reliability: 0.89 },
     table: { ...bare.table, columns: ['stanine', 't'] },
     sheet: { ...bare.sheet, cautions: bare.sheet.cautions.replace('this form,', 'these forms, this'), notes: NOTES },
-    release: { edition: '1.0', date: '2026-06-15', answers: [] },
+    release: { ...bare.release, edition: '1.0', date: '2026-06-15' },
+    cuts: [{ name: 'Spring goal (invented)', score: 20, values: null }],
+    classTable: ['5'],
   });
   const read = projectFromText(text);
   if (!read.ok) throw new Error(read.problem);

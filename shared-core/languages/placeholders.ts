@@ -3,7 +3,7 @@ export type PlaceholdersOf<Template extends string> = Template extends `${string
   ? Name | PlaceholdersOf<Rest>
   : never;
 
-const PLACEHOLDER = /\{([a-z-]+)\}/g;
+const PLACEHOLDER = /\{([a-z][a-z0-9-]*)\}/g;
 
 /** The names in braces in a text, each once, in alphabetical order. */
 export function placeholdersIn(text: string): readonly string[] {
@@ -20,10 +20,10 @@ export interface FilledPart {
 /** The template with its values, in parts. A value is put in as it is, whatever it holds; throws where one is missing. */
 export function filledParts(template: string, values: Readonly<Record<string, string>>): readonly FilledPart[] {
   return template
-    .split(/(\{[a-z-]+\})/)
+    .split(/(\{[a-z][a-z0-9-]*\})/)
     .filter((part) => part !== '')
     .map((part) => {
-      const placeholder = /^\{([a-z-]+)\}$/.exec(part)?.[1];
+      const placeholder = /^\{([a-z][a-z0-9-]*)\}$/.exec(part)?.[1];
       if (placeholder === undefined) return { text: part, placeholder: null };
       const text = values[placeholder];
       if (text === undefined) throw new RangeError(`no value for {${placeholder}}`);

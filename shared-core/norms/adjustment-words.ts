@@ -1,3 +1,4 @@
+import { ENGLISH_WORDS, figure, say } from '../languages/phrases.ts';
 import type { ConversionRow } from './conversion-table.ts';
 import type { GroupNorms } from './group-norms.ts';
 
@@ -13,12 +14,13 @@ export function markedRank({ printed, adjusted }: Pick<ConversionRow, 'printed' 
  * What was changed by hand in a group's table, as it is printed under it; null where nothing was.
  * "† Adjusted by hand: raw 31 from 84 to 85 (reason; who)."
  */
-export function adjustmentNote({ rows }: GroupNorms): string | null {
-  const changes = rows.flatMap(({ scoreText, printed, adjusted }) =>
-    adjusted === null
-      ? []
-      : [`raw ${scoreText} from ${adjusted.from} to ${printed} (${adjusted.reason}; ${adjusted.by})`],
-  );
+export function adjustmentNote({ rows }: GroupNorms, words = ENGLISH_WORDS): string | null {
+  const changes = rows.flatMap(({ scoreText, printed, adjusted }) => {
+    if (adjusted === null) return [];
+    const { reason, by } = adjusted;
+    const [score, from, to] = [scoreText, adjusted.from, printed].map((text) => figure(words, text));
+    return [say(words, 'adjusted.change', { score: score ?? '', from: from ?? '', to: to ?? '', reason, by })];
+  });
   if (changes.length === 0) return null;
-  return `${ADJUSTED_MARK} Adjusted by hand: ${changes.join('; ')}. Everything else follows the computed rank.`;
+  return say(words, 'adjusted.note', { mark: ADJUSTED_MARK, changes: changes.join('; ') });
 }

@@ -66,7 +66,7 @@ export function strayAdjustments(project: NormProject, groups: readonly NormGrou
     .map((adjustment) => ({
       adjustment,
       problem:
-        `There is no group ${adjustment.values.map(valueInWords).join(', ') || 'of everybody'} any more, ` +
+        `There is no group ${adjustment.values.map((value) => valueInWords(value)).join(', ') || 'of everybody'} any more, ` +
         'so its adjusted rank has no place. Withdraw the adjustment.',
     }));
 }

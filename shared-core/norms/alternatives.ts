@@ -9,7 +9,8 @@ import {
   smoothingAlternatives,
   type SmoothingScope,
 } from './smoothing-alternatives.ts';
-import type { ChoiceKey } from './statements.ts';
+import { sheetAlternatives } from './sheet-alternatives.ts';
+import type { ChoiceKey, EditedChoice } from './statements.ts';
 
 /** One way a choice can be made: what it is, what it changes, and the project with it made. */
 export interface Alternative {
@@ -19,11 +20,8 @@ export interface Alternative {
   readonly project: NormProject;
 }
 
-/** Choices that are made from a short list; the others need a number, a text or several ticks. */
-export type ListedChoice = Exclude<
-  ChoiceKey,
-  'scale' | 'missing' | 'grouping' | 'columns' | 'edition' | 'date' | 'kept' | 'bandwidth' | 'reliability'
->;
+/** Choices that are made from a short list. */
+export type ListedChoice = Exclude<ChoiceKey, EditedChoice>;
 
 /** All alternatives of a choice for a project, the present one marked; smoothing is chosen for a scope. */
 export function alternatives(
@@ -155,59 +153,16 @@ export function alternatives(
           'Ranks 0 and 100 are taken as half a person from the end; nothing is held.',
         ),
       ];
+    case 'booklet':
     case 'paper':
-      return [
-        sheetAlternative(project, { paper: 'a4' }, 'A4', '210 × 297 mm.'),
-        sheetAlternative(project, { paper: 'letter' }, 'Letter', '8½ × 11 inches.'),
-        sheetAlternative(project, { paper: 'a5' }, 'A5', '148 × 210 mm, for a small booklet.'),
-      ];
     case 'orientation':
-      return [
-        sheetAlternative(project, { orientation: 'portrait' }, 'portrait', 'Upright.'),
-        sheetAlternative(project, { orientation: 'landscape' }, 'landscape', 'On its side.'),
-      ];
+    case 'fours':
     case 'table-columns':
-      return [
-        sheetAlternative(project, { tableColumns: 1 }, 'one column', 'The table runs down the page once.'),
-        sheetAlternative(
-          project,
-          { tableColumns: 2 },
-          'two columns',
-          'The table is split in two, the heading repeated.',
-        ),
-        sheetAlternative(
-          project,
-          { tableColumns: 3 },
-          'three columns',
-          'The table is split in three, the heading repeated.',
-        ),
-        sheetAlternative(
-          project,
-          { tableColumns: 4 },
-          'four columns',
-          'For few figures and many scores, or a sheet on its side.',
-        ),
-      ];
+    case 'fives':
+    case 'range-rows':
     case 'ogive':
-      return [
-        sheetAlternative(
-          project,
-          { ogive: true },
-          'with its ogive',
-          'The cumulative distribution as a picture below the table.',
-        ),
-        sheetAlternative(project, { ogive: false }, 'without a picture', 'The table and its notes alone.'),
-      ];
     case 'inverse':
-      return [
-        sheetAlternative(project, { inverse: false }, 'without an inverse table', 'From raw score to rank only.'),
-        sheetAlternative(
-          project,
-          { inverse: true },
-          'with the lowest score for each percentile',
-          'Also from percentile to raw score: the poorest score that reaches it.',
-        ),
-      ];
+      return sheetAlternatives(project, choice);
   }
 }
 
@@ -306,16 +261,6 @@ function tableAlternative(
 ): Alternative {
   const table = { ...project.table, ...change };
   return { label, explanation, chosen: sameChoices(project.table, table), project: { ...project, table } };
-}
-
-function sheetAlternative(
-  project: NormProject,
-  change: Partial<NormProject['sheet']>,
-  label: string,
-  explanation: string,
-): Alternative {
-  const sheet = { ...project.sheet, ...change };
-  return { label, explanation, chosen: sameChoices(project.sheet, sheet), project: { ...project, sheet } };
 }
 
 function sameChoices(now: object, then: object): boolean {

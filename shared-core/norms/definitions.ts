@@ -1,3 +1,4 @@
+import { ENGLISH_WORDS, figure, say } from '../languages/phrases.ts';
 import { parseOffset, type RankDefinition } from '../percentile/percentile-rank.ts';
 import type { Direction } from '../scale/score-scale.ts';
 
@@ -34,34 +35,30 @@ export function definitionFromKey(key: string): RankDefinition | null {
 }
 
 /** The definition in the middle of a sentence that begins "the share of the group scoring …". */
-export function definitionInWords(definition: RankDefinition, direction: Direction): string {
-  const worse = direction === 'high-is-good' ? 'below' : 'above';
+export function definitionInWords(definition: RankDefinition, direction: Direction, words = ENGLISH_WORDS): string {
+  const worse = say(words, direction === 'high-is-good' ? 'worse.below' : 'worse.above');
   switch (definition.kind) {
     case 'midpoint':
-      return `${worse}, plus half of those at the same score`;
     case 'at-or-below':
-      return `at the same score or ${worse}`;
     case 'below':
-      return `${worse} that score`;
+      return say(words, `definition.${definition.kind}`, { worse });
     case 'plotting-position':
-      return `${worse}, by mean rank (r − a)/(N + 1 − 2a) with a = ${definition.offset}`;
+      return say(words, 'definition.plotting-position', { worse, offset: figure(words, definition.offset) });
     case 'grouped':
-      return `${worse}, interpolated in classes of ${definition.width} points between exact limits`;
+      return say(words, 'definition.grouped', { worse, width: figure(words, String(definition.width)) });
   }
 }
 
 /** Short name for the foot of a page. */
-export function definitionName(definition: RankDefinition): string {
+export function definitionName(definition: RankDefinition, words = ENGLISH_WORDS): string {
   switch (definition.kind) {
     case 'midpoint':
-      return 'midpoint';
     case 'at-or-below':
-      return 'at or below';
     case 'below':
-      return 'below';
+      return say(words, `definition-name.${definition.kind}`);
     case 'plotting-position':
-      return `plotting position, a = ${definition.offset}`;
+      return say(words, 'definition-name.plotting-position', { offset: figure(words, definition.offset) });
     case 'grouped':
-      return `grouped by ${definition.width}`;
+      return say(words, 'definition-name.grouped', { width: figure(words, String(definition.width)) });
   }
 }

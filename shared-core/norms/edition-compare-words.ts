@@ -102,7 +102,12 @@ function rowInWords(row: RowChange): string {
 
 /** "percentile rank 24 → 25; stanine 4 → 5" */
 export function cellsInWords(cells: readonly CellChange[]): string {
-  return cells.map(({ name, before, after }) => `${name} ${before} → ${after}`).join('; ');
+  return cells.map(namedCell).join('; ');
+}
+
+/** "stanine 4 → 5" */
+export function namedCell({ name, before, after }: CellChange): string {
+  return `${name} ${before} → ${after}`;
 }
 
 /** "1 row", "2 rows" */

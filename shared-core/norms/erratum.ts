@@ -1,5 +1,5 @@
 import { printCount } from '../scores/printed-number.ts';
-import type { TextChange } from './edition-compare-choices.ts';
+import { COHORT_FINGERPRINT, type TextChange } from './edition-compare-choices.ts';
 import {
   cellsInWords,
   changeInWords,
@@ -62,7 +62,7 @@ function cautionsOf(comparison: EditionComparison, roster: FollowedRoster | null
     ...(changed(({ what }) => what === 'title' || what === 'form or season')
       ? ['The two editions do not have the same title. Make sure that they are editions of one table.']
       : []),
-    ...(changed(({ what }) => what === 'SHA-256 of the cohort')
+    ...(changed(({ what }) => what === COHORT_FINGERPRINT)
       ? ['The new edition was made from another file: the numbers may differ because the people do.']
       : []),
     ...(changed(({ what }) => OTHER_QUESTION.has(what))

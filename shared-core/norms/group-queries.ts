@@ -1,6 +1,7 @@
 import { ratioToNumber } from '../percentile/exact-ratio.ts';
 import { printCount, printNumber, printShare } from '../scores/printed-number.ts';
 import { clusterQueries } from './cluster-queries.ts';
+import { rangeRowQueries } from './cut-queries.ts';
 import { derivedQueries } from './derived-queries.ts';
 import type { GroupNorms } from './group-norms.ts';
 import { listed } from './listed.ts';
@@ -22,6 +23,7 @@ export function groupQueries(project: NormProject, norms: GroupNorms): readonly 
     ...stepQueries(project, norms),
     ...unobservedQueries(norms),
     ...derivedQueries(project, norms),
+    ...rangeRowQueries(project, norms),
   ];
 }
 

@@ -1,3 +1,4 @@
+import { ENGLISH_WORDS, figure, say, sayCounted } from '../languages/phrases.ts';
 import { tablesByGroup, type FrequencyTable } from '../tally/frequency-table.ts';
 import type { Documentation, NormProject, PeopleNoun } from './norm-project.ts';
 
@@ -37,9 +38,14 @@ export function normGroups(project: NormProject): readonly NormGroup[] {
 }
 
 /** "Grade 5, Form A"; "All pupils" where there is no grouping. */
-export function standingTitle(by: readonly string[], values: readonly string[], people: PeopleNoun): string {
-  if (by.length === 0) return people === 'people' ? 'Everybody' : `All ${people}`;
-  return by.map((column, index) => `${columnInWords(column)} ${valueInWords(values[index])}`).join(', ');
+export function standingTitle(
+  by: readonly string[],
+  values: readonly string[],
+  people: PeopleNoun,
+  words = ENGLISH_WORDS,
+): string {
+  if (by.length === 0) return say(words, `all.${people}`);
+  return by.map((column, index) => `${columnInWords(column)} ${valueInWords(values[index], words)}`).join(', ');
 }
 
 /** Cells of a file may hold line ends, which a title has no room for. */
@@ -48,8 +54,8 @@ function inOneLine(text = ''): string {
 }
 
 /** A value of a grouping column as it is printed. */
-export function valueInWords(value = ''): string {
-  return inOneLine(value) || '(blank)';
+export function valueInWords(value = '', words = ENGLISH_WORDS): string {
+  return inOneLine(value) || say(words, 'group.blank');
 }
 
 /** "age_group" as it is printed: "Age group". */
@@ -82,11 +88,11 @@ export function groupNoun(documentation: Documentation): 'norm group' | 'sample'
 }
 
 /** One of them: "pupil", "person". */
-export function onePerson(people: PeopleNoun): string {
-  return people === 'people' ? 'person' : people.slice(0, -1);
+export function onePerson(people: PeopleNoun, words = ENGLISH_WORDS): string {
+  return say(words, `person.${people}`);
 }
 
-/** A count with its noun: "1 pupil", "2 pupils". */
-export function countedPeople(count: string, people: PeopleNoun): string {
-  return `${count} ${count === '1' ? onePerson(people) : people}`;
+/** A printed count with its noun: "1 pupil", "2 pupils". */
+export function countedPeople(count: string, people: PeopleNoun, words = ENGLISH_WORDS): string {
+  return sayCounted(words, `counted.${people}`, count, { count: figure(words, count) });
 }

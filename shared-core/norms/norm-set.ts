@@ -1,17 +1,11 @@
 import { definitionProblem } from '../percentile/percentile-rank.ts';
-import { printNumber } from '../scores/printed-number.ts';
-import type { CohortSummary } from '../tally/cohort-summary.ts';
 import { peopleIn } from '../tally/frequency-table.ts';
-import { checkCodeOf } from './check-code.ts';
-import { definitionKey } from './definitions.ts';
+import { checkCode } from './check-code.ts';
 import { normsOfGroup, type GroupNorms } from './group-norms.ts';
-import { adjustmentNote } from './adjustment-words.ts';
 import { strayAdjustments, type RefusedAdjustment } from './adjustments.ts';
 import { normGroups } from './norm-groups.ts';
 import type { NormProject } from './norm-project.ts';
-import { clusterFacts } from './sampling-words.ts';
 import { openMustQueries, queriesOf, type Query } from './queries.ts';
-import { methodText } from './statements.ts';
 
 /** Every number that screen, PDF, workbook and csv print, from one project. */
 export interface NormSet {
@@ -51,9 +45,10 @@ export function buildNormSet(project: NormProject): NormSetBuilt {
     ...strayAdjustments(project, all),
     ...groups.flatMap((norms) => norms.refusedAdjustments),
   ];
-  const queries = queriesOf(project, groups, refusedAdjustments);
+  const whenReleased = checkCode(project, groups, 'released');
+  const queries = queriesOf(project, groups, refusedAdjustments, whenReleased);
   const status = openMustQueries(queries).length > 0 ? 'draft' : 'released';
-  const check = checkCode(project, groups, status);
+  const check = status === 'released' ? whenReleased : checkCode(project, groups, status);
   return { ok: true, normSet: { project, groups, queries, refusedAdjustments, status, check } };
 }
 
@@ -67,45 +62,4 @@ export function pressProblem({ groups, refusedAdjustments }: NormSet): string | 
   const refused = groups.find(({ smoothing }) => smoothing.state === 'refused');
   if (refused?.smoothing.state !== 'refused') return null;
   return `${refused.group.title} cannot be smoothed as chosen. ${refused.smoothing.problem}`;
-}
-
-/** Of everything that is printed, except the paper it is printed on. */
-function checkCode(project: NormProject, groups: readonly GroupNorms[], status: NormSet['status']): string {
-  const { title, subtitle, people, source, sheet, release } = project;
-  const { documentation } = project.groups;
-  const printed = [
-    [title, subtitle, people, release.edition, release.date, definitionKey(project.curve.definition)],
-    [sheet.title, sheet.howToRead, sheet.cautions, sheet.notes, methodText(project)],
-    [documentation.population, documentation.sampling, documentation.participation],
-    [documentation.testDates, documentation.weighting],
-    source === null ? [] : [source.file, source.sha256, source.rowsRead, source.rowsKept],
-    project.table.columns,
-    groups.map(({ group, summary, sampling, smoothing, rows, inverse }) => [
-      group.title,
-      smoothing.state === 'smoothed' ? smoothing.curve.statement : '',
-      factsIn(summary),
-      ...(sampling.clusters === null ? [] : [clusterFacts(sampling)]),
-      rows.map((row) => [row.scoreText, row.printed, ...project.table.columns.map((column) => row.texts[column])]),
-      sheet.inverse ? inverse.map((row) => [row.percentile, row.scoreText]) : [],
-    ]),
-    // What few sets have leaves the code of the others as it is.
-    ...groups.map(adjustmentNote).filter((note) => note !== null),
-    ...(status === 'draft' ? [status] : []),
-  ];
-  return checkCodeOf(printed);
-}
-
-/** Rounded, so that the last digit of a machine's square roots decides nothing. */
-function factsIn({
-  n,
-  weightSum,
-  effectiveN,
-  mean,
-  sd,
-  skewness,
-  excessKurtosis,
-  fiveNumbers,
-}: CohortSummary): unknown {
-  const rounded = [weightSum, effectiveN, mean, sd, skewness, excessKurtosis, ...fiveNumbers];
-  return [n, rounded.map((value) => (value === null ? null : printNumber(value, 2)))];
 }

@@ -1,5 +1,6 @@
 import * as v from 'valibot';
 import { fileKey, fromFileKeys, toFileKeys } from './file-keys.ts';
+import { jsonIn } from './json-object.ts';
 import { policySchema, type Policy } from './policy-schema.ts';
 
 const POLICY_FORMAT = 'normloom-policy';
@@ -16,10 +17,8 @@ export type PolicyRead =
 
 /** Reads the text of a policy. Unknown keys are left behind; whatever is wrong comes back as a sentence. */
 export function policyFromText(text: string): PolicyRead {
-  let value: unknown;
-  try {
-    value = JSON.parse(text.replace(/^\uFEFF/, ''));
-  } catch {
+  const value = jsonIn(text);
+  if (value === undefined) {
     return { ok: false, problem: 'The policy is not complete JSON. Look for a missing comma, quote or brace.' };
   }
   const head = v.safeParse(v.object({ format: v.literal(POLICY_FORMAT), version: v.number() }), value);

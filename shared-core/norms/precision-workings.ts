@@ -6,7 +6,7 @@ import { definitionName } from './definitions.ts';
 import type { GroupNorms } from './group-norms.ts';
 import type { NormProject } from './norm-project.ts';
 import type { RankAlternative } from './print-range.ts';
-import { clusterFacts, DESIGN_EFFECT_NOTE, drawnInWords } from './sampling-words.ts';
+import { clusterFacts, designEffectNote, drawnInWords } from './sampling-words.ts';
 import { intervalName } from './smoothing-words.ts';
 
 export type PrecisionColumn = Extract<ColumnKey, 'interval' | 'standard-error' | 'measurement-band' | 'print-range'>;
@@ -74,7 +74,7 @@ function effectiveLines({ designEffect, effectiveN }: SamplingDesign, n: number)
     effectiveN < n / designEffect
       ? `A design effect of ${printNumber(designEffect, 2)} leaves more than the weights do; the effective n is theirs.`
       : `Effective n: ${printCount(n)} / ${printNumber(designEffect, 2)} = ${printNumber(effectiveN, 1)}.`,
-    DESIGN_EFFECT_NOTE,
+    designEffectNote(),
   ];
 }
 

@@ -1,5 +1,6 @@
 import * as v from 'valibot';
 import { fileKey, fromFileKeys, toFileKeys } from './file-keys.ts';
+import { isFileObject, jsonIn, type FileObject } from './json-object.ts';
 import { newProject } from './new-project.ts';
 import { normProjectSchema, PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
 
@@ -13,13 +14,15 @@ export type ProjectRead =
 
 /** Reads the text of a `*.normloom` file. Unknown keys are left behind; whatever is wrong comes back as a sentence. */
 export function projectFromText(text: string): ProjectRead {
-  let value: unknown;
-  try {
-    value = JSON.parse(text.replace(/^\uFEFF/, ''));
-  } catch {
-    return damaged('it is not complete JSON, as after a copy that broke off');
-  }
-  if (!isRecord(value) || value['format'] !== PROJECT_FORMAT) {
+  const value = jsonIn(text);
+  return value === undefined
+    ? damaged('it is not complete JSON, as after a copy that broke off')
+    : projectFromValue(value);
+}
+
+/** The same for a project that is part of another file, parsed, with the keys of files. */
+export function projectFromValue(value: unknown): ProjectRead {
+  if (!isFileObject(value) || value['format'] !== PROJECT_FORMAT) {
     return { ok: false, problem: 'This is not a Normloom project. Choose a file that Normloom saved (*.normloom).' };
   }
   const version = value['version'];
@@ -34,8 +37,6 @@ export function projectFromText(text: string): ProjectRead {
   const issue = parsed.issues[0];
   return damaged(`${fileKey(v.getDotPath(issue) ?? 'the whole')}: ${issue.message}`);
 }
-
-type FileObject = Readonly<Record<string, unknown>>;
 
 /** A project of an earlier version with what it did not know yet; keys are those of the file. */
 function broughtForward(value: FileObject): FileObject {
@@ -55,24 +56,24 @@ function broughtForward(value: FileObject): FileObject {
 /** Projects of version 1 knew neither smoothing nor precision: they get the defaults. */
 function withPrecision(value: FileObject): FileObject {
   const { curve: now, precision } = newProject('');
-  const curve = isRecord(value['curve']) ? { ...now, ...value['curve'] } : value['curve'];
+  const curve = isFileObject(value['curve']) ? { ...now, ...value['curve'] } : value['curve'];
   return { ...value, curve, precision };
 }
 
 /** Projects before version 3 knew no clusters: their people stay drawn one by one. */
 function withClusters(value: FileObject): FileObject {
   const { tally, reading } = value;
-  const cells = isRecord(tally) ? tally['cells'] : null;
-  const decisions = isRecord(reading) ? reading['decisions'] : null;
+  const cells = isFileObject(tally) ? tally['cells'] : null;
+  const decisions = isFileObject(reading) ? reading['decisions'] : null;
   return {
     ...value,
     version: PROJECT_VERSION,
     tally:
-      isRecord(tally) && Array.isArray(cells)
-        ? { ...tally, cells: cells.map((cell: unknown) => (isRecord(cell) ? { ...cell, clusters: null } : cell)) }
+      isFileObject(tally) && Array.isArray(cells)
+        ? { ...tally, cells: cells.map((cell: unknown) => (isFileObject(cell) ? { ...cell, clusters: null } : cell)) }
         : tally,
     reading:
-      isRecord(reading) && isRecord(decisions)
+      isFileObject(reading) && isFileObject(decisions)
         ? { ...reading, decisions: { ...decisions, 'blank-cluster': 'alone' } }
         : reading,
   };
@@ -83,8 +84,4 @@ function damaged(why: string): ProjectRead {
     ok: false,
     problem: `The project file is damaged (${why}). Open a backup, or the draft that Normloom kept on the start page; the file was not touched.`,
   };
-}
-
-function isRecord(value: unknown): value is FileObject {
-  return typeof value === 'object' && value !== null && !Array.isArray(value);
 }

@@ -2,6 +2,8 @@ import { adjustmentQueries } from './adjustment-queries.ts';
 import type { RefusedAdjustment } from './adjustments.ts';
 import { unusedClusterQueries } from './cluster-queries.ts';
 import { cohortQueries } from './cohort-queries.ts';
+import { editionQueries } from './edition-queries.ts';
+import { cutQueries } from './cut-queries.ts';
 import { descriptionQueries } from './description-queries.ts';
 import type { GroupNorms } from './group-norms.ts';
 import { groupQueries } from './group-queries.ts';
@@ -34,18 +36,21 @@ export type AskedOfGroup = Omit<Asked, 'group'>;
 
 /**
  * All queries of a project, most pressing first, those with a reason given last. Their thresholds are those of the
- * project's policy. `refused` are the adjustments that were not made, of all groups and of none.
+ * project's policy. `refused` are the adjustments that were not made, of all groups and of none; `check` is the code that
+ * a released edition of the project carries.
  */
 export function queriesOf(
   project: NormProject,
   groups: readonly GroupNorms[],
   refused: readonly RefusedAdjustment[],
+  check: string,
 ): readonly Query[] {
   const asked = [
     ...cohortQueries(project),
     ...unusedClusterQueries(project),
     ...descriptionQueries(project, groups),
     ...adjustmentQueries(groups, refused),
+    ...cutQueries(project),
     ...groups.flatMap((norms) =>
       groupQueries(project, norms).map((query) => ({
         ...query,
@@ -54,6 +59,7 @@ export function queriesOf(
       })),
     ),
     ...reversalQueries(project, groups),
+    ...editionQueries(project, check),
   ];
   const weights = { must: 0, should: 1, note: 2 } as const;
   return asked

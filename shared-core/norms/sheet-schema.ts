@@ -1,10 +1,11 @@
 import * as v from 'valibot';
 import { BLOCK_KINDS, DEFAULT_BLOCKS } from './booklet-blocks.ts';
+import { SHEET_LENGTHS } from './sheet-lengths.ts';
 
 const shortText = v.pipe(v.string(), v.maxLength(400));
 const longText = v.pipe(v.string(), v.maxLength(8000));
 
-function lengthFrom(least: number, most: number) {
+function lengthFrom([least, most]: readonly [number, number]) {
   return v.pipe(v.number(), v.minValue(least), v.maxValue(most));
 }
 
@@ -77,12 +78,12 @@ export const sheetSchema = v.pipe(
     orientation: v.picklist(['portrait', 'landscape']),
     tableColumns: v.picklist([1, 2, 3, 4]),
     /** White space at every edge, millimetres; null for what is usual on the paper. */
-    marginMm: v.optional(v.nullable(lengthFrom(8, 45)), null),
+    marginMm: v.optional(v.nullable(lengthFrom(SHEET_LENGTHS.marginMm)), null),
     /** More of it at the edge that is bound: left on odd pages, right on even ones. */
-    gutterMm: v.optional(lengthFrom(0, 30), DEFAULT_SETTING.gutterMm),
+    gutterMm: v.optional(lengthFrom(SHEET_LENGTHS.gutterMm), DEFAULT_SETTING.gutterMm),
     /** Size of the figures, and from one row to the next, points. */
-    rowType: v.optional(lengthFrom(6, 14), DEFAULT_SETTING.rowType),
-    rowHeight: v.optional(lengthFrom(8, 36), DEFAULT_SETTING.rowHeight),
+    rowType: v.optional(lengthFrom(SHEET_LENGTHS.rowType), DEFAULT_SETTING.rowType),
+    rowHeight: v.optional(lengthFrom(SHEET_LENGTHS.rowHeight), DEFAULT_SETTING.rowHeight),
     /** Rows stand in fives. */
     fives: v.optional(v.boolean(), DEFAULT_SETTING.fives),
     /** Neighbouring scores that print alike stand in one row: "23–25". */

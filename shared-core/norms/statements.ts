@@ -1,13 +1,14 @@
+import { listed } from '../languages/lists.ts';
+import { ENGLISH_WORDS } from '../languages/phrases.ts';
 import { scaleInWords } from '../scale/score-scale.ts';
-import { columnInWords, onePerson } from './norm-groups.ts';
-import { definitionInWords } from './definitions.ts';
+import { columnInWords } from './norm-groups.ts';
 import type { SmoothingChoice } from '../smoothing/smoothing.ts';
+import { intervalStatement, rankStatement, reliabilityStatement, tableStatement } from './method-statements.ts';
 import type { NormProject } from './norm-project.ts';
 import { smoothingInScope, type SmoothingScope } from './smoothing-alternatives.ts';
 import { logLinearIn } from './smoothing-choice.ts';
-import { bandwidthInWords, degreeInWords, intervalName, keptInWords, smoothingInWords } from './smoothing-words.ts';
+import { bandwidthInWords, degreeInWords, keptInWords, smoothingInWords } from './smoothing-words.ts';
 import { drawnInGeneral } from './sampling-words.ts';
-import { columnOf } from './table-columns.ts';
 
 /** Phrases of the statements that stand for a choice. */
 export type ChoiceKey =
@@ -31,13 +32,44 @@ export type ChoiceKey =
   | 'columns'
   | 'z-source'
   | 'z-ends'
+  | 'booklet'
   | 'paper'
   | 'orientation'
+  | 'margin'
+  | 'gutter'
+  | 'fours'
   | 'table-columns'
+  | 'row-type'
+  | 'row-height'
+  | 'fives'
+  | 'range-rows'
   | 'ogive'
   | 'inverse'
   | 'edition'
-  | 'date';
+  | 'date'
+  | 'analyst'
+  | 'checker';
+
+/** Choices that take a number, a text or several ticks; all others are made from a list. */
+export const EDITED_CHOICES = [
+  'scale',
+  'missing',
+  'grouping',
+  'kept',
+  'bandwidth',
+  'reliability',
+  'columns',
+  'margin',
+  'gutter',
+  'row-type',
+  'row-height',
+  'edition',
+  'date',
+  'analyst',
+  'checker',
+] as const satisfies readonly ChoiceKey[];
+
+export type EditedChoice = (typeof EDITED_CHOICES)[number];
 
 export interface StatementPart {
   readonly text: string;
@@ -45,8 +77,15 @@ export interface StatementPart {
   readonly choice: ChoiceKey | null;
 }
 
-const words = (text: string): StatementPart => ({ text, choice: null });
-const phrase = (choice: ChoiceKey, text: string): StatementPart => ({ choice, text });
+/** Plain words of a statement. */
+export function words(text: string): StatementPart {
+  return { text, choice: null };
+}
+
+/** Words of a statement that stand for a choice. */
+export function phrase(choice: ChoiceKey, text: string): StatementPart {
+  return { choice, text };
+}
 
 /** The statement as one plain sentence, for print. */
 export function statementText(parts: readonly StatementPart[]): string {
@@ -55,7 +94,7 @@ export function statementText(parts: readonly StatementPart[]): string {
 
 /** "a, b and c" */
 export function joined(items: readonly string[]): string {
-  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1)}`;
+  return listed(ENGLISH_WORDS, items);
 }
 
 export function cohortStatement(project: NormProject): readonly StatementPart[] {
@@ -122,19 +161,10 @@ export function curveStatement(project: NormProject, scope: SmoothingScope = nul
     words(' '),
     ...smoothingStatement(smoothingInScope(project, scope)),
     words(' '),
-    ...intervalStatement(project, `, ${drawnInGeneral(project)}.`),
+    ...withoutStop(intervalStatement(project)),
+    words(`, ${drawnInGeneral(project)}.`),
     words(' '),
     ...reliabilityStatement(project),
-  ];
-}
-
-function rankStatement(project: NormProject): readonly StatementPart[] {
-  const direction = project.tally?.scale.direction ?? 'high-is-good';
-  const one = onePerson(project.people);
-  return [
-    words(`A ${one}’s percentile rank is the share of the group scoring `),
-    phrase('definition', definitionInWords(project.curve.definition, direction)),
-    words('.'),
   ];
 }
 
@@ -158,103 +188,37 @@ function smoothingStatement(smoothing: SmoothingChoice): readonly StatementPart[
   ];
 }
 
-function intervalStatement({ precision }: NormProject, end = '.'): readonly StatementPart[] {
-  return [
-    words('The sampling error of a rank is told by its '),
-    phrase('level', `${precision.level} %`),
-    words(' '),
-    phrase('interval', `${intervalName(precision.interval)} interval`),
-    words(end),
-  ];
-}
-
-function reliabilityStatement({ precision }: NormProject): readonly StatementPart[] {
-  return [
-    words('The reliability of the test is '),
-    phrase('reliability', precision.reliability === null ? 'not given' : String(precision.reliability)),
-    words('.'),
-  ];
-}
-
-export function tableStatement(project: NormProject): readonly StatementPart[] {
-  const { columns, decimals, rounding, ends, zSource, zEnds } = project.table;
-  const names = columns.map((key) => columnOf(key, project).name);
-  const derived = columns.some(
-    (key) => ['z', 't', 'nce', 'deviation', 'sten'].includes(key) || (key === 'stanine' && zSource === 'linear'),
-  );
-  const low = decimals === 0 ? '1' : '0.1';
-  const high = decimals === 0 ? '99' : '99.9';
-  return [
-    words('Percentile ranks are printed '),
-    phrase('decimals', decimals === 0 ? 'as whole numbers' : 'to one decimal'),
-    words(', '),
-    phrase('rounding', rounding === 'half-up' ? 'halves rounded up' : 'halves rounded to even'),
-    words(', '),
-    phrase('ends', ends === 'signs' ? `with <${low} and >${high} at the ends` : `held at ${low} and ${high}`),
-    words('; beside them '),
-    phrase(
-      'columns',
-      names.length === 0 ? 'nothing else' : names.length === 1 ? `the ${names[0]}` : `the ${joined(names)}`,
-    ),
-    words('.'),
-    ...(derived
-      ? [
-          words(' z scores are '),
-          phrase(
-            'z-source',
-            zSource === 'normalised' ? 'normal deviates of the ranks' : 'linear, from mean and standard deviation',
-          ),
-          words('; '),
-          phrase(
-            'z-ends',
-            zEnds === 'limits' ? 'they are held between −3 and 3' : 'at ranks 0 and 100 half a person stands in',
-          ),
-          words('.'),
-        ]
-      : []),
-  ];
-}
-
-const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
-const NUMBER_WORDS = { 1: 'one column', 2: 'two columns', 3: 'three columns', 4: 'four columns' } as const;
-
-export function sheetStatement(project: NormProject): readonly StatementPart[] {
-  const { paper, orientation, tableColumns, ogive, inverse } = project.sheet;
-  return [
-    words('Each table is set on '),
-    phrase('paper', PAPER_NAMES[paper]),
-    words(', '),
-    phrase('orientation', orientation),
-    words(', in '),
-    phrase('table-columns', NUMBER_WORDS[tableColumns]),
-    words(', '),
-    phrase('ogive', ogive ? 'with its ogive' : 'without a picture'),
-    words(' and '),
-    phrase('inverse', inverse ? 'with the lowest score for each percentile' : 'without an inverse table'),
-    words('.'),
-  ];
-}
-
 export function releaseStatement(project: NormProject): readonly StatementPart[] {
-  const { edition, date } = project.release;
+  const { edition, date, analyst, checker } = project.release;
   return [
     words('This is edition '),
     phrase('edition', edition.trim() === '' ? '(no number)' : edition),
     words(', dated '),
     phrase('date', date === '' ? '(no date)' : date),
+    words(', prepared by '),
+    phrase('analyst', analyst.trim() === '' ? '(nobody yet)' : analyst),
+    words(', checked by '),
+    phrase('checker', checker.trim() === '' ? '(nobody yet)' : checker),
     words('.'),
   ];
 }
 
 /** What of the method holds for all tables, as it is printed. Each group's smoothing has a statement of its own. */
-export function methodText(project: NormProject): string {
+export function methodText(project: NormProject, words = ENGLISH_WORDS): string {
   const { columns } = project.table;
   return [
-    rankStatement(project),
-    ...(columns.includes('interval') ? [intervalStatement(project)] : []),
-    ...(columns.includes('measurement-band') ? [reliabilityStatement(project)] : []),
-    tableStatement(project),
+    rankStatement(project, words),
+    ...(columns.includes('interval') ? [intervalStatement(project, words)] : []),
+    ...(columns.includes('measurement-band') ? [reliabilityStatement(project, words)] : []),
+    tableStatement(project, words),
   ]
     .map(statementText)
     .join(' ');
+}
+
+/** A sentence that goes on. */
+function withoutStop(parts: readonly StatementPart[]): readonly StatementPart[] {
+  return parts.map((part, index) =>
+    index === parts.length - 1 ? { ...part, text: part.text.replace(/\.$/, '') } : part,
+  );
 }

@@ -1,8 +1,10 @@
 import { printCount } from '../scores/printed-number.ts';
+import { bookletExtent, printedBlocks } from './booklet-choice.ts';
 import { definitionName } from './definitions.ts';
 import { columnInWords, normGroups } from './norm-groups.ts';
-import type { NormProject } from './norm-project.ts';
+import type { NormProject, SheetChoices } from './norm-project.ts';
 import type { Station } from './queries.ts';
+import { COLUMN_WORDS, PAPER_NAMES } from './sheet-statement.ts';
 import { smoothingInBrief } from './smoothing-words.ts';
 import { columnOf } from './table-columns.ts';
 
@@ -18,7 +20,7 @@ export function stationContents(project: NormProject, openQueries: number): Read
     groups: groupsInWords(project),
     curve: `${definitionName(project.curve.definition)}, ${smoothingInBrief(project.curve.smoothing)}`,
     table: ['rank', ...table.columns.map((key) => columnOf(key, project).name)].join(', '),
-    sheet: `${{ a4: 'A4', letter: 'Letter', a5: 'A5' }[sheet.paper]}, ${{ 1: 'one column', 2: 'two columns', 3: 'three columns', 4: 'four columns' }[sheet.tableColumns]}`,
+    sheet: sheetInWords(sheet),
     release:
       openQueries === 0
         ? `edition ${release.edition}`
@@ -35,5 +37,22 @@ export function stationContents(project: NormProject, openQueries: number): Read
       return `${columnInWords(only).toLowerCase()} ${titles.map((group) => group.values[0] ?? '').join(', ')}`;
     }
     return `${titles.length} tables`;
+  }
+}
+
+/** "A4, three columns"; "booklet of 9 blocks, A4" */
+function sheetInWords(sheet: SheetChoices): string {
+  const paper = PAPER_NAMES[sheet.paper];
+  const extent = bookletExtent(sheet);
+  switch (extent) {
+    case 'tables':
+    case 'nothing':
+      return `${paper}, ${COLUMN_WORDS[sheet.tableColumns]}`;
+    case 'whole':
+      return `whole booklet, ${paper}`;
+    case 'own': {
+      const count = printedBlocks(sheet);
+      return `booklet of ${count === 1 ? 'one block' : `${count} blocks`}, ${paper}`;
+    }
   }
 }

@@ -1,6 +1,10 @@
+import { ENGLISH_WORDS, figure, say, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { NormProject } from './norm-project.ts';
 import { drawnInGeneral } from './sampling-words.ts';
+
+/** Points of a normal curve equivalent to one of z. */
+const NCE_FACTOR = '21.06';
 
 /** How a column is headed and explained. The percentile rank and the raw score are columns of every table. */
 export interface TableColumn {
@@ -12,119 +16,108 @@ export interface TableColumn {
   readonly explanation: string;
 }
 
-export function scoreColumn(): TableColumn {
+export function scoreColumn(words = ENGLISH_WORDS): TableColumn {
   return {
     key: 'score',
-    heading: ['Raw', 'score'],
-    name: 'raw score',
-    explanation: 'The score as counted on the test.',
+    heading: linesOf(say(words, 'column.score.heading')),
+    name: say(words, 'column.score.name'),
+    explanation: say(words, 'column.score.explanation'),
   };
 }
 
-export function rankColumn(): TableColumn {
+export function rankColumn(words = ENGLISH_WORDS): TableColumn {
   return {
     key: 'rank',
-    heading: ['Percentile', 'rank'],
-    name: 'percentile rank',
-    explanation: 'The place of the score in the group, rounded for print.',
+    heading: linesOf(say(words, 'column.rank.heading')),
+    name: say(words, 'column.rank.name'),
+    explanation: say(words, 'column.rank.explanation'),
   };
 }
 
 /** The column of a key in the words of this project. */
-export function columnOf(key: ColumnKey, project: NormProject): TableColumn {
-  const people = project.people.charAt(0).toUpperCase() + project.people.slice(1);
-  const weighted = project.tally !== null && project.tally.weightDecimals !== null;
-  const good = project.tally?.scale.direction !== 'low-is-good';
+export function columnOf(key: ColumnKey, project: NormProject, words = ENGLISH_WORDS): TableColumn {
+  return { key, ...textsOf(key, project, words) };
+}
+
+function textsOf(key: ColumnKey, project: NormProject, words: PrintWords): Omit<TableColumn, 'key'> {
   switch (key) {
     case 'count':
       return {
-        key,
-        heading: [people],
-        name: `number of ${project.people}`,
-        explanation: 'How many obtained the score.',
+        heading: linesOf(say(words, `column.count.heading.${project.people}`)),
+        name: say(words, 'column.count.name', { people: say(words, `people.${project.people}`) }),
+        explanation: say(words, 'column.count.explanation'),
       };
     case 'cumulative': {
-      const side = good ? 'below' : 'above';
+      const what = project.tally !== null && project.tally.weightDecimals !== null ? 'weight' : 'number';
+      const side = project.tally?.scale.direction === 'low-is-good' ? 'above' : 'below';
       return {
-        key,
-        heading: weighted ? ['Weight at', `or ${side}`] : ['At or', side],
-        name: `${weighted ? 'weight' : 'number'} at or ${side}`,
-        explanation: `${weighted ? 'The weight of those who' : 'How many'} obtained the score or a ${
-          good ? 'lower one' : 'higher one, which here is the poorer side'
-        }.`,
+        heading: linesOf(say(words, `column.cumulative.heading.${what}-${side}`)),
+        name: say(words, `column.cumulative.name.${what}-${side}`),
+        explanation: say(words, `column.cumulative.explanation.${what}-${side}`),
       };
     }
-    case 'exact-rank':
+    case 'interval': {
+      const level = levelInWords(project, words);
       return {
-        key,
-        heading: ['Rank,', '2 decimals'],
-        name: 'rank to two decimals',
-        explanation: 'The percentile rank before it is rounded for print.',
+        heading: linesOf(say(words, 'column.interval.heading', { level })),
+        name: say(words, 'column.interval.name', { level }),
+        explanation: say(words, 'column.interval.explanation'),
       };
-    case 'observed-rank':
-      return {
-        key,
-        heading: ['Observed', 'rank'],
-        name: 'observed rank',
-        explanation: 'The percentile rank before smoothing and rounding.',
-      };
-    case 'interval':
-      return {
-        key,
-        heading: [`${project.precision.level} %`, 'interval'],
-        name: `${project.precision.level} % interval`,
-        explanation: 'Error of sampling: how far the rank could move had other people been drawn.',
-      };
+    }
     case 'standard-error':
       return {
-        key,
-        heading: ['Standard', 'error'],
-        name: 'standard error of the rank',
-        explanation: `Error of sampling, in percentile-rank points, ${drawnInGeneral({ ...project, people: 'people' })}.`,
+        heading: linesOf(say(words, 'column.standard-error.heading')),
+        name: say(words, 'column.standard-error.name'),
+        explanation: say(words, 'column.standard-error.explanation', {
+          drawn: drawnInGeneral({ ...project, people: 'people' }, words),
+        }),
       };
-    case 'measurement-band':
-      return {
-        key,
-        heading: ['Measure-', 'ment band'],
-        name: 'measurement band',
-        explanation: 'Error of measurement: where the rank of one person’s true score may lie, by the reliability.',
-      };
-    case 'print-range':
-      return {
-        key,
-        heading: ['Could', 'be printed'],
-        name: 'range of defensible ranks',
-        explanation: 'Lowest and highest rank over the usual definitions, with and without smoothing.',
-      };
-    case 'z':
-      return { key, heading: ['z'], name: 'z score', explanation: 'Distance from the middle in standard deviations.' };
-    case 't':
-      return { key, heading: ['T'], name: 'T score', explanation: '50 + 10 z.' };
     case 'nce':
       return {
-        key,
-        heading: ['NCE'],
-        name: 'normal curve equivalent',
-        explanation: '50 + 21.06 z: equal steps that meet the percentile rank at 1, 50 and 99.',
+        heading: linesOf(say(words, 'column.nce.heading')),
+        name: say(words, 'column.nce.name'),
+        explanation: say(words, 'column.nce.explanation', { factor: figure(words, NCE_FACTOR) }),
       };
-    case 'deviation':
-      return { key, heading: ['Deviation', 'score'], name: 'deviation score', explanation: '100 + 15 z.' };
-    case 'sten':
-      return { key, heading: ['Sten'], name: 'sten', explanation: 'Ten bands, half a standard deviation wide.' };
     case 'stanine':
       return {
-        key,
-        heading: ['Sta-', 'nine'],
-        name: 'stanine',
-        explanation:
-          project.table.zSource === 'normalised'
-            ? 'Nine bands holding 4, 7, 12, 17, 20, 17, 12, 7 and 4 per cent.'
-            : 'Nine bands, half a standard deviation wide.',
+        heading: linesOf(say(words, 'column.stanine.heading')),
+        name: say(words, 'column.stanine.name'),
+        explanation: say(words, `column.stanine.explanation.${project.table.zSource}`),
+      };
+    case 'exact-rank':
+    case 'observed-rank':
+    case 'measurement-band':
+    case 'print-range':
+    case 'z':
+    case 't':
+    case 'deviation':
+    case 'sten':
+      return {
+        heading: linesOf(say(words, `column.${key}.heading`)),
+        name: say(words, `column.${key}.name`),
+        explanation: say(words, `column.${key}.explanation`),
       };
   }
 }
 
+function linesOf(heading: string): readonly string[] {
+  return heading.split('\n');
+}
+
+/** The level of intervals and bands: "95 %". */
+export function levelInWords(
+  { precision }: { readonly precision: { readonly level: number } },
+  words = ENGLISH_WORDS,
+): string {
+  return `${figure(words, String(precision.level))} %`;
+}
+
 /** All columns of the project's tables in print order. */
-export function tableColumns(project: NormProject): readonly TableColumn[] {
-  return [scoreColumn(), rankColumn(), ...project.table.columns.map((key) => columnOf(key, project))];
+export function tableColumns(project: NormProject, words = ENGLISH_WORDS): readonly TableColumn[] {
+  return [scoreColumn(words), rankColumn(words), ...project.table.columns.map((key) => columnOf(key, project, words))];
+}
+
+/** The same in the language of the booklet. */
+export function printedColumns(project: NormProject): readonly TableColumn[] {
+  return tableColumns(project, wordsOf(project));
 }

@@ -17,6 +17,11 @@ export const BLOCK_WORDS = {
   'block.continued': '{heading} (continued)',
   'block.blank': 'This page is left blank.',
 
+  'cuts.rule': 'A rule marks the cut {cut}.',
+  'cuts.rules': 'Rules mark the cuts {cuts}.',
+  'cuts.named': '“{name}” at {score}',
+  'cuts.nameless': 'at {score}',
+
   'cautions.place':
     'A percentile rank is a place in a named group. It is not a per cent of correct answers, and says nothing of how ' +
     'much of the subject is known.',

@@ -1,3 +1,4 @@
+import { say, wordsOf } from '../languages/phrases.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { BLOCK_WORDS } from './block-words.ts';
 import type { Booklet, BookletPage, Paper } from './booklet.ts';
@@ -16,7 +17,7 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
   const { parts, remarks } = bookletParts({ normSet, paper, words: BLOCK_WORDS, programVersion });
   const pages = numbered(parts, paper);
   return {
-    title: draftTitle(normSet, surveyName(normSet.project) || 'Conversion tables'),
+    title: draftTitle(normSet, surveyName(normSet.project) || say(wordsOf(normSet.project), 'booklet.title')),
     paper,
     pages,
     remarks: [...paperRemarks(normSet.project.sheet), ...remarks, ...missingSignsRemark(pages)],

@@ -70,7 +70,12 @@ function tableParts({ normSet, paper }: PartsBasis): BookletParts {
   const { measure, remarks } = measureTables(normSet, bodyWidth(paper));
   const sheets = normSet.groups.map((norms, group) => {
     const frame = groupFrame(normSet, group, norms, paper);
-    return { group, name: tableName(group, norms), frame, ...sheetPages(normSet, group, frame, measure) };
+    return {
+      group,
+      name: tableName(normSet.project, group, norms),
+      frame,
+      ...sheetPages(normSet, group, frame, measure),
+    };
   });
   return {
     parts: sheets.map(({ group, name, frame, pages }) => ({ block: 'tables', group, name, frame, pages })),

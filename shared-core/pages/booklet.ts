@@ -1,7 +1,7 @@
 import type { BlockKind } from '../norms/booklet-blocks.ts';
-import type { ColumnKey } from '../norms/column-keys.ts';
 import type { TextRole } from './text-role.ts';
 import type { FontFace } from './text-width.ts';
+import type { TypeSize } from './type-sizes.ts';
 
 /**
  * Something printed as placed pages. Lengths are in points (1/72 inch), x from the left edge of the paper, y from its
@@ -86,26 +86,41 @@ export interface Picture {
   readonly alt: string;
 }
 
-/** One column of a conversion table: heads, rules, and a row for each score in it. */
+/** One column of rows of a table: heads, rules, and its rows. */
 export interface TableColumnBlock {
   readonly kind: 'table-column';
+  readonly table: ColumnTable;
   readonly x: number;
   readonly width: number;
   /** The rules above the heads, below them, and below the last line that any column of the table could hold. */
   readonly top: number;
   readonly headRule: number;
   readonly bottom: number;
+  /** Size of the figures, and of the heads with their leading. */
   readonly size: number;
-  /** True where the heads of the same table stand before it already. */
-  readonly continued: boolean;
+  readonly headType: TypeSize;
   readonly heads: readonly TableHead[];
   readonly rows: readonly PlacedRow[];
+  /** Rules between rows that mark cuts. */
+  readonly cutRules: readonly number[];
 }
 
+/** Tables that are set in columns of rows. In a conversion table each raw score of its group stands once. */
+export type ColumnTable = 'conversion' | 'groups-across' | 'inverse-across' | 'cuts';
+
 export interface TableHead {
-  readonly key: ColumnKey | 'score' | 'rank';
+  /** Which column of its whole table it heads, 0 for the heads of rows; further parts of a table have other columns. */
+  readonly column: number;
   readonly lines: readonly string[];
-  /** Figures and heads end here. */
+  /** A line in lighter type below them; empty for none. */
+  readonly note: string;
+  /** How the whole head is read aloud, where its lines would not say it. */
+  readonly said: string | null;
+  /** What of the column is printed once more, standing in the table already. */
+  readonly repeated: 'nothing' | 'head' | 'column';
+  /** Words begin at the left edge of their room, figures end at its right. */
+  readonly align: 'left' | 'right';
+  /** Figures and heads end here, from the left edge of the block. */
   readonly right: number;
   /** Room from the column before it. */
   readonly width: number;
@@ -114,11 +129,20 @@ export interface TableHead {
 }
 
 export interface PlacedRow {
-  /** Raw-score points. */
-  readonly score: number;
+  /** Tells the rows of a whole table apart: the raw score, the first of several, or the place in the table. */
+  readonly row: number;
+  /** Raw scores that it stands for, lowest first; none where rows are not headed by raw scores. */
+  readonly scores: readonly number[];
   readonly baseline: number;
-  /** One text for each head. */
-  readonly texts: readonly string[];
-  /** True where the rank was adjusted by hand: a mark hangs behind it. */
-  readonly adjusted: boolean;
+  /** One for each head. */
+  readonly cells: readonly PlacedCell[];
+}
+
+export interface PlacedCell {
+  /** Empty where nothing is printed. */
+  readonly text: string;
+  /** How it is read aloud, where its signs would not say it. */
+  readonly said: string | null;
+  /** True where the mark of a rank adjusted by hand hangs behind it. */
+  readonly marked: boolean;
 }

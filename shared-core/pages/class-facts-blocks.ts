@@ -1,11 +1,11 @@
 import type { ClassFacts } from '../class/class-results.ts';
-import { say, type PhraseKey, type PrintWords } from '../languages/phrases.ts';
+import { figure, say, type PhraseKey, type PrintWords } from '../languages/phrases.ts';
 import { printCount, printNumber, printScore } from '../scores/printed-number.ts';
 import { layHeading } from './block-text.ts';
 import { boxPicture, quartersPicture } from './class-pictures.ts';
 import type { ClassPrint } from './class-print.ts';
 import { readingParagraphs, theGroup } from './class-report-texts.ts';
-import { figureInWords, printedFigure } from './class-words.ts';
+import { figureInWords } from './class-words.ts';
 import { layRowTable, placeRowTable, type RowTable, type RowTableCell, type RowTableColumn } from './row-table.ts';
 import { measureRowTable, type MeasuredRowTable } from './row-table-measure.ts';
 import type { SheetFlow } from './sheet-flow.ts';
@@ -98,7 +98,7 @@ function countsTable({ results }: ClassPrint, words: PrintWords): RowTable {
     'counts',
     say(words, 'class.counted'),
     say(words, 'class.count'),
-    shown.map(([key, count]) => [say(words, key), printedFigure(words, printCount(count))]),
+    shown.map(([key, count]) => [say(words, key), figure(words, printCount(count))]),
   );
 }
 
@@ -109,7 +109,7 @@ export function fiveNumbers(facts: ClassFacts, words: PrintWords): readonly (rea
   return (facts.fiveNumbers ?? []).map(({ printed }, index) => {
     const name = FIVE_NAMES[index];
     if (name === undefined) throw new RangeError('a sixth of five numbers');
-    return [say(words, name), printedFigure(words, printed)];
+    return [say(words, name), figure(words, printed)];
   });
 }
 
@@ -159,7 +159,7 @@ function layScores(flow: SheetFlow, { results }: ClassPrint, words: PrintWords):
   flow.skip(BETWEEN_SECTIONS);
   if (facts.boxPlot === null) {
     const scores = facts.scores.flatMap(({ scoreText, count }) =>
-      Array.from({ length: count }, () => printedFigure(words, scoreText)),
+      Array.from({ length: count }, () => figure(words, scoreText)),
     );
     layAcross(flow, 'scores', say(words, 'class.scores-listed', { scores: scores.join(', ') }));
     return;
@@ -167,7 +167,7 @@ function layScores(flow: SheetFlow, { results }: ClassPrint, words: PrintWords):
   const size = { width: flow.width, height: BOX_HEIGHT };
   const caption = captionLines(flow, 'box', say(words, 'class.box-caption'));
   flow.need(size.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE));
-  const printed = (score: number): string => printedFigure(words, printScore(table.scale, score));
+  const printed = (score: number): string => figure(words, printScore(table.scale, score));
   flow.place(
     [
       {
@@ -175,7 +175,7 @@ function layScores(flow: SheetFlow, { results }: ClassPrint, words: PrintWords):
         x: flow.left,
         y: flow.y,
         ...size,
-        svg: boxPicture(facts.boxPlot, facts.scores, table.scale, size, (text) => printedFigure(words, text)),
+        svg: boxPicture(facts.boxPlot, facts.scores, table.scale, size, (text) => figure(words, text)),
         alt: say(words, 'class.box-alt', {
           lowest: printed(table.scale.min),
           highest: printed(table.scale.max),
@@ -193,8 +193,8 @@ function layScores(flow: SheetFlow, { results }: ClassPrint, words: PrintWords):
 /** How many of the class have ranks in each quarter, beside a quarter of the class. */
 function layQuarters(flow: SheetFlow, { results }: ClassPrint, words: PrintWords): void {
   const { facts, table } = results;
-  const counts = facts.quarters.map(({ count }) => printedFigure(words, printCount(count)));
-  const expected = { n: printedFigure(words, printCount(facts.n)), expected: quarterOf(facts.n, words) };
+  const counts = facts.quarters.map(({ count }) => figure(words, printCount(count)));
+  const expected = { n: figure(words, printCount(facts.n)), expected: quarterOf(facts.n, words) };
   const quarters: RowTable = {
     name: 'quarters',
     fives: false,
@@ -239,7 +239,7 @@ function layQuarters(flow: SheetFlow, { results }: ClassPrint, words: PrintWords
 
 /** A quarter of a count with the decimals that it takes: 7, 7.5, 7.25. */
 function quarterOf(n: number, words: PrintWords): string {
-  return printedFigure(words, printNumber(n / 4, n % 4 === 0 ? 0 : n % 2 === 0 ? 1 : 2));
+  return figure(words, printNumber(n / 4, n % 4 === 0 ? 0 : n % 2 === 0 ? 1 : 2));
 }
 
 /** The groups of the class by raw scores and normal curve equivalents. */
@@ -247,7 +247,7 @@ function layComparison(flow: SheetFlow, { results }: ClassPrint, words: PrintWor
   const { comparison } = results;
   if (comparison === null) return;
   const { groups, hasNce } = comparison;
-  const figure = (text: string | null): string => (text === null ? '\u2013' : printedFigure(words, text));
+  const shown = (text: string | null): string => (text === null ? '\u2013' : figure(words, text));
   const said = (text: string): string | null => {
     const figure = figureInWords(words, text);
     return figure === text ? null : figure;
@@ -265,21 +265,21 @@ function layComparison(flow: SheetFlow, { results }: ClassPrint, words: PrintWor
       ),
       figures(
         'class.compared-n',
-        groups.map(({ n }) => figure(printCount(n))),
+        groups.map(({ n }) => shown(printCount(n))),
       ),
       figures(
         'class.compared-median',
-        groups.map(({ median }) => figure(median)),
+        groups.map(({ median }) => shown(median)),
       ),
       figures(
         'class.compared-mean',
-        groups.map(({ mean }) => figure(mean)),
+        groups.map(({ mean }) => shown(mean)),
       ),
       ...(hasNce
         ? [
             figures(
               'class.compared-nce',
-              groups.map(({ nceMean }) => figure(nceMean)),
+              groups.map(({ nceMean }) => shown(nceMean)),
             ),
           ]
         : []),

@@ -1,11 +1,11 @@
 import type { PupilResult } from '../class/class-results.ts';
 import type { ClassTableColumn } from '../class/class-table.ts';
-import { say, type PrintWords } from '../languages/phrases.ts';
+import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import { bandChart } from './band-chart-picture.ts';
 import { LEAST_CHART_WIDTH, type ChartRow } from './band-chart-scale.ts';
 import { labelOf, pupilsInOrder, rankPlace, type ClassPrint } from './class-print.ts';
-import { figureInWords, printedFigure } from './class-words.ts';
+import { figureInWords } from './class-words.ts';
 import type { RowTable, RowTableCell, RowTableColumn } from './row-table.ts';
 
 /** A column of the pupils' table: its key in files, its heading and the printed text of a pupil. */
@@ -29,7 +29,7 @@ export function pupilColumns(print: ClassPrint, words: PrintWords): readonly Pup
     key,
     heading: head,
     kind: 'figures',
-    textOf: (pupil) => printedFigure(words, textOf(pupil)),
+    textOf: (pupil) => figure(words, textOf(pupil)),
   });
   const named: PupilColumn = {
     key: file.sharing.as === 'codes' ? 'code' : 'name',

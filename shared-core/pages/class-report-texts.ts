@@ -1,11 +1,13 @@
+import { countedPeople, onePerson } from '../norms/norm-groups.ts';
+import { dateInLanguage } from '../languages/number-format.ts';
 import type { PupilResult } from '../class/class-results.ts';
 import type { ClassTable, ClassTableGroup } from '../class/class-table.ts';
-import { say, type PrintWords } from '../languages/phrases.ts';
+import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import { printCount, printNumber } from '../scores/printed-number.ts';
 import { inPrintOrder, labelOf, type ClassPrint } from './class-print.ts';
-import { countedWord, peopleWord, personWord, printedDate, printedFigure } from './class-words.ts';
+import { peopleWord } from './class-words.ts';
 import { hasBands } from './class-pupils-table.ts';
 import type { Paragraph } from './paragraph.ts';
 
@@ -21,7 +23,8 @@ export function tableTitle({ title, form }: ClassTable): string {
 
 /** Under the title: the test and the day. */
 export function classSubtitle({ file, results }: ClassPrint, words: PrintWords): string {
-  const tested = file.date === '' ? [] : [say(words, 'class.tested-on', { date: printedDate(words, file.date) })];
+  const tested =
+    file.date === '' ? [] : [say(words, 'class.tested-on', { date: dateInLanguage(file.date, words.numbers) })];
   return [tableTitle(results.table), ...tested].filter((part) => part !== '').join(', ');
 }
 
@@ -30,7 +33,7 @@ export function classFoot({ results }: ClassPrint, words: PrintWords, check: str
   const { edition, date, check: tableCheck } = results.table;
   return [
     ...(edition.trim() === '' ? [] : [say(words, 'foot.edition', { edition: edition.trim() })]),
-    ...(date === '' ? [] : [printedDate(words, date)]),
+    ...(date === '' ? [] : [dateInLanguage(date, words.numbers)]),
     ...(tableCheck === '' ? [] : [say(words, 'class.table-check', { check: tableCheck })]),
     say(words, 'class.report-check', { check }),
   ].join(' · ');
@@ -51,7 +54,7 @@ export function tableParagraphs(print: ClassPrint, words: PrintWords): readonly 
       ? title
       : say(words, 'class.group-and-count', {
           group: title,
-          count: countedWord(words, printedFigure(words, printCount(n)), table.peopleNoun),
+          count: countedPeople(printCount(n), table.peopleNoun, words),
         }),
   );
   const populations = new Set(groups.map(({ population }) => population.trim()).filter((text) => text !== ''));
@@ -81,7 +84,7 @@ function releaseSentences(table: ClassTable, words: PrintWords): readonly string
   }
   const facts = [
     ...(edition.trim() === '' ? [] : [say(words, 'foot.edition', { edition: edition.trim() })]),
-    ...(date === '' ? [] : [printedDate(words, date)]),
+    ...(date === '' ? [] : [dateInLanguage(date, words.numbers)]),
     ...(check === '' ? [] : [say(words, 'foot.check', { check })]),
   ];
   return facts.length === 0 ? [] : [closed(facts.join(', '))];
@@ -107,7 +110,7 @@ function bandParagraph(print: ClassPrint, words: PrintWords): Paragraph {
 
 /** A number with the decimals that it was given with. */
 export function asGiven(words: PrintWords, value: number): string {
-  return printedFigure(words, printNumber(value, decimalOf(value).decimals));
+  return figure(words, printNumber(value, decimalOf(value).decimals));
 }
 
 /** Below the pupils' table: what the chart shows, and which ranks were set by hand. */
@@ -145,7 +148,7 @@ export function missedParagraphs(print: ClassPrint, words: PrintWords): readonly
   return lists
     .filter(([, names]) => names.length > 0)
     .map(([key, names]) => ({
-      lead: say(words, key, { count: printedFigure(words, printCount(names.length)) }),
+      lead: say(words, key, { count: figure(words, printCount(names.length)) }),
       text: closed(names.join('; ')),
     }));
 }
@@ -154,7 +157,7 @@ export function missedParagraphs(print: ClassPrint, words: PrintWords): readonly
 export function readingParagraphs(print: ClassPrint, words: PrintWords): readonly Paragraph[] {
   const { results, file } = print;
   const people = peopleWord(words, file.people);
-  const person = personWord(words, file.people);
+  const person = onePerson(file.people, words);
   const group = { 'the-group': theGroup(results.table, words) };
   const reading = hasBands(print)
     ? say(words, 'class.read', { ...group, people })

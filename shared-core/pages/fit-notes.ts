@@ -1,8 +1,9 @@
+import { listed } from '../languages/lists.ts';
+import { figure, say, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import type { FitEvidence } from '../norms/fit-evidence.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { SmoothedCurve } from '../norms/group-smoothing.ts';
 import type { NormProject } from '../norms/norm-project.ts';
-import { joined } from '../norms/statements.ts';
 import { printNumber } from '../scores/printed-number.ts';
 import type { DegreeLine } from '../smoothing/smoothing.ts';
 import type { NoteTable } from './note-table.ts';
@@ -21,31 +22,39 @@ const NO_VALUE = '\u2013';
 /** Figures of misfit from here on are as good as without bound. */
 const BEYOND = 99_999;
 const LEAST_P = 0.001;
+const MOMENT_DECIMALS = 3;
 /** Longer lists of scores are cut. */
 const MOST_NAMED = 10;
 
 /** The technical notes of a group, or null where it is not smoothed. */
-export function fitNotesOf({ people }: NormProject, { smoothing, evidence }: GroupNorms): FitNotes | null {
+export function fitNotesOf(project: NormProject, { smoothing, evidence }: GroupNorms): FitNotes | null {
   if (smoothing.state !== 'smoothed' || evidence === null) return null;
   const { curve } = smoothing;
+  const words = wordsOf(project);
   const compared = curve.degrees.length > 0;
   return {
-    degrees: compared ? degreeTable(curve) : null,
-    moments: momentTable(curve),
+    degrees: compared ? degreeTable(curve, words) : null,
+    moments: momentTable(curve, words),
     paragraphs: [
-      ...(compared ? [{ lead: 'Degrees.', text: aboutDegrees(curve, evidence) }] : []),
-      { lead: 'Fit.', text: [...fitSentences(curve), ...moveSentences(evidence)].join(' ') },
-      ...warnings(evidence, people).map((text) => ({ lead: 'Beware.', text })),
+      ...(compared ? [{ lead: say(words, 'fit.degrees-lead'), text: aboutDegrees(curve, evidence, words) }] : []),
+      {
+        lead: say(words, 'fit.fit-lead'),
+        text: [...fitSentences(curve, words), ...moveSentences(evidence, words)].join(' '),
+      },
+      ...warnings(evidence, project.people, words).map((text) => ({ lead: say(words, 'fit.beware-lead'), text })),
     ],
   };
 }
 
-function degreeTable({ degrees, degree }: SmoothedCurve): NoteTable {
+function degreeTable({ degrees, degree }: SmoothedCurve, words: PrintWords): NoteTable {
   return {
     name: 'degrees',
-    heads: ['Degree', 'G²', 'X²', 'df', 'AIC', 'BIC', 'p'],
+    heads: [say(words, 'fit.degree'), 'G²', 'X²', say(words, 'fit.df'), 'AIC', 'BIC', 'p'],
     firstColumn: 'figures',
-    rows: degrees.map((line) => ({ cells: degreeCells(line), marked: line.degree === degree })),
+    rows: degrees.map((line) => ({
+      cells: degreeCells(line).map((cell) => figure(words, cell)),
+      marked: line.degree === degree,
+    })),
   };
 }
 
@@ -63,99 +72,119 @@ function printP(p: number | null): string {
   return p < LEAST_P ? `<${LEAST_P}` : printNumber(p, 3);
 }
 
-function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence): string {
+function aboutDegrees({ degrees }: SmoothedCurve, { nearlyAsGood }: FitEvidence, words: PrintWords): string {
   return [
-    'G² and X² tell how far the fitted frequencies lie from the observed ones. AIC and BIC add a charge for each ' +
-      'parameter; less is better. p tests a degree against the one below it. The degree taken is in bold, above a rule.',
-    ...(degrees.every(({ converged }) => converged) ? [] : ['Where dashes stand, no fit was found.']),
+    say(words, 'fit.about-degrees'),
+    ...(degrees.every(({ converged }) => converged) ? [] : [say(words, 'fit.none-found')]),
     ...(nearlyAsGood.length === 0
       ? []
-      : [`As good by BIC, lower or at most 2 higher: degree ${joined(nearlyAsGood.map(String))}.`]),
+      : [say(words, 'fit.nearly-as-good', { degrees: listed(words, nearlyAsGood.map(String)) })]),
   ].join(' ');
 }
 
-function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve): NoteTable {
-  const row = (name: string, key: keyof typeof momentsObserved, decimals: number): NoteTable['rows'][number] => ({
-    cells: [name, printNumber(momentsObserved[key], decimals), printNumber(momentsFitted[key], decimals)],
+function momentTable({ momentsObserved, momentsFitted }: SmoothedCurve, words: PrintWords): NoteTable {
+  const row = (name: string, key: keyof typeof momentsObserved): NoteTable['rows'][number] => ({
+    cells: [
+      name,
+      ...[momentsObserved, momentsFitted].map((moments) => figure(words, printNumber(moments[key], MOMENT_DECIMALS))),
+    ],
     marked: false,
   });
   return {
     name: 'moments',
-    heads: ['Moment', 'Observed', 'Smoothed'],
+    heads: [say(words, 'fit.moment'), say(words, 'fit.observed'), say(words, 'fit.smoothed')],
     firstColumn: 'words',
     rows: [
-      row('Mean', 'mean', 3),
-      row('SD, dividing by n', 'sd', 3),
-      row('Skewness', 'skewness', 3),
-      row('Excess kurtosis', 'excessKurtosis', 3),
+      row(say(words, 'fit.mean'), 'mean'),
+      row(say(words, 'fit.sd'), 'sd'),
+      row(say(words, 'fit.skewness'), 'skewness'),
+      row(say(words, 'fit.excess-kurtosis'), 'excessKurtosis'),
     ],
   };
 }
 
 /** All the figures of a group's notes in sentences, the other degrees left out; empty where it is not smoothed. */
-export function fitFacts({ people }: NormProject, { smoothing, evidence }: GroupNorms): string {
+export function fitFacts(project: NormProject, { smoothing, evidence }: GroupNorms): string {
   if (smoothing.state !== 'smoothed' || evidence === null) return '';
   const { curve } = smoothing;
+  const words = wordsOf(project);
+  const { g2, x2, df, aic, bic } = curve;
   const figures = [
-    ['G²', curve.g2],
-    ['X²', curve.x2],
-    ['df', curve.df],
-    ['AIC', curve.aic],
-    ['BIC', curve.bic],
+    ['G²', g2, misfit],
+    ['X²', x2, misfit],
+    [say(words, 'fit.df'), df, String],
+    ['AIC', aic, misfit],
+    ['BIC', bic, misfit],
   ] as const;
-  const known = figures.flatMap(([name, value]) =>
-    value === null ? [] : [`${name} ${name === 'df' ? value : misfit(value)}`],
+  const known = figures.flatMap(([name, value, print]) =>
+    value === null ? [] : [`${name} ${figure(words, print(value))}`],
   );
-  const moments = momentTable(curve).rows.map(({ cells: [name = '', observed = '', smoothed = ''] }) => {
-    return `${name} ${observed} observed, ${smoothed} smoothed`;
-  });
+  const moments = momentTable(curve, words).rows.map(({ cells: [moment = '', observed = '', smoothed = ''] }) =>
+    say(words, 'fit.moment-pair', { moment, observed, smoothed }),
+  );
   return [
     ...(known.length === 0 ? [] : [`${known.join(', ')}.`]),
-    ...bandwidthSentence(curve),
+    ...bandwidthSentence(curve, words),
     `${moments.join('; ')}.`,
-    ...moveSentences(evidence),
-    ...warnings(evidence, people),
+    ...moveSentences(evidence, words),
+    ...warnings(evidence, project.people, words),
   ].join(' ');
 }
 
 /** Fit and bandwidth, where no table of degrees tells it. */
-function fitSentences(curve: SmoothedCurve): readonly string[] {
+function fitSentences(curve: SmoothedCurve, words: PrintWords): readonly string[] {
   const { degrees, g2, x2, df } = curve;
   const told = degrees.length > 0 || g2 === null || x2 === null || df === null;
   return [
-    ...(told ? [] : [`G² is ${misfit(g2)} and X² ${misfit(x2)}, on ${df} degrees of freedom.`]),
-    ...bandwidthSentence(curve),
+    ...(told
+      ? []
+      : [
+          say(words, 'fit.misfit', {
+            g2: figure(words, misfit(g2)),
+            x2: figure(words, misfit(x2)),
+            df: String(df),
+          }),
+        ]),
+    ...bandwidthSentence(curve, words),
   ];
 }
 
-function bandwidthSentence({ choice, bandwidth }: SmoothedCurve): readonly string[] {
+function bandwidthSentence({ choice, bandwidth }: SmoothedCurve, words: PrintWords): readonly string[] {
   if (bandwidth === null) return [];
-  const found = choice.kind === 'kernel' && choice.bandwidth === 'auto';
-  const points = found
-    ? `${printNumber(bandwidth, 4)} raw-score points, found from the data`
-    : `${bandwidth} raw-score points`;
-  return [`The bandwidth of the kernel is ${points}.`];
+  return choice.kind === 'kernel' && choice.bandwidth === 'auto'
+    ? [say(words, 'fit.bandwidth-found', { bandwidth: figure(words, printNumber(bandwidth, 4)) })]
+    : [say(words, 'fit.bandwidth', { bandwidth: figure(words, String(bandwidth)) })];
 }
 
 /** What smoothing did to the printed table. */
-function moveSentences({ largestMove, changed, of }: FitEvidence): readonly string[] {
+function moveSentences({ largestMove, changed, of }: FitEvidence, words: PrintWords): readonly string[] {
   return [
-    `The largest move of a rank is ${printNumber(largestMove.points, 2)} percentile-rank points, at raw score ${largestMove.scoreText}.`,
-    `Smoothing changes ${changed} of ${of} printed ranks.`,
+    say(words, 'fit.largest-move', {
+      points: figure(words, printNumber(largestMove.points, 2)),
+      score: figure(words, largestMove.scoreText),
+    }),
+    say(words, 'fit.changed', { changed: String(changed), of: String(of) }),
   ];
 }
 
-function warnings({ filledGaps, inventedDips }: FitEvidence, people: NormProject['people']): readonly string[] {
+function warnings(
+  { filledGaps, inventedDips }: FitEvidence,
+  noun: NormProject['people'],
+  words: PrintWords,
+): readonly string[] {
+  const people = say(words, `people.${noun}`);
   return [
-    ...(filledGaps.length === 0
-      ? []
-      : [`The curve expects five ${people} or more at ${named(filledGaps)}, where there are none.`]),
-    ...(inventedDips.length === 0 ? [] : [`The curve dips at ${named(inventedDips)}; the data do not.`]),
+    ...(filledGaps.length === 0 ? [] : [say(words, 'fit.filled-gaps', { people, scores: named(filledGaps, words) })]),
+    ...(inventedDips.length === 0 ? [] : [say(words, 'fit.invented-dips', { scores: named(inventedDips, words) })]),
   ];
 }
 
 /** "7, 9 and 12", or the first few and how many more there are. */
-function named(scores: readonly string[]): string {
+function named(scoreTexts: readonly string[], words: PrintWords): string {
+  const scores = scoreTexts.map((score) => figure(words, score));
   const left = scores.length - MOST_NAMED;
-  return joined(left > 1 ? [...scores.slice(0, MOST_NAMED), `${left} more`] : scores);
+  return listed(
+    words,
+    left > 1 ? [...scores.slice(0, MOST_NAMED), say(words, 'list.more', { count: String(left) })] : scores,
+  );
 }

@@ -1,4 +1,6 @@
+import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
+import type { Direction } from '../scale/score-scale.ts';
 import type { Block } from './booklet.ts';
 import { spokenFigure } from './spoken-text.ts';
 import { linesOf, placeLines } from './text-lines.ts';
@@ -17,13 +19,16 @@ const ABOVE_LINES = 4;
 const BETWEEN_STRIPS = 8;
 const STRIP_HEIGHT = ABOVE_LINES + 2 * ROW.leading + ABOVE_LINES;
 
-export function inverseStrip({ inverse, group }: GroupNorms, width: number): InverseStrip {
-  const best = group.table.scale.direction === 'high-is-good' ? 'Lowest' : 'Highest';
-  const labels = ['Percentile rank', `${best} raw score`] as const;
+export function inverseStrip({ inverse: listed, group }: GroupNorms, width: number, words: PrintWords): InverseStrip {
+  const labels = inverseLabels(group.table.scale.direction, words);
+  const inverse = listed.map(({ percentile, scoreText }) => ({
+    percentile: figure(words, String(percentile)),
+    scoreText: figure(words, scoreText),
+  }));
   const labelWidth = Math.max(...labels.map((label) => textWidth(label, 'sans-bold', TABLE_HEAD.size))) + LEAST_GAP;
   const cell = Math.max(
     ...inverse.map(({ percentile, scoreText }) =>
-      Math.max(textWidth(String(percentile), 'sans', ROW.size), textWidth(scoreText, 'sans-bold', ROW.size)),
+      Math.max(textWidth(percentile, 'sans', ROW.size), textWidth(scoreText, 'sans-bold', ROW.size)),
     ),
   );
   const perStrip = Math.max(1, Math.floor((width - labelWidth) / (cell + LEAST_GAP)));
@@ -44,7 +49,7 @@ export function inverseStrip({ inverse, group }: GroupNorms, width: number): Inv
           rule(stripTop + STRIP_HEIGHT, STRONG_RULE),
           ...labels.flatMap((label, line) =>
             placeLines(
-              linesOf(label, 'sans-bold', TABLE_HEAD, labelWidth, strip === 0 ? cellRole(line, 0, label) : REPEATED),
+              linesOf(label, 'sans-bold', TABLE_HEAD, labelWidth, strip === 0 ? cellRole(line, 0, null) : REPEATED),
               { ...TABLE_HEAD, leading: ROW.leading },
               {
                 x,
@@ -54,14 +59,14 @@ export function inverseStrip({ inverse, group }: GroupNorms, width: number): Inv
             ),
           ),
           ...rows.flatMap(({ percentile, scoreText }, index) =>
-            ([String(percentile), scoreText] as const).flatMap((text, line) =>
+            ([percentile, scoreText] as const).flatMap((text, line) =>
               placeLines(
                 linesOf(
                   text,
                   line === 0 ? 'sans' : 'sans-bold',
                   ROW,
                   cellWidth,
-                  cellRole(line, 1 + strip * inStrip + index, text),
+                  cellRole(line, 1 + strip * inStrip + index, spokenFigure(words, text)),
                 ),
                 ROW,
                 {
@@ -78,14 +83,22 @@ export function inverseStrip({ inverse, group }: GroupNorms, width: number): Inv
   };
 }
 
+/** What stands before percentiles and scores. */
+export function inverseLabels(direction: Direction, words: PrintWords): readonly [string, string] {
+  return [
+    say(words, 'inverse.percentile-rank'),
+    say(words, direction === 'high-is-good' ? 'inverse.lowest' : 'inverse.highest'),
+  ];
+}
+
 /** The strips are one table of two rows: percentiles as heads of columns, and scores. Labels head their rows. */
-function cellRole(line: number, column: number, text: string): CellRole {
+function cellRole(line: number, column: number, said: string | null): CellRole {
   return {
     kind: 'cell',
     table: 'inverse',
     row: line === 0 ? 'head' : line,
     column,
     headOf: column === 0 ? 'row' : line === 0 ? 'column' : null,
-    said: column === 0 ? null : spokenFigure(text),
+    said,
   };
 }

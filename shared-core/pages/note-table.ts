@@ -1,3 +1,4 @@
+import type { PrintWords } from '../languages/phrases.ts';
 import type { Block } from './booklet.ts';
 import { spokenFigure } from './spoken-text.ts';
 import type { CellRole } from './text-role.ts';
@@ -55,6 +56,7 @@ export function noteTableHeight({ rows }: NoteTable): number {
 export function placeNoteTable(
   table: NoteTable,
   { x, top, width }: { readonly x: number; readonly top: number; readonly width: number },
+  words: PrintWords,
 ): readonly Block[] {
   const widths = columnWidths(table);
   const figures = widths.reduce((sum, wide) => sum + wide, 0);
@@ -79,7 +81,7 @@ export function placeNoteTable(
           row,
           column: index,
           headOf: row === 'head' ? 'column' : index === 0 ? 'row' : null,
-          said: row === 'head' ? null : spokenFigure(text),
+          said: row === 'head' ? null : spokenFigure(words, text),
         },
       };
       left += wide + gap;

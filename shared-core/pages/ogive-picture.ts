@@ -1,4 +1,6 @@
+import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
+import { levelInWords } from '../norms/table-columns.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import { printNumber } from '../scores/printed-number.ts';
@@ -50,6 +52,7 @@ export function ogivePicture(
   norms: GroupNorms,
   level: number,
   size: PictureSize,
+  language: PrintWords,
   colours: OgiveColours = PRINTED_COLOURS,
 ): string {
   const { scale } = norms.group.table;
@@ -67,15 +70,22 @@ export function ogivePicture(
   const band = bandEdges(norms, { x, y });
   const labels: readonly OgiveLabel[] = [
     {
-      text: smoothed ? 'smoothed' : 'percentile rank',
+      text: say(language, smoothed ? 'picture.smoothed' : 'picture.percentile-rank'),
       colour: colours.curve,
       sample: dotted ? 'dotted-curve' : 'curve',
       fill: colours.curve,
     },
-    { text: 'observed', colour: colours.ink, sample: 'steps', fill: colours.ink },
+    { text: say(language, 'picture.observed'), colour: colours.ink, sample: 'steps', fill: colours.ink },
     ...(band === null
       ? []
-      : [{ text: `${level} % interval`, colour: colours.soft, sample: 'band', fill: colours.band } as const]),
+      : [
+          {
+            text: say(language, 'column.interval.name', { level: levelInWords({ precision: { level } }, language) }),
+            colour: colours.soft,
+            sample: 'band',
+            fill: colours.band,
+          } as const,
+        ]),
   ];
   const stepLevels = norms.rows.map((row) => ({ x: x(row.score), ends: stepAt(row, { x, y }) }));
   const extreme = (pick: (...values: number[]) => number): readonly Point[] =>
@@ -99,10 +109,15 @@ export function ogivePicture(
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
     ...scoreTicks(scale, size.width - EDGE.left - EDGE.right).flatMap((tick) => [
       vertical(x(tick), y(0), y(0) + 2.5, colours.soft),
-      words(printNumber(tick, decimalOf(tick).decimals), { x: x(tick), y: y(0) + 9.5 }, 'middle', colours.soft),
+      words(
+        figure(language, printNumber(tick, decimalOf(tick).decimals)),
+        { x: x(tick), y: y(0) + 9.5 },
+        'middle',
+        colours.soft,
+      ),
     ]),
-    words('Raw score', { x: size.width - EDGE.right, y: y(0) + 18.5 }, 'end', colours.soft),
-    words('Per cent', { x: EDGE.left - 15, y: y(0) + 18.5 }, 'start', colours.soft),
+    words(say(language, 'picture.raw-score'), { x: size.width - EDGE.right, y: y(0) + 18.5 }, 'end', colours.soft),
+    words(say(language, 'picture.per-cent'), { x: EDGE.left - 15, y: y(0) + 18.5 }, 'start', colours.soft),
     path(steps(norms, { x, y }), colours.ink, 0.6),
     path(ranks, colours.curve, 1),
     ...(dotted ? ranks.map((point) => dot(point, colours.curve)) : []),

@@ -1,3 +1,4 @@
+import { say, wordsOf } from '../languages/phrases.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { Block, Paper, TextRun } from './booklet.ts';
@@ -50,7 +51,7 @@ export interface RunningTexts {
 
 /** The pages of one group. */
 export function groupFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
-  return bookletFrame(normSet, tableName(index, norms), editionLine(normSet, norms), paper);
+  return bookletFrame(normSet, tableName(normSet.project, index, norms), editionLine(normSet, norms), paper);
 }
 
 /** Pages that belong to no single group; `place` stands at the right of their head. */
@@ -60,7 +61,10 @@ export function blockFrame(normSet: NormSet, place: string, paper: Paper): PageF
 
 function bookletFrame(normSet: NormSet, place: string, line: string, paper: Paper): PageFrame {
   const survey = markedRuns(draftMark(normSet), surveyName(normSet.project));
-  return pageFrame({ survey, place, line, numbered: (page, pages) => `page ${page} of ${pages}` }, paper);
+  const words = wordsOf(normSet.project);
+  const numbered = (page: number, pages: number): string =>
+    say(words, 'foot.page', { page: String(page), pages: String(pages) });
+  return pageFrame({ survey, place, line, numbered }, paper);
 }
 
 /** Head and foot, and the room that they leave. */

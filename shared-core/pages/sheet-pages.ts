@@ -1,8 +1,11 @@
+import { say, wordsOf } from '../languages/phrases.ts';
 import { adjustmentNote } from '../norms/adjustment-words.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormSet } from '../norms/norm-set.ts';
-import { tableColumns } from '../norms/table-columns.ts';
+import { BLOCK_WORDS } from './block-words.ts';
 import type { Block, TextRun } from './booklet.ts';
+import { conversionLines } from './conversion-rows.ts';
+import { cutNote } from './cut-note.ts';
 import { fitNotesOf } from './fit-notes.ts';
 import { layFitNotes } from './fit-notes-blocks.ts';
 import { cautionsOf, errorCaution } from './group-method.ts';
@@ -12,9 +15,10 @@ import type { PageFrame } from './page-frame.ts';
 import { firstLines } from './prose.ts';
 import { SheetFlow } from './sheet-flow.ts';
 import { figureCaption, figureInWords, notesOf, sheetSubtitle, sheetTitle } from './sheet-texts.ts';
-import { placeTable, rowMeasure, tableOverhead } from './table-blocks.ts';
 import type { TableMeasure } from './table-measure.ts';
-import { columnHeight, fillColumns, inFives, type Five } from './table-rows.ts';
+import { layTableNote } from './table-notes.ts';
+import { layTable } from './table-pages.ts';
+import { rowBlocks } from './table-rows.ts';
 import {
   countThatFits,
   heightOf,
@@ -31,18 +35,13 @@ const MOST_TITLE_LINES = 6;
 const MOST_SUBTITLE_LINES = 3;
 /** Longer cautions are printed once and pointed to from the pages that follow. */
 const MOST_CAUTION_LINES = 6;
-const CAUTIONS_ELSEWHERE = 'Read with the cautions on the first page of this table.';
 const AROUND_INTRODUCTION = 10;
 const BETWEEN_HEAD_LINES = 2;
 const BELOW_TABLE = 22;
-/** A table begins on a page only where this many of its rows find room. */
-const LEAST_ROWS = 5;
 /** Height of the picture against its width. */
 const PICTURE_SHAPE = 0.47;
 const BELOW_PICTURE = 5;
 const LEAST_NOTE_LINES = 6;
-/** A note of more lines is set in two columns, which the eye follows more easily. */
-const MOST_LINES_ACROSS = 3;
 
 export interface SheetPages {
   readonly pages: readonly (readonly Block[])[];
@@ -71,8 +70,9 @@ export function sheetPages(normSet: NormSet, index: number, frame: PageFrame, me
   );
   placeFull(flow, subtitle.lines, SUBTITLE);
   introduce(flow, normSet);
-  layTable(flow, normSet, norms, measure);
-  layAdjustments(flow, norms);
+  layConversion(flow, normSet, norms, measure);
+  layTableNote(flow, 'adjustments', adjustmentNote(norms, wordsOf(normSet.project)));
+  layTableNote(flow, 'cuts', cutNote(normSet.project, norms, BLOCK_WORDS));
   layInverse(flow, normSet, norms);
   layNotes(flow, normSet, index, norms);
   layTechnicalNotes(flow, normSet, norms);
@@ -108,17 +108,16 @@ function furtherHead(
   top: number,
 ): { readonly blocks: readonly Block[]; readonly bottom: number } {
   const { project } = normSet;
+  const words = wordsOf(project);
+  const continued = say(words, 'sheet.continued', { title: sheetTitle(project, norms) });
   const cautions = linesOf(cautionsOf(project), 'sans', SMALL_PROSE, width, REPEATED);
   const parts: readonly (readonly [readonly LooseLine[], TypeSize])[] = [
-    [
-      cutText(`${sheetTitle(project, norms)} (continued)`, 'serif-bold', CONTINUED, width, 2, REPEATED).lines,
-      CONTINUED,
-    ],
+    [cutText(continued, 'serif-bold', CONTINUED, width, 2, REPEATED).lines, CONTINUED],
     [cutText(sheetSubtitle(project), 'serif-italic', PROSE, width, 2, REPEATED).lines, PROSE],
     [
       cautions.length <= MOST_CAUTION_LINES
         ? cautions
-        : linesOf(CAUTIONS_ELSEWHERE, 'sans', SMALL_PROSE, width, REPEATED),
+        : linesOf(say(words, 'sheet.cautions-elsewhere'), 'sans', SMALL_PROSE, width, REPEATED),
       SMALL_PROSE,
     ],
   ];
@@ -141,47 +140,15 @@ function introduce(flow: SheetFlow, { project }: NormSet): void {
   flow.sideBySide(left, right, PROSE);
 }
 
-function layTable(flow: SheetFlow, normSet: NormSet, norms: GroupNorms, measure: TableMeasure): void {
-  const heads = tableColumns(normSet.project);
-  const rows = rowMeasure(measure);
-  const overhead = tableOverhead(measure);
-  const all = inFives(norms.rows, norms.group.table.scale);
-  let rest: readonly Five[] = all;
+function layConversion(flow: SheetFlow, { project }: NormSet, norms: GroupNorms, measure: TableMeasure): void {
   flow.skip(AROUND_INTRODUCTION + 2);
-  while (rest.length > 0) {
-    const first = rest[0] ?? [];
-    flow.need(overhead + Math.max(columnHeight([first], rows), Math.min(LEAST_ROWS, norms.rows.length) * rows.pitch));
-    const page = fillColumns(rest, measure.columns, flow.room - overhead, rows);
-    const { blocks, height } = placeTable(page.columns, heads, measure, {
-      x: flow.left,
-      top: flow.y,
-      continued: rest !== all,
-    });
-    flow.place(blocks, height);
-    rest = page.rest;
-    if (rest.length > 0) flow.turn();
-  }
-}
-
-/** Which ranks of the table were changed by hand, and why. */
-function layAdjustments(flow: SheetFlow, norms: GroupNorms): void {
-  const note = adjustmentNote(norms);
-  if (note === null) return;
-  flow.skip(BELOW_PICTURE);
-  const linesIn = (width: number): readonly LooseLine[] =>
-    linesOf(note, 'sans', SMALL_PROSE, width, paragraph('adjustments'));
-  const across = linesIn(flow.width);
-  if (across.length > MOST_LINES_ACROSS) {
-    flow.inTwoColumns(linesIn(flow.halfWidth), SMALL_PROSE);
-    return;
-  }
-  flow.need(heightOf(across, SMALL_PROSE));
-  placeFull(flow, across, SMALL_PROSE);
+  const rows = conversionLines(project, norms);
+  layTable(flow, 'conversion', rowBlocks(rows, project.sheet, norms.group.table.scale), measure);
 }
 
 function layInverse(flow: SheetFlow, { project }: NormSet, norms: GroupNorms): void {
   if (!project.sheet.inverse) return;
-  const strip = inverseStrip(norms, flow.width);
+  const strip = inverseStrip(norms, flow.width, wordsOf(project));
   flow.skip(BELOW_TABLE - 6);
   flow.need(strip.height);
   flow.place(strip.place(flow.left, flow.y), strip.height);
@@ -198,7 +165,11 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
     return;
   }
   const picture = { width: flow.halfWidth, height: flow.halfWidth * PICTURE_SHAPE };
-  const figureLead = { lead: `Figure ${index + 1}.`, text: figureCaption(project, norms) };
+  const words = wordsOf(project);
+  const figureLead = {
+    lead: say(words, 'caption.lead', { number: String(index + 1) }),
+    text: figureCaption(project, norms),
+  };
   const caption = paragraphLines([figureLead], SMALL_PROSE, flow.halfWidth, 'caption');
   const figure = picture.height + BELOW_PICTURE + heightOf(caption, SMALL_PROSE);
   const whole = heightOf(lines, PROSE);
@@ -212,7 +183,7 @@ function layNotes(flow: SheetFlow, normSet: NormSet, index: number, norms: Group
         x: flow.left,
         y: top,
         ...picture,
-        svg: ogivePicture(norms, project.precision.level, picture),
+        svg: ogivePicture(norms, project.precision.level, picture, words),
         alt: figureInWords(project, norms),
       },
       ...placeLines(caption, SMALL_PROSE, {
@@ -231,5 +202,5 @@ function layTechnicalNotes(flow: SheetFlow, { project }: NormSet, norms: GroupNo
   const notes = fitNotesOf(project, norms);
   if (notes === null) return;
   flow.skip(BELOW_TABLE);
-  layFitNotes(flow, notes);
+  layFitNotes(flow, notes, wordsOf(project));
 }

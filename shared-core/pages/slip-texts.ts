@@ -1,10 +1,12 @@
+import { countedPeople } from '../norms/norm-groups.ts';
+import { dateInLanguage } from '../languages/number-format.ts';
 import type { PupilResult } from '../class/class-results.ts';
-import { say, type PrintWords } from '../languages/phrases.ts';
+import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import { printCount } from '../scores/printed-number.ts';
 import { chartRow } from './class-pupils-table.ts';
 import { labelOf, rankParts, type ClassPrint } from './class-print.ts';
 import { asGiven, classFoot, tableTitle } from './class-report-texts.ts';
-import { countedWord, figureInWords, peopleWord, printedDate, printedFigure } from './class-words.ts';
+import { figureInWords, peopleWord } from './class-words.ts';
 import { chartPlace, offScale, type ChartRow } from './band-chart-scale.ts';
 
 /** What stands on the slip of one pupil. */
@@ -48,7 +50,7 @@ export function slipTexts(print: ClassPrint, words: PrintWords, pupil: PupilResu
   const band = found.band === null ? null : figureInWords(words, found.band.text);
   return {
     name,
-    test: file.date === '' ? test : say(words, 'slip.test', { test, date: printedDate(words, file.date) }),
+    test: file.date === '' ? test : say(words, 'slip.test', { test, date: dateInLanguage(file.date, words.numbers) }),
     draft: table.draft ? say(words, 'head.draft') : '',
     facts: slipFacts(pupil, words),
     chart: chartRow(pupil),
@@ -89,7 +91,7 @@ function captionOf({ rank, band }: ChartRow, words: PrintWords): string {
 
 function slipFacts({ found, scoreText }: PupilResult, words: PrintWords): readonly SlipFact[] {
   const fact = (label: string, printed: string): SlipFact => {
-    const text = printedFigure(words, printed);
+    const text = figure(words, printed);
     const said = figureInWords(words, printed);
     return { label, text, said: said === text ? null : said };
   };
@@ -111,9 +113,9 @@ function scoreSentences(
   const ends = [rows[0], rows.at(-1)].map((row) => row?.scoreText ?? '');
   const [lowest = '', highest = ''] = ends.map((text, index) => {
     const sides = text.split('\u2013');
-    return printedFigure(words, (index === 0 ? sides[0] : sides.at(-1)) ?? '');
+    return figure(words, (index === 0 ? sides[0] : sides.at(-1)) ?? '');
   });
-  const score = printedFigure(words, pupil.scoreText);
+  const score = figure(words, pupil.scoreText);
   return [
     say(words, 'slip.score', { name, score, lowest, highest }),
     ...(table.scale.direction === 'low-is-good' ? [say(words, 'slip.low-is-good')] : []),
@@ -124,11 +126,11 @@ function rankSentences({ results }: ClassPrint, words: PrintWords, pupil: PupilR
   const { table } = results;
   const { title, n, population } = pupil.table;
   const people = peopleWord(words, table.peopleNoun);
-  const count = n === null ? null : countedWord(words, printedFigure(words, printCount(n)), table.peopleNoun);
+  const count = n === null ? null : countedPeople(printCount(n), table.peopleNoun, words);
   const group = count === null ? title : say(words, 'class.group-and-count', { group: title, count });
   const said = population.trim();
   const { end, figures, adjusted } = rankParts(pupil.found.printed);
-  const share = say(words, `slip.share-${end ?? 'about'}`, { rank: printedFigure(words, figures) });
+  const share = say(words, `slip.share-${end ?? 'about'}`, { rank: figure(words, figures) });
   const worse = say(words, table.scale.direction === 'high-is-good' ? 'class.lower' : 'class.higher');
   return [
     say(words, 'slip.group', { people, group }),

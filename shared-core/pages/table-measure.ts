@@ -1,120 +1,121 @@
+import { figure, wordsOf } from '../languages/phrases.ts';
+import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import type { SheetChoices } from '../norms/norm-project.ts';
+import { printedRows } from '../norms/printed-rows.ts';
 import { tableColumns } from '../norms/table-columns.ts';
 import type { TableHead } from './booklet.ts';
-import { isRangeColumn, RANGE_DASH, rangeSides } from './range-cell.ts';
+import {
+  figureFace,
+  headRoom,
+  leastWidth,
+  roomOf,
+  scaledColumns,
+  sharedWidth,
+  type NaturalColumn,
+} from './column-widths.ts';
+import { isRangeColumn } from './range-cell.ts';
 import { cellText } from './sheet-texts.ts';
+import { spokenHead } from './spoken-text.ts';
+import { chosenType, rowHeightRemark, scaledType, type TableType } from './table-type.ts';
 import { textWidth } from './text-width.ts';
-import { GUTTER, ROW, TABLE_HEAD } from './type-sizes.ts';
+import { GUTTER } from './type-sizes.ts';
 
-/** How the tables of a booklet are set: the same for every group. */
+/** How tables of one kind are set: the same on every page. */
 export interface TableMeasure {
   /** Columns of rows side by side. */
   readonly columns: number;
   /** Width of one of them, in points. */
   readonly width: number;
-  /** Scale of the type against the usual size; below 1 where the figures would not fit otherwise. */
-  readonly typeScale: number;
+  readonly type: TableType;
   /** Places from the left edge of a column of rows. */
   readonly heads: readonly TableHead[];
 }
 
-/** Least room between two columns of figures, and the most that the eye can cross in a table of one column. */
-const LEAST_GAP = 8;
-const WIDEST_GAP = 42;
 /** Tried in turn where even one column of rows is too wide. */
 const TYPE_SCALES = [1, 0.92, 0.85, 0.78, 0.71, 0.64, 0.57] as const;
 
-/** Sets the columns of figures in the width of the page, and says in sentences what could not be done as asked. */
+/**
+ * Sets the columns of the conversion tables in the width of the page, the same for every group, and says in sentences
+ * what could not be done as asked.
+ */
 export function measureTables(
   normSet: NormSet,
   pageWidth: number,
 ): { readonly measure: TableMeasure; readonly remarks: readonly string[] } {
   const { sheet } = normSet.project;
-  const natural = naturalColumns(normSet);
-  const fits = (columns: number, typeScale: number): boolean => {
-    const figures = natural.reduce((sum, column) => sum + column.width * typeScale, 0);
-    return figures + natural.length * LEAST_GAP * typeScale <= columnWidth(columns);
-  };
+  const type = chosenType(sheet);
+  const natural = naturalColumns(normSet, type);
+  const behind = roomBehind(normSet, type);
+  const needed = leastWidth(natural, type, behind);
   const columnWidth = (columns: number): number => (pageWidth - (columns - 1) * GUTTER) / columns;
   const most = [4, 3, 2, 1].filter((columns) => columns <= sheet.tableColumns);
-  const columns = most.find((count) => fits(count, 1)) ?? 1;
-  const typeScale = TYPE_SCALES.find((scale) => fits(columns, scale)) ?? Math.min(...TYPE_SCALES);
+  const columns = most.find((count) => needed <= columnWidth(count)) ?? 1;
+  const scale = TYPE_SCALES.find((each) => needed * each <= columnWidth(columns)) ?? Math.min(...TYPE_SCALES);
+  const scaled = scaledType(type, scale);
   return {
-    measure: { columns, typeScale, ...placed(natural, columnWidth(columns), typeScale, columns === 1) },
-    remarks: remarksOn(sheet, columns, typeScale),
+    measure: {
+      columns,
+      type: scaled,
+      ...sharedWidth(scaledColumns(natural, scale), columnWidth(columns), scaled, {
+        alone: columns === 1,
+        behind: behind * scale,
+      }),
+    },
+    remarks: remarksOn(sheet, columns, scale),
   };
 }
 
-interface NaturalColumn {
-  readonly key: TableHead['key'];
-  readonly lines: readonly string[];
-  readonly width: number;
-  readonly range: TableHead['range'];
-}
-
-function naturalColumns(normSet: NormSet): readonly NaturalColumn[] {
-  return tableColumns(normSet.project).map((column) => {
-    const face = column.key === 'score' ? 'sans-bold' : 'sans';
-    const texts = new Set(normSet.groups.flatMap(({ rows }) => rows.map((row) => cellText(row, column))));
-    const range = isRangeColumn(column.key) ? rangeRoom(texts) : null;
-    const figures = range?.width ?? Math.max(...[...texts].map((text) => textWidth(text, face, ROW.size)));
-    const head = Math.max(...column.heading.map((line) => textWidth(line, 'sans-bold', TABLE_HEAD.size)));
-    return { key: column.key, lines: column.heading, width: Math.max(figures, head), range };
+function naturalColumns(normSet: NormSet, type: TableType): readonly NaturalColumn[] {
+  const rows = normSet.groups.flatMap((norms) => printedRows(normSet.project, norms));
+  const words = wordsOf(normSet.project);
+  return tableColumns(normSet.project, words).map((column, index) => {
+    const texts = rows.map(({ scoreText, shown }) =>
+      figure(words, column.key === 'score' ? scoreText : cellText(shown, column)),
+    );
+    const ranges = isRangeColumn(column.key) || column.key === 'score';
+    const { width, range } = roomOf(texts, figureFace(index), type.row.size, ranges);
+    return {
+      width: Math.max(width, headRoom(column.heading, '', type)),
+      head: {
+        column: index,
+        lines: column.heading,
+        note: '',
+        said: spokenHead(column.heading),
+        repeated: 'nothing',
+        align: 'right',
+        range,
+      },
+    };
   });
 }
 
-/** Widths of ranges aligned on their dashes; without any dash they are figures like others. */
-function rangeRoom(texts: ReadonlySet<string>): (NonNullable<TableHead['range']> & { readonly width: number }) | null {
-  const sides = [...texts].map(rangeSides);
-  if (sides.every(({ after }) => after === null)) return null;
-  const dash = textWidth(RANGE_DASH, 'sans', ROW.size);
-  const before = sides.map(
-    ({ upToDash, after }) => textWidth(upToDash, 'sans', ROW.size) - (after === null ? 0 : dash),
-  );
-  const after = Math.max(...sides.map((side) => textWidth(side.after ?? '', 'sans', ROW.size)));
-  return { dash, after, width: Math.max(...before) + dash + after };
-}
-
-/** Shares the room left between the columns of figures, half a share before the first. */
-function placed(
-  natural: readonly NaturalColumn[],
-  width: number,
-  typeScale: number,
-  alone: boolean,
-): { readonly width: number; readonly heads: readonly TableHead[] } {
-  const figures = natural.reduce((sum, column) => sum + column.width * typeScale, 0);
-  const share = (width - figures) / (natural.length - 0.5);
-  const gap = alone ? Math.min(share, WIDEST_GAP) : share;
-  let right = -gap / 2;
-  const heads = natural.map((column, index) => {
-    const before = index === 0 ? gap / 2 : gap;
-    right += gap + column.width * typeScale;
-    const range =
-      column.range === null ? null : { dash: column.range.dash * typeScale, after: column.range.after * typeScale };
-    return { key: column.key, lines: column.lines, right, width: column.width * typeScale + before, range };
-  });
-  return { width: right, heads };
+/** The mark of a rank adjusted by hand hangs behind it, which needs room where ranks stand last. */
+function roomBehind({ project, groups }: NormSet, { row }: TableType): number {
+  const last = tableColumns(project).at(-1)?.key;
+  const marked = groups.some(({ rows }) => rows.some(({ adjusted }) => adjusted !== null));
+  return last === 'rank' && marked ? textWidth(ADJUSTED_MARK, 'sans', row.size) : 0;
 }
 
 const COUNT_WORDS = ['no', 'one', 'two', 'three', 'four'] as const;
 const PAPER_NAMES = { a4: 'A4', letter: 'Letter', a5: 'A5' } as const;
 
-function remarksOn(sheet: SheetChoices, columns: number, typeScale: number): readonly string[] {
+function remarksOn(sheet: SheetChoices, columns: number, scale: number): readonly string[] {
   const paper = `${PAPER_NAMES[sheet.paper]} ${sheet.orientation}`;
   const remarks: string[] = [];
   if (columns < sheet.tableColumns) {
     remarks.push(
       `The chosen figures are too wide to stand ${COUNT_WORDS[sheet.tableColumns]} times across ${paper}; the tables ` +
         `are set in ${COUNT_WORDS[columns]} ${columns === 1 ? 'column' : 'columns'}. ` +
-        'Choose fewer figures, or turn or enlarge the paper.',
+        'Choose fewer or smaller figures, or turn or enlarge the paper.',
     );
   }
-  if (typeScale < 1) {
+  if (scale < 1) {
     remarks.push(
-      `The chosen figures are too wide for ${paper} at the usual size of type; they are set smaller. ` +
-        'Choose fewer figures, or turn or enlarge the paper.',
+      `The chosen figures are too wide for ${paper} at the chosen size of type; they are set smaller. ` +
+        'Choose fewer or smaller figures, or turn or enlarge the paper.',
     );
   }
-  return remarks;
+  const height = rowHeightRemark(sheet);
+  return height === null ? remarks : [...remarks, height];
 }

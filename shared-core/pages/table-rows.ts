@@ -1,11 +1,18 @@
-import type { ConversionRow } from '../norms/conversion-table.ts';
-import { decimalOf, unitsAt } from '../scale/decimal.ts';
-import { scaleGrid, type ScoreScale } from '../scale/score-scale.ts';
+import type { SheetChoices } from '../norms/norm-project.ts';
+import type { ScoreScale } from '../scale/score-scale.ts';
+import type { PlacedRow } from './booklet.ts';
+import { inCountedFives, inFives } from './row-blocks.ts';
 
-/** Rows that stand together: up to five steps of the scale, beginning at a multiple of five steps. */
-export type Five = readonly ConversionRow[];
+/** A row that has yet to be placed. */
+export interface LooseRow extends Omit<PlacedRow, 'baseline'> {
+  /** On which side of the row a rule marks a cut; null for none. */
+  readonly cut: 'above' | 'below' | null;
+}
 
-/** Blocks of five rows, one below the other. */
+/** Rows that stand together. */
+export type Five = readonly LooseRow[];
+
+/** Blocks of rows, one below the other. */
 export type RowColumn = readonly Five[];
 
 export interface RowMeasure {
@@ -15,22 +22,17 @@ export interface RowMeasure {
   readonly gap: number;
 }
 
-const STEPS_IN_BLOCK = 5n;
-
-/** 0–4, 5–9, … on whole scores; 0–2, 2.5–4.5, … on halves. */
-export function inFives(rows: readonly ConversionRow[], scale: ScoreScale): readonly Five[] {
-  const { decimals, stepUnits } = scaleGrid(scale);
-  const width = stepUnits * STEPS_IN_BLOCK;
-  const fives: ConversionRow[][] = [];
-  let current: bigint | null = null;
-  for (const row of rows) {
-    const units = unitsAt(decimalOf(row.score), decimals);
-    const block = (units - (((units % width) + width) % width)) / width;
-    if (block === current) fives.at(-1)?.push(row);
-    else fives.push([row]);
-    current = block;
-  }
-  return fives;
+/**
+ * Rows as the sheet asks for: in fives of the scale, in fives of printed rows where some stand for several scores or for
+ * none, or each by itself, so that rows stand evenly.
+ */
+export function rowBlocks(
+  rows: readonly LooseRow[],
+  { fives, rangeRows }: Pick<SheetChoices, 'fives' | 'rangeRows'>,
+  scale: ScoreScale | null,
+): readonly Five[] {
+  if (!fives) return rows.map((row) => [row]);
+  return rangeRows || scale === null ? inCountedFives(rows) : inFives(rows, scale, ({ row }) => row);
 }
 
 /** Height of a column of rows, in points. */

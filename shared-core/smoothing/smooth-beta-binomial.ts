@@ -5,6 +5,7 @@ import { cumulativeOnGrid } from './cumulative.ts';
 import type { EffectiveFrequencies } from './effective-frequencies.ts';
 import { fitStatistics, freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
 import { workingOffer } from './smooth-log-linear.ts';
+import { smoothingStatement } from './smoothing-statement.ts';
 import type { SmoothingResult } from './smoothing.ts';
 
 /** Two moments and the total are taken from the data. */
@@ -34,28 +35,30 @@ export function smoothBetaBinomial(scale: ScoreScale, frequencies: EffectiveFreq
   if (!curve.ok) return refusal(scale, frequencies, TROUBLES[curve.trouble]);
   const { a, b, probabilities } = curve;
   const fitted = probabilities.map((probability) => probability * frequencies.total);
+  const facts = {
+    choice: { kind: 'beta-binomial' },
+    degree: null,
+    degrees: [],
+    bandwidth: null,
+    shape: { a, b },
+  } as const;
   return {
     ok: true,
     smoothed: {
-      choice: { kind: 'beta-binomial' },
+      ...facts,
       probabilities,
       cumulative: cumulativeOnGrid(probabilities),
-      degree: null,
-      bandwidth: null,
       ...fitStatistics(frequencies.at, fitted),
       df: scores.length - PARAMETERS,
       // Both criteria are of maximum likelihood, which a fit by moments is not.
       aic: null,
       bic: null,
-      degrees: [],
       momentsObserved: momentsOf(scores, observed),
       momentsFitted: momentsOf(scores, probabilities),
       residuals: freemanTukeyResiduals(frequencies.at, fitted),
       varianceOf: null,
       rankVariancesOf: null,
-      statement:
-        `Beta-binomial smoothing by moments with a = ${a.toFixed(4)} and b = ${b.toFixed(4)}; ` +
-        'mean and variance of the observed scores are kept.',
+      statement: smoothingStatement(facts),
     },
   };
 }

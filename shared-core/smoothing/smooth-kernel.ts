@@ -4,6 +4,7 @@ import { automaticBandwidth, bandwidthProblem } from './bandwidth.ts';
 import type { EffectiveFrequencies } from './effective-frequencies.ts';
 import { freemanTukeyResiduals, momentsOf } from './fit-statistics.ts';
 import { kernelCumulative, shrinkage, type GridDistribution } from './kernel.ts';
+import { smoothingStatement } from './smoothing-statement.ts';
 import type { Moments, Smoothed, SmoothingChoice, SmoothingResult } from './smoothing.ts';
 
 type Choice = Extract<SmoothingChoice, { readonly kind: 'kernel' }>;
@@ -29,8 +30,9 @@ export function smoothKernel(
   const last = scores.length - 1;
   const limits = scores.map((_, k) => (k === last ? 1 : curve(k + 0.5)));
   const probabilities = limits.map((limit, k) => Math.max(0, limit - (limits[k - 1] ?? 0)));
+  const facts = { choice, degree: after?.degree ?? null, degrees: after?.degrees ?? [], bandwidth, shape: null };
   const result: Smoothed = {
-    choice,
+    ...facts,
     probabilities,
     cumulative: (position, shift) => {
       if (!Number.isInteger(position) || position < 0 || position > last) {
@@ -38,14 +40,11 @@ export function smoothKernel(
       }
       return curve(position + shift);
     },
-    degree: after?.degree ?? null,
-    bandwidth,
     g2: after?.g2 ?? null,
     x2: after?.x2 ?? null,
     df: after?.df ?? null,
     aic: after?.aic ?? null,
     bic: after?.bic ?? null,
-    degrees: after?.degrees ?? [],
     momentsObserved: momentsOf(scores, observed),
     momentsFitted: continuousMoments(scale, discrete, steps),
     residuals: freemanTukeyResiduals(
@@ -54,7 +53,7 @@ export function smoothKernel(
     ),
     varianceOf: null,
     rankVariancesOf: null,
-    statement: statementOf(choice, bandwidth, after),
+    statement: smoothingStatement(facts),
   };
   return { ok: true, smoothed: result };
 }
@@ -78,13 +77,4 @@ function continuousMoments(scale: ScoreScale, discrete: GridDistribution, steps:
     skewness: (a ** 3 * m3) / m2 ** 1.5,
     excessKurtosis: fourth / (m2 * m2) - 3,
   };
-}
-
-function statementOf(choice: Choice, bandwidth: number, after: Smoothed | null): string {
-  const how = choice.bandwidth === 'auto' ? ', chosen so that the curve misses the shares least' : '';
-  const points = choice.bandwidth === 'auto' ? bandwidth.toFixed(4) : String(bandwidth);
-  const kernel = `a Gaussian kernel with a bandwidth of ${points} raw-score points${how}; mean and variance are kept.`;
-  return after === null
-    ? `Smoothing of the observed shares by ${kernel}`
-    : `${after.statement} Then smoothing by ${kernel}`;
 }

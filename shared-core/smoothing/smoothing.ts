@@ -60,6 +60,8 @@ export interface Smoothed {
   readonly degree: number | null;
   /** In raw-score points. */
   readonly bandwidth: number | null;
+  /** Parameters of a beta-binomial distribution; null for other methods. */
+  readonly shape: { readonly a: number; readonly b: number } | null;
   /**
    * Of the log-linear model, also where a kernel follows it; of a beta-binomial fit G², X² and df alone, which is not of
    * maximum likelihood; null for a kernel of the observed shares.
@@ -85,7 +87,7 @@ export interface Smoothed {
    * proportion: one pass for all scores, where varianceOf takes one pass a score. `tied` is the share of a score's own people counted, 0–1.
    */
   readonly rankVariancesOf: ((tied: number) => readonly number[]) | null;
-  /** What was done, in one plain sentence. */
+  /** What was done, in a plain sentence or two of English; see `smoothingStatement`. */
   readonly statement: string;
 }
 

@@ -3,7 +3,7 @@ import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns, type TableColumn } from '../../shared-core/norms/table-columns.ts';
 import { cellText, sampleFacts, sheetSubtitle } from '../../shared-core/pages/sheet-texts.ts';
-import { inFives } from '../../shared-core/pages/table-rows.ts';
+import { inFives } from '../../shared-core/pages/row-blocks.ts';
 import { POINT_DEFINITION_WORDS } from '../../shared-core/percentile/percentile-point.ts';
 import { printNumber } from '../../shared-core/scores/printed-number.ts';
 import { alignedLines } from './aligned-lines.ts';
@@ -48,7 +48,9 @@ function tableLines({ project }: NormSet, { group, rows }: GroupNorms): readonly
   const heading = Array.from({ length: deepest }, (_, line) =>
     columns.map((column) => column.heading[line - deepest + column.heading.length] ?? ''),
   );
-  const fives = inFives(rows, group.table.scale).map((five) => five.map((row) => cells(row, columns)));
+  const fives = inFives(rows, group.table.scale, ({ score }) => score).map((five) =>
+    five.map((row) => cells(row, columns)),
+  );
   return alignedLines([...heading, ...fives.flatMap((five) => [[], ...five])]);
 }
 

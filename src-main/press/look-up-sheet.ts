@@ -1,5 +1,6 @@
 import type { Worksheet } from 'exceljs';
 import { scaleInWords } from '../../shared-core/scale/score-scale.ts';
+import { ENGLISH_WORDS } from '../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../shared-core/norms/table-columns.ts';
 import { cautionsOf } from '../../shared-core/pages/group-method.ts';
@@ -87,7 +88,7 @@ export function fillLookUp(sheet: Worksheet, list: Worksheet, normSet: NormSet):
     const letter = list.getColumn(3 + index).letter;
     const found = `INDEX(${range(letter, 2, 1 + groups.length * perGroup)},${onList(places.position)})`;
     const otherwise = index === 0 ? textInFormula(notFound(normSet)) : '""';
-    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: markedText(exampleRow, column) };
+    cell.value = { formula: `IFERROR(${found},${otherwise})`, result: markedText(ENGLISH_WORDS, exampleRow, column) };
     cell.alignment = { horizontal: 'right', wrapText: true };
     if (index === 0) for (const part of [name, cell]) asBold(part);
     for (const part of [name, cell]) ruleBelow(part, index === columns.length - 1 ? 'strong' : 'fine');
@@ -125,7 +126,11 @@ function fillList(list: Worksheet, normSet: NormSet, titles: readonly string[]):
   groups.forEach(({ rows }, group) => {
     rows.forEach((row, index) => {
       const at = 2 + group * rows.length + index;
-      const cells = [titles[group] ?? '', row.score, ...columns.map((column) => markedText(row, column))];
+      const cells = [
+        titles[group] ?? '',
+        row.score,
+        ...columns.map((column) => markedText(ENGLISH_WORDS, row, column)),
+      ];
       cells.forEach((value, place) => {
         list.getCell(at, place + 1).value = value;
         if (place > 1) list.getCell(at, place + 1).alignment = { horizontal: 'right' };

@@ -132,6 +132,6 @@ function printableNormSet(project: NormProject): NormSetBuilt {
 export async function drawPages(project: NormProject, onProgress: PressProgress = silent): Promise<Reply<DrawnPages>> {
   const built = printableNormSet(project);
   if (!built.ok) return built;
-  const { pdf, pages, remarks } = await bookletPdf(built.normSet, (share) => onProgress(share, 'Drawing the pages'));
-  return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), pages, remarks } };
+  const { pdf, ...told } = await bookletPdf(built.normSet, (share) => onProgress(share, 'Drawing the pages'));
+  return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), ...told } };
 }

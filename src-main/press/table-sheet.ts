@@ -2,7 +2,7 @@ import type { Worksheet } from 'exceljs';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { cellText, draftTitle, editionLine, sheetTitle } from '../../shared-core/pages/sheet-texts.ts';
-import { inFives } from '../../shared-core/pages/table-rows.ts';
+import { inFives } from '../../shared-core/pages/row-blocks.ts';
 import type { TableSheetLayout } from './table-layout.ts';
 import { rankCell, typedCell } from './typed-cell.ts';
 import { UNROUNDED_FORMAT } from './unrounded-columns.ts';
@@ -37,7 +37,9 @@ export function fillTableSheet(
     asHead(cell);
   });
   sheet.getRow(headRow).height = 14 * HEAD_LINES;
-  const endsFive = new Set(inFives(norms.rows, norms.group.table.scale).map((five) => five.at(-1)?.score));
+  const endsFive = new Set(
+    inFives(norms.rows, norms.group.table.scale, ({ score }) => score).map((five) => five.at(-1)?.score),
+  );
   norms.rows.forEach((row, index) => {
     const at = firstRow + index;
     columns.forEach((column, place) => {

@@ -2,7 +2,7 @@ import type { Cell, Worksheet } from 'exceljs';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { draftTitle, editionLine, sheetSubtitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
-import { inFives } from '../../shared-core/pages/table-rows.ts';
+import { inFives } from '../../shared-core/pages/row-blocks.ts';
 import type { TablePlaces } from './table-layout.ts';
 import { factCell, SAME, workingsCell, type WorkingsBasis, type WorkingsCell } from './workings-cells.ts';
 import { AGREEMENT_COLUMNS, workingsPlaces } from './workings-places.ts';
@@ -56,7 +56,9 @@ export function fillWorkingsSheet(
   fillFacts(sheet, basis);
   const { headRow, firstRow } = places;
   const lastRow = firstRow + norms.rows.length - 1;
-  const endsFive = new Set(inFives(norms.rows, norms.group.table.scale).map((five) => five.at(-1)?.score));
+  const endsFive = new Set(
+    inFives(norms.rows, norms.group.table.scale, ({ score }) => score).map((five) => five.at(-1)?.score),
+  );
   sheet.getRow(headRow).height = 28;
   sheet.getRow(headRow + 1).height = 11 * NOTE_LINES;
   plan.keys.forEach((key, index) => {

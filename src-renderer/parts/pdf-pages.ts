@@ -1,32 +1,33 @@
-import { getDocument, GlobalWorkerOptions, type PDFDocumentProxy } from 'pdfjs-dist';
+import { getDocument, PDFWorker, type PDFDocumentProxy } from 'pdfjs-dist';
 import workerUrl from 'pdfjs-dist/build/pdf.worker.min.mjs?url';
 import { startWorker } from '../compute/own-worker.ts';
 
-function prepareWorker(): void {
-  GlobalWorkerOptions.workerPort ??= startWorker(workerUrl);
-}
+/** One worker serves all documents; a document that is closed leaves it to the others. */
+let shared: PDFWorker | null = null;
 
-/** Opens a PDF given as base64. */
+/** Opens a PDF given as base64. Whoever opens it destroys it when it is no longer shown. */
 export async function openPages(base64: string): Promise<PDFDocumentProxy> {
-  prepareWorker();
+  shared ??= PDFWorker.create({ port: startWorker(workerUrl) });
   const binary = atob(base64);
   const data = Uint8Array.from(binary, (letter) => letter.charCodeAt(0));
-  return getDocument({ data, isEvalSupported: false, useWorkerFetch: false }).promise;
+  return getDocument({ data, worker: shared, isEvalSupported: false, useWorkerFetch: false }).promise;
 }
 
-/** Draws a page (from 1) into a canvas so wide that it fills `width` CSS pixels; returns its height in CSS pixels. */
-export async function drawPage(
-  pages: PDFDocumentProxy,
-  number: number,
-  canvas: HTMLCanvasElement,
-  width: number,
-): Promise<number> {
+/** Width of the first page against its height; all pages of a booklet are alike. */
+export async function shapeOf(pages: PDFDocumentProxy): Promise<number> {
+  const { width, height } = (await pages.getPage(1)).getViewport({ scale: 1 });
+  return width / height;
+}
+
+/** A page (from 1) as a picture that fills `width` CSS pixels. */
+export async function drawPage(pages: PDFDocumentProxy, number: number, width: number): Promise<HTMLCanvasElement> {
   const page = await pages.getPage(number);
   const whole = page.getViewport({ scale: 1 });
   const density = Math.max(1, window.devicePixelRatio);
   const viewport = page.getViewport({ scale: (width / whole.width) * density });
+  const canvas = document.createElement('canvas');
   canvas.width = Math.round(viewport.width);
   canvas.height = Math.round(viewport.height);
   await page.render({ canvas, viewport }).promise;
-  return viewport.height / density;
+  return canvas;
 }

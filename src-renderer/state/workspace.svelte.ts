@@ -1,4 +1,4 @@
-import type { CohortPreview, DrawnPages, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
+import type { CohortPreview, FileHandle, OpenedProject, Pressed } from '../../shared-core/desk.ts';
 import type { GroupNorms } from '../../shared-core/norms/group-norms.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { Station } from '../../shared-core/norms/queries.ts';
@@ -7,6 +7,7 @@ import { readTypedCounts, type LineProblem } from '../../shared-core/tally/typed
 import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { BuiltNorms } from './built-norms.svelte.ts';
+import { DrawnBooklet } from './drawn-booklet.svelte.ts';
 import { ProjectHistory } from './history.svelte.ts';
 import { ReadStates } from './read-states.ts';
 import { followJob } from './run-job.ts';
@@ -42,13 +43,9 @@ export class Workspace {
   problem = $state<string | null>(null);
   preview = $state.raw<CohortPreview | null>(null);
   pressed = $state.raw<Pressed | null>(null);
-  drawn = $state.raw<DrawnPages | null>(null);
   cohort = $state<FileHandle | null>(null);
-  /** The project that `drawn` shows. */
-  drawnFor = $state.raw<NormProject | null>(null);
   readonly #states = new ReadStates();
   #handle: FileHandle | null;
-  #drawing: string | null = null;
   /** Counts the readings of the cohort file; only the last one is taken. */
   #readings = 0;
   /** The tally that a reading without result put out of use: what was chosen with it serves the next one. */
@@ -56,12 +53,19 @@ export class Workspace {
 
   /** The numbers of the project, or of the one before it while the new ones are being worked out. */
   readonly norms = new BuiltNorms();
+  readonly booklet: DrawnBooklet;
   readonly group: GroupNorms | null = $derived(
     this.norms.groups.find(({ group }) => group.key === this.groupKey) ?? this.norms.groups[0] ?? null,
   );
 
   constructor(wire: DeskWire, opened: OpenedProject) {
     this.#wire = wire;
+    this.booklet = new DrawnBooklet({
+      wire,
+      project: () => this.project,
+      follow: (job, doing) => this.#follow(job, doing),
+      fail: (problem) => (this.problem = problem),
+    });
     this.#draft = opened.draft;
     this.#history = new ProjectHistory(opened.project);
     this.#handle = opened.handle;
@@ -263,25 +267,6 @@ export class Workspace {
       this.file = answer.value.file;
       this.saved = { kind: 'saved', at: answer.value.at };
       this.problem = answer.value.remark;
-    }
-  }
-
-  /** The booklet as the press would draw it now. */
-  async draw(): Promise<void> {
-    const { project } = this;
-    if (this.drawnFor === project) return;
-    if (this.#drawing !== null) await this.#wire.ask('cancel-job', { job: this.#drawing });
-    const started = await this.#wire.ask('draw-pages', { project });
-    if (!started.ok) {
-      this.problem = started.problem;
-      return;
-    }
-    this.#drawing = started.value.job;
-    const result = await this.#follow(started.value.job, 'Drawing the pages');
-    if (this.#drawing === started.value.job) this.#drawing = null;
-    if (result?.kind === 'drawn' && this.project === project) {
-      this.drawn = result.drawn;
-      this.drawnFor = project;
     }
   }
 

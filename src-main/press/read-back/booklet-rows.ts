@@ -1,3 +1,4 @@
+import { wordsOf } from '../../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
 import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
@@ -81,7 +82,7 @@ export class BookletRows {
     }
     this.#scores[group]?.push(score);
     columns.forEach((column, index) => {
-      const expected = withPlainSpaces(markedText(row, column));
+      const expected = withPlainSpaces(markedText(wordsOf(this.#normSet.project), row, column));
       this.#comparison.compare({ ...place, column: column.name }, expected, cells[index] ?? '');
     });
   }

@@ -34,7 +34,7 @@ export function readBooklet(file: string, pages: PdfPages, normSet: NormSet): Fi
     const place = { where, group: norms.group.title, score: '' };
     comparison.compare({ ...place, column: 'page number' }, `page ${index + 1} of ${total}`, foot.number);
     numbers.push(Number(PAGE_NUMBER.exec(foot.number)?.[1] ?? index + 1));
-    compareHead(comparison, place, tableName(group, norms), headText(lines));
+    compareHead(comparison, place, tableName(normSet.project, group, norms), headText(lines));
     compareFoot(comparison, place, normSet, norms, foot.text);
     rows.take(group, where, lines);
   });

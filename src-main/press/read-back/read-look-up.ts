@@ -1,4 +1,5 @@
 import type { Workbook } from 'exceljs';
+import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
 import { markedText } from '../../../shared-core/pages/sheet-texts.ts';
@@ -25,7 +26,7 @@ export function readLookUp(comparison: CellComparison, workbook: Workbook, normS
       const expected = [
         ['group', titles[index] ?? ''],
         ['raw score', String(row.score)],
-        ...columns.map((column) => [column.name, markedText(row, column)]),
+        ...columns.map((column) => [column.name, markedText(ENGLISH_WORDS, row, column)]),
       ];
       expected.forEach(([column = '', text = ''], place) => {
         const cell = list.getCell(at, place + 1);
@@ -49,6 +50,10 @@ export function readLookUp(comparison: CellComparison, workbook: Workbook, normS
   columns.forEach((column, index) => {
     const cell = sheet.getCell(FIRST_RESULT_ROW + index, 2);
     const where = `${LOOK_UP}!${cell.address}`;
-    comparison.compare({ ...place, where, column: column.name }, markedText(row, column), shownCell(cell));
+    comparison.compare(
+      { ...place, where, column: column.name },
+      markedText(ENGLISH_WORDS, row, column),
+      shownCell(cell),
+    );
   });
 }

@@ -1,4 +1,5 @@
 import ExcelJS, { type Cell, type Worksheet } from 'exceljs';
+import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { tableColumns } from '../../../shared-core/norms/table-columns.ts';
 import { draftTitle, markedText, sheetTitle } from '../../../shared-core/pages/sheet-texts.ts';
@@ -54,7 +55,7 @@ function readTable(comparison: CellComparison, sheet: Worksheet, normSet: NormSe
     const at = headRow + 1 + index;
     columns.forEach((column, position) => {
       const cell = sheet.getCell(at, position + 1);
-      comparePrinted(comparison, place(at, position + 1, row.scoreText), markedText(row, column), cell);
+      comparePrinted(comparison, place(at, position + 1, row.scoreText), markedText(ENGLISH_WORDS, row, column), cell);
     });
     unrounded.forEach(({ valueOf }, position) => {
       const cell = sheet.getCell(at, columns.length + 1 + position);

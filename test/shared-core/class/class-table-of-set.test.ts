@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import * as v from 'valibot';
 import { describe, expect, it } from 'vitest';
+import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import { classTableOfSet } from '../../../shared-core/class/class-table-of-set.ts';
 import { classTableSchema, type ClassTable } from '../../../shared-core/class/class-table.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
@@ -70,7 +71,7 @@ describe('the class table of a norm set', () => {
                   : column.key === 'rank'
                     ? found?.printed
                     : found?.texts[column.key];
-              expect(text).toBe(column.key === 'rank' ? markedText(row, column) : cellText(row, column));
+              expect(text).toBe(column.key === 'rank' ? markedText(ENGLISH_WORDS, row, column) : cellText(row, column));
             }
             expect([found?.low, found?.high]).toEqual([row.score, row.score]);
           });

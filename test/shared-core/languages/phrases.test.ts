@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { usualNumbers } from '../../../shared-core/languages/number-format.ts';
 import {
   ENGLISH_WORDS,
   PHRASE_KEYS,
@@ -10,7 +11,7 @@ import {
 } from '../../../shared-core/languages/phrases.ts';
 import { placeholdersIn } from '../../../shared-core/languages/placeholders.ts';
 
-const german = { words: 'de', phrases: [] } as const;
+const german = { words: 'de', phrases: [], numbers: usualNumbers('de') } as const;
 
 describe('the shipped words', () => {
   it.each(['de', 'es', 'fr'] as const)('%s: every key has a text with the placeholders of the English one', (words) => {
@@ -19,11 +20,11 @@ describe('the shipped words', () => {
     for (const key of PHRASE_KEYS) expect(phraseProblem(key, phrases[key]), phrases[key]).toBeNull();
   });
 
-  it('write a placeholder in letters and hyphens alone', () => {
+  it('write a placeholder in lower case', () => {
     for (const key of PHRASE_KEYS) {
       const braces = ENGLISH_WORDS.phrases[key].match(/[{}]/g) ?? [];
       expect(braces.length, key).toBeGreaterThanOrEqual(2 * placeholdersIn(ENGLISH_WORDS.phrases[key]).length);
-      expect(ENGLISH_WORDS.phrases[key].replace(/\{[a-z-]+\}/g, ''), key).not.toMatch(/[{}]/);
+      expect(ENGLISH_WORDS.phrases[key].replace(/\{[a-z][a-z0-9-]*\}/g, ''), key).not.toMatch(/[{}]/);
     }
   });
 });

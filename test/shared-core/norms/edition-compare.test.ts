@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import { withBlock } from '../../../shared-core/norms/booklet-choice.ts';
 import { describe, expect, it } from 'vitest';
 import { comparisonText } from '../../../shared-core/norms/edition-compare-words.ts';
 import {
@@ -165,6 +166,20 @@ describe('two editions', () => {
     ]);
     expect(comparison.counts).toMatchObject({ cellsCompared: 10, cellsChanged: 0, columnsCame: 1, columnsWent: 1 });
     expect(printsTheSame(comparison)).toBe(false);
+  });
+
+  it('tell cuts, one at no score of the scale too, and the blocks of the booklet with their words', () => {
+    const project = projectOf(TEN_COUNTS);
+    const cut = { name: 'Support', score: 2, values: null };
+    const sheet = withBlock(project.sheet, 'cautions', { printed: true, heading: 'Take care', text: 'Ask first.' });
+    const { choices } = compared({ ...project, cuts: [cut] }, { ...project, sheet, cuts: [{ ...cut, score: 2.5 }] });
+    expect(choices).toEqual([
+      { what: 'booklet', before: 'a sheet for each table', after: '2 blocks of your own choice' },
+      { what: 'blocks of the booklet', before: 'tables', after: 'tables, cautions' },
+      { what: 'heading of the block “Cautions”', before: null, after: 'Take care' },
+      { what: 'text of the block “Cautions”', before: null, after: 'Ask first.' },
+      { what: 'cut score Support', before: '2', after: '2.5' },
+    ]);
   });
 
   it('tell another cohort by its fingerprint, other words only by their name, and lines of inverse tables', () => {

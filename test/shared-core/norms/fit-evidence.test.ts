@@ -18,6 +18,7 @@ function curveWith(probabilities: readonly number[], degrees: readonly DegreeLin
     probabilities,
     degree: 2,
     bandwidth: null,
+    shape: null,
     g2: 0,
     x2: 0,
     df: 0,

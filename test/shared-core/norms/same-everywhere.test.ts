@@ -22,7 +22,7 @@ function everythingOf(project: ReturnType<typeof settledProject>): string {
   const normSet = builtSet(project);
   const norms = firstNorms(project);
   const workings = norms.rows.map((row) => workingsOf(project, norms, row.scoreText, 't'));
-  const queries = queriesOf(project, normSet.groups, normSet.refusedAdjustments);
+  const queries = queriesOf(project, normSet.groups, normSet.refusedAdjustments, normSet.check);
   const parts = [normSet, workings, queries, methodText(project), projectToText(project)];
   return JSON.stringify(parts, (_, value: unknown) => (typeof value === 'bigint' ? `${value}n` : value));
 }

@@ -79,7 +79,7 @@ export const READING: Reading = {
   decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
 };
 
-/** Two grades of 420 people each, spread evenly over 0 to 20, fully documented: nothing to ask about. */
+/** Two grades of 420 people each, spread evenly over 0 to 20, fully documented and signed: nothing to ask about. */
 export function settledProject(): NormProject {
   const even = Array.from({ length: 21 }, () => 10);
   const bare = newProject('Ostrey Vale reading (invented)');
@@ -124,7 +124,7 @@ export function settledProject(): NormProject {
       },
     },
     sheet: { ...bare.sheet, notes: 'Read aloud.', inverse: true },
-    release: { ...bare.release, edition: '1.0', date: '2026-06-15', answers: [] },
+    release: { ...bare.release, edition: '1.0', date: '2026-06-15', analyst: 'A. Weir', checker: 'J. Lund' },
   };
 }
 

@@ -1,8 +1,10 @@
 import * as v from 'valibot';
+import { tableStatement } from '../../../shared-core/norms/method-statements.ts';
 import { describe, expect, it } from 'vitest';
 import { alternatives, type ListedChoice } from '../../../shared-core/norms/alternatives.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { normProjectSchema, type NormProject } from '../../../shared-core/norms/norm-project.ts';
+import { sheetStatement } from '../../../shared-core/norms/sheet-statement.ts';
 import {
   cohortStatement,
   curveStatement,
@@ -10,9 +12,7 @@ import {
   joined,
   methodText,
   releaseStatement,
-  sheetStatement,
   statementText,
-  tableStatement,
   type ChoiceKey,
   type StatementPart,
 } from '../../../shared-core/norms/statements.ts';
@@ -41,9 +41,13 @@ const LISTED = [
   'ends',
   'z-source',
   'z-ends',
+  'booklet',
   'paper',
   'orientation',
+  'fours',
   'table-columns',
+  'fives',
+  'range-rows',
   'ogive',
   'inverse',
 ] as const satisfies readonly ListedChoice[];
@@ -146,9 +150,13 @@ describe('statements', () => {
         'z scores are normal deviates of the ranks; they are held between −3 and 3.',
     );
     expect(statementText(sheetStatement(settled))).toBe(
-      'Each table is set on A4, portrait, in three columns, with its ogive and with the lowest score for each percentile.',
+      'The booklet is a sheet for each table, on A4, portrait, with the usual margins, no gutter and no blank pages. ' +
+        'Tables stand in three columns, figures of 8.7 points on rows of 12.4 points, set in fives, with a row for each ' +
+        'score. Each comes with its ogive and with the lowest score for each percentile.',
     );
-    expect(statementText(releaseStatement(settled))).toBe('This is edition 1.0, dated 2026-06-15.');
+    expect(statementText(releaseStatement(settled))).toBe(
+      'This is edition 1.0, dated 2026-06-15, prepared by A. Weir, checked by J. Lund.',
+    );
   });
 
   it('turn round where low scores are good', () => {
@@ -172,7 +180,7 @@ describe('statements', () => {
     expect(statementText(tableStatement(columns([], 'normalised')))).toContain('beside them nothing else.');
     expect(statementText(groupsStatement(bare))).toBe('There is one table for all people.');
     expect(statementText(releaseStatement({ ...bare, release: { ...bare.release, edition: ' ', date: '' } }))).toBe(
-      'This is edition (no number), dated (no date).',
+      'This is edition (no number), dated (no date), prepared by (nobody yet), checked by (nobody yet).',
     );
   });
 

@@ -59,7 +59,9 @@ function check(normSet: NormSet, booklet: Booklet): void {
   const { width, height, margin } = booklet.paper;
   const { columns } = normSet.project.table;
   const printed = booklet.pages.flatMap((page) =>
-    tablesOn(page).flatMap(({ rows }) => rows.map(({ score, texts }) => [page.group, score, ...texts])),
+    tablesOn(page).flatMap(({ rows }) =>
+      rows.map(({ scores, cells }) => [page.group, ...scores, ...cells.map(({ text }) => text)]),
+    ),
   );
   const expected = normSet.groups.flatMap(({ rows }, group) =>
     rows.map((row) => [group, row.score, row.scoreText, row.printed, ...columns.map((key) => row.texts[key])]),

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import { ogivePicture } from '../../../shared-core/pages/ogive-picture.ts';
 import { textWidth } from '../../../shared-core/pages/text-width.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
@@ -13,7 +14,7 @@ function picture(cohort: SampleCohort, curve: Partial<NormProject['curve']> = {}
   }));
   const norms = set.groups[0];
   if (norms === undefined) throw new Error('no group');
-  return ogivePicture(norms, 95, within);
+  return ogivePicture(norms, 95, within, ENGLISH_WORDS);
 }
 
 const BAND = /<path d="([^"]+)" fill="#d3e4e5"/;

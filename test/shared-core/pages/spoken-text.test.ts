@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { ENGLISH_WORDS } from '../../../shared-core/languages/phrases.ts';
 import { spokenFigure, spokenHead } from '../../../shared-core/pages/spoken-text.ts';
 
 describe('figures read aloud', () => {
@@ -15,13 +16,13 @@ describe('figures read aloud', () => {
       ['–', 'no value'],
       ['12\u202f345', '12345'],
     ] as const) {
-      expect(spokenFigure(printed)).toBe(said);
+      expect(spokenFigure(ENGLISH_WORDS, printed)).toBe(said);
     }
   });
 
   it('are left as they are where they read well', () => {
     for (const printed of ['', '0', '50', '99.5', 'Mean', 'SD, dividing by n'])
-      expect(spokenFigure(printed)).toBeNull();
+      expect(spokenFigure(ENGLISH_WORDS, printed)).toBeNull();
   });
 });
 

@@ -1,17 +1,20 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { columnHeight, fillColumns, inFives } from '../../../shared-core/pages/table-rows.ts';
+import { conversionLines } from '../../../shared-core/pages/conversion-rows.ts';
+import { columnHeight, fillColumns, rowBlocks } from '../../../shared-core/pages/table-rows.ts';
 import { sampleNormSet } from './sample-norm-set.ts';
 
 const measure = { pitch: 12, gap: 5 };
 
 function fives(min: number, max: number, step = 1) {
-  const norms = sampleNormSet({ scale: { min, max, step }, groups: ['4'] }).groups[0];
+  const { groups, project } = sampleNormSet({ scale: { min, max, step }, groups: ['4'] });
+  const [norms] = groups;
   if (norms === undefined) throw new Error('no group');
-  return inFives(norms.rows, norms.group.table.scale);
+  return rowBlocks(conversionLines(project, norms), project.sheet, norms.group.table.scale);
 }
 
-const scores = (blocks: ReturnType<typeof fives>): number[][] => blocks.map((five) => five.map((row) => row.score));
+const scores = (blocks: ReturnType<typeof fives>): number[][] =>
+  blocks.map((five) => five.flatMap((row) => row.scores));
 
 describe('rows in fives', () => {
   it('begin at multiples of five steps', () => {
@@ -54,11 +57,11 @@ describe('rows in fives', () => {
             for (const column of filled.columns) {
               expect(column.flat().length).toBeGreaterThan(0);
               expect(columnHeight(column, measure)).toBeLessThanOrEqual(height + 1e-6);
-              seen.push(...column.flat().map((row) => row.score));
+              seen.push(...column.flat().flatMap((row) => row.scores));
             }
             left = filled.rest;
           }
-          expect(seen).toEqual(all.flat().map((row) => row.score));
+          expect(seen).toEqual(all.flat().flatMap((row) => row.scores));
         },
       ),
       { numRuns: 60 },

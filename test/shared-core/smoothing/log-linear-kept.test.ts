@@ -38,7 +38,7 @@ describe('indicators of a log-linear fit', () => {
     const share = (at: readonly number[]): number => teeth.reduce((sum, k) => sum + (at[k] ?? NaN), 0);
     expectNear(share(fit.probabilities), share(counts) / n, 1e-12, 'share of the teeth');
     expect(fit.df).toBe(61 - 7);
-    expect(fit.statement).toContain('every 4th score');
+    expect(fit.statement).toContain('the share of one score in every 4, counted from position 2');
   });
 
   it('keep moments over all scores, and take part in the covariance', () => {

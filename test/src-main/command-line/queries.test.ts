@@ -44,8 +44,10 @@ describe('queries', () => {
     );
   });
 
-  it('asks nothing that wants an answer of the sample', () => {
-    expect(normloom(['queries', SAMPLE_PROJECT])).toMatchObject({ exit: 0, stderr: 'No query is open.\n' });
+  it('asks only for signatures in the sample', () => {
+    const ran = normloom(['queries', SAMPLE_PROJECT]);
+    expect(ran).toMatchObject({ exit: 0, stderr: '1 query is open.\n' });
+    expect(ran.stdout).toMatch(/^should {2}release {2}unsigned\n/);
   });
 
   it('refuses what is no project, and wrong usage', () => {

@@ -32,7 +32,7 @@ export const PLAIN_WORK: DeskWork = {
   async press(request, hooks) {
     hooks.onProgress(0.5, 'Drawing pages');
     if (request.kind === 'draw')
-      return { ok: true, value: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, remarks: [] } } };
+      return { ok: true, value: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, sections: [], remarks: [] } } };
     const files = [];
     for (const file of ['booklet.pdf', 'tables.csv']) {
       const text = `${file} of ${request.project.title}`;

@@ -24,7 +24,7 @@ describe('jobs', () => {
     const { job } = await hand.ask('draw-pages', { project: newProject('x') });
     expect(await hand.endOf(job)).toEqual({
       state: 'done',
-      result: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, remarks: [] } },
+      result: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, sections: [], remarks: [] } },
     });
     expect(await hand.problem('job-state', { job })).toMatch(/was collected/);
     const handle = hand.desk.giveHandle(join(hand.folder, 'empty.csv'));

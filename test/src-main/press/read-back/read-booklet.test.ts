@@ -163,7 +163,7 @@ describe('readBooklet', () => {
     );
     expect(lostPage).toContain(`booklet.pdf, page 2: page: expected "page 2 of ${total}", found nothing`);
     const onSecond = (booklet.pages[1]?.blocks ?? []).flatMap((block) =>
-      block.kind === 'table-column' ? block.rows.map(({ score }) => score) : [],
+      block.kind === 'table-column' ? block.rows.flatMap(({ scores }) => scores) : [],
     );
     expect(onSecond.length).toBeGreaterThan(20);
     for (const score of onSecond) {
@@ -174,7 +174,7 @@ describe('readBooklet', () => {
 
     const atBreak = booklet.pages[0]?.blocks.findLast((block) => block.kind === 'table-column');
     if (atBreak?.kind !== 'table-column') throw new Error('no table on the first page');
-    const last = atBreak.rows.at(-1)?.score;
+    const last = atBreak.rows.at(-1)?.scores[0];
     const shortened = { ...atBreak, rows: atBreak.rows.slice(0, -1) };
     const pages = booklet.pages.map((page) => ({
       ...page,

@@ -1,0 +1,28 @@
+/** Technical notes on the smoothing. */
+export const ENGLISH_FIT = {
+  'fit.title': 'Technical notes on the smoothing',
+  'fit.degrees-lead': 'Degrees.',
+  'fit.fit-lead': 'Fit.',
+  'fit.beware-lead': 'Beware.',
+  'fit.degree': 'Degree',
+  'fit.df': 'df',
+  'fit.about-degrees':
+    'G² and X² tell how far the fitted frequencies lie from the observed ones. AIC and BIC add a charge for each parameter; less is better. p tests a degree against the one below it. The degree taken is in bold, above a rule.',
+  'fit.none-found': 'Where dashes stand, no fit was found.',
+  'fit.nearly-as-good': 'As good by BIC, lower or at most 2 higher: degree {degrees}.',
+  'fit.moment': 'Moment',
+  'fit.observed': 'Observed',
+  'fit.smoothed': 'Smoothed',
+  'fit.mean': 'Mean',
+  'fit.sd': 'SD, dividing by n',
+  'fit.skewness': 'Skewness',
+  'fit.excess-kurtosis': 'Excess kurtosis',
+  'fit.moment-pair': '{moment} {observed} observed, {smoothed} smoothed',
+  'fit.misfit': 'G² is {g2} and X² {x2}, on {df} degrees of freedom.',
+  'fit.bandwidth': 'The bandwidth of the kernel is {bandwidth} raw-score points.',
+  'fit.bandwidth-found': 'The bandwidth of the kernel is {bandwidth} raw-score points, found from the data.',
+  'fit.largest-move': 'The largest move of a rank is {points} percentile-rank points, at raw score {score}.',
+  'fit.changed': 'Smoothing changes {changed} of {of} printed ranks.',
+  'fit.filled-gaps': 'The curve expects five {people} or more at {scores}, where there are none.',
+  'fit.invented-dips': 'The curve dips at {scores}; the data do not.',
+} as const;
