@@ -6,7 +6,14 @@ import { boxPicture, quartersPicture } from './class-pictures.ts';
 import type { ClassPrint } from './class-print.ts';
 import { readingParagraphs, theGroup } from './class-report-texts.ts';
 import { figureInWords } from './class-words.ts';
-import { layRowTable, placeRowTable, type RowTable, type RowTableCell, type RowTableColumn } from './row-table.ts';
+import {
+  layRowTable,
+  placeRowTable,
+  type RowChart,
+  type RowTable,
+  type RowTableCell,
+  type RowTableColumn,
+} from './row-table.ts';
 import { measureRowTable, type MeasuredRowTable } from './row-table-measure.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { heightOf, linesOf, paragraphLines, placeLines, type LooseLine } from './text-lines.ts';
@@ -26,7 +33,7 @@ export function layClassFacts(flow: SheetFlow, print: ClassPrint, words: PrintWo
   const { facts, comparison } = print.results;
   laySideBySide(flow, words, [
     { name: 'counts', heading: 'class.counts-heading', table: countsTable(print, words) },
-    ...(facts.fiveNumbers === null
+    ...(facts.boxPlot === null
       ? []
       : [{ name: 'scores', heading: 'class.scores-heading', table: scoresTable(facts, words) } as const]),
   ]);
@@ -195,6 +202,25 @@ function layQuarters(flow: SheetFlow, { results }: ClassPrint, words: PrintWords
   const { facts, table } = results;
   const counts = facts.quarters.map(({ count }) => figure(words, printCount(count)));
   const expected = { n: figure(words, printCount(facts.n)), expected: quarterOf(facts.n, words) };
+  const bars: RowChart = {
+    leastWidth: LEAST_BARS,
+    draw: (rows, size, headRule) => ({
+      svg: quartersPicture(
+        facts.quarters,
+        rows.map(({ middle }) => middle),
+        size,
+        headRule,
+      ),
+      alt: say(words, 'class.quarters-alt', {
+        ...expected,
+        counts: facts.quarters
+          .map(({ ranks }, index) =>
+            say(words, 'class.quarter-alt', { ranks: figureInWords(words, ranks), count: counts[index] ?? '' }),
+          )
+          .join('; '),
+      }),
+    }),
+  };
   const quarters: RowTable = {
     name: 'quarters',
     fives: false,
@@ -207,33 +233,12 @@ function layQuarters(flow: SheetFlow, { results }: ClassPrint, words: PrintWords
       ),
       column([say(words, 'class.quarter-count')], 'figures', counts),
     ],
-    chart: {
-      leastWidth: LEAST_BARS,
-      draw: (rows, size, headRule) => ({
-        svg: quartersPicture(
-          facts.quarters,
-          rows.map(({ middle }) => middle),
-          size,
-          headRule,
-        ),
-        alt: say(words, 'class.quarters-alt', {
-          ...expected,
-          counts: facts.quarters
-            .map(({ ranks }, index) =>
-              say(words, 'class.quarter-alt', { ranks: figureInWords(words, ranks), count: counts[index] ?? '' }),
-            )
-            .join('; '),
-        }),
-      }),
-    },
+    chart: facts.boxPlot === null ? null : bars,
   };
   const measure = fitted(quarters, flow.width * BARS_SHARE);
   const heading = table.groupNoun === 'norm group' ? 'class.quarters-heading' : 'class.quarters-heading-sample';
-  const caption = captionLines(
-    flow,
-    'quarters',
-    say(words, 'class.quarters-expected', { ...expected, 'the-group': theGroup(table, words) }),
-  );
+  const said = say(words, 'class.quarters-expected', { ...expected, 'the-group': theGroup(table, words) });
+  const caption = captionLines(flow, 'quarters', facts.boxPlot === null ? '' : said);
   laySection(flow, 'quarters', say(words, heading), quarters, measure, caption);
 }
 

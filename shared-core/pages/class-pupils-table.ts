@@ -8,7 +8,7 @@ import { labelOf, pupilsInOrder, rankPlace, type ClassPrint } from './class-prin
 import { figureInWords } from './class-words.ts';
 import type { RowTable, RowTableCell, RowTableColumn } from './row-table.ts';
 
-/** A column of the pupils' table: its key in files, its heading and the printed text of a pupil. */
+/** A column of the pupils' table: its key in files, its heading, and the text of a pupil as the table prints it. */
 export interface PupilColumn {
   readonly key: string;
   readonly heading: readonly string[];
@@ -29,7 +29,7 @@ export function pupilColumns(print: ClassPrint, words: PrintWords): readonly Pup
     key,
     heading: head,
     kind: 'figures',
-    textOf: (pupil) => figure(words, textOf(pupil)),
+    textOf,
   });
   const named: PupilColumn = {
     key: file.sharing.as === 'codes' ? 'code' : 'name',
@@ -115,11 +115,12 @@ export function pupilsTable(print: ClassPrint, words: PrintWords): RowTable {
   };
 }
 
-function cellOf(text: string, kind: RowTableColumn['kind'], words: PrintWords): RowTableCell {
-  if (kind === 'words') return { text, said: null };
-  const figure = figureInWords(words, text);
-  if (text.endsWith(ADJUSTED_MARK)) return { text, said: say(words, 'spoken.adjusted', { figure }) };
-  return { text, said: figure === text ? null : figure };
+function cellOf(printed: string, kind: RowTableColumn['kind'], words: PrintWords): RowTableCell {
+  if (kind === 'words') return { text: printed, said: null };
+  const text = figure(words, printed);
+  const said = figureInWords(words, printed);
+  if (printed.endsWith(ADJUSTED_MARK)) return { text, said: say(words, 'spoken.adjusted', { figure: said }) };
+  return { text, said: said === text ? null : said };
 }
 
 /** What the chart shows of a pupil: the rank as it is printed. */

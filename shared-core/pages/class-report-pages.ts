@@ -17,7 +17,7 @@ import { layRowTable } from './row-table.ts';
 import { measureRowTable } from './row-table-measure.ts';
 import type { SheetFlow } from './sheet-flow.ts';
 import { plainParagraphs } from './text-lines.ts';
-import { SMALL_PROSE } from './type-sizes.ts';
+import { PROSE, SMALL_PROSE } from './type-sizes.ts';
 
 const ABOVE_TABLE = 12;
 const BELOW_TABLE = 5;
@@ -54,10 +54,7 @@ export function composeClassReport(print: ClassPrint): PlacedPages {
 function layPupils(flow: SheetFlow, print: ClassPrint, words: PrintWords): readonly string[] {
   flow.skip(ABOVE_TABLE);
   if (print.results.pupils.length === 0) {
-    flow.inTwoColumns(
-      plainParagraphs([say(words, 'class.nobody')], 'sans', SMALL_PROSE, flow.width, 'nobody'),
-      SMALL_PROSE,
-    );
+    flow.sideBySide(plainParagraphs([say(words, 'class.nobody')], 'sans', PROSE, flow.halfWidth, 'nobody'), [], PROSE);
     return [];
   }
   const table = pupilsTable(print, words);

@@ -40,8 +40,8 @@ export interface PlacedText {
 /** Least room between two columns; the most where no chart takes what is left. */
 const GAP = 11;
 const WIDEST_GAP = 34;
-/** Words are broken into lines at this share of the table, and never made narrower than so many points. */
-const WORDS_SHARE = 0.34;
+/** Words are broken into lines at this share of the table, beside a chart or alone, and never made narrower than so many points. */
+const WORDS_SHARE = { beside: 0.34, alone: 0.6 } as const;
 const LEAST_WORDS = 58;
 /** A column of figures wider than this is set as words. */
 const WIDEST_FIGURES = 86;
@@ -106,7 +106,8 @@ function fitted(
   const figures = natural.filter((column) => !isWords(column)).reduce((sum, column) => sum + column.width * scale, 0);
   const gaps = (natural.length - (leastChart > 0 ? 0 : 1)) * GAP * scale;
   const room = width - figures - gaps - leastChart;
-  const wanted = natural.filter(isWords).map((column) => Math.min(column.width * scale, width * WORDS_SHARE));
+  const share = width * (leastChart > 0 ? WORDS_SHARE.beside : WORDS_SHARE.alone);
+  const wanted = natural.filter(isWords).map((column) => Math.min(column.width * scale, share));
   const words = shared(wanted, room);
   const least = natural
     .filter(isWords)

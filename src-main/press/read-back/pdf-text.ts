@@ -27,6 +27,11 @@ const SAME_LINE = 0.6;
 
 /** The lines of every page of a PDF, from the top, as another program reads them. Throws on a file that is no PDF. */
 export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
+  return (await pdfParts(bytes)).map(linesOf);
+}
+
+/** The pieces of text of every page as they were drawn, in no order. Throws on a file that is no PDF. */
+export async function pdfParts(bytes: Uint8Array): Promise<readonly (readonly PdfCell[])[]> {
   const { getDocument } = await pdfReader();
   const task = getDocument({
     data: Uint8Array.from(bytes),
@@ -36,17 +41,18 @@ export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
   });
   try {
     const document = await task.promise;
-    const pages: (readonly PdfLine[])[] = [];
+    const pages: (readonly PdfCell[])[] = [];
     for (let number = 1; number <= document.numPages; number += 1) {
       const page = await document.getPage(number);
       const { items } = await page.getTextContent({ disableNormalization: true });
-      const parts = items.flatMap((item): PdfCell[] => {
-        if (!('str' in item) || item.str.trim() === '') return [];
-        const [size, slant, , , left, baseline] = item.transform.map(Number);
-        if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
-        return [{ text: item.str, left, right: left + item.width, baseline, size }];
-      });
-      pages.push(linesOf(parts));
+      pages.push(
+        items.flatMap((item): PdfCell[] => {
+          if (!('str' in item) || item.str.trim() === '') return [];
+          const [size, slant, , , left, baseline] = item.transform.map(Number);
+          if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
+          return [{ text: item.str, left, right: left + item.width, baseline, size }];
+        }),
+      );
       page.cleanup();
     }
     return pages;
