@@ -15,10 +15,10 @@ const texts = v.pipe(v.array(shortText), v.readonly());
 
 const answer = v.pipe(
   v.object({
-    /** Id of the question, which holds what was asked about: another question has another id. */
-    question: longText,
+    /** Id of the question: another thing asked has another id. */
+    question: shortText,
     /** Key of the choice. */
-    choice: shortText,
+    choice: longText,
     /** What was typed anew where the choice is `value`; empty otherwise. */
     value: shortText,
   }),
@@ -80,7 +80,7 @@ export const classFileSchema = v.pipe(
     table: v.nullable(classTableSchema),
     /** Values of the table for pupils whose row names no group; null: the table's default, if it has one. */
     group: v.nullable(texts),
-    /** Which end is good where there is no table. */
+    /** Which end is good in the standing within the class, where there is no table. */
     direction: v.picklist(['high-is-good', 'low-is-good']),
     list: classListSchema,
     answers: v.pipe(v.array(answer), v.readonly()),

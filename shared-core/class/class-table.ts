@@ -1,6 +1,7 @@
 import * as v from 'valibot';
 import { COLUMN_KEYS } from '../norms/column-keys.ts';
-import { scaleProblems } from '../scale/score-scale.ts';
+import { decimalOf } from '../scale/decimal.ts';
+import { placeOnGrid, scaleGrid, scaleProblems, type ScoreScale } from '../scale/score-scale.ts';
 
 /**
  * What the pupils of a class are looked up in: one or more conversion tables as they are printed, from a project, a
@@ -37,7 +38,7 @@ const row = v.pipe(
     /** "27", or "25–27". */
     scoreText: shortText,
     /** The percentile rank as it is printed: "63", "<1", with † where it was adjusted by hand. */
-    printed: shortText,
+    printed: v.pipe(v.string(), v.regex(/^[<>]?\d{1,3}(?:\.\d{1,40})?\u2020?$/)),
     /** The rank 0–100 before rounding where that is known, as printed in a published table; null for "<1" and ">99" there. */
     rank: v.nullable(percent),
     /** Normal curve equivalent, not rounded, held as the table holds it; null where there is none. */
@@ -110,12 +111,42 @@ export const classTableSchema = v.pipe(
     peopleNoun: v.picklist(['pupils', 'students', 'candidates', 'people']),
   }),
   v.check(
+    ({ columns }) => new Set(columns.map(({ key }) => key)).size === columns.length,
+    'a column stands in it twice',
+  ),
+  v.check(
     ({ columns, groups }) =>
-      groups.every(({ rows }) => rows.every(({ texts }) => columns.every(({ key }) => texts[key] !== undefined))),
-    'a row lacks the text of a column',
+      groups.every(({ rows }) =>
+        rows.every(
+          ({ texts }) =>
+            Object.keys(texts).length === columns.length && columns.every(({ key }) => texts[key] !== undefined),
+        ),
+      ),
+    'the texts of a row are not those of the columns',
+  ),
+  v.check(
+    ({ scale, groups }) => groups.every(({ rows }) => rowsFit(scale, rows)),
+    'the rows of a group do not fit the scale',
   ),
   v.readonly(),
 );
+
+interface RowEnds {
+  readonly low: number;
+  readonly high: number;
+}
+
+/** From the lowest score to the highest without gaps, so that every score of the scale has one row. */
+function rowsFit(scale: ScoreScale, rows: readonly RowEnds[]): boolean {
+  if (scaleProblems(scale).length > 0) return true; // told already
+  const grid = scaleGrid(scale);
+  const place = (score: number): number => {
+    const found = placeOnGrid(grid, decimalOf(score));
+    return typeof found === 'number' ? found : NaN;
+  };
+  const next = rows.reduce((expected, { low, high }) => (place(low) === expected ? place(high) + 1 : NaN), 0);
+  return next === grid.length;
+}
 
 export type ClassTable = v.InferOutput<typeof classTableSchema>;
 export type ClassTableGroup = ClassTable['groups'][number];

@@ -1,4 +1,4 @@
-import type { QuarterCount } from '../class/class-results.ts';
+import type { QuarterCount } from '../class/rank-quarters.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';

@@ -55,7 +55,7 @@ export function sampleClass({ scores, names = NAMES, missed = [], groups = [], t
     if (found === undefined) throw new Error('off the scale');
     const place = rankPlace(found);
     const quarter = place < 24.5 ? 1 : place < 49.5 ? 2 : place < 74.5 ? 3 : 4;
-    return { index, row: row(index, String(score)), name: nameAt(index), group: groups[index % Math.max(1, groups.length)] ?? '', score, scoreText: String(score), table: of, found, quarter };
+    return { index, row: row(index, String(score)), name: nameAt(index), group: groups[index % Math.max(1, groups.length)] ?? '', score, scoreText: String(score), corrected: false, table: of, found, quarter };
   });
   const sorted = [...scores].sort((a, b) => a - b);
   const at = (share: number): number => sorted[Math.round((sorted.length - 1) * share)] ?? 0;
