@@ -1,6 +1,6 @@
-import { ENGLISH_CLASS_REPORT } from './english/class-report.ts';
-import { ENGLISH_CLASS_STANDING } from './english/class-standing.ts';
-import { ENGLISH_SLIPS } from './english/slips.ts';
+import { GERMAN_CLASS_REPORT } from './german/class-report.ts';
+import { GERMAN_CLASS_STANDING } from './german/class-standing.ts';
+import { GERMAN_SLIPS } from './german/slips.ts';
 import { GERMAN_COLUMNS } from './german/columns.ts';
 import { GERMAN_FIT } from './german/fit.ts';
 import { GERMAN_METHOD } from './german/method.ts';
@@ -13,7 +13,7 @@ export const GERMAN_PHRASES: Phrases = {
   ...GERMAN_COLUMNS,
   ...GERMAN_METHOD,
   ...GERMAN_FIT,
-  ...ENGLISH_CLASS_REPORT,
-  ...ENGLISH_CLASS_STANDING,
-  ...ENGLISH_SLIPS,
+  ...GERMAN_CLASS_REPORT,
+  ...GERMAN_CLASS_STANDING,
+  ...GERMAN_SLIPS,
 };

@@ -1,6 +1,6 @@
-import { ENGLISH_CLASS_REPORT } from './english/class-report.ts';
-import { ENGLISH_CLASS_STANDING } from './english/class-standing.ts';
-import { ENGLISH_SLIPS } from './english/slips.ts';
+import { SPANISH_CLASS_REPORT } from './spanish/class-report.ts';
+import { SPANISH_CLASS_STANDING } from './spanish/class-standing.ts';
+import { SPANISH_SLIPS } from './spanish/slips.ts';
 import { SPANISH_COLUMNS } from './spanish/columns.ts';
 import { SPANISH_FIT } from './spanish/fit.ts';
 import { SPANISH_METHOD } from './spanish/method.ts';
@@ -13,7 +13,7 @@ export const SPANISH_PHRASES: Phrases = {
   ...SPANISH_COLUMNS,
   ...SPANISH_METHOD,
   ...SPANISH_FIT,
-  ...ENGLISH_CLASS_REPORT,
-  ...ENGLISH_CLASS_STANDING,
-  ...ENGLISH_SLIPS,
+  ...SPANISH_CLASS_REPORT,
+  ...SPANISH_CLASS_STANDING,
+  ...SPANISH_SLIPS,
 };

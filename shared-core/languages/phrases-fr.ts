@@ -1,6 +1,6 @@
-import { ENGLISH_CLASS_REPORT } from './english/class-report.ts';
-import { ENGLISH_CLASS_STANDING } from './english/class-standing.ts';
-import { ENGLISH_SLIPS } from './english/slips.ts';
+import { FRENCH_CLASS_REPORT } from './french/class-report.ts';
+import { FRENCH_CLASS_STANDING } from './french/class-standing.ts';
+import { FRENCH_SLIPS } from './french/slips.ts';
 import { FRENCH_COLUMNS } from './french/columns.ts';
 import { FRENCH_FIT } from './french/fit.ts';
 import { FRENCH_METHOD } from './french/method.ts';
@@ -14,7 +14,7 @@ export const FRENCH_PHRASES: Phrases = frenchSpaces({
   ...FRENCH_COLUMNS,
   ...FRENCH_METHOD,
   ...FRENCH_FIT,
-  ...ENGLISH_CLASS_REPORT,
-  ...ENGLISH_CLASS_STANDING,
-  ...ENGLISH_SLIPS,
+  ...FRENCH_CLASS_REPORT,
+  ...FRENCH_CLASS_STANDING,
+  ...FRENCH_SLIPS,
 });

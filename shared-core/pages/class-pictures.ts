@@ -1,4 +1,5 @@
 import type { QuarterCount } from '../class/rank-quarters.ts';
+import type { ScoreFacts } from '../class/score-facts.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import type { ScoreScale } from '../scale/score-scale.ts';
 import { printNumber } from '../scores/printed-number.ts';
@@ -16,8 +17,7 @@ const DOT_STEP = 3;
 
 /** The raw scores of a class on their scale: the box plot, and below it a dot for each of the class. */
 export function boxPicture(
-  numbers: FiveNumbers,
-  scores: readonly { readonly score: number; readonly count: number }[],
+  { boxPlot, scores }: Pick<ScoreFacts, 'scores'> & { readonly boxPlot: FiveNumbers },
   scale: ScoreScale,
   size: PictureSize,
   printed: (text: string) => string,
@@ -26,7 +26,7 @@ export function boxPicture(
   const axis = size.height - BELOW_AXIS;
   const x = (score: number): number =>
     SIDES + ((score - scale.min) / (scale.max - scale.min)) * (size.width - 2 * SIDES);
-  const [lowest, lower, median, upper, highest] = numbers;
+  const [lowest, lower, median, upper, highest] = boxPlot;
   const { top, height } = BOX;
   const [middle, bottom] = [top + height / 2, top + height];
   const corners = [

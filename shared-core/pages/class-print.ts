@@ -1,24 +1,35 @@
 import type { ClassFile } from '../class/class-file.ts';
 import type { ClassResults, PupilResult } from '../class/class-results.ts';
+import type { ClassStanding } from '../class/class-standing.ts';
 import type { ClassTableRow } from '../class/class-table.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
+import type { Direction } from '../scale/score-scale.ts';
 
-/** What the pages and files of a class are made from. */
-export interface ClassPrint {
+/** How a class is printed, and under which names. */
+export interface PrintedClass {
   readonly file: Pick<ClassFile, 'title' | 'date' | 'people' | 'report' | 'slips' | 'sharing'>;
-  readonly results: ClassResults;
   /** Codes by place in the list, where pupils are printed under codes; empty otherwise. */
   readonly codes: readonly string[];
 }
 
+/** What report, slips and files of a class with a table are made from. */
+export interface ClassPrint extends PrintedClass {
+  readonly results: ClassResults;
+}
+
+/** The same of a class without a table. */
+export interface StandingPrint extends PrintedClass {
+  readonly standing: ClassStanding;
+}
+
 /** Somebody of the list, by place in it. */
-interface Listed {
+export interface Listed {
   readonly index: number;
   readonly name: string;
 }
 
 /** What stands for a pupil in print: the name, or the code where pupils are printed under codes. */
-export function labelOf({ file, codes }: ClassPrint, { index, name }: Listed): string {
+export function labelOf({ file, codes }: PrintedClass, { index, name }: Listed): string {
   if (file.sharing.as !== 'codes') return name;
   const code = codes[index];
   if (code === undefined) throw new RangeError('a pupil without a code');
@@ -26,29 +37,48 @@ export function labelOf({ file, codes }: ClassPrint, { index, name }: Listed): s
 }
 
 /** Listed people in the order of print: codes in their own order, which tells nothing; otherwise that of the list. */
-export function inPrintOrder<One extends Listed>(print: ClassPrint, listed: readonly One[]): readonly One[] {
+export function inPrintOrder<One extends Listed>(print: PrintedClass, listed: readonly One[]): readonly One[] {
   if (print.file.sharing.as !== 'codes') return listed;
   return listed.toSorted((left, right) => compareTexts(labelOf(print, left), labelOf(print, right)));
 }
 
-/** The pupils with a score in the order chosen for the report; those who are alike stay in the order of the list. */
-export function pupilsInOrder(print: ClassPrint): readonly PupilResult[] {
-  const { results, file } = print;
-  const listed = inPrintOrder(print, results.pupils);
-  if (file.sharing.as === 'codes') return listed;
-  const better = results.table.scale.direction === 'high-is-good' ? -1 : 1;
-  switch (file.report.sort) {
+/** Somebody with a score. */
+interface Scored extends Listed {
+  readonly group: string;
+  readonly score: number;
+}
+
+/**
+ * Those with a score in the order chosen for the report; those who are alike stay in the order of the list. `rankOf` is
+ * the more the better.
+ */
+export function inChosenOrder<One extends Scored>(
+  print: PrintedClass,
+  scored: readonly One[],
+  direction: Direction,
+  rankOf: (one: One) => number,
+): readonly One[] {
+  const listed = inPrintOrder(print, scored);
+  if (print.file.sharing.as === 'codes') return listed;
+  const better = direction === 'high-is-good' ? 1 : -1;
+  switch (print.file.report.sort) {
     case 'list':
       return listed;
     case 'name':
       return listed.toSorted((left, right) => compareTexts(folded(left.name), folded(right.name)));
     case 'score':
-      return listed.toSorted((left, right) => better * (left.score - right.score));
+      return listed.toSorted((left, right) => better * (right.score - left.score));
     case 'rank':
-      return listed.toSorted((left, right) => rankPlace(right.found) - rankPlace(left.found));
+      return listed.toSorted((left, right) => rankOf(right) - rankOf(left));
     case 'group':
       return listed.toSorted((left, right) => compareTexts(folded(left.group), folded(right.group)));
   }
+}
+
+/** The pupils of the report in its order. */
+export function pupilsInOrder(print: ClassPrint): readonly PupilResult[] {
+  const { pupils, table } = print.results;
+  return inChosenOrder(print, pupils, table.scale.direction, ({ found }) => rankPlace(found));
 }
 
 /** A printed rank with its sign and its mark taken off: "<1" is below 1, "85†" was set by hand. */
@@ -70,7 +100,7 @@ export function rankParts(printed: string): RankParts {
 export function rankPlace({ printed }: Pick<ClassTableRow, 'printed'>): number {
   const { end, figures } = rankParts(printed);
   if (end !== null) return end === 'below' ? 0 : 100;
-  const place = Number(figures.replace(',', '.'));
+  const place = Number(figures);
   if (!Number.isFinite(place)) throw new RangeError(`no percentile rank: ${printed}`);
   return place;
 }

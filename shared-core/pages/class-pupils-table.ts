@@ -63,9 +63,9 @@ export function pupilColumns(print: ClassPrint, words: PrintWords): readonly Pup
   ];
 }
 
-/** Columns of the table that the report prints, in their print order. */
+/** The band wherever the table has one, and the chosen columns of the table, in their print order. */
 function chosenColumns({ file, results }: ClassPrint): readonly ClassTableColumn[] {
-  return results.table.columns.filter(({ key }) => file.report.columns.includes(key));
+  return results.table.columns.filter(({ key }) => key === BAND || file.report.columns.includes(key));
 }
 
 function shortened(title: string): string {

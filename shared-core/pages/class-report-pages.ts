@@ -35,15 +35,15 @@ export function composeClassReport(print: ClassPrint): PlacedPages {
   const words = printWords(file.report.language);
   const head: ReportHead = {
     title: classTitle(print, words),
-    subtitle: classSubtitle(print, words),
+    subtitle: classSubtitle(print, tableTitle(results.table), words),
     place: tableTitle(results.table),
-    foot: classFoot(print, words, results.check),
+    foot: classFoot(results.table, words, results.check),
     draft: results.table.draft,
   };
   const { flow, frame, paper } = openReport(head, file.report.paper, words);
   layTitle(flow, head, tableParagraphs(print, words));
   const remarks = layPupils(flow, print, words);
-  layMissed(flow, missedParagraphs(print, words));
+  layMissed(flow, missedParagraphs(print, results, words));
   if (results.pupils.length > MOST_ON_ONE_PAGE) flow.turn();
   else flow.skip(ABOVE_FACTS);
   layClassFacts(flow, print, words);

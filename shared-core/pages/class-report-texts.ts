@@ -1,18 +1,19 @@
-import { countedPeople, onePerson } from '../norms/norm-groups.ts';
+import { countedPeople } from '../norms/norm-groups.ts';
 import { dateInLanguage } from '../languages/number-format.ts';
-import type { PupilResult } from '../class/class-results.ts';
+import type { ClassResults } from '../class/class-results.ts';
 import type { ClassTable, ClassTableGroup } from '../class/class-table.ts';
 import { figure, say, type PrintWords } from '../languages/phrases.ts';
 import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import { printCount, printNumber } from '../scores/printed-number.ts';
-import { inPrintOrder, labelOf, type ClassPrint } from './class-print.ts';
+import { inPrintOrder, labelOf, type ClassPrint, type Listed, type PrintedClass } from './class-print.ts';
+import { inSentence } from '../languages/sentence.ts';
 import { peopleWord } from './class-words.ts';
 import { hasBands } from './class-pupils-table.ts';
 import type { Paragraph } from './paragraph.ts';
 
 /** What the report is about: the class as it is called. */
-export function classTitle({ file }: ClassPrint, words: PrintWords): string {
+export function classTitle({ file }: PrintedClass, words: PrintWords): string {
   return file.title.trim() || say(words, 'class.report');
 }
 
@@ -21,16 +22,16 @@ export function tableTitle({ title, form }: ClassTable): string {
   return [title.trim(), form.trim()].filter((part) => part !== '').join(' · ');
 }
 
-/** Under the title: the test and the day. */
-export function classSubtitle({ file, results }: ClassPrint, words: PrintWords): string {
+/** Under the title: what it is about, and the day of testing. */
+export function classSubtitle({ file }: PrintedClass, about: string, words: PrintWords): string {
   const tested =
     file.date === '' ? [] : [say(words, 'class.tested-on', { date: dateInLanguage(file.date, words.numbers) })];
-  return [tableTitle(results.table), ...tested].filter((part) => part !== '').join(', ');
+  return [about, ...tested].filter((part) => part !== '').join(', ');
 }
 
 /** Left side of the foot: which table this is, and which report. */
-export function classFoot({ results }: ClassPrint, words: PrintWords, check: string): string {
-  const { edition, date, check: tableCheck } = results.table;
+export function classFoot(table: ClassTable, words: PrintWords, check: string): string {
+  const { edition, date, check: tableCheck } = table;
   return [
     ...(edition.trim() === '' ? [] : [say(words, 'foot.edition', { edition: edition.trim() })]),
     ...(date === '' ? [] : [dateInLanguage(date, words.numbers)]),
@@ -48,7 +49,9 @@ function groupsUsed({ results }: ClassPrint): readonly ClassTableGroup[] {
 export function tableParagraphs(print: ClassPrint, words: PrintWords): readonly Paragraph[] {
   const { results, file } = print;
   const { table } = results;
-  const groups = groupsUsed(print);
+  const used = groupsUsed(print);
+  // Of a summary, a table that few were looked up in could tell who they are.
+  const groups = file.sharing.as === 'summary' && used.length > 1 ? [] : used;
   const names = groups.map(({ title, n }) =>
     n === null
       ? title
@@ -125,25 +128,35 @@ export function tableNotes(print: ClassPrint, words: PrintWords, hasChart: boole
   ];
 }
 
-/** Everybody of the list who is not in the table, by name or code, with the reason. */
-export function missedParagraphs(print: ClassPrint, words: PrintWords): readonly Paragraph[] {
-  const { results, file } = print;
-  const named = (listed: readonly Pick<PupilResult, 'index' | 'name'>[]): readonly string[] =>
+/** What became of those of a list who have no result, and which scores were entered anew. */
+type ListOutcome = Pick<ClassResults, 'missed' | 'leftOut' | 'open'> & {
+  readonly pupils: readonly (Listed & { readonly corrected: boolean })[];
+};
+
+/** Everybody of the list who is not in the table, by name or code, with the reason; and whose score was entered anew. */
+export function missedParagraphs(
+  print: PrintedClass,
+  { missed, leftOut, open, pupils }: ListOutcome,
+  words: PrintWords,
+): readonly Paragraph[] {
+  const named = (listed: readonly Listed[]): readonly string[] =>
     inPrintOrder(print, listed).map((one) => labelOf(print, one));
-  const withWhy = (aside: typeof results.open, standing: string): readonly string[] =>
+  const withWhy = (aside: ListOutcome['open'], standing: string): readonly string[] =>
     inPrintOrder(print, aside).map((one) =>
       say(words, 'class.name-and-why', {
         name: labelOf(print, one),
-        // What was asked about a row may hold names of others.
-        why: file.sharing.as === 'codes' ? standing : unclosed(one.why),
+        // What was asked about a row may hold names of others, and is asked in English.
+        why:
+          print.file.sharing.as === 'codes' || words.words !== 'en' ? standing : inSentence(words, unclosed(one.why)),
       }),
     );
   const lists = [
-    ['class.absent', named(results.missed.filter(({ status }) => status === 'absent'))],
-    ['class.not-tested', named(results.missed.filter(({ status }) => status === 'not-tested'))],
-    ['class.excused', named(results.missed.filter(({ status }) => status === 'excused'))],
-    ['class.left-out', withWhy(results.leftOut, say(words, 'class.left-out-code'))],
-    ['class.open', withWhy(results.open, say(words, 'class.open-code'))],
+    ['class.absent', named(missed.filter(({ status }) => status === 'absent'))],
+    ['class.not-tested', named(missed.filter(({ status }) => status === 'not-tested'))],
+    ['class.excused', named(missed.filter(({ status }) => status === 'excused'))],
+    ['class.left-out', withWhy(leftOut, say(words, 'class.left-out-code'))],
+    ['class.open', withWhy(open, say(words, 'class.open-code'))],
+    ['class.corrected', named(pupils.filter(({ corrected }) => corrected))],
   ] as const;
   return lists
     .filter(([, names]) => names.length > 0)
@@ -157,21 +170,29 @@ export function missedParagraphs(print: ClassPrint, words: PrintWords): readonly
 export function readingParagraphs(print: ClassPrint, words: PrintWords): readonly Paragraph[] {
   const { results, file } = print;
   const people = peopleWord(words, file.people);
-  const person = onePerson(file.people, words);
   const group = { 'the-group': theGroup(results.table, words) };
   const reading = hasBands(print)
     ? say(words, 'class.read', { ...group, people })
     : say(words, 'class.read-no-band', group);
-  const kept = {
-    names: [say(words, 'class.private-names')],
-    codes: [say(words, 'class.private-codes', { person })],
-    summary: [],
-  }[file.sharing.as];
   return [
     ...(file.sharing.as === 'summary' ? [] : [{ lead: say(words, 'class.read-lead'), text: reading }]),
     { lead: say(words, 'class.no-mean-lead'), text: say(words, 'class.no-mean', { people }) },
-    { lead: say(words, 'class.cautions-lead'), text: [say(words, 'class.cautions', { person }), ...kept].join(' ') },
+    { lead: say(words, 'class.cautions-lead'), text: say(words, 'class.cautions') },
+    ...keptParagraph(print, words),
   ];
+}
+
+/** Who may see the report; nothing of a summary, which names nobody. */
+export function keptParagraph({ file }: PrintedClass, words: PrintWords): readonly Paragraph[] {
+  const lead = say(words, 'class.private-lead');
+  switch (file.sharing.as) {
+    case 'names':
+      return [{ lead, text: say(words, 'class.private-names') }];
+    case 'codes':
+      return [{ lead, text: say(words, 'class.private-codes') }];
+    case 'summary':
+      return [];
+  }
 }
 
 /** A sentence with its end. */

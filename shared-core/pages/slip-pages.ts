@@ -43,6 +43,11 @@ export function composeSlips(print: ClassPrint): Reply<PlacedPages> {
   return { ok: false, problem: TOO_LONG };
 }
 
+/** Begins the names of all that stands on a slip, counted from 0. */
+export function slipKey(index: number): string {
+  return `slip ${index}`;
+}
+
 function title(print: ClassPrint, words: PrintWords): string {
   const named = say(words, 'slip.title', { class: classTitle(print, words) });
   return print.results.table.draft ? `${say(words, 'head.draft')} · ${named}` : named;
@@ -60,7 +65,7 @@ function placedSlips(
     for (const [index, slip] of slips.entries()) {
       const box = boxes[index % perPage];
       if (box === undefined) throw new RangeError('a slip without a place');
-      const blocks = placeSlip(slip, `slip ${index}`, box, size);
+      const blocks = placeSlip(slip, slipKey(index), box, size);
       if (blocks === null) break;
       placed.push(blocks);
     }

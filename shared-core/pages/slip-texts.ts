@@ -70,11 +70,11 @@ export function slipTexts(print: ClassPrint, words: PrintWords, pupil: PupilResu
       paragraphs: [
         say(words, 'slip.not-per-cent'),
         say(words, 'slip.not-judgement', { name }),
-        say(words, 'slip.not-alone', { name }),
+        say(words, 'slip.not-alone'),
         say(words, 'slip.ask'),
       ],
     },
-    foot: classFoot(print, words, results.check),
+    foot: classFoot(table, words, results.check),
   };
 }
 

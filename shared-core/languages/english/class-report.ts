@@ -35,6 +35,7 @@ export const ENGLISH_CLASS_REPORT = {
   'class.column-code': 'Code',
   'class.column-group': 'Group',
   'class.column-table': 'Table',
+  'class.column-status': 'Status',
   'class.column-score': 'Raw\nscore',
   'class.column-rank': 'Percentile\nrank',
   'class.column-band': 'Band',
@@ -52,9 +53,15 @@ export const ENGLISH_CLASS_REPORT = {
   'class.excused': 'Excused ({count}):',
   'class.left-out': 'Left out ({count}):',
   'class.open': 'Not yet answered ({count}):',
+  'class.corrected': 'Score entered anew ({count}):',
   'class.name-and-why': '{name} ({why})',
   'class.left-out-code': 'left out by an answer about the list',
   'class.open-code': 'a question about the list is open',
+
+  'class.sheet-class': 'Class',
+  'class.sheet-groups': 'Groups',
+  'class.sheet-summary': 'Summary',
+  'class.sheet-about': 'About',
 
   'class.count-listed': 'In the list',
   'class.count-reported': 'With a result',
@@ -76,9 +83,8 @@ export const ENGLISH_CLASS_REPORT = {
   'class.highest': 'Highest',
   'class.box-caption':
     'The box reaches from hinge to hinge and so holds the middle half of the class; the line in it is the median, the strokes end at the lowest and the highest score. Each dot is one of the class.',
-  'class.box-alt': 'Box plot of the raw scores on the scale from {lowest} to {highest}: {numbers}.',
+  'class.box-alt': 'Box plot of the raw scores: {numbers}.',
   'class.scores-listed': 'A box plot needs five scores or more. The scores are: {scores}.',
-  'class.scores-hidden': 'The raw scores of so small a class are not shown, because they could tell who had which.',
   'class.quarters-heading': 'Where the class stands in the norm group',
   'class.quarters-heading-sample': 'Where the class stands in the sample',
   'class.quarter-ranks': 'Percentile ranks',
@@ -105,17 +111,25 @@ export const ENGLISH_CLASS_REPORT = {
     'The raw score is what was counted on the test; the percentile rank is its place in {the-group}. Small differences between ranks, above all in the middle of the scale, lie within the error of the test.',
   'class.cautions-lead': 'Take care.',
   'class.cautions':
-    'A percentile rank is no per cent of right answers and no mark. It holds for this form, this season and this group. Do not decide anything about a {person} on one score alone; follow local rules and the judgement of those who are qualified.',
+    'A percentile rank is no per cent of right answers and no mark. It holds for this form, this season and this group. No decision about anybody may rest on one score alone; follow local rules and the judgement of those who are qualified.',
+  'class.private-lead': 'Who may see it.',
   'class.private-names':
     'This report holds names. Keep it like a mark book, and pass it on only to those who may see it.',
   'class.private-codes':
-    'Codes stand for names, in an order drawn by chance. Keep the key apart from this report; with it, or with what somebody knows of a {person}, results can be told.',
+    'Codes stand for names, in an order drawn by chance. Keep the key apart from this report; with it, or with what somebody knows of them already, results can be told apart by name.',
 
-  'class.summary': 'Summary without {people}',
   'class.summary-lead': 'Summary.',
-  'class.summary-text':
-    'This summary names nobody. Numbers from which something about fewer than {least} {people} could be found out are not shown; “hidden” stands for them, also where a larger number would have let them be worked out.',
-  'class.summary-text-all': 'This summary names nobody. All its numbers are shown.',
+  'class.summary-all': 'This summary names nobody, and all its counts are shown.',
+  'class.summary-hidden':
+    'This summary names nobody. A count that is smaller than {least} is hidden, and so is every count from which one could be worked out; “hidden” may stand for any number.',
+  'class.summary-class-only':
+    'Counts by group are left out, because not all groups are large enough to hide counts below {least} in them.',
+  'class.summary-nothing':
+    'This summary names nobody, and gives no counts: whatever was left out to hide counts below {least} could be worked out again from the rest.',
+  'class.summary-again':
+    'Share it once: if it is made again after somebody has joined, left or been tested later, the difference between the two can tell of that one.',
+  'class.summary-ends': 'Lowest and highest score are not told, since each belongs to somebody.',
+  'class.summary-not-tested': 'Not\ntested',
   'class.hidden': 'hidden',
   'class.summary-heading': 'The class by percentile rank',
   'class.summary-ranks': 'Ranks\n{ranks}',
@@ -123,6 +137,4 @@ export const ENGLISH_CLASS_REPORT = {
   'class.summary-total': 'In the\nlist',
   'class.summary-whole': 'Whole class',
   'class.summary-no-group': 'No group',
-  'class.summary-withheld':
-    'The class is too small for a table of counts: whatever was left out could be worked out again from the rest.',
 } as const;

@@ -43,6 +43,6 @@ export const ENGLISH_SLIPS = {
   'slip.not-judgement':
     'It shows how one test went on one day. It is no judgement of {name}, and it does not tell what {name} can learn.',
   'slip.not-alone':
-    'What teachers and family know of {name} counts as well. Nothing should be decided on this result alone.',
+    'What teachers and family know besides counts as well. Nothing should be decided on this result alone.',
   'slip.ask': 'Please ask the school if anything is unclear, how this result is used, and which rules hold for it.',
 } as const;
