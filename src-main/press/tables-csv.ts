@@ -1,11 +1,11 @@
 import { definitionKey } from '../../shared-core/norms/definitions.ts';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
+import { csvBytes } from './csv-text.ts';
 import { safeForCsv } from './safe-text.ts';
 
 /**
- * All tables as one csv file by RFC 4180: UTF-8 with a byte-order mark (spreadsheets guess the encoding without it),
- * comma, CRLF, decimal point. Numbers are unrounded; `printed` and the columns `printed-…` hold the texts of the booklet.
- * The names mean what they mean in `norm-set.json`: `percentile-rank` is the observed one, `standard-error` that of the
+ * All tables as one csv file, with the decimal point. Numbers are unrounded; `printed` and the columns `printed-…` hold the
+ * texts of the booklet. The names mean what they mean in `norm-set.json`: `percentile-rank` is the observed one, `standard-error` that of the
  * midpoint rank, `interval-low` and `interval-high` (0–100) are of the observed rank; where a group is smoothed, `printed`
  * follows `smoothed-percentile-rank`. Cells are empty where there is no such number.
  * `adjusted` tells what was changed by hand, why and by whom; `status` is draft or released.
@@ -60,14 +60,9 @@ export function tablesCsv(normSet: NormSet): Uint8Array {
       status,
     ]),
   );
-  const text = [heads, ...records].map((record) => `${record.map(quoted).join(',')}\r\n`).join('');
-  return new TextEncoder().encode(`\uFEFF${text}`);
+  return csvBytes([heads, ...records]);
 }
 
 function numberOrNothing(value: number | null | undefined): string {
   return value === null || value === undefined ? '' : String(value);
-}
-
-function quoted(cell: string): string {
-  return /[",\r\n]|^\s|\s$/.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;
 }
