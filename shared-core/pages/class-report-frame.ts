@@ -19,7 +19,8 @@ export interface ReportHead {
   /** At the right of the running head. */
   readonly place: string;
   readonly foot: string;
-  readonly draft: boolean;
+  /** "DRAFT" where the table is one; empty otherwise. */
+  readonly draft: string;
 }
 
 export interface OpenReport {
@@ -39,7 +40,7 @@ export function openReport(head: ReportHead, size: ReportChoices['paper'], words
   const paper = paperOf({ paper: size, orientation: 'portrait', marginMm: null, gutterMm: 0 });
   const frame = pageFrame(
     {
-      survey: markedRuns(head.draft ? say(words, 'head.draft') : '', head.title),
+      survey: markedRuns(head.draft, head.title),
       place: head.place,
       line: head.foot,
       numbered: (page, pages) => say(words, 'foot.page', { page: String(page), pages: String(pages) }),
@@ -84,7 +85,7 @@ export function layMissed(flow: SheetFlow, missed: readonly Paragraph[]): void {
 export function placedReport(
   { title, draft }: ReportHead,
   { flow, frame, paper }: OpenReport,
-  words: PrintWords,
+  { tag }: ReportChoices['language'],
   remarks: readonly string[],
 ): PlacedPages {
   const pages = flow.pages.map((body, index): PlacedPage => ({
@@ -93,7 +94,8 @@ export function placedReport(
     blocks: [...frame.blocks(index + 1, flow.pages.length), ...body],
   }));
   return {
-    title: draft ? `${say(words, 'head.draft')} · ${title}` : title,
+    title: draft === '' ? title : `${draft} · ${title}`,
+    language: tag,
     paper,
     pages,
     remarks: [...remarks, ...missingSignsRemark(pages)],

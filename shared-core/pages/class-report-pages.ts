@@ -22,8 +22,6 @@ import { PROSE, SMALL_PROSE } from './type-sizes.ts';
 const ABOVE_TABLE = 12;
 const BELOW_TABLE = 5;
 const ABOVE_FACTS = 22;
-/** A smaller class goes on with its numbers on the page where it ends. */
-const MOST_ON_ONE_PAGE = 10;
 
 /**
  * The report of a class: every pupil of the list, in the table or by name below it, then the class in numbers. Under
@@ -38,16 +36,16 @@ export function composeClassReport(print: ClassPrint): PlacedPages {
     subtitle: classSubtitle(print, tableTitle(results.table), words),
     place: tableTitle(results.table),
     foot: classFoot(results.table, words, results.check),
-    draft: results.table.draft,
+    draft: results.table.draft ? say(words, 'head.draft') : '',
   };
   const { flow, frame, paper } = openReport(head, file.report.paper, words);
   layTitle(flow, head, tableParagraphs(print, words));
   const remarks = layPupils(flow, print, words);
   layMissed(flow, missedParagraphs(print, results, words));
-  if (results.pupils.length > MOST_ON_ONE_PAGE) flow.turn();
+  if (results.facts.boxPlot !== null) flow.turn();
   else flow.skip(ABOVE_FACTS);
   layClassFacts(flow, print, words);
-  return placedReport(head, { flow, frame, paper }, words, remarks);
+  return placedReport(head, { flow, frame, paper }, file.report.language, remarks);
 }
 
 /** The table of the pupils with its notes; says what of it had to be left out. */

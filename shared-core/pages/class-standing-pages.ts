@@ -30,7 +30,7 @@ export function composeClassStanding(print: StandingPrint): PlacedPages {
     subtitle: classSubtitle(print, title, words),
     place: title,
     foot: say(words, 'class.report-check', { check: standing.check }),
-    draft: false,
+    draft: '',
   };
   const open = openReport(head, file.report.paper, words);
   const { flow } = open;
@@ -45,7 +45,7 @@ export function composeClassStanding(print: StandingPrint): PlacedPages {
   layCountsAndScores(flow, standing.counts, standing.facts, scaleOf(print), words);
   flow.skip(BETWEEN_SECTIONS);
   flow.inTwoColumns(paragraphLines(closingParagraphs(print, words), PROSE, flow.halfWidth, 'reading'), PROSE);
-  return placedReport(head, open, words, standing.remark === null ? [] : [standing.remark]);
+  return placedReport(head, open, file.report.language, standing.remark === null ? [] : [standing.remark]);
 }
 
 /** What the standing is, and how coarse. */

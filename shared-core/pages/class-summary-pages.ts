@@ -33,7 +33,7 @@ export function composeClassSummary(print: ClassPrint): PlacedPages {
     subtitle: classSubtitle(print, tableTitle(results.table), words),
     place: tableTitle(results.table),
     foot: classFoot(results.table, words, summary.check),
-    draft: results.table.draft,
+    draft: results.table.draft ? say(words, 'head.draft') : '',
   };
   const open = openReport(head, file.report.paper, words);
   const { flow } = open;
@@ -43,7 +43,7 @@ export function composeClassSummary(print: ClassPrint): PlacedPages {
   if (summary.compared !== null) layCompared(flow, summary.compared, words);
   flow.skip(BETWEEN_SECTIONS);
   flow.inTwoColumns(paragraphLines(readingParagraphs(print, words), PROSE, flow.halfWidth, 'reading'), PROSE);
-  return placedReport(head, open, words, []);
+  return placedReport(head, open, file.report.language, []);
 }
 
 /** What is hidden and why, in the words of the report. */

@@ -38,7 +38,7 @@ export function composeSlips(print: ClassPrint): Reply<PlacedPages> {
     if (placed === null) continue;
     const pages = pagesOf(placed, count, paper, title(print, words));
     const remarks = [...fewerRemark(perPage, count), ...ownTextRemarks(own), ...missingSignsRemark(pages)];
-    return { ok: true, value: { title: title(print, words), paper, pages, remarks } };
+    return { ok: true, value: { title: title(print, words), language: language.tag, paper, pages, remarks } };
   }
   return { ok: false, problem: TOO_LONG };
 }

@@ -13,24 +13,17 @@ export interface DrawnPdf {
   readonly remarks: readonly string[];
 }
 
-/** What a document says of itself besides its title. */
-export interface DocumentFacts {
-  /** Tag of its language (BCP 47). */
-  readonly language: string;
-  /** The moment that it carries as its own. */
-  readonly day: Date;
-}
-
 /**
  * Placed pages as a tagged PDF of version 1.7: pdfmake makes the document, and every placed mark is drawn into it under
- * its element of the structure tree. The same pages give the same bytes.
+ * its element of the structure tree. `day` is the moment that it carries as its own. The same pages and day give the same
+ * bytes.
  */
 export async function placedPdf(
   placed: PlacedPages,
-  facts: DocumentFacts,
+  day: Date,
   onProgress: (share: number) => void = () => {},
 ): Promise<DrawnPdf> {
-  const made = housePrinter(PICTURE_FONTS).createPdf(definition(placed, facts));
+  const made = housePrinter(PICTURE_FONTS).createPdf(definition(placed, day));
   const document = await made.getStream();
   drawPages(document, placed, onProgress);
   const { start, count } = document.bufferedPageRange();
@@ -41,7 +34,7 @@ export async function placedPdf(
 }
 
 /** The document with its first page, still white. */
-function definition({ title, paper }: PlacedPages, { language, day }: DocumentFacts): TDocumentDefinitions {
+function definition({ title, paper, language }: PlacedPages, day: Date): TDocumentDefinitions {
   return {
     version: '1.7',
     language,

@@ -36,6 +36,9 @@ export interface ClassPressChoices {
   readonly slips: boolean;
 }
 
+/** Pages of a class for the screen; it has no blocks to turn to. */
+export type DrawnClassPages = Omit<DrawnPages, 'sections'>;
+
 /** Files of a class, made in memory and read back. */
 export interface PressedClass {
   /** The certificate last; the key to codes is not among them. */
@@ -72,16 +75,14 @@ export async function pressClass(
   const printed = made.value;
   const day = classDay(file);
   const report = reportPages(printed);
-  const pdf = await placedPdf(report, { language: file.report.language.tag, day }, (share) =>
-    onProgress(share * AFTER_REPORT, 'Drawing the report'),
-  );
+  const pdf = await placedPdf(report, day, (share) => onProgress(share * AFTER_REPORT, 'Drawing the report'));
   const slips = slipsOf(printed, choices);
   if (!slips.ok) return slips;
   const slipPages = slips.value.pages;
   const drawnSlips =
     slipPages === null
       ? null
-      : await placedPdf(slipPages, { language: file.slips.language.tag, day }, (share) =>
+      : await placedPdf(slipPages, day, (share) =>
           onProgress(AFTER_REPORT + share * (AFTER_SLIPS - AFTER_REPORT), 'Drawing the slips'),
         );
   onProgress(AFTER_SLIPS, 'Filling workbook and csv');
@@ -114,32 +115,28 @@ export async function pressClass(
 }
 
 /** The report alone, for the pages on screen. */
-export async function drawClassReport(file: ClassFile, onProgress: PressProgress = silent): Promise<Reply<DrawnPages>> {
+export async function drawClassReport(
+  file: ClassFile,
+  onProgress: PressProgress = silent,
+): Promise<Reply<DrawnClassPages>> {
   const made = printOfClass(file);
   if (!made.ok) return made;
-  return drawn(reportPages(made.value), file.report.language.tag, classDay(file), onProgress);
+  return drawn(reportPages(made.value), classDay(file), onProgress);
 }
 
 /** The slips alone, for the pages on screen. */
-export async function drawSlips(file: ClassFile, onProgress: PressProgress = silent): Promise<Reply<DrawnPages>> {
+export async function drawSlips(file: ClassFile, onProgress: PressProgress = silent): Promise<Reply<DrawnClassPages>> {
   const made = printOfClass(file);
   if (!made.ok) return made;
   const slips = slipsOf(made.value, { slips: true });
   if (!slips.ok) return slips;
   const { pages, remarks } = slips.value;
   if (pages === null) return { ok: false, problem: remarks.join(' ') };
-  return drawn(pages, file.slips.language.tag, classDay(file), onProgress);
+  return drawn(pages, classDay(file), onProgress);
 }
 
-async function drawn(
-  placed: PlacedPages,
-  language: string,
-  day: Date,
-  onProgress: PressProgress,
-): Promise<Reply<DrawnPages>> {
-  const { pdf, pages, remarks } = await placedPdf(placed, { language, day }, (share) =>
-    onProgress(share, 'Drawing the pages'),
-  );
+async function drawn(placed: PlacedPages, day: Date, onProgress: PressProgress): Promise<Reply<DrawnClassPages>> {
+  const { pdf, pages, remarks } = await placedPdf(placed, day, (share) => onProgress(share, 'Drawing the pages'));
   return { ok: true, value: { pdf: Buffer.from(pdf).toString('base64'), pages, remarks } };
 }
 

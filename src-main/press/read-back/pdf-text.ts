@@ -1,5 +1,6 @@
 import { createRequire } from 'node:module';
 import { pathToFileURL } from 'node:url';
+import { BOX } from './read-text.ts';
 import type * as pdfjs from 'pdfjs-dist/legacy/build/pdf.mjs';
 
 /** Words that stand together on a page; points from the left and from the bottom of the paper. */
@@ -24,14 +25,24 @@ export type PdfPages = readonly (readonly PdfLine[])[];
 const WORD_GAP = 0.12;
 const CELL_GAP = 0.35;
 const SAME_LINE = 0.6;
+/** What a reader is told where a box is drawn. */
+const NO_GLYPH = '\0';
 
-/** The lines of every page of a PDF, from the top, as another program reads them. Throws on a file that is no PDF. */
-export async function pdfPages(bytes: Uint8Array): Promise<PdfPages> {
-  return (await pdfParts(bytes)).map(linesOf);
+/** A PDF as another program reads it. */
+export interface PdfRead<Page> {
+  readonly pages: readonly Page[];
+  /** The program that made it, as it names itself; empty where it does not. */
+  readonly producer: string;
 }
 
-/** The pieces of text of every page as they were drawn, in no order. Throws on a file that is no PDF. */
-export async function pdfParts(bytes: Uint8Array): Promise<readonly (readonly PdfCell[])[]> {
+/** Reads the lines of every page of a PDF, from the top. Throws on a file that is no PDF. */
+export async function readPdf(bytes: Uint8Array): Promise<PdfRead<readonly PdfLine[]>> {
+  const { pages, producer } = await readPdfParts(bytes);
+  return { pages: pages.map(linesOf), producer };
+}
+
+/** Reads the pieces of text of every page as they were drawn, in no order. Throws on a file that is no PDF. */
+export async function readPdfParts(bytes: Uint8Array): Promise<PdfRead<readonly PdfCell[]>> {
   const { getDocument } = await pdfReader();
   const task = getDocument({
     data: Uint8Array.from(bytes),
@@ -45,25 +56,21 @@ export async function pdfParts(bytes: Uint8Array): Promise<readonly (readonly Pd
     for (let number = 1; number <= document.numPages; number += 1) {
       const page = await document.getPage(number);
       const { items } = await page.getTextContent({ disableNormalization: true });
-      pages.push(
-        items.flatMap((item): PdfCell[] => {
-          if (!('str' in item) || item.str.trim() === '') return [];
-          const [size, slant, , , left, baseline] = item.transform.map(Number);
-          if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
-          return [{ text: item.str, left, right: left + item.width, baseline, size }];
-        }),
-      );
+      const parts = items.flatMap((item): PdfCell[] => {
+        if (!('str' in item) || item.str.trim() === '') return [];
+        const [size, slant, , , left, baseline] = item.transform.map(Number);
+        if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
+        return [{ text: item.str.replaceAll(NO_GLYPH, BOX), left, right: left + item.width, baseline, size }];
+      });
+      pages.push(parts);
       page.cleanup();
     }
-    return pages;
+    const { info } = await document.getMetadata();
+    const producer: unknown = Reflect.get(info, 'Producer');
+    return { pages, producer: typeof producer === 'string' ? producer : '' };
   } finally {
     await task.destroy();
   }
-}
-
-/** Without any space: line breaks and the width of spaces say nothing about a text. */
-export function squeezed(text: string): string {
-  return text.replace(/\s+/g, '');
 }
 
 function linesOf(parts: readonly PdfCell[]): readonly PdfLine[] {

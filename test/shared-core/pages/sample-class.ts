@@ -30,6 +30,13 @@ export function sampleTable(change: (project: NormProject) => NormProject = (pro
 /** Made once: it is the same for every class. */
 export const SAMPLE_TABLE = sampleTable();
 
+/** The table of grade 5 alone, beside which a list may name groups of its own. */
+export const UNGROUPED_TABLE: ClassTable = {
+  ...SAMPLE_TABLE,
+  groupColumns: [],
+  groups: SAMPLE_TABLE.groups.slice(1).map((group) => ({ ...group, values: [] })),
+};
+
 export interface SampleClass {
   /** A score for each, or a text: "absent", "excused", or what does not fit. */
   readonly entries: readonly (number | string)[];
@@ -48,8 +55,9 @@ export function sampleFile(
   return {
     ...file,
     date: '2026-06-12',
-    table: SAMPLE_TABLE,
-    group: ['5'],
+    ...(groups.every((group) => group === '' || group === '4' || group === '5')
+      ? { table: SAMPLE_TABLE, group: ['5'] }
+      : { table: UNGROUPED_TABLE, group: null }),
     report: { ...file.report, columns: ['stanine'] },
     list: {
       decimalMark: '.',

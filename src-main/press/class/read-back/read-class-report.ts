@@ -5,7 +5,7 @@ import { pupilColumns } from '../../../../shared-core/pages/class-pupils-table.t
 import { standingColumns, standingInOrder } from '../../../../shared-core/pages/class-standing-table.ts';
 import { missingCharacters } from '../../../../shared-core/pages/text-width.ts';
 import { CellComparison, type FileReadBack } from '../../read-back/cell-differences.ts';
-import { squeezed } from '../../read-back/pdf-text.ts';
+import { squeezed } from '../../read-back/read-text.ts';
 import { readPlaced, type FoundTexts } from './read-placed.ts';
 import { textFromTable } from './table-texts.ts';
 

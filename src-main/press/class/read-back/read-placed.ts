@@ -1,7 +1,7 @@
 import type { PlacedPages } from '../../../../shared-core/pages/booklet.ts';
 import type { TextRole } from '../../../../shared-core/pages/text-role.ts';
 import type { CellComparison } from '../../read-back/cell-differences.ts';
-import { pdfParts } from '../../read-back/pdf-text.ts';
+import { readPdfParts } from '../../read-back/pdf-text.ts';
 import { foundLines, type FoundLine } from './found-lines.ts';
 
 /** What a reader of the file finds in the place of every text. */
@@ -18,7 +18,7 @@ export async function readPlaced(
   bytes: Uint8Array,
   placed: PlacedPages,
 ): Promise<FoundTexts> {
-  const { lines, strays } = foundLines(placed, await pdfParts(bytes));
+  const { lines, strays } = foundLines(placed, (await readPdfParts(bytes)).pages);
   for (const { page, role, expected, found } of lines) {
     comparison.compare({ where: `page ${page}`, group: '', score: '', column: roleInWords(role) }, expected, found);
   }

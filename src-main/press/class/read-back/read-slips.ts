@@ -3,7 +3,7 @@ import type { PlacedPages } from '../../../../shared-core/pages/booklet.ts';
 import { pupilsInOrder, type ClassPrint } from '../../../../shared-core/pages/class-print.ts';
 import { slipKey } from '../../../../shared-core/pages/slip-pages.ts';
 import { CellComparison, type FileReadBack } from '../../read-back/cell-differences.ts';
-import { squeezed } from '../../read-back/pdf-text.ts';
+import { squeezed } from '../../read-back/read-text.ts';
 import { readPlaced } from './read-placed.ts';
 import { textFromTable } from './table-texts.ts';
 

@@ -18,7 +18,7 @@ import { printOf, sampleFile, spreadScores } from '../../../shared-core/pages/sa
 const PRINT = printOf(sampleFile({ entries: spreadScores(28), groups: ['a', 'b'] }));
 const REPORT = composeClassReport(PRINT);
 const SLIPS = slips();
-const FACTS = { language: 'en', day: new Date(0) };
+const DAY = new Date(0);
 
 function slips(): PlacedPages {
   const made = composeSlips(PRINT);
@@ -53,12 +53,12 @@ const told = ({ differences }: FileReadBack): readonly string[] => differences.m
 
 /** Draws the first pages and reads them as if they were the second. */
 async function readReport(drawn: PlacedPages, meant: PlacedPages): Promise<readonly string[]> {
-  const { pdf } = await placedPdf(drawn, FACTS);
+  const { pdf } = await placedPdf(drawn, DAY);
   return told(await readClassReport('class-report.pdf', pdf, meant, PRINT));
 }
 
 async function readDrawnSlips(drawn: PlacedPages, meant: PlacedPages): Promise<readonly string[]> {
-  const { pdf } = await placedPdf(drawn, FACTS);
+  const { pdf } = await placedPdf(drawn, DAY);
   return told(await readSlips('slips.pdf', pdf, meant, PRINT));
 }
 
@@ -90,14 +90,18 @@ describe('reading a class report back', () => {
     if (page === undefined || line?.kind !== 'text') throw new Error('no line');
     const more = { ...line, x: 200, baseline: 700, runs: [{ text: '7', face: 'sans' as const }] };
     const pages = [{ ...page, blocks: [...page.blocks, more] }, ...REPORT.pages.slice(1)];
-    expect(await readReport({ ...REPORT, pages }, REPORT)).toEqual(['class-report.pdf, page 1: text: expected nothing, found "7"']);
+    expect(await readReport({ ...REPORT, pages }, REPORT)).toEqual([
+      'class-report.pdf, page 1: text: expected nothing, found "7"',
+    ]);
   });
 
   it('finds a page that is missing, and a row that was left out', async () => {
     expect((await readReport({ ...REPORT, pages: REPORT.pages.slice(0, 1) }, REPORT)).length).toBeGreaterThan(20);
     const without = REPORT.pages.map((page) => ({
       ...page,
-      blocks: page.blocks.filter((block) => block.kind !== 'text' || block.role.kind !== 'cell' || block.role.row !== 12),
+      blocks: page.blocks.filter(
+        (block) => block.kind !== 'text' || block.role.kind !== 'cell' || block.role.row !== 12,
+      ),
     }));
     expect((await readReport({ ...REPORT, pages: without }, REPORT)).length).toBeGreaterThan(4);
   });
@@ -117,7 +121,12 @@ describe('reading a class report back', () => {
       expect((await readDrawnSlips(wrong, SLIPS)).length).toBeGreaterThan(0);
       expect((await readDrawnSlips(wrong, wrong)).join(' ')).toContain('slip 10');
     }
-    const sentence = changed(SLIPS, ({ role, runs }) => 'name' in role && role.name.startsWith('slip 4 means') && runs.some(({ text }) => /\d/.test(text)), otherDigit);
+    const sentence = changed(
+      SLIPS,
+      ({ role, runs }) =>
+        'name' in role && role.name.startsWith('slip 4 means') && runs.some(({ text }) => /\d/.test(text)),
+      otherDigit,
+    );
     expect((await readDrawnSlips(sentence, SLIPS)).length).toBeGreaterThan(0);
   });
 });
@@ -166,7 +175,9 @@ describe('reading the workbook and the csv of a class back', () => {
   it('finds a wrong number of the sheets themselves, against the row of the table', async () => {
     const [people, ...others] = content.sheets;
     if (people === undefined) throw new Error('no sheet');
-    const rows = people.rows.map((row, index) => (index === 6 ? row.map((text, place) => (place === 3 ? otherDigit(text) : text)) : row));
+    const rows = people.rows.map((row, index) =>
+      index === 6 ? row.map((text, place) => (place === 3 ? otherDigit(text) : text)) : row,
+    );
     const wrong = { ...content, sheets: [{ ...people, rows }, ...others] };
     const bytes = await classWorkbook(wrong, report, new Date(0));
     const differences = told(await readClassWorkbook('class.xlsx', bytes, wrong, PRINT));

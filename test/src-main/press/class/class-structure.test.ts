@@ -15,10 +15,12 @@ const folder = mkdtempSync(join(tmpdir(), 'normloom-class-structure-'));
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
 async function treeOf(placed: PlacedPages, name: string): Promise<ReadElement> {
-  const { pdf } = await placedPdf(placed, { language: 'en', day: new Date(0) });
+  const { pdf } = await placedPdf(placed, new Date(0));
   const file = join(folder, `${name}.pdf`);
   writeFileSync(file, pdf);
-  expect(execFileSync('qpdf', ['--check', file], { encoding: 'utf8' })).toContain('No syntax or stream encoding errors');
+  expect(execFileSync('qpdf', ['--check', file], { encoding: 'utf8' })).toContain(
+    'No syntax or stream encoding errors',
+  );
   const tree = await readStructure(file, pdf);
   expect(tree.faults).toEqual([]);
   expect(tree.loose).toEqual([]);
@@ -75,7 +77,11 @@ describe('the structure tree of a class', () => {
     print.results.pupils.forEach(({ scoreText, found }, index) => {
       const table = tables[index];
       if (table === undefined) throw new Error('no figures');
-      expect(findAll(findOne(table, 'THead'), 'TH').map((head) => spoken(head).trim())).toEqual(['Score', 'Percentile rank', 'Band']);
+      expect(findAll(findOne(table, 'THead'), 'TH').map((head) => spoken(head).trim())).toEqual([
+        'Score',
+        'Percentile rank',
+        'Band',
+      ]);
       expect(findAll(findOne(table, 'TBody'), 'TD').map(spoken)).toEqual(
         [scoreText, found.printed, found.band?.text ?? ''].map(saidOf),
       );
@@ -86,7 +92,9 @@ describe('the structure tree of a class', () => {
           `A scale of percentile ranks from 1 to 99. The percentile rank is ${saidOf(found.printed)}, the band ${saidOf(found.band?.text ?? '')}.`,
       ),
     );
-    const order = elementsIn(sheet).slice(0, 8).map(({ type }) => type);
+    const order = elementsIn(sheet)
+      .slice(0, 8)
+      .map(({ type }) => type);
     expect(order).toEqual(['H1', 'P', 'Table', 'Figure', 'P', 'H2', 'P', 'P']);
   });
 });

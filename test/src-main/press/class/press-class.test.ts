@@ -6,7 +6,10 @@ import { NAMES, SAMPLE_TABLE, sampleFile, spreadScores } from '../../../shared-c
 import { readPdf } from '../pdf-text.ts';
 import { bytesOf, everythingIn, pressed } from './pressed-class.ts';
 
-const CLASS = sampleFile({ entries: [...spreadScores(25), 'absent', 'absent', 'excused', 'what?'], groups: ['a', 'b'] });
+const CLASS = sampleFile({
+  entries: [...spreadScores(25), 'absent', 'absent', 'excused', 'what?'],
+  groups: ['a', 'b'],
+});
 const codesOf = (file: ClassFile): ClassFile => ({ ...file, sharing: { as: 'codes', seed: 99 } });
 const summaryOf = (file: ClassFile): ClassFile => ({ ...file, sharing: { as: 'summary', seed: 99 } });
 const standingOf = (file: ClassFile): ClassFile => ({ ...file, table: null, group: null });
@@ -92,7 +95,10 @@ describe('pressing a class', () => {
     const made = await pressed(standingOf(CLASS));
     expect(made.files.map(({ file }) => file)).not.toContain('slips.pdf');
     const { pages } = await readPdf(bytesOf(made, 'class-report.pdf'));
-    const text = pages.flat().map(({ text }) => text).join(' ');
+    const text = pages
+      .flat()
+      .map(({ text }) => text)
+      .join(' ');
     expect(text).toContain('Class standing');
     expect(text).not.toMatch(/percentile|norm|stanine/i);
     expect(text).toContain('1 pupil of 25 is 4.0 points of the last column.');

@@ -41,7 +41,9 @@ function unfoldedPdf(bytes: Uint8Array): string {
     execFileSync('qpdf', ['--qdf', '--object-streams=disable', '--stream-data=uncompress', from, to]);
     const text = readFileSync(to).toString('latin1');
     const decoded = [...text.matchAll(/<([0-9a-fA-F]{8,})>/g)].map(([, hex = '']) =>
-      Buffer.from(hex.slice(0, hex.length - (hex.length % 4)), 'hex').swap16().toString('utf16le'),
+      Buffer.from(hex.slice(0, hex.length - (hex.length % 4)), 'hex')
+        .swap16()
+        .toString('utf16le'),
     );
     const wide = text.replace(/\0/g, '');
     return [text, wide, ...decoded].join('\n');
