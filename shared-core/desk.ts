@@ -169,7 +169,10 @@ export interface ListedFile {
 export interface PressedClassFiles {
   readonly folder: string;
   readonly files: readonly PressedFile[];
-  /** Name of the file that holds who has which code, among the files; null where no codes are printed. */
+  /**
+   * The file that holds who has which code, one of the files; null where no codes are printed. It lies in a folder of
+   * its own beside the other: this is the name of that folder, a slash and the name of the file.
+   */
   readonly keyFile: string | null;
   /** Cells that were read back and agree. */
   readonly cells: number;

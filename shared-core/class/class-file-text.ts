@@ -1,5 +1,6 @@
 import * as v from 'valibot';
 import { fromFileKeys, toFileKeys } from '../norms/file-keys.ts';
+import { CLASS_ENDING } from '../norms/file-endings.ts';
 import { isFileObject, jsonIn, type FileObject } from '../norms/json-object.ts';
 import { notAsSaved, notComplete, savedObject, type SavedKind } from '../norms/saved-text.ts';
 import { CLASS_FORMAT, CLASS_VERSION, classFileSchema, type ClassFile } from './class-file.ts';
@@ -9,7 +10,7 @@ const CLASS: SavedKind = {
   format: CLASS_FORMAT,
   version: CLASS_VERSION,
   name: 'class',
-  ending: '*.normclass',
+  ending: `*${CLASS_ENDING}`,
   wayOut: 'Open a backup, or read the class list again',
 };
 

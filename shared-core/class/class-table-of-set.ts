@@ -6,7 +6,7 @@ import { definitionInWords } from '../norms/definitions.ts';
 import { groupKey, groupNoun } from '../norms/norm-groups.ts';
 import type { GroupNorms } from '../norms/group-norms.ts';
 import type { NormProject } from '../norms/norm-project.ts';
-import { pressProblem, type NormSet } from '../norms/norm-set.ts';
+import { buildNormSet, pressProblem, type NormSet } from '../norms/norm-set.ts';
 import { columnOf } from '../norms/table-columns.ts';
 import type { ClassTable, ClassTableGroup, ClassTableRow } from './class-table.ts';
 
@@ -52,6 +52,12 @@ export function classTableOfSet(normSet: NormSet, source: 'project' | 'edition')
       peopleNoun: project.people,
     },
   };
+}
+
+/** The same from a project whose norm set is still to be worked out. */
+export function projectClassTable(project: NormProject, source: 'project' | 'edition'): Reply<ClassTable> {
+  const built = buildNormSet(project);
+  return built.ok ? classTableOfSet(built.normSet, source) : built;
 }
 
 /** Columns of the booklet, with the measurement band exactly where there is a reliability. */

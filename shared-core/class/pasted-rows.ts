@@ -7,9 +7,9 @@ export interface ListedRow {
   readonly cells: readonly string[];
 }
 
-/** Rows of a file that were read already: the first is row 1. */
-export function listedRows(rows: readonly (readonly string[])[]): readonly ListedRow[] {
-  return rows.map((cells, index) => ({ line: index + 1, cells }));
+/** Rows of a file that were read already; `first` is the number of the first of them in the file. */
+export function listedRows(rows: readonly (readonly string[])[], first = 1): readonly ListedRow[] {
+  return rows.map((cells, index) => ({ line: first + index, cells }));
 }
 
 export interface PastedRows {
