@@ -6,12 +6,9 @@ export const EDITION_ENDING = '.normedition';
 /** Ending of the files that hold a class. */
 export const CLASS_ENDING = '.normclass';
 
-/** Ending of the file that holds a class with its names. */
-export const CLASS_ENDING = '.normclass';
-
 /** What a file from outside the program is opened as, by its name; whatever has no ending of ours is a cohort file. */
 export function givenKind(name: string): GivenFile['kind'] {
-  if (name.toLowerCase().endsWith(CLASS_ENDING)) return 'class';
+  if (opensAsClass(name)) return 'class';
   return opensAsProject(name) ? 'project' : 'cohort';
 }
 
