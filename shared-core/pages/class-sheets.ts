@@ -1,3 +1,4 @@
+import type { ClassTable } from '../class/class-table.ts';
 import { figure, printWords, say, type PhraseKey, type PrintWords } from '../languages/phrases.ts';
 import { asSentence } from '../languages/sentence.ts';
 import { printCount } from '../scores/printed-number.ts';
@@ -33,6 +34,8 @@ export interface ClassSheet {
 export interface ClassSheets {
   readonly title: string;
   readonly subtitle: string;
+  /** "DRAFT" where the table is one; empty otherwise. */
+  readonly draft: string;
   readonly check: string;
   readonly sheets: readonly ClassSheet[];
 }
@@ -48,7 +51,7 @@ export function classSheets(print: ClassPrint): ClassSheets {
     ...missedParagraphs(print, results, words),
     ...readingParagraphs(print, words),
   ];
-  return sheetsOf(print, words, tableTitle(results.table), results.check, [
+  return sheetsOf(print, words, aboutTable(results.table, words), results.check, [
     peopleSheet(print, words, peopleRows(print, words)),
     figuresSheet(words, [
       ...countRows(results.counts, words),
@@ -88,7 +91,7 @@ export function summarySheets(print: ClassPrint): ClassSheets {
   const rows = summaryRows(summary, words);
   const hidden = say(words, 'class.hidden');
   const statistics = summary.statistics.map(({ name, printed }) => [say(words, `class.${name}`), printed] as const);
-  return sheetsOf(print, words, tableTitle(print.results.table), summary.check, [
+  return sheetsOf(print, words, aboutTable(print.results.table, words), summary.check, [
     {
       name: say(words, 'class.sheet-summary'),
       title: say(words, 'class.summary-heading'),
@@ -130,7 +133,7 @@ export function summarySheets(print: ClassPrint): ClassSheets {
 export function standingSheets(print: StandingPrint): ClassSheets {
   const words = printWords(print.file.report.language);
   const { standing } = print;
-  return sheetsOf(print, words, say(words, 'standing.title'), standing.check, [
+  return sheetsOf(print, words, { title: say(words, 'standing.title'), draft: '' }, standing.check, [
     peopleSheet(print, words, standingRows(print, words)),
     figuresSheet(words, [
       ...countRows(standing.counts, words),
@@ -143,11 +146,17 @@ export function standingSheets(print: StandingPrint): ClassSheets {
 function sheetsOf(
   print: PrintedClass,
   words: PrintWords,
-  about: string,
+  { title, draft }: About,
   check: string,
   sheets: readonly ClassSheet[],
 ): ClassSheets {
-  return { title: classTitle(print, words), subtitle: classSubtitle(print, about, words), check, sheets };
+  return { title: classTitle(print, words), subtitle: classSubtitle(print, title, words), draft, check, sheets };
+}
+
+type About = Pick<ClassSheets, 'title' | 'draft'>;
+
+function aboutTable(table: ClassTable, words: PrintWords): About {
+  return { title: tableTitle(table), draft: table.draft ? say(words, 'head.draft') : '' };
 }
 
 const STATUS_WORDS: Readonly<Record<ListedStatus, PhraseKey & `class.count-${string}`>> = {

@@ -7,6 +7,7 @@ import { workbookBytes } from '../workbook-bytes.ts';
 import { asBold, asHead, asProse, asTitle, fillCell, linesIn, ruleBelow, titleRow } from '../workbook-look.ts';
 import { setUpPages } from '../workbook-pages.ts';
 
+export const SUBTITLE_ROW = 2;
 export const HEAD_ROW = 4;
 const NARROWEST = 10;
 const WIDEST = 44;
@@ -23,19 +24,29 @@ export async function classWorkbook(content: ClassSheets, report: ReportChoices,
   workbook.lastModifiedBy = 'Normloom';
   workbook.created = day;
   workbook.modified = day;
-  workbook.title = content.title;
+  const { draft } = content;
+  workbook.title = marked(draft, content.title);
   const names = sheetNames(
     content.sheets.map(({ name }) => name),
     [],
   );
-  const foot = [content.title, content.subtitle, content.check].join(' \u00b7 ');
+  const foot = [marked(draft, content.title), content.subtitle, content.check].join(' \u00b7 ');
   content.sheets.forEach((sheet, index) => {
     const worksheet = workbook.addWorksheet(names[index] ?? '');
-    const across =
-      sheet.heads.length === 0 ? fillProse(worksheet, sheet) : fillTable(worksheet, sheet, content.subtitle);
+    const across = sheet.heads.length === 0 ? fillProse(worksheet, sheet) : fillTable(worksheet, sheet);
+    worksheet.getCell(SUBTITLE_ROW, 1).value = subtitleOf(sheet, content);
     setUpPages(worksheet, { paper: report.paper, orientation: 'portrait', language: report.language }, foot, across);
   });
   return workbookBytes(workbook, [], day);
+}
+
+/** The line below the title of a sheet: what the table is, and whether it is a draft. */
+export function subtitleOf({ heads }: ClassSheet, { draft, subtitle }: ClassSheets): string {
+  return heads.length === 0 ? draft : marked(draft, subtitle);
+}
+
+function marked(draft: string, text: string): string {
+  return [draft, text].filter((part) => part !== '').join(' \u00b7 ');
 }
 
 /** Leads and paragraphs; returns the width in characters. */
@@ -57,7 +68,7 @@ function fillProse(worksheet: Worksheet, { title, rows }: ClassSheet): number {
 }
 
 /** Title, subtitle, heads and rows in fives; returns the width in characters. */
-function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassSheet, subtitle: string): number {
+function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassSheet): number {
   const widths = heads.map((head, place) =>
     Math.min(
       WIDEST,
@@ -67,7 +78,6 @@ function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassShe
   const across = widths.reduce((sum, width) => sum + width, 0);
   worksheet.columns = widths.map((width) => ({ width }));
   titleRow(worksheet, title, heads.length, across);
-  worksheet.getCell(2, 1).value = subtitle;
   heads.forEach((head, place) => {
     const cell = worksheet.getCell(HEAD_ROW, place + 1);
     cell.value = head;

@@ -127,7 +127,7 @@ function withoutSpaces(text: string): string {
 
 const FACES = ['sans', 'sans-bold', 'serif-bold', 'serif-italic'] as const satisfies readonly FontFace[];
 
-/** A sign that a typeface lacks is drawn as a box, read back as any sign, and may have been written from right to left. */
+/** A sign that a typeface lacks is drawn as a box, read back as some other, and may have been written from right to left. */
 function signsDrawn(text: string): string {
   const plain = withoutSpaces(text.normalize('NFKC'));
   const lacking = new Set(FACES.flatMap((face) => missingCharacters(plain, face)));

@@ -74,7 +74,7 @@ function inPrint(text: string, kind: 'words' | 'figures', words: PrintWords): st
   return (kind === 'figures' ? figure(words, text) : text).normalize('NFC');
 }
 
-/** False where a typeface lacks a sign, which is read back as any sign; the line is compared without it. */
+/** False where a typeface lacks a sign, which is read back as some other; the line is compared without it. */
 function isDrawn(text: string): boolean {
   return missingCharacters(text, 'sans').length === 0 && missingCharacters(text, 'sans-bold').length === 0;
 }

@@ -5,7 +5,7 @@ import type { ClassSheet, ClassSheets } from '../../../../shared-core/pages/clas
 import { printWords } from '../../../../shared-core/languages/phrases.ts';
 import { CellComparison, type FileReadBack } from '../../read-back/cell-differences.ts';
 import { isPrintedNumber, shownCell } from '../../read-back/shown-cell.ts';
-import { HEAD_ROW } from '../class-workbook.ts';
+import { HEAD_ROW, SUBTITLE_ROW, subtitleOf } from '../class-workbook.ts';
 import { textFromTable } from './table-texts.ts';
 
 /** First row of the paragraphs of a sheet without heads. */
@@ -32,20 +32,22 @@ export async function readClassWorkbook(
   );
   for (let index = 0; index < count; index += 1) {
     const [sheet, found] = [content.sheets[index], workbook.worksheets[index]];
-    if (sheet !== undefined && found !== undefined) readSheet(comparison, found, sheet);
+    if (sheet !== undefined && found !== undefined) readSheet(comparison, found, sheet, content);
   }
   const [people] = workbook.worksheets;
   if (print !== null && people !== undefined) readPupils(comparison, people, print);
   return comparison.result('class workbook');
 }
 
-function readSheet(comparison: CellComparison, found: Worksheet, { title, heads, kinds, rows }: ClassSheet): void {
+function readSheet(comparison: CellComparison, found: Worksheet, sheet: ClassSheet, content: ClassSheets): void {
+  const { title, heads, kinds, rows } = sheet;
   const compare = (row: number, column: number, expected: string, kind: 'words' | 'figures'): void => {
     const cell = found.getCell(row, column);
     const place = { where: `${found.name}!${cell.address}`, group: '', score: '', column: heads[column - 1] ?? '' };
     comparison.compare(place, expected, foundIn(cell, expected, kind));
   };
   compare(1, 1, title, 'words');
+  compare(SUBTITLE_ROW, 1, subtitleOf(sheet, content), 'words');
   heads.forEach((head, place) => compare(HEAD_ROW, place + 1, head, 'words'));
   const first = heads.length === 0 ? FIRST_PARAGRAPH : HEAD_ROW + 1;
   rows.forEach((row, index) => {
