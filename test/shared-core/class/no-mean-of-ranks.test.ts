@@ -3,6 +3,8 @@ import { describe, expect, it } from 'vitest';
 import type { ClassFile } from '../../../shared-core/class/class-file.ts';
 import { classStanding } from '../../../shared-core/class/class-standing.ts';
 import { classFromText, classToText } from '../../../shared-core/class/class-file-text.ts';
+import { classSheets, summarySheets } from '../../../shared-core/pages/class-sheets.ts';
+import { printOfClass, reportPages } from '../../../shared-core/pages/print-of-class.ts';
 import { codeFiles, withoutWords } from '../../architecture/source-files.ts';
 import { classOf, resultsOf, type Typed } from './classes.ts';
 import { publishedTable } from './published-facts.ts';
@@ -13,6 +15,17 @@ function numbersIn(value: unknown): readonly number[] {
   if (typeof value === 'string') return [...value.matchAll(/\d+(?:\.\d+)?/g)].map(([found]) => Number(found));
   if (typeof value !== 'object' || value === null) return [];
   return Object.values(value).flatMap(numbersIn);
+}
+
+/** Every text in plain data; places on paper are numbers and no texts. */
+function textsIn(value: unknown): readonly string[] {
+  if (typeof value === 'string') return [value];
+  return typeof value !== 'object' || value === null ? [] : Object.values(value).flatMap(textsIn);
+}
+
+/** Numbers that stand alone in a text, parts of check codes not among them. */
+function figuresOf(text: string): readonly number[] {
+  return [...text.matchAll(/(?<![\w.-])\d+(?:\.\d+)?(?![\w-])/g)].map(([found]) => Number(found));
 }
 
 const meanOf = (values: readonly number[]): number => values.reduce((sum, one) => sum + one, 0) / values.length;
@@ -79,6 +92,15 @@ describe('a mean of percentile ranks', () => {
     const nces = pupils.slice(0, 2).map(({ found }) => found.nce ?? NaN);
     expect(printed).toContain(Number(meanOf(nces).toFixed(1)));
     expect(known.groups).toHaveLength(1);
+    for (const as of ['names', 'codes', 'summary'] as const) {
+      const made = printOfClass({ ...file, sharing: { as, seed: 5 } });
+      if (!made.ok || made.value.kind === 'standing') throw new Error('no report');
+      const sheets = as === 'summary' ? summarySheets(made.value.print) : classSheets(made.value.print);
+      const texts = [reportPages(made.value), sheets].flatMap(textsIn).flatMap(figuresOf);
+      expect(texts.length).toBeGreaterThan(20);
+      for (const mean of [37.123, 37.12, 37.1, 37, 25.5575, 25.6, 44.8333, 44.83, 44.8])
+        expect(texts).not.toContain(mean);
+    }
     expect(classFromText(classToText(file))).toEqual({ ok: true, file });
   });
 
@@ -122,21 +144,50 @@ describe('the source of the class', () => {
     expect(ARITHMETIC.test('rank === null ? null : normalisedZ(ratioNear(rank))')).toBe(false);
   });
 
+  /** All code that knows classes: the rooms, their pages and how these are pressed. */
+  const classCode = () => [
+    ...codeFiles('shared-core/class'),
+    ...codeFiles('shared-core/pages').filter(({ path }) => /\/(?:class|standing|slip|band-chart|print-of)-/.test(path)),
+    ...codeFiles('src-main/press/class'),
+  ];
+  const plainCode = (text: string): string => withoutWords(text.replace(/`[^`]*`/g, ''));
+
   it('reckons with no rank', () => {
-    const files = codeFiles('shared-core/class');
-    expect(files.length).toBeGreaterThan(15);
+    const files = classCode();
+    expect(files.length).toBeGreaterThan(60);
     const found = files.flatMap(({ path, text }) =>
-      withoutWords(text)
+      plainCode(text)
         .split('\n')
         .flatMap((line) => (ARITHMETIC.test(line) ? [`${path}: ${line.trim()}`] : [])),
     );
-    expect(found).toEqual([]);
+    // One rank as an exact share, to find its place on the scale of the band chart.
+    expect(found).toEqual([
+      'shared-core/pages/band-chart-scale.ts: const z = normalisedZ(ratio(BigInt(Math.round(rank * PARTS)), BigInt(PARTS)));',
+    ]);
   });
 
-  it('takes means of raw scores and normal curve equivalents alone', () => {
-    const takers = codeFiles('shared-core/class').filter(({ text }) =>
-      /\bmean\w*\b/i.test(withoutWords(text.replace(/`[^`]*`/g, ''))),
-    );
-    expect(takers.map(({ path }) => path)).toEqual(['shared-core/class/group-comparison.ts']);
+  it('averages in two places only: raw scores in numbers, and groups by raw scores and normal curve equivalents', () => {
+    // A mean is a sum over a length, or is had from the summary of a frequency table.
+    const averages = /\/\s*(?:\w+\.)*(?:length|n|count)\b|\bsummarise\(/;
+    for (const code of ['sum / values.length', 'total / n', 'summarise(table)']) expect(averages.test(code)).toBe(true);
+    const takers = classCode().filter(({ text }) => averages.test(plainCode(text)));
+    expect(takers.map(({ path }) => path)).toEqual([
+      'shared-core/class/group-comparison.ts',
+      'shared-core/class/score-facts.ts',
+    ]);
+  });
+
+  it('passes means on that were made there: a summary only tells which of them may stand in it', () => {
+    const users = classCode().filter(({ text }) => /\b(?:mean|nceMean|meanOf)\b/.test(plainCode(text)));
+    expect(users.map(({ path }) => path)).toEqual([
+      'shared-core/class/group-comparison.ts',
+      'shared-core/class/shared-summary.ts',
+      'shared-core/pages/class-facts-blocks.ts',
+      'shared-core/pages/class-sheets.ts',
+      'shared-core/pages/class-summary-pages.ts',
+      'shared-core/pages/class-summary.ts',
+    ]);
+    const [summary] = users.filter(({ path }) => path.endsWith('/shared-summary.ts'));
+    expect(plainCode(summary?.text ?? '')).not.toMatch(/\brank|\bnce|[^/*]\/[^/*]|\breduce\(/i);
   });
 });
