@@ -1,0 +1,180 @@
+import { readdirSync, readFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { expect, test, type Page } from 'playwright/test';
+import { complaintsOf, expectAccessible, expectNoSidewaysScroll, goTo } from './page-checks.ts';
+import { Program } from './program.ts';
+
+let program: Program;
+
+test.beforeEach(async () => {
+  program = await Program.inNewHome();
+});
+
+test.afterEach(async () => {
+  await program.end();
+});
+
+const SIZES = [
+  { width: 1024, height: 700, scheme: 'light' },
+  { width: 1440, height: 900, scheme: 'light' },
+  { width: 1280, height: 800, scheme: 'dark' },
+] as const;
+
+/** Looks at a station in every size and scheme, and keeps the pictures. */
+async function lookAt(page: Page, name: string): Promise<void> {
+  for (const { width, height, scheme } of SIZES) {
+    await page.setViewportSize({ width, height });
+    await page.emulateMedia({ colorScheme: scheme });
+    await expectNoSidewaysScroll(page);
+    await page.waitForTimeout(150);
+    await page.screenshot({ path: `.cache/journey-pictures/class-${name}-${width}-${scheme}.png` });
+  }
+  await expectAccessible(page);
+}
+
+/** Thirty-one rows as a spreadsheet gives them: three absent, one score too high, one name twice, one name with "=". */
+const ROWS: readonly (readonly [string, string])[] = [
+  ['=Una Marsh', '21'],
+  ['Bram Tolly', '99'],
+  ['Ceri Quill', 'absent'],
+  ['Dov Ister', 'absent'],
+  ['Edda Wray', 'absent'],
+  ['Fenn Orrick', '17'],
+  ['Fenn Orrick', '24'],
+  ...Array.from({ length: 24 }, (_, index): readonly [string, string] => [
+    `Pupil ${String.fromCharCode(65 + index)} Harrow`,
+    String(8 + ((index * 7) % 30)),
+  ]),
+];
+const PASTED = ['Name\tRaw score', ...ROWS.map((cells) => cells.join('\t'))].join('\n');
+
+function bytesWithName(folder: string, file: string): boolean {
+  const bytes = readFileSync(join(folder, file));
+  return bytes.includes('Una Marsh') || bytes.includes('Fenn Orrick');
+}
+
+test('a pasted list of thirty-one becomes a report and slips, and the key to its codes stays apart', async ({
+  page,
+}) => {
+  const complaints = complaintsOf(page);
+  await page.goto(await program.start());
+  await expect(page.getByRole('heading', { name: 'Normloom' })).toBeVisible();
+  await page.getByRole('button', { name: 'Class report' }).click();
+  await page.getByRole('button', { name: 'The table of the sample' }).click();
+  await expect(page.getByRole('main')).toContainText('Scores are looked up in');
+  await lookAt(page, 'table');
+
+  await goTo(page, 'List');
+  await page.getByLabel('Class', { exact: true }).fill('Class 5a');
+  await page.getByLabel(/^The list: one line for each/).fill(PASTED);
+  await page.getByRole('button', { name: 'Read this list' }).click();
+  await expect(page.getByLabel('What Name holds')).toHaveValue('name');
+  await expect(page.getByLabel('What Raw score holds')).toHaveValue('score');
+  await lookAt(page, 'incoming');
+  await page.getByRole('button', { name: 'Take these 31 rows' }).click();
+  await expect(page.getByLabel('Name, line 2', { exact: true })).toHaveValue('=Una Marsh');
+  await lookAt(page, 'list');
+
+  await goTo(page, 'Questions');
+  await expect(page.getByRole('button', { name: /^Questions/ })).toContainText('2 of 2 open');
+  const tooHigh = page.getByRole('group', { name: /^Line 3: the score “99” lies above/ });
+  await tooHigh.getByLabel('Type the right score').check();
+  await tooHigh.getByRole('textbox').fill('1000');
+  await tooHigh.getByRole('textbox').press('Tab');
+  await expect(tooHigh.getByRole('alert')).toContainText('lies above');
+  await tooHigh.getByRole('textbox').fill('29');
+  await tooHigh.getByRole('textbox').press('Tab');
+  await expect(tooHigh).toContainText('Answered.');
+  await lookAt(page, 'questions');
+  await page
+    .getByRole('group', { name: /^Lines 7 and 8/ })
+    .getByLabel('One pupil: keep line 8 only')
+    .check();
+  await expect(page.getByRole('button', { name: /^Questions/ })).toContainText('2 answered');
+
+  await goTo(page, 'Report');
+  await expect(page.getByText(/^page 1 of \d+$/)).toBeVisible({ timeout: 30_000 });
+  await expect(page.getByRole('row', { name: 'absent 3' })).toBeVisible();
+  await lookAt(page, 'report');
+  await goTo(page, 'Slips');
+  await expect(page.getByText(/^page 1 of 7$/)).toBeVisible({ timeout: 30_000 });
+  await lookAt(page, 'slips');
+
+  await goTo(page, 'Sharing and press');
+  await page.getByRole('radio', { name: /^With codes/ }).check();
+  await page.getByRole('button', { name: 'Press', exact: true }).click();
+  await expect(page.getByText('Pressed.')).toBeVisible({ timeout: 60_000 });
+  await lookAt(page, 'press');
+  const key = await page.getByRole('table', { name: 'The key to the codes' }).getByRole('cell').first().innerText();
+  const folder = folderOf(await page.getByText(/^Pressed\. The files lie in/).innerText());
+  const files = readdirSync(folder);
+  expect(files.filter((file) => file.endsWith('.pdf')).length).toBeGreaterThanOrEqual(2);
+  expect(key).toContain('key');
+  expect(bytesWithName(folder, key)).toBe(true);
+  expect(files.filter((file) => file !== key && bytesWithName(folder, file))).toEqual([]);
+
+  await page.getByRole('button', { name: 'Save' }).click();
+  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible();
+  await page.getByRole('radio', { name: /^As a summary/ }).check();
+  await expect(page.getByText(/^Changed since/)).toBeVisible();
+  await page.getByRole('button', { name: 'Normloom' }).click();
+  await expect(page.getByRole('dialog', { name: 'Class 5a is not saved' })).toBeVisible();
+  await page.getByRole('button', { name: 'Leave without saving' }).click();
+  await page.getByRole('button', { name: 'Class 5a' }).click();
+  await goTo(page, 'Questions');
+  await expect(page.getByRole('button', { name: /^Questions/ })).toContainText('2 answered');
+  expect(complaints).toEqual([]);
+});
+
+function folderOf(line: string): string {
+  return /lie in (.*)\.$/.exec(line.split('\n')[0] ?? '')?.[1] ?? '';
+}
+
+test('a published table is typed in, its gap is told by line, and a class is looked up in it', async ({ page }) => {
+  const complaints = complaintsOf(page);
+  await page.goto(await program.start());
+  await page.getByRole('button', { name: 'Class report' }).click();
+  await page.getByRole('button', { name: 'A published table' }).click();
+  const lines = page.getByLabel(/^Lines of the table/);
+  await lines.fill('0-4 <1\n5-9 12\n11 40\n12-20 >99');
+  await page.getByRole('button', { name: 'Take this table' }).click();
+  await expect(page.getByRole('alert')).toContainText('Give the test its title');
+  await page.getByLabel('Title of the test').fill('Harbour spelling test');
+  await page.getByLabel('Where it is printed').fill('Harbour tests, manual, table 3');
+  await page.getByRole('button', { name: 'Take this table' }).click();
+  await expect(page.getByRole('alert')).toContainText('Line 3: Score 10 has no rank');
+  await lookAt(page, 'published');
+  await lines.fill('0-4 <1\n5-9 12\n10-11 40\n12-20 >99');
+  await page.getByRole('button', { name: 'Take this table' }).click();
+  await expect(page.getByText('Scores are looked up in “Harbour spelling test”.')).toBeVisible();
+  await expect(page.getByText('Harbour tests, manual, table 3')).toBeVisible();
+
+  await goTo(page, 'List');
+  const more = page.getByRole('form', { name: 'One more' });
+  for (const [name, score] of [
+    ['Ada Lorne', '7'],
+    ['=Ben Stroud', '20'],
+  ] as const) {
+    await more.getByLabel('Name').fill(name);
+    await more.getByLabel('Raw score').fill(score);
+    await more.getByRole('button', { name: 'Add a row' }).click();
+  }
+  await expect(page.getByRole('row', { name: /rank 12/ })).toBeVisible();
+  await expect(page.getByRole('row', { name: /rank >99/ })).toBeVisible();
+  await page.getByRole('button', { name: 'Undo' }).click();
+  await expect(page.getByRole('row', { name: /rank >99/ })).toBeHidden();
+  await page.getByRole('button', { name: 'Redo' }).click();
+
+  await goTo(page, 'Report');
+  await expect(page.getByText(/^page 1 of \d+$/)).toBeVisible({ timeout: 30_000 });
+  await goTo(page, 'Sharing and press');
+  await page.getByRole('button', { name: 'Press', exact: true }).click();
+  await expect(page.getByText('Pressed.')).toBeVisible({ timeout: 60_000 });
+  const folder = folderOf(await page.getByText(/^Pressed\. The files lie in/).innerText());
+  const files = readdirSync(folder);
+  expect(readFileSync(join(folder, files.find((file) => file.endsWith('.csv')) ?? ''), 'utf8')).toContain(
+    '=Ben Stroud',
+  );
+  expect(files.filter((file) => /Stroud|Lorne/.test(file))).toEqual([]);
+  expect(complaints).toEqual([]);
+});
