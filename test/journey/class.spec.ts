@@ -1,5 +1,5 @@
 import { readdirSync, readFileSync } from 'node:fs';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { expect, test, type Page } from 'playwright/test';
 import { complaintsOf, expectAccessible, expectNoSidewaysScroll, goTo } from './page-checks.ts';
 import { Program } from './program.ts';
@@ -110,8 +110,9 @@ test('a pasted list of thirty-one becomes a report and slips, and the key to its
   const files = readdirSync(folder);
   expect(files.filter((file) => file.endsWith('.pdf')).length).toBeGreaterThanOrEqual(2);
   expect(key).toContain('key');
-  expect(bytesWithName(folder, key)).toBe(true);
-  expect(files.filter((file) => file !== key && bytesWithName(folder, file))).toEqual([]);
+  expect(bytesWithName(dirname(folder), key)).toBe(true);
+  expect(readFileSync(join(dirname(folder), key), 'utf8')).toContain('=Una Marsh');
+  expect(files.filter((file) => bytesWithName(folder, file))).toEqual([]);
 
   await page.getByRole('button', { name: 'Save' }).click();
   await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible();
