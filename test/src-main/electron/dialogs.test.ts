@@ -74,6 +74,18 @@ describe('native dialogs', () => {
     expect(chosen.mock.calls).toEqual([['/surveys/grade-5.normloom']]);
   });
 
+  it('choose and save classes by their ending, and tell the system of none, since their names are nobody’s business', async () => {
+    electron.dialog.showOpenDialog.mockResolvedValue({ canceled: false, filePaths: ['/lists/5b.normclass'] });
+    expect(await dialogs.chooseFile('class')).toBe('/lists/5b.normclass');
+    expect(await dialogs.chooseFile('class-list')).toBe('/lists/5b.normclass');
+    const filters = electron.dialog.showOpenDialog.mock.calls.map(([, asked]) => asked.filters?.[0]?.extensions);
+    expect(filters).toEqual([['normclass'], ['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls']]);
+    electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: '/lists/5c' });
+    expect(await dialogs.chooseSave('class', '/lists/5b.normclass')).toBe('/lists/5c.normclass');
+    expect(electron.dialog.showSaveDialog.mock.calls[0]?.[1].filters?.[0]?.extensions).toEqual(['normclass']);
+    expect(chosen).not.toHaveBeenCalled();
+  });
+
   it('ask again where the full name is taken, so that nothing is written over unasked', async () => {
     const folder = mkdtempSync(join(tmpdir(), 'normloom-dialogs-'));
     const taken = join(folder, 'grade-4.normloom');
