@@ -59,7 +59,12 @@ describe('startPressJob', () => {
     expect(table.value.groups[0]?.rows).toHaveLength(41);
     const row = { name: 'Ida', code: '', scoreText: '12', group: '', statusText: '' };
     const rows = [1, 2].map((line) => ({ ...row, line, name: `Ida ${line}` }));
-    const file = { ...newClass('Class 5b', 1), table: table.value, list: { decimalMark: '.' as const, rows } };
+    const file = {
+      ...newClass('Class 5b', 1),
+      table: table.value,
+      group: table.value.groups[0]?.values ?? null,
+      list: { decimalMark: '.' as const, rows },
+    };
     const drawn = await startPressJob({ kind: 'draw-class', class: file, what: 'report' }, quiet, never(), worker);
     expect(drawn).toMatchObject({ ok: true, value: { kind: 'drawn-class', drawn: { remarks: [] } } });
     const into = { folder: join(folder, 'class'), keyFolder: join(folder, 'class-key') };
