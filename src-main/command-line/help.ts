@@ -16,8 +16,8 @@ normloom compare OLD NEW [--format text|json]
                                             every printed cell and choice in which two projects differ
 normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
 normloom class LIST [--table TABLE] --into FOLDER [options]
-                                            report of a class, its slips, workbook and csv; without a table, the
-                                            order within the class
+                                            report of a class, its slips, workbook and csv; without a table,
+                                            the order within the class
 normloom queries PROJECT [--format text|json]
                                             what a proof-reader would ask, and what was answered
 normloom --help | --version
@@ -72,12 +72,12 @@ Options of erratum:
   --cut RANK                also tells whose unrounded rank lies on another side of this percentile rank
 
 Options of class:
-  --table TABLE             project or released edition, or a text with a published table: a raw score or range
-                            and its percentile rank a line
+  --table TABLE             project or released edition, or a text with a published table: a raw score or
+                            range and its percentile rank a line
   --group VALUE,VALUE       the table for pupils whose row names no group: its values or its title
   --low-is-good             low scores are the good ones, where no project says so
-  --codes                   codes in random order in place of names; who has which goes to key-to-codes.csv
-  --seed N                  whole number that the codes are drawn from, to be kept as the key is; without it, chance
+  --codes                   codes in random order in place of names; key-to-codes.csv tells who has which
+  --seed N                  whole number that the codes are drawn from, as secret as the key; default chance
   --summary                 counts and no pupils, with small cells left out
   --slips N                 a slip for each pupil, 1 to 4 to a page
   --title TEXT              what the class is called
