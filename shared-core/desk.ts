@@ -1,3 +1,6 @@
+import type { ClassFile } from './class/class-file.ts';
+import type { ClassTable } from './class/class-table.ts';
+import type { ListedRow } from './class/pasted-rows.ts';
 import type { CohortSource, NormProject } from './norms/norm-project.ts';
 import type { Reading } from './norms/reading.ts';
 import type { BookletSection } from './pages/booklet-sections.ts';
@@ -144,11 +147,45 @@ export interface RosterChoice {
   };
 }
 
+/** A class file as it was read. */
+export interface OpenedClass {
+  readonly class: ClassFile;
+  readonly handle: FileHandle;
+  readonly file: string;
+}
+
+/** Rows of a class list as they stand in a file, before its columns are known. */
+export interface ListedFile {
+  readonly file: string;
+  /** Sheets of a workbook; empty for text. */
+  readonly sheets: readonly string[];
+  /** The sheet that was read; null for text. */
+  readonly sheet: string | null;
+  readonly rows: readonly ListedRow[];
+  /** What looks odd: sentences. */
+  readonly remarks: readonly string[];
+}
+
+export interface PressedClassFiles {
+  readonly folder: string;
+  readonly files: readonly PressedFile[];
+  /**
+   * The file that holds who has which code, one of the files; null where no codes are printed. It lies in a folder of
+   * its own beside the other: this is the name of that folder, a slash and the name of the file.
+   */
+  readonly keyFile: string | null;
+  /** Cells that were read back and agree. */
+  readonly cells: number;
+  readonly remarks: readonly string[];
+}
+
 export type JobResult =
   | { readonly kind: 'tallied'; readonly tallied: TalliedCohort }
   | { readonly kind: 'pressed'; readonly pressed: Pressed }
   | { readonly kind: 'drawn'; readonly drawn: DrawnPages }
-  | { readonly kind: 'erratum'; readonly erratum: Erratum };
+  | { readonly kind: 'erratum'; readonly erratum: Erratum }
+  | { readonly kind: 'drawn-class'; readonly drawn: Omit<DrawnPages, 'sections'> }
+  | { readonly kind: 'pressed-class'; readonly pressed: PressedClassFiles };
 
 export type JobState =
   | { readonly state: 'running'; /** 0–1 */ readonly progress: number; readonly doing: string }
@@ -158,12 +195,12 @@ export type JobState =
 
 /** A file from outside the program: named when it was started, opened in the file manager, or dropped. */
 export interface GivenFile {
-  readonly kind: 'project' | 'cohort';
+  readonly kind: 'project' | 'cohort' | 'class';
   readonly handle: FileHandle;
 }
 
 /** What a file is chosen for: `project` and `edition` take projects and released editions alike. */
-export type FileKind = 'cohort' | 'project' | 'edition' | 'roster';
+export type FileKind = 'cohort' | 'project' | 'edition' | 'roster' | 'class' | 'class-list';
 
 /** What a desktop window's menu asks of the page; `open-file` comes with the file. */
 export type MenuCommand = 'new' | 'open' | 'open-file' | 'save' | 'undo' | 'redo';
@@ -244,6 +281,36 @@ export interface DeskRequests {
     };
     answer: { readonly job: string };
   };
+  /** Class files opened or saved before that are still there. */
+  'list-classes': { ask: Record<never, never>; answer: readonly ProjectListing[] };
+  'open-class': { ask: { readonly handle: FileHandle }; answer: OpenedClass };
+  /**
+   * Saves a class to the handle's file, or to a new one, in the way of `save-project`. A class is kept nowhere else:
+   * there are no drafts of it, since it holds names.
+   */
+  'save-class': {
+    ask: { readonly handle: FileHandle | null; readonly name: string; readonly class: ClassFile };
+    answer: {
+      readonly handle: FileHandle;
+      readonly file: string;
+      readonly at: number;
+      readonly remark: string | null;
+    } | null;
+  };
+  /** The tables of a project or a released edition, as a class looks pupils up in them; null: of the sample. */
+  'class-table': { ask: { readonly handle: FileHandle | null }; answer: ClassTable };
+  /** The rows of a class list in a file; null sheet: the first that holds anything. */
+  'look-at-list': { ask: { readonly handle: FileHandle; readonly sheet: string | null }; answer: ListedFile };
+  /** Report or slips of a class as a PDF, for the screen. */
+  'draw-class': {
+    ask: { readonly class: ClassFile; readonly what: 'report' | 'slips' };
+    answer: { readonly job: string };
+  };
+  /** Writes report, slips, workbook, csv and certificate into a folder of their own, and the key to codes where there is one. */
+  'press-class': {
+    ask: { readonly class: ClassFile; readonly slips: boolean; readonly name: string };
+    answer: { readonly job: string };
+  };
   'job-state': { ask: { readonly job: string }; answer: JobState };
   'cancel-job': { ask: { readonly job: string }; answer: null };
   /** Shows the folder of the last press in the file manager, where the host can. */
@@ -269,6 +336,13 @@ export const DESK_REQUESTS = [
   'press',
   'release',
   'make-erratum',
+  'list-classes',
+  'open-class',
+  'save-class',
+  'class-table',
+  'look-at-list',
+  'draw-class',
+  'press-class',
   'job-state',
   'cancel-job',
   'show-pressed',

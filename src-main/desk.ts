@@ -1,8 +1,9 @@
 import { lookAtCohort } from './cohort-file/look-at-cohort.ts';
+import { lookAtList } from './cohort-file/look-at-list.ts';
 import { startTallyJob } from './cohort-file/tally-job.ts';
 import { openDesk, type DeskHost, type DeskOptions } from './desk/desk-host.ts';
 import { startErratumJob } from './erratum/erratum-job.ts';
-import { startPressJob } from './press/press-job.ts';
+import { startPressJob, startTableJob } from './press/press-job.ts';
 
 export type { DeskHost, DeskOptions } from './desk/desk-host.ts';
 
@@ -11,6 +12,8 @@ export function createDesk(options: DeskOptions): DeskHost {
   const { workers } = options;
   return openDesk(options, {
     lookAtCohort,
+    lookAtList,
+    classTable: (request) => startTableJob(request, workers.press),
     async tally(path, file, reading, hooks, signal) {
       const reply = await startTallyJob(workers.tally, path, file, reading, hooks, signal);
       return reply.ok ? { ok: true, value: { kind: 'tallied', tallied: reply.value } } : reply;

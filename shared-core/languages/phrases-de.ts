@@ -1,4 +1,7 @@
 import { GERMAN_BLOCKS } from './german/blocks.ts';
+import { GERMAN_CLASS_REPORT } from './german/class-report.ts';
+import { GERMAN_CLASS_STANDING } from './german/class-standing.ts';
+import { GERMAN_SLIPS } from './german/slips.ts';
 import { GERMAN_COLUMNS } from './german/columns.ts';
 import { GERMAN_FIT } from './german/fit.ts';
 import { GERMAN_METHOD } from './german/method.ts';
@@ -16,4 +19,7 @@ export const GERMAN_PHRASES: Phrases = {
   ...GERMAN_WORKBOOK,
   ...GERMAN_RECIPE,
   ...GERMAN_BLOCKS,
+  ...GERMAN_CLASS_REPORT,
+  ...GERMAN_CLASS_STANDING,
+  ...GERMAN_SLIPS,
 };

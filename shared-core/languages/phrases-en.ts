@@ -1,4 +1,7 @@
 import { ENGLISH_BLOCKS } from './english/blocks.ts';
+import { ENGLISH_CLASS_REPORT } from './english/class-report.ts';
+import { ENGLISH_CLASS_STANDING } from './english/class-standing.ts';
+import { ENGLISH_SLIPS } from './english/slips.ts';
 import { ENGLISH_COLUMNS } from './english/columns.ts';
 import { ENGLISH_FIT } from './english/fit.ts';
 import { ENGLISH_METHOD } from './english/method.ts';
@@ -18,4 +21,7 @@ export const ENGLISH_PHRASES = {
   ...ENGLISH_WORKBOOK,
   ...ENGLISH_RECIPE,
   ...ENGLISH_BLOCKS,
+  ...ENGLISH_CLASS_REPORT,
+  ...ENGLISH_CLASS_STANDING,
+  ...ENGLISH_SLIPS,
 } as const;

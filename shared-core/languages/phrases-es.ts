@@ -1,4 +1,7 @@
 import { SPANISH_BLOCKS } from './spanish/blocks.ts';
+import { SPANISH_CLASS_REPORT } from './spanish/class-report.ts';
+import { SPANISH_CLASS_STANDING } from './spanish/class-standing.ts';
+import { SPANISH_SLIPS } from './spanish/slips.ts';
 import { SPANISH_COLUMNS } from './spanish/columns.ts';
 import { SPANISH_FIT } from './spanish/fit.ts';
 import { SPANISH_METHOD } from './spanish/method.ts';
@@ -16,4 +19,7 @@ export const SPANISH_PHRASES: Phrases = {
   ...SPANISH_WORKBOOK,
   ...SPANISH_RECIPE,
   ...SPANISH_BLOCKS,
+  ...SPANISH_CLASS_REPORT,
+  ...SPANISH_CLASS_STANDING,
+  ...SPANISH_SLIPS,
 };

@@ -1,4 +1,7 @@
 import { FRENCH_BLOCKS } from './french/blocks.ts';
+import { FRENCH_CLASS_REPORT } from './french/class-report.ts';
+import { FRENCH_CLASS_STANDING } from './french/class-standing.ts';
+import { FRENCH_SLIPS } from './french/slips.ts';
 import { FRENCH_COLUMNS } from './french/columns.ts';
 import { FRENCH_FIT } from './french/fit.ts';
 import { FRENCH_METHOD } from './french/method.ts';
@@ -17,4 +20,7 @@ export const FRENCH_PHRASES: Phrases = frenchSpaces({
   ...FRENCH_WORKBOOK,
   ...FRENCH_RECIPE,
   ...FRENCH_BLOCKS,
+  ...FRENCH_CLASS_REPORT,
+  ...FRENCH_CLASS_STANDING,
+  ...FRENCH_SLIPS,
 });

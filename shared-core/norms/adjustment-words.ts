@@ -1,8 +1,14 @@
 import { ENGLISH_WORDS, figure, say } from '../languages/phrases.ts';
+import type { ConversionRow } from './conversion-table.ts';
 import type { GroupNorms } from './group-norms.ts';
 
 /** Stands behind every printed rank that was changed by hand. */
 export const ADJUSTED_MARK = '†';
+
+/** The printed rank of a row, with the mark where it was changed by hand. */
+export function markedRank({ printed, adjusted }: Pick<ConversionRow, 'printed' | 'adjusted'>): string {
+  return adjusted === null ? printed : `${printed}${ADJUSTED_MARK}`;
+}
 
 /**
  * What was changed by hand in a group's table, as it is printed under it; null where nothing was.

@@ -163,8 +163,7 @@ function rowOf(basis: RowBasis, { position, score, observed, rank, part }: RowPa
   const asNumber = (units: bigint): number => ratioToNumber(ratio(units, table.weightUnit));
   const fromZ = (key: keyof typeof PRINTED_SCALES): string => {
     if (behindPrint.z === null) return NO_VALUE;
-    const { mean, spread, low, high, decimals } = PRINTED_SCALES[key];
-    return printNumber(held(linearScale(behindPrint.z, mean, spread), low, high, choices), decimals);
+    return printNumber(printedScaleValue(key, behindPrint.z, choices), PRINTED_SCALES[key].decimals);
   };
   return {
     score,
@@ -248,6 +247,9 @@ function zForPrint(
   return { z: normalisedZ(half), from: 'half-person' };
 }
 
-function held(value: number, low: number, high: number, choices: TableChoices): number {
-  return choices.zEnds === 'limits' ? Math.min(high, Math.max(low, value)) : value;
+/** The number behind a printed score: mean + spread · z, held where the limits stand in for missing values. */
+export function printedScaleValue(key: keyof typeof PRINTED_SCALES, z: number, { zEnds }: TableChoices): number {
+  const { mean, spread, low, high } = PRINTED_SCALES[key];
+  const value = linearScale(z, mean, spread);
+  return zEnds === 'limits' ? Math.min(high, Math.max(low, value)) : value;
 }

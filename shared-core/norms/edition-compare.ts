@@ -1,4 +1,4 @@
-import { ADJUSTED_MARK } from './adjustment-words.ts';
+import { markedRank } from './adjustment-words.ts';
 import type { ColumnKey } from './column-keys.ts';
 import type { ConversionRow } from './conversion-table.ts';
 import { changedChoices, type TextChange } from './edition-compare-choices.ts';
@@ -240,8 +240,7 @@ function inOrderOf(
 
 /** As it stands in print: a rank adjusted by hand carries its mark. */
 function textIn(row: ConversionRow, column: PrintedColumnKey): string {
-  if (column !== 'rank') return row.texts[column];
-  return row.adjusted === null ? row.printed : `${row.printed}${ADJUSTED_MARK}`;
+  return column === 'rank' ? markedRank(row) : row.texts[column];
 }
 
 function editionName({ project, check }: NormSet): EditionName {

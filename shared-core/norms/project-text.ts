@@ -1,8 +1,9 @@
 import * as v from 'valibot';
-import { fileKey, fromFileKeys, toFileKeys } from './file-keys.ts';
+import { fromFileKeys, toFileKeys } from './file-keys.ts';
 import { isFileObject, jsonIn, type FileObject } from './json-object.ts';
 import { newProject } from './new-project.ts';
 import { normProjectSchema, PROJECT_FORMAT, PROJECT_VERSION, type NormProject } from './norm-project.ts';
+import { notAsSaved, notComplete, savedObject, type SavedKind } from './saved-text.ts';
 
 /** Turns a project into the text of a `*.normloom` file: JSON, keys in lower-case-with-hyphens, one line at the end. */
 export function projectToText(project: NormProject): string {
@@ -12,30 +13,26 @@ export function projectToText(project: NormProject): string {
 export type ProjectRead =
   { readonly ok: true; readonly project: NormProject } | { readonly ok: false; readonly problem: string };
 
+const PROJECT: SavedKind = {
+  format: PROJECT_FORMAT,
+  version: PROJECT_VERSION,
+  name: 'project',
+  ending: '*.normloom',
+  wayOut: 'Open a backup, or the draft that Normloom kept on the start page',
+};
+
 /** Reads the text of a `*.normloom` file. Unknown keys are left behind; whatever is wrong comes back as a sentence. */
 export function projectFromText(text: string): ProjectRead {
   const value = jsonIn(text);
-  return value === undefined
-    ? damaged('it is not complete JSON, as after a copy that broke off')
-    : projectFromValue(value);
+  return value === undefined ? notComplete(PROJECT) : projectFromValue(value);
 }
 
 /** The same for a project that is part of another file, parsed, with the keys of files. */
 export function projectFromValue(value: unknown): ProjectRead {
-  if (!isFileObject(value) || value['format'] !== PROJECT_FORMAT) {
-    return { ok: false, problem: 'This is not a Normloom project. Choose a file that Normloom saved (*.normloom).' };
-  }
-  const version = value['version'];
-  if (typeof version === 'number' && version > PROJECT_VERSION) {
-    return {
-      ok: false,
-      problem: `This project was saved by a newer Normloom (file version ${version}; this one reads up to ${PROJECT_VERSION}). Open it with the newer program; the file was not touched.`,
-    };
-  }
-  const parsed = v.safeParse(normProjectSchema, fromFileKeys(broughtForward(value)));
-  if (parsed.success) return { ok: true, project: parsed.output };
-  const issue = parsed.issues[0];
-  return damaged(`${fileKey(v.getDotPath(issue) ?? 'the whole')}: ${issue.message}`);
+  const saved = savedObject(value, PROJECT);
+  if (!saved.ok) return saved;
+  const parsed = v.safeParse(normProjectSchema, fromFileKeys(broughtForward(saved.value)));
+  return parsed.success ? { ok: true, project: parsed.output } : notAsSaved(PROJECT, parsed.issues[0]);
 }
 
 /** A project of an earlier version with what it did not know yet; keys are those of the file. */
@@ -76,12 +73,5 @@ function withClusters(value: FileObject): FileObject {
       isFileObject(reading) && isFileObject(decisions)
         ? { ...reading, decisions: { ...decisions, 'blank-cluster': 'alone' } }
         : reading,
-  };
-}
-
-function damaged(why: string): ProjectRead {
-  return {
-    ok: false,
-    problem: `The project file is damaged (${why}). Open a backup, or the draft that Normloom kept on the start page; the file was not touched.`,
   };
 }

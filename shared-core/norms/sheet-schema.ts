@@ -39,7 +39,8 @@ const numbers = v.pipe(
   v.readonly(),
 );
 
-const language = v.pipe(
+/** The language of something printed: its tag, its words and how its numbers are written. */
+export const languageSchema = v.pipe(
   v.object({
     /** Tag of the language of the booklet (BCP 47): it decides how a screen reader speaks. */
     tag: v.pipe(v.string(), v.regex(LANGUAGE_TAG)),
@@ -56,7 +57,7 @@ const language = v.pipe(
 );
 
 /** Words and numbers as they are printed in English. */
-export const ENGLISH_LANGUAGE: v.InferOutput<typeof language> = {
+export const ENGLISH_LANGUAGE: v.InferOutput<typeof languageSchema> = {
   tag: 'en',
   words: 'en',
   numbers: ENGLISH_NUMBERS,
@@ -102,7 +103,7 @@ export const sheetSchema = v.pipe(
     inverse: v.boolean(),
     /** What the booklet is made of, in print order; kinds that are not listed are not printed. */
     blocks: v.optional(blocks, DEFAULT_BLOCKS),
-    language: v.optional(language, ENGLISH_LANGUAGE),
+    language: v.optional(languageSchema, ENGLISH_LANGUAGE),
   }),
   v.readonly(),
 );

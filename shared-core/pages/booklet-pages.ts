@@ -1,13 +1,13 @@
 import { say, wordsOf } from '../languages/phrases.ts';
 import type { NormSet } from '../norms/norm-set.ts';
 import { filledToFours } from './blank-pages.ts';
-import type { Block, Booklet, BookletPage, Paper } from './booklet.ts';
+import type { Booklet, BookletPage, Paper } from './booklet.ts';
 import { withContents } from './booklet-contents.ts';
 import { plannedParts, type BookletPart } from './booklet-parts.ts';
 import { blockFrame } from './page-frame.ts';
+import { missingSignsRemark } from './missing-signs.ts';
 import { paperOf, paperRemarks } from './paper.ts';
 import { draftTitle, surveyName } from './sheet-texts.ts';
-import { missingCharacters } from './text-width.ts';
 
 /**
  * Places every text, figure, rule and picture of a booklet: its blocks in their order, among them the tables with a
@@ -27,11 +27,7 @@ export function composeBooklet(normSet: NormSet, programVersion: string | null =
     language: normSet.project.sheet.language.tag,
     paper,
     pages,
-    remarks: [
-      ...paperRemarks(normSet.project.sheet),
-      ...remarks,
-      ...missingRemark(pages.flatMap(({ blocks }) => blocks)),
-    ],
+    remarks: [...paperRemarks(normSet.project.sheet), ...remarks, ...missingSignsRemark(pages)],
   };
 }
 
@@ -56,17 +52,4 @@ function numbered(parts: readonly BookletPart[], { gutter }: Paper): readonly Bo
 
 function pagesIn(parts: readonly BookletPart[]): number {
   return parts.reduce((sum, { pages }) => sum + pages.length, 0);
-}
-
-function missingRemark(blocks: readonly Block[]): readonly string[] {
-  const missing = new Set(
-    blocks.flatMap((block) =>
-      block.kind === 'text' ? block.runs.flatMap(({ text, face }) => missingCharacters(text, face)) : [],
-    ),
-  );
-  if (missing.size === 0) return [];
-  return [
-    `The typefaces have no sign for ${[...missing].slice(0, 12).join(' ')}; boxes print instead. ` +
-      'Write those words in Latin, Greek or Cyrillic letters.',
-  ];
 }

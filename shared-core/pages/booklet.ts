@@ -4,17 +4,21 @@ import type { FontFace } from './text-width.ts';
 import type { TypeSize } from './type-sizes.ts';
 
 /**
- * A booklet as placed pages. Lengths are in points (1/72 inch), x from the left edge of the paper, y from its top. Text
- * is broken into lines here, so that whatever draws the pages only draws.
+ * Something printed as placed pages. Lengths are in points (1/72 inch), x from the left edge of the paper, y from its
+ * top. Text is broken into lines here, so that whatever draws the pages only draws.
  */
-export interface Booklet {
+export interface PlacedPages {
   readonly title: string;
   /** Tag of the language (BCP 47). */
   readonly language: string;
   readonly paper: Paper;
-  readonly pages: readonly BookletPage[];
+  readonly pages: readonly PlacedPage[];
   /** What had to be set otherwise than asked, as sentences that tell what to do. */
   readonly remarks: readonly string[];
+}
+
+export interface Booklet extends PlacedPages {
+  readonly pages: readonly BookletPage[];
 }
 
 export interface Paper {
@@ -28,16 +32,19 @@ export interface Paper {
   readonly gutter: number;
 }
 
-export interface BookletPage {
+export interface PlacedPage {
   /** 1 for the first. */
   readonly number: number;
+  /** "Table 2 · Grade 5", or the heading of a block, where one begins; null on its further pages. */
+  readonly opens: string | null;
+  readonly blocks: readonly Block[];
+}
+
+export interface BookletPage extends PlacedPage {
   /** The block of the booklet that it belongs to; null for a page left blank. */
   readonly block: BlockKind | null;
   /** Position of the group in the norm set; null where it belongs to no single one. */
   readonly group: number | null;
-  /** "Table 2 · Grade 5", or the heading of a block, where one begins; null on its further pages. */
-  readonly opens: string | null;
-  readonly blocks: readonly Block[];
 }
 
 export type Block = TextLine | Rule | Picture | TableColumnBlock;

@@ -4,9 +4,9 @@ import { levelInWords } from '../norms/table-columns.ts';
 import { ratio, ratioToNumber } from '../percentile/exact-ratio.ts';
 import { decimalOf } from '../scale/decimal.ts';
 import { printNumber } from '../scores/printed-number.ts';
-import { ogiveLabels, type OgiveLabel, type PlacedLabels } from './ogive-labels.ts';
 import { scoreTicks } from './score-ticks.ts';
-import { area, dot, fixed, horizontal, path, words, type Point } from './svg-marks.ts';
+import { ogiveLabels, type OgiveLabel, type PlacedLabels } from './ogive-labels.ts';
+import { area, dot, horizontal, path, picture, vertical, words, type Point } from './svg-marks.ts';
 
 export interface OgiveColours {
   readonly ink: string;
@@ -101,15 +101,14 @@ export function ogivePicture(
     rising: scale.direction === 'high-is-good',
   };
   const placed = ogiveLabels(labels, extreme(Math.min), extreme(Math.max), room);
-  return [
-    `<svg xmlns="http://www.w3.org/2000/svg" width="${fixed(size.width)}" height="${fixed(size.height)}" viewBox="0 0 ${fixed(size.width)} ${fixed(size.height)}">`,
+  return picture(size, [
     ...(band === null ? [] : [area([...band.upper, ...band.lower.toReversed()], colours.band)]),
     ...PER_CENT_TICKS.flatMap((tick) =>
       gridLine(y(tick), size.width - EDGE.right, placed.box, tick === 0 ? colours.soft : colours.grid),
     ),
     ...PER_CENT_TICKS.map((tick) => words(String(tick), { x: EDGE.left - 4, y: y(tick) + 2.2 }, 'end', colours.soft)),
     ...scoreTicks(scale, size.width - EDGE.left - EDGE.right).flatMap((tick) => [
-      `<path d="M${fixed(x(tick))} ${fixed(y(0))}v2.5" fill="none" stroke="${colours.soft}" stroke-width="0.5"/>`,
+      vertical(x(tick), y(0), y(0) + 2.5, colours.soft),
       words(
         figure(language, printNumber(tick, decimalOf(tick).decimals)),
         { x: x(tick), y: y(0) + 9.5 },
@@ -123,8 +122,7 @@ export function ogivePicture(
     path(ranks, colours.curve, 1),
     ...(dotted ? ranks.map((point) => dot(point, colours.curve)) : []),
     ...placed.marks,
-    '</svg>',
-  ].join('');
+  ]);
 }
 
 /** A line of the grid, which leaves the ground of the labels free. */

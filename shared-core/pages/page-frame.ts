@@ -28,7 +28,7 @@ const ROOM_AT_RULE = 4;
 const ROOM_TO_BODY = 13;
 /** Share of the width that the survey's name may take. */
 const LEFT_SHARE = 0.58;
-const WIDEST_NUMBER = '9999';
+const MOST_PAGES = 9999;
 const HEAD: PageRole = { kind: 'running', edge: 'top' };
 const FOOT: PageRole = { kind: 'running', edge: 'bottom' };
 
@@ -37,26 +37,45 @@ export function bodyWidth({ width, margin, gutter }: Paper): number {
   return width - 2 * margin - gutter;
 }
 
+/** What the head and foot of a page say. */
+export interface RunningTexts {
+  /** At the left of the head. */
+  readonly survey: readonly TextRun[];
+  /** At the right of the head. */
+  readonly place: string;
+  /** At the left of the foot. */
+  readonly line: string;
+  /** "page 2 of 3", at the right of the foot. */
+  readonly numbered: (page: number, pages: number) => string;
+}
+
 /** The pages of one group. */
 export function groupFrame(normSet: NormSet, index: number, norms: GroupNorms, paper: Paper): PageFrame {
-  return pageFrame(normSet, tableName(normSet.project, index, norms), editionLine(normSet, norms), paper);
+  return bookletFrame(normSet, tableName(normSet.project, index, norms), editionLine(normSet, norms), paper);
 }
 
 /** Pages that belong to no single group; `place` stands at the right of their head. */
 export function blockFrame(normSet: NormSet, place: string, paper: Paper): PageFrame {
-  return pageFrame(normSet, place, bookletLine(normSet), paper);
+  return bookletFrame(normSet, place, bookletLine(normSet), paper);
 }
 
-function pageFrame(normSet: NormSet, place: string, line: string, paper: Paper): PageFrame {
+function bookletFrame(normSet: NormSet, place: string, line: string, paper: Paper): PageFrame {
+  const survey = markedRuns(draftMark(normSet), surveyName(normSet.project));
+  const words = wordsOf(normSet.project);
+  const numbered = (page: number, pages: number): string =>
+    say(words, 'foot.page', { page: String(page), pages: String(pages) });
+  return pageFrame({ survey, place, line, numbered }, paper);
+}
+
+/** Head and foot, and the room that they leave. */
+export function pageFrame({ survey, place, line, numbered }: RunningTexts, paper: Paper): PageFrame {
   const left = paper.margin + paper.gutter;
   const width = bodyWidth(paper);
-  const survey = headLines(surveyRuns(normSet), (width - GUTTER) * LEFT_SHARE);
-  const table = headLines([{ text: place, face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
+  const atLeft = headLines(survey, (width - GUTTER) * LEFT_SHARE);
+  const atRight = headLines([{ text: place, face: 'sans' }], (width - GUTTER) * (1 - LEFT_SHARE));
   const headTop = paper.edge;
-  const headRule = headTop + Math.max(heightOf(survey.lines, RUNNING), heightOf(table.lines, RUNNING)) + ROOM_AT_RULE;
-  const words = wordsOf(normSet.project);
-  const pageNumber = (page: string, pages: string): string => say(words, 'foot.page', { page, pages });
-  const numberWidth = textWidth(pageNumber(WIDEST_NUMBER, WIDEST_NUMBER), 'sans', RUNNING.size);
+  const headRule = headTop + Math.max(heightOf(atLeft.lines, RUNNING), heightOf(atRight.lines, RUNNING)) + ROOM_AT_RULE;
+  const numberWidth = textWidth(numbered(MOST_PAGES, MOST_PAGES), 'sans', RUNNING.size);
   const edition = linesOf(line, 'sans', RUNNING, width - numberWidth - GUTTER, FOOT);
   const footTop = paper.height - paper.edge - heightOf(edition, RUNNING);
   const footRule = footTop - ROOM_AT_RULE;
@@ -69,20 +88,19 @@ function pageFrame(normSet: NormSet, place: string, line: string, paper: Paper):
     top: headRule + ROOM_TO_BODY,
     bottom: footRule - ROOM_TO_BODY,
     blocks: (page, pages) => [
-      ...running(survey.lines, headTop, 'left'),
-      ...running(table.lines, headTop, 'right'),
+      ...running(atLeft.lines, headTop, 'left'),
+      ...running(atRight.lines, headTop, 'right'),
       rule(headRule),
       rule(footRule),
       ...running(edition, footTop, 'left'),
-      ...running(linesOf(pageNumber(String(page), String(pages)), 'sans', RUNNING, width, FOOT), footTop, 'right'),
+      ...running(linesOf(numbered(page, pages), 'sans', RUNNING, width, FOOT), footTop, 'right'),
     ],
-    shortened: survey.cut || table.cut,
+    shortened: atLeft.cut || atRight.cut,
   };
 }
 
-/** The survey's name, behind the word that a draft carries on every page. */
-function surveyRuns(normSet: NormSet): readonly TextRun[] {
-  const [mark, name] = [draftMark(normSet), surveyName(normSet.project)];
+/** What a page belongs to, behind the word that a draft carries on every page. */
+export function markedRuns(mark: string, name: string): readonly TextRun[] {
   if (mark === '') return [{ text: name, face: 'sans' }];
   return [
     { text: mark, face: 'sans-bold' },

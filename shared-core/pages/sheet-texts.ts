@@ -1,7 +1,7 @@
 import { dateInLanguage } from '../languages/number-format.ts';
 import { figure, say, sayCounted, wordsOf, type PrintWords } from '../languages/phrases.ts';
 import { asSentence, inSentence } from '../languages/sentence.ts';
-import { ADJUSTED_MARK } from '../norms/adjustment-words.ts';
+import { markedRank } from '../norms/adjustment-words.ts';
 import { prints } from '../norms/booklet-blocks.ts';
 import { definitionInWords, definitionName } from '../norms/definitions.ts';
 import type { ConversionRow } from '../norms/conversion-table.ts';
@@ -243,6 +243,5 @@ export function printedCell(words: PrintWords, row: ConversionRow, column: Table
 
 /** The same with the mark of a rank that was adjusted by hand, where one printed text holds both. */
 export function markedText(words: PrintWords, row: ConversionRow, column: TableColumn): string {
-  const text = printedCell(words, row, column);
-  return column.key === 'rank' && row.adjusted !== null ? `${text}${ADJUSTED_MARK}` : text;
+  return column.key === 'rank' ? figure(words, markedRank(row)) : printedCell(words, row, column);
 }

@@ -3,7 +3,7 @@ import { parseArgs } from 'node:util';
 
 /** How the program was started. */
 export interface StartWords {
-  /** A project or cohort file to open, absolute; null for none. */
+  /** A project, class or cohort file to open, absolute; null for none. */
   readonly file: string | null;
   readonly window: boolean;
   /** 0: any free port. */

@@ -64,7 +64,8 @@ async function refit(known: KnownFile, reading: Reading): Promise<Asked> {
   return first.ok ? { ok: true, value: refitReading(reading, first.value.columns, first.value.rows) } : first;
 }
 
-async function guessSplit(known: KnownFile): Promise<Reply<Pick<Reading, 'encoding' | 'separator' | 'sheet'>>> {
+/** Encoding and separator of a text, guessed from its beginning. */
+export async function guessSplit(known: KnownFile): Promise<Reply<Pick<Reading, 'encoding' | 'separator' | 'sheet'>>> {
   let sample: Buffer;
   try {
     const handle = await open(known.path, 'r');

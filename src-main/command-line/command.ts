@@ -1,9 +1,11 @@
 import type { Reply } from '../../shared-core/desk.ts';
+import { classOptions, type ClassOptions } from './class-options.ts';
 import { COMPARE_FORMATS, type CompareFormat } from './compare-command.ts';
 import { differOptions, type DifferOptions } from './differ-options.ts';
 import type { EditionPaths } from './edition-pair.ts';
 import { erratumOptions, type ErratumOptions } from './erratum-options.ts';
 import {
+  CLASS,
   COMPARE,
   DIFFER,
   ERRATUM,
@@ -33,6 +35,7 @@ export type Command =
   | { readonly kind: 'read-back'; readonly paths: readonly string[]; readonly options: ReadBackOptions }
   | { readonly kind: 'queries'; readonly path: string; readonly format: QueriesFormat }
   | { readonly kind: 'compare'; readonly paths: EditionPaths; readonly format: CompareFormat }
+  | { readonly kind: 'class'; readonly path: string; readonly options: ClassOptions }
   | { readonly kind: 'erratum'; readonly paths: EditionPaths; readonly options: ErratumOptions };
 
 /** Reads the words; the problem is a sentence about what is wrong with them. */
@@ -82,6 +85,11 @@ export function readCommand(words: readonly string[]): Reply<Command> {
         const options = erratumOptions(values);
         return options.ok ? { ok: true, value: { kind: 'erratum', paths, options: options.value } } : options;
       });
+    case 'class':
+      return readFileCommand(others, CLASS, 'class takes one list', (path, values) => {
+        const options = classOptions(values);
+        return options.ok ? { ok: true, value: { kind: 'class', path, options: options.value } } : options;
+      });
     case 'queries':
       return readFileCommand(others, QUERIES, 'queries takes one project', (path, values) => {
         const format = queriesOptions(values);
@@ -94,7 +102,7 @@ export function readCommand(words: readonly string[]): Reply<Command> {
       if (general !== null) return { ok: true, value: general };
       return wrong(
         name === undefined
-          ? 'Tell what to do: table, differ, press, release, read-back, queries, compare or erratum.'
+          ? 'Tell what to do: table, differ, press, release, read-back, queries, compare, erratum or class.'
           : `There is no command "${name}".`,
       );
     }

@@ -15,6 +15,9 @@ normloom read-back FILE… --against PROJECT  pressed files compared with the pr
 normloom compare OLD NEW [--format text|json]
                                             every printed cell and choice in which two projects differ
 normloom erratum OLD NEW [options]          the erratum of an edition, with the people whom it concerns
+normloom class LIST [--table TABLE] --into FOLDER [options]
+                                            report of a class, its slips, workbook and csv; without a table,
+                                            the order within the class
 normloom queries PROJECT [--format text|json]
                                             what a proof-reader would ask, and what was answered
 normloom --help | --version
@@ -68,6 +71,24 @@ Options of erratum:
   --person COL              column of names or codes; without it, people are told by their row
   --cut RANK                also tells whose unrounded rank lies on another side of this percentile rank
 
+Options of class:
+  --table TABLE             project or released edition, or a text with a published table: a raw score or
+                            range and its percentile rank a line
+  --group VALUE,VALUE       the table for pupils whose row names no group: its values or its title
+  --low-is-good             low scores are the good ones, where no project says so
+  --codes                   codes in random order in place of names; key-to-codes.csv tells who has which
+  --seed N                  whole number that the codes are drawn from, as secret as the key; default chance
+  --summary                 counts and no pupils, with small cells left out
+  --slips N                 a slip for each pupil, 1 to 4 to a page
+  --title TEXT              what the class is called
+  --date YYYY-MM-DD         day of testing
+  --name COL,COL            columns of the list that hold the name, or code; without it, guessed
+  --score COL, --by COL,COL, --status COL
+                            columns of raw score, group values, and who was absent, not tested or excused
+  --language NAME           en (default), de, es or fr
+
+LIST is a text or a workbook, or a class saved by the program (*.normclass), whose own choices then stand.
+What does not fit in a list is told with its lines, and nothing is written.
 Columns are named as in the heading of the file; within a list, a name with a comma in it stands in double
 quotes.
 Wherever PROJECT, OLD or NEW stands, a project (*.normloom) or a released edition (*.normedition) is read.

@@ -1,3 +1,4 @@
+import { classCommand } from './class-command.ts';
 import { readCommand, type Command } from './command.ts';
 import { compareCommand } from './compare-command.ts';
 import { differCommand } from './differ-command.ts';
@@ -32,6 +33,8 @@ async function run(command: Command): Promise<Outcome> {
       return queriesCommand(command.path, command.format);
     case 'compare':
       return compareCommand(command.paths, command.format);
+    case 'class':
+      return classCommand(command.path, command.options);
     case 'erratum':
       return erratumCommand(command.paths, command.options);
   }

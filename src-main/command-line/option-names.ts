@@ -53,4 +53,23 @@ export const ERRATUM = {
   cut: text,
 } as const satisfies OptionNames;
 
+export const CLASS = {
+  ...GENERAL,
+  table: text,
+  group: text,
+  'low-is-good': flag,
+  into: text,
+  codes: flag,
+  seed: text,
+  summary: flag,
+  slips: text,
+  title: text,
+  date: text,
+  name: text,
+  score: text,
+  by: text,
+  status: text,
+  language: text,
+} as const satisfies OptionNames;
+
 export const QUERIES = { ...GENERAL, format: text } as const satisfies OptionNames;

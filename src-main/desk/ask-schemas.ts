@@ -1,4 +1,5 @@
 import * as v from 'valibot';
+import { classFileSchema } from '../../shared-core/class/class-file.ts';
 import type { DeskRequest, DeskRequests } from '../../shared-core/desk.ts';
 import { normProjectSchema } from '../../shared-core/norms/norm-project.ts';
 import { draftNameSchema } from '../project-file/drafts.ts';
@@ -8,6 +9,7 @@ type AskSchemas = {
   readonly [R in DeskRequest]: v.GenericSchema<unknown, DeskRequests[R]['ask']>;
 };
 
+const FILE_KINDS = ['cohort', 'project', 'edition', 'roster', 'class', 'class-list'] as const;
 const nothing = v.object({});
 const handle = v.pipe(v.string(), v.maxLength(64));
 const name = v.pipe(v.string(), v.maxLength(400));
@@ -17,7 +19,7 @@ const reading = normProjectSchema.entries.reading;
 export const ASK_SCHEMAS: AskSchemas = {
   about: nothing,
   'list-projects': nothing,
-  'choose-file': v.object({ kind: v.picklist(['cohort', 'project', 'edition', 'roster']) }),
+  'choose-file': v.object({ kind: v.picklist(FILE_KINDS) }),
   'open-project': v.object({ handle }),
   'look-at-edition': v.object({ handle }),
   'open-draft': v.object({ draft: draftNameSchema }),
@@ -43,6 +45,13 @@ export const ASK_SCHEMAS: AskSchemas = {
     cut: v.pipe(v.string(), v.maxLength(40)),
     write: v.boolean(),
   }),
+  'list-classes': nothing,
+  'open-class': v.object({ handle }),
+  'save-class': v.object({ handle: v.nullable(handle), name, class: classFileSchema }),
+  'class-table': v.object({ handle: v.nullable(handle) }),
+  'look-at-list': v.object({ handle, sheet: v.nullable(name) }),
+  'draw-class': v.object({ class: classFileSchema, what: v.picklist(['report', 'slips']) }),
+  'press-class': v.object({ class: classFileSchema, slips: v.boolean(), name }),
   'job-state': v.object({ job }),
   'cancel-job': v.object({ job }),
   'show-pressed': nothing,

@@ -9,13 +9,14 @@ import {
   type FileHandle,
   type Reply,
 } from '../../shared-core/desk.ts';
-import { opensAsProject, PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
+import { givenKind, PROJECT_ENDING } from '../../shared-core/norms/file-endings.ts';
 import type { Dialogs } from '../dialogs.ts';
 import { Drafts } from '../project-file/drafts.ts';
 import { ProjectSaver } from '../project-file/project-saver.ts';
 import { Recents } from '../project-file/recents.ts';
 import { ASK_SCHEMAS } from './ask-schemas.ts';
 import { asCalledHere } from './called-here.ts';
+import { ClassRoom } from './class-room.ts';
 import type { DeskWork } from './desk-work.ts';
 import { FileHandles, UNKNOWN_FILE, type KnownFile } from './file-handles.ts';
 import { Jobs, unexpected } from './jobs.ts';
@@ -45,7 +46,7 @@ export interface DeskOptions {
   readonly workers: { readonly tally: URL; readonly press: URL; readonly erratum: URL };
   readonly dialogs: Dialogs | null;
   readonly showFolder: ((folder: string) => Promise<void>) | null;
-  /** A project or cohort file the program was opened with. */
+  /** A project, class or cohort file the program was opened with. */
   readonly openedWith: string | null;
 }
 
@@ -59,7 +60,8 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
   const handles = new FileHandles();
   const jobs = new Jobs();
   const drafts = new Drafts(options.dataFolder);
-  const recents = new Recents(options.dataFolder);
+  const recents = new Recents(options.dataFolder, 'projects');
+  const recentClasses = new Recents(options.dataFolder, 'classes');
   const saver = new ProjectSaver(options.dataFolder, Date.now);
   const folders = new PressFolders(options.projectsFolder, options.dataFolder);
   const sample = join(options.assetsFolder, 'sample-cohorts', `ostrey-vale${PROJECT_ENDING}`);
@@ -74,6 +76,16 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
     sample,
     now: Date.now,
   });
+  const classes = new ClassRoom({
+    handles,
+    recents: recentClasses,
+    saver,
+    dialogs,
+    projectsFolder,
+    sample,
+    work,
+    now: Date.now,
+  });
   const about = aboutHost(options, handles);
   const pressRoom = new PressRoom(work, folders, options.showFolder);
 
@@ -81,6 +93,7 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
   const swept = Promise.all([
     drafts.sweep(Date.now()),
     recents.sweep(Date.now()),
+    recentClasses.sweep(Date.now()),
     saver.sweep(),
     folders.sweep(),
   ]).catch(() => undefined);
@@ -125,6 +138,14 @@ export function openDesk(options: Omit<DeskOptions, 'workers'>, work: DeskWork):
         job: jobs.start((hooks, signal) => pressRoom.erratum(ask, people, hooks, signal)),
       });
     },
+    'list-classes': async () => answered(await classes.list()),
+    'open-class': ({ handle }) => classes.open(handle),
+    'save-class': (ask) => classes.save(ask),
+    'class-table': ({ handle }) => classes.table(handle),
+    'look-at-list': (ask) => classes.lookAtList(ask),
+    'draw-class': (ask) =>
+      answered({ job: jobs.start((hooks, signal) => work.press({ kind: 'draw-class', ...ask }, hooks, signal)) }),
+    'press-class': (ask) => answered({ job: jobs.start((hooks, signal) => pressRoom.pressClass(ask, hooks, signal)) }),
     'job-state': ({ job }) => {
       const state = jobs.collect(job);
       return state === null
@@ -173,7 +194,7 @@ function aboutHost(options: Omit<DeskOptions, 'workers'>, handles: FileHandles):
       openedWith === null
         ? null
         : {
-            kind: opensAsProject(openedWith) ? 'project' : 'cohort',
+            kind: givenKind(openedWith),
             handle: handles.give(openedWith),
           },
   };

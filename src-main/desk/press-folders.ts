@@ -4,7 +4,7 @@ import { basename, join } from 'node:path';
 import * as v from 'valibot';
 import type { Pressed, PressedFile, Reply } from '../../shared-core/desk.ts';
 import { namesIn, replaceFile } from '../project-file/atomic-write.ts';
-import { fingerprintAt } from '../project-file/project-store.ts';
+import { fingerprintAt } from '../project-file/stored-text.ts';
 import { harmedBy, releasedIn, type ReleasedThere } from '../press/released-editions.ts';
 import { isAlive } from './live-process.ts';
 import { answered, refused } from './reply.ts';
@@ -83,8 +83,9 @@ export class PressFolders {
       await mkdir(folder, { recursive: true });
       for (const { file } of files) await rename(join(staged, file), join(folder, file));
       await this.discard(staged);
-      const untouched = earlier.filter((old) => !fresh.some(({ file }) => file === old.file));
-      await this.#record({ folder, title, subtitle, files: [...untouched, ...fresh] });
+      const old = earlier.filter(({ file }) => !fresh.some((one) => one.file === file));
+      if (released.length === 0) await removeUnchanged(folder, old);
+      await this.#record({ folder, title, subtitle, files: released.length === 0 ? fresh : [...old, ...fresh] });
       return answered(folder);
     }
   }
@@ -146,6 +147,14 @@ export class PressFolders {
 
   #ledger(): string {
     return join(this.#dataFolder, 'pressed.json');
+  }
+}
+
+/** Takes away what an earlier press left that this one does not make; what the user changed since stays. */
+async function removeUnchanged(folder: string, files: Entry['files']): Promise<void> {
+  for (const { file, sha256 } of files) {
+    const path = join(folder, file);
+    if ((await fingerprintAt(path)) === sha256) await rm(path, { force: true });
   }
 }
 

@@ -1,4 +1,5 @@
-import type { DeskRequests, JobResult, PressedFile, Reply } from '../../shared-core/desk.ts';
+import { basename } from 'node:path';
+import type { DeskRequests, JobResult, PressedClassFiles, PressedFile, Reply } from '../../shared-core/desk.ts';
 import { codeOf, diskTrouble } from '../project-file/disk-trouble.ts';
 import { cleanFileName } from '../project-file/file-name.ts';
 import { asCalledHere } from './called-here.ts';
@@ -13,6 +14,14 @@ interface Made {
   readonly files: readonly PressedFile[];
   readonly editionFile: string | null;
 }
+
+/** What a folder of class files holds, by how the class is shared: names never lie in a folder that may be handed on. */
+const CLASS_FOLDERS = {
+  names: 'class report with names',
+  codes: 'class report with codes',
+  summary: 'class summary',
+} as const;
+const KEY_FOLDER = 'key to codes, keep apart';
 
 /** Presses and releases into folders named after the project, and shows the last one. */
 export class PressRoom {
@@ -44,6 +53,59 @@ export class PressRoom {
       return answered(reply.value.pressed);
     });
     return pressed.ok ? answered({ kind: 'pressed', pressed: pressed.value }) : pressed;
+  }
+
+  /** The key to codes goes into a folder of its own, beside the one that may be handed on. */
+  async pressClass(
+    { class: file, slips, name }: DeskRequests['press-class']['ask'],
+    hooks: JobHooks,
+    signal: AbortSignal,
+  ): Promise<Reply<JobResult>> {
+    const sharing = file.sharing.as;
+    const shown = name.trim() === '' ? file.title : name.replace(/\.normclass$/i, '');
+    const pressedFor = {
+      name: cleanFileName([shown.trim() || 'Class', CLASS_FOLDERS[sharing]].join(' – '), 'Class'),
+      title: file.title,
+      subtitle: `class, ${sharing}`,
+      edition: '',
+    };
+    let keyStaged: string | null = null;
+    try {
+      const keyFolder = (keyStaged = await this.#folders.stage());
+      const pressed = await this.#inOwnFolder(pressedFor, signal, async (staged) => {
+        const request = { kind: 'press-class', class: file, slips, folder: staged, keyFolder } as const;
+        const reply = await this.#work.press(request, hooks, signal);
+        if (!reply.ok) return reply;
+        if (reply.value.kind !== 'pressed-class') throw new TypeError('the press answered with something else');
+        const made = reply.value.pressed;
+        const key = made.files.find((one) => one.file === made.keyFile) ?? null;
+        return answered({ ...made, files: made.files.filter((one) => one !== key), key, editionFile: null });
+      });
+      if (!pressed.ok) return pressed;
+      const { folder, files, key, cells, remarks } = pressed.value;
+      const told = { folder, files, keyFile: null, cells, remarks };
+      if (key === null) return answered({ kind: 'pressed-class', pressed: told });
+      return await this.#withKey(told, key, keyFolder, pressedFor);
+    } catch (error) {
+      if (codeOf(error) === null) throw error;
+      return refused(diskTrouble('The key to the codes', 'written', error));
+    } finally {
+      if (keyStaged !== null) await this.#folders.discard(keyStaged);
+    }
+  }
+
+  async #withKey(
+    pressed: PressedClassFiles,
+    key: PressedFile,
+    staged: string,
+    pressedFor: PressedFor,
+  ): Promise<Reply<JobResult>> {
+    const name = `${basename(this.#last ?? pressedFor.name)} – ${KEY_FOLDER}`;
+    const settled = await this.#folders.settle(staged, { files: [key], editionFile: null }, { ...pressedFor, name });
+    if (!settled.ok) return settled;
+    const keyFile = `${basename(settled.value)}/${key.file}`;
+    const files = [...pressed.files, { ...key, file: keyFile }];
+    return answered({ kind: 'pressed-class', pressed: { ...pressed, files, keyFile } });
   }
 
   /** Follows the people of a roster, and writes the erratum into a folder that is none of a release. */

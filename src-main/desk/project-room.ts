@@ -10,7 +10,7 @@ import type { Drafts } from '../project-file/drafts.ts';
 import { projectText, readProject, type StoredProject } from '../project-file/project-store.ts';
 import type { Recents } from '../project-file/recents.ts';
 import { UNKNOWN_FILE, type KnownFile } from './file-handles.ts';
-import { writeAgain, writeNew, type WritingParts } from './project-writing.ts';
+import { writeAgain, writeNew, type WritingParts } from './file-writing.ts';
 import { answered, refused } from './reply.ts';
 
 export interface ProjectRoomParts extends WritingParts {
@@ -117,8 +117,8 @@ export class ProjectRoom {
     });
     const saved =
       own === null || ask.handle === null
-        ? await writeNew(this.#parts, ask.name, text.text)
-        : await writeAgain(this.#parts, ask.handle, own, text.text);
+        ? await writeNew(this.#parts, 'project', ask.name, text.text)
+        : await writeAgain(this.#parts, 'project', ask.handle, own, text.text);
     if (!saved.ok || saved.value === null) return saved.ok ? answered(null) : saved;
     const { handle, path, remark } = saved.value;
     // The project is safe by now. A list that cannot be written must not make it look unsaved.

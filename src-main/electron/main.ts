@@ -2,6 +2,7 @@ import { fileURLToPath } from 'node:url';
 import { app, Menu, session, shell } from 'electron';
 import type { BrowserWindow } from 'electron';
 import type { GivenFile, MenuCommand } from '../../shared-core/desk.ts';
+import { givenKind } from '../../shared-core/norms/file-endings.ts';
 import { createDesk } from '../desk.ts';
 import type { DeskHost } from '../desk.ts';
 import { dataFolder, projectsFolder } from '../places.ts';
@@ -9,7 +10,7 @@ import { MENU_CHANNEL } from './bridge.ts';
 import { answerDesk } from './desk-channel.ts';
 import { nativeDialogs } from './dialogs.ts';
 import { buildMenu } from './menu.ts';
-import { fileToOpen, openedKind } from './opened-file.ts';
+import { fileToOpen } from './opened-file.ts';
 import { PAGE_ADDRESS, registerScheme, serveFolder } from './scheme.ts';
 import { closeSession, holdPage } from './security.ts';
 import { createWindow } from './window.ts';
@@ -22,7 +23,7 @@ let desk: DeskHost | null = null;
 let waiting: string | null = fileToOpen(process.argv.slice(1), process.cwd());
 
 const remember = (path: string): void => {
-  if (openedKind(path) === 'project') app.addRecentDocument(path);
+  if (givenKind(path) === 'project') app.addRecentDocument(path);
 };
 
 const toPage = (command: MenuCommand, given: GivenFile | null = null): void => {
@@ -36,7 +37,7 @@ const openFromOutside = (path: string): void => {
     return;
   }
   remember(path);
-  toPage('open-file', { kind: openedKind(path), handle: desk.giveHandle(path) });
+  toPage('open-file', { kind: givenKind(path), handle: desk.giveHandle(path) });
 };
 
 const bringForward = (): void => {

@@ -1,6 +1,5 @@
 import { statSync } from 'node:fs';
 import { resolve } from 'node:path';
-import { opensAsProject } from '../../shared-core/norms/file-endings.ts';
 
 const isFile = (path: string): boolean => statSync(path, { throwIfNoEntry: false })?.isFile() ?? false;
 
@@ -12,6 +11,3 @@ export const fileToOpen = (words: readonly string[], folder: string): string | n
   const paths = words.filter((word) => !word.startsWith('-')).map((word) => resolve(folder, word));
   return paths.findLast(isFile) ?? null;
 };
-
-/** Projects and released editions are known by their endings; every other file is taken for a cohort file. */
-export const openedKind = (path: string): 'project' | 'cohort' => (opensAsProject(path) ? 'project' : 'cohort');

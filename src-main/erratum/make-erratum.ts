@@ -7,7 +7,7 @@ import { changesOf, erratumText, personInWords } from '../../shared-core/norms/e
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../shared-core/norms/reading.ts';
 import { diskTrouble } from '../project-file/disk-trouble.ts';
-import { fingerprintOf } from '../project-file/project-store.ts';
+import { fingerprintOf } from '../project-file/stored-text.ts';
 import { changedCellsCsv, peopleCsv } from './erratum-csv.ts';
 import { rosterPeople, type RosterColumns } from './roster-people.ts';
 

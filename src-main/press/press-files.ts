@@ -1,31 +1,22 @@
-import { createHash } from 'node:crypto';
-import { mkdir, readFile, rm } from 'node:fs/promises';
-import { join } from 'node:path';
-import writeFileAtomic from 'write-file-atomic';
-import type { DrawnPages, Pressed, PressedFile, Reply } from '../../shared-core/desk.ts';
+import type { DrawnPages, Pressed, Reply } from '../../shared-core/desk.ts';
 import { editionToText, type FrozenEdition } from '../../shared-core/norms/edition-file.ts';
 import type { NormProject } from '../../shared-core/norms/norm-project.ts';
 import { buildNormSet, pressProblem, type NormSet, type NormSetBuilt } from '../../shared-core/norms/norm-set.ts';
 import { releaseProblem } from '../../shared-core/norms/release-gaps.ts';
 import { compareEngines, engineProblem } from '../../shared-core/second-engine/compare-engines.ts';
 import { programVersion } from '../program-version.ts';
-import { diskTrouble } from '../project-file/disk-trouble.ts';
 import { bookletPdf } from './booklet-pdf.ts';
 import { normSetJson } from './norm-set-json.ts';
 import { certificateJson, certificateOf } from './read-back/certificate.ts';
 import { certificatePdf } from './read-back/certificate-page.ts';
 import { readBack, readBackProblem } from './read-back/read-back.ts';
-import { editionFileName, harmedBy, harmProblem, releasedIn } from './released-editions.ts';
+import { editionFileName } from './released-editions.ts';
 import { tablesCsv } from './tables-csv.ts';
 import { tablesWorkbook } from './workbook.ts';
+import { named, writePressed, type FileToWrite } from './write-pressed.ts';
 
 /** Told how far the work is, 0–1, and what is being done, in a few words. */
 export type PressProgress = (progress: number, doing: string) => void;
-
-export interface FileToWrite {
-  readonly file: string;
-  readonly bytes: Uint8Array;
-}
 
 const CERTIFICATE_FILE = 'certificate.json';
 
@@ -102,7 +93,7 @@ export async function pressInto(
 ): Promise<Reply<Pressed>> {
   const made = await pressFiles(project, onProgress);
   if (!made.ok) return made;
-  const problem = await writeFiles(made.value.files, folder);
+  const problem = await writePressed(made.value.files, folder, CERTIFICATE_FILE);
   if (problem !== null) return { ok: false, problem };
   onProgress(1, 'Done');
   return { ok: true, value: pressedInto(folder, made.value, null) };
@@ -128,29 +119,10 @@ export async function releaseInto(
   const text = editionToText(frozenEdition(built.normSet, made.value));
   const file = { file: editionFileName(edition), bytes: new TextEncoder().encode(text) };
   const released = { ...made.value, files: [...made.value.files, file] };
-  const problem = await writeFiles(released.files, folder);
+  const problem = await writePressed(released.files, folder, CERTIFICATE_FILE);
   if (problem !== null) return { ok: false, problem };
   onProgress(1, 'Done');
   return { ok: true, value: pressedInto(folder, released, file.file) };
-}
-
-/** Writes files into a folder and reads them again; the problem is a sentence, or null where all is well. */
-async function writeFiles(files: readonly FileToWrite[], folder: string): Promise<string | null> {
-  const released = await releasedIn(folder);
-  const harmed = harmedBy(released, files.map(named));
-  if (harmed !== null) return harmProblem(harmed);
-  try {
-    await mkdir(folder, { recursive: true });
-    if (released.length === 0) await rm(join(folder, CERTIFICATE_FILE), { force: true });
-    for (const { file, bytes } of files) {
-      const path = join(folder, file);
-      await writeFileAtomic(path, Buffer.from(bytes), { fsync: true });
-      if (!(await readFile(path)).equals(bytes)) return wrongOnDisk(file);
-    }
-    return null;
-  } catch (error) {
-    return diskTrouble('The pressed files', 'written', error);
-  }
 }
 
 function pressedInto(folder: string, { files, readBack }: PressedSet, editionFile: string | null): Pressed {
@@ -170,14 +142,6 @@ function frozenEdition({ project, check }: NormSet, { files, readBack }: Pressed
     readBack: { cellsCompared: readBack.cells, cellsRecomputed: readBack.recomputed },
     project,
   };
-}
-
-function named({ file, bytes }: FileToWrite): PressedFile {
-  return { file, bytes: bytes.length, sha256: createHash('sha256').update(bytes).digest('hex') };
-}
-
-function wrongOnDisk(file: string): string {
-  return `${file} was written, but the disk gives other bytes back. Press again, into a folder on another disk.`;
 }
 
 /** The set of a project, unless one of its groups would be printed as something it is not. */

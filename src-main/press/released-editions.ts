@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { editionFromText, type FrozenEdition, type FrozenFile } from '../../shared-core/norms/edition-file.ts';
 import { EDITION_ENDING } from '../../shared-core/norms/file-endings.ts';
 import { namesIn } from '../project-file/atomic-write.ts';
-import { fingerprintOf } from '../project-file/project-store.ts';
+import { fingerprintOf } from '../project-file/stored-text.ts';
 import { cleanFileName } from '../project-file/file-name.ts';
 
 /** The name of the file in which an edition is frozen: "edition-1.0.normedition". */

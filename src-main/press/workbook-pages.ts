@@ -28,7 +28,12 @@ const SEPARATOR = ' \u00b7 ';
  * Paper as in the booklet, on its side where the columns (in characters of the usual type) ask for it, fitted to one
  * page across. The foot tells the edition and, in a line of its own, the page, so that the two cannot run together.
  */
-export function setUpPages(sheet: Worksheet, choices: SheetChoices, foot: string, across: number): void {
+export function setUpPages(
+  sheet: Worksheet,
+  choices: Pick<SheetChoices, 'paper' | 'orientation' | 'language'>,
+  foot: string,
+  across: number,
+): void {
   const page = say(printWords(choices.language), 'workbook.page', { page: '&P', pages: '&N' });
   const { number, sides } = PAPER[choices.paper];
   const room = (side: number): number => side - (MARGINS.left + MARGINS.right) * POINTS_IN_AN_INCH;

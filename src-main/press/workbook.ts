@@ -1,5 +1,4 @@
 import ExcelJS from 'exceljs';
-import JSZip from 'jszip';
 import type { NormSet } from '../../shared-core/norms/norm-set.ts';
 import { draftTitle, printedTitle, surveyName } from '../../shared-core/pages/sheet-texts.ts';
 import { ABOUT, fillAboutSheet } from './about-sheet.ts';
@@ -9,12 +8,9 @@ import { releaseDay } from './release-day.ts';
 import { sheetNames } from './sheet-names.ts';
 import { tablePlaces, tableSheetLayout } from './table-layout.ts';
 import { fillTableSheet } from './table-sheet.ts';
-import { nameStems, withNamedRanges, type NamedRange } from './workbook-names.ts';
+import { workbookBytes } from './workbook-bytes.ts';
+import { nameStems, type NamedRange } from './workbook-names.ts';
 import { fillWorkingsSheet } from './workings-sheet.ts';
-
-/** Zip archives cannot hold an earlier day. */
-const FIRST_ZIP_DAY = new Date('1980-01-01T00:00:00Z');
-const WORKBOOK_PART = 'xl/workbook.xml';
 
 /** Names of the sheets of each group, in the order of the norm set's groups. */
 export interface GroupSheets {
@@ -71,15 +67,5 @@ export async function tablesWorkbook(normSet: NormSet): Promise<Uint8Array> {
   if (normSet.project.cuts.length > 0) fillCutsSheet(workbook.addWorksheet(CUTS), normSet);
   fillAboutSheet(workbook.addWorksheet(ABOUT), normSet, ranges);
   fillLookUp(lookUp, workbook.addWorksheet(LOOK_UP_ROWS), normSet);
-  return finished(await workbook.xlsx.writeBuffer(), ranges, day < FIRST_ZIP_DAY ? FIRST_ZIP_DAY : day);
-}
-
-/** The same archive with named ranges, and with one date on every part, so that it does not tell when it was made. */
-async function finished(bytes: ExcelJS.Buffer, ranges: readonly NamedRange[], day: Date): Promise<Uint8Array> {
-  const archive = await JSZip.loadAsync(bytes);
-  const sheets = await archive.file(WORKBOOK_PART)?.async('string');
-  if (sheets === undefined) throw new RangeError('a workbook without its list of sheets');
-  archive.file(WORKBOOK_PART, withNamedRanges(sheets, ranges), { createFolders: false });
-  for (const part of Object.values(archive.files)) part.date = day;
-  return archive.generateAsync({ type: 'uint8array', compression: 'DEFLATE', platform: 'DOS' });
+  return workbookBytes(workbook, ranges, day);
 }

@@ -1,9 +1,10 @@
 import { mkdir, readFile, stat } from 'node:fs/promises';
-import { dirname, join } from 'node:path';
+import { basename, dirname, join } from 'node:path';
 import * as v from 'valibot';
 import { removeLeftovers, replaceFile } from './atomic-write.ts';
 
-export interface RecentProject {
+/** A file of one kind that was opened or saved here. */
+export interface RecentFile {
   readonly path: string;
   readonly title: string;
   /** Milliseconds since 1970. */
@@ -11,34 +12,30 @@ export interface RecentProject {
 }
 
 const MOST = 12;
-const FILE = 'recent-projects.json';
-
-const recentsSchema = v.object({
-  format: v.literal('normloom-recent-projects'),
-  version: v.literal(1),
-  projects: v.array(v.object({ path: v.string(), title: v.string() })),
-});
-type Entry = v.InferOutput<typeof recentsSchema>['projects'][number];
+const entriesSchema = v.array(v.object({ path: v.string(), title: v.string() }));
+type Entry = v.InferOutput<typeof entriesSchema>[number];
 
 /**
- * The projects opened or saved last. A file that is not there now (a memory stick, a network folder) keeps its place in
+ * The projects, or the classes, opened or saved last. A file that is not there now (a memory stick, a network folder) keeps its place in
  * the list but is not shown. A damaged list counts as an empty one: it holds nothing that cannot be opened again.
  */
 export class Recents {
+  readonly #what: 'projects' | 'classes';
   readonly #path: string;
   #last: Promise<unknown> = Promise.resolve();
 
-  constructor(dataFolder: string) {
-    this.#path = join(dataFolder, FILE);
+  constructor(dataFolder: string, what: 'projects' | 'classes') {
+    this.#what = what;
+    this.#path = join(dataFolder, `recent-${what}.json`);
   }
 
-  /** Puts a project at the head of the list. */
+  /** Puts a file at the head of the list. The title is kept with it, and is better left empty where it may name people. */
   add(path: string, title: string): Promise<void> {
     const write = async (): Promise<void> => {
       const others = (await this.#read()).filter((entry) => entry.path !== path);
-      const projects = [{ path, title }, ...others].slice(0, MOST);
+      const files = [{ path, title }, ...others].slice(0, MOST);
       await mkdir(dirname(this.#path), { recursive: true, mode: 0o700 });
-      const list = { format: 'normloom-recent-projects', version: 1, projects };
+      const list = { format: this.#format, version: 1, [this.#what]: files };
       await replaceFile(this.#path, `${JSON.stringify(list, null, 1)}\n`);
     };
     const mine = this.#last.then(write, write);
@@ -46,9 +43,9 @@ export class Recents {
     return mine;
   }
 
-  /** The projects that are there, last used first. */
-  async list(): Promise<readonly RecentProject[]> {
-    const found: RecentProject[] = [];
+  /** The files that are there, last used first. */
+  async list(): Promise<readonly RecentFile[]> {
+    const found: RecentFile[] = [];
     for (const { path, title } of await this.#read()) {
       const file = await stat(path).catch(() => null);
       if (file?.isFile() === true) found.push({ path, title, changedAt: Math.round(file.mtimeMs) });
@@ -58,7 +55,10 @@ export class Recents {
 
   /** Removes what killed writes of the list left behind, when older than ten seconds. */
   async sweep(now: number): Promise<void> {
-    await removeLeftovers(dirname(this.#path), ({ file, writtenAt }) => file === FILE && now - writtenAt > 10_000);
+    await removeLeftovers(
+      dirname(this.#path),
+      ({ file, writtenAt }) => file === basename(this.#path) && now - writtenAt > 10_000,
+    );
   }
 
   async #read(): Promise<readonly Entry[]> {
@@ -69,7 +69,16 @@ export class Recents {
     } catch {
       return [];
     }
-    const list = v.safeParse(recentsSchema, value);
-    return list.success ? list.output.projects : [];
+    const schema = v.object({
+      format: v.literal(this.#format),
+      version: v.literal(1),
+      [this.#what]: entriesSchema,
+    });
+    const list = v.safeParse(schema, value);
+    return list.success ? v.parse(entriesSchema, list.output[this.#what]) : [];
+  }
+
+  get #format(): string {
+    return `normloom-recent-${this.#what}`;
   }
 }

@@ -33,7 +33,8 @@ declare global {
 
 const LOST: Reply<never> = {
   ok: false,
-  problem: 'The program behind this page has ended. Start Normloom again; your last changes are kept as a draft.',
+  problem:
+    'The program behind this page has ended. Start Normloom again. Changes to a project are kept as a draft; those to a class only where they were saved.',
 };
 
 export function connectDesk(): DeskWire {

@@ -38,7 +38,7 @@ export class EarlierEditions {
   /** Compares with the project as it stands now; an answer that another question has overtaken is dropped. */
   async compare(): Promise<void> {
     const { edition } = this;
-    const project = this.#for.project();
+    const project = this.#for.present();
     if (edition === null || this.comparedFor === project || this.#wanted === project) return;
     this.#wanted = project;
     const compared = await compute.ask({ kind: 'comparison', before: edition.project, after: project }).then(
@@ -49,7 +49,7 @@ export class EarlierEditions {
       }),
     );
     if (this.#wanted === project) this.#wanted = null;
-    if (this.edition !== edition || this.#for.project() !== project) return;
+    if (this.edition !== edition || this.#for.present() !== project) return;
     this.compared = compared;
     this.comparedFor = project;
   }

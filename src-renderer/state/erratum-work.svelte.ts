@@ -41,7 +41,7 @@ export class ErratumWork {
     this.roster = { handle, preview: seen.value };
     this.score = columnOf(reading, 'score');
     this.person = named('name') === '' ? columnOf(reading, 'id') : named('name');
-    this.by = this.#for.project().groups.by.map(named);
+    this.by = this.#for.present().groups.by.map(named);
     this.made = null;
   }
 
@@ -58,7 +58,7 @@ export class ErratumWork {
     const columns = { score, person: person === '' ? null : person, by };
     const started = await wire.ask('make-erratum', {
       before,
-      after: this.#for.project(),
+      after: this.#for.present(),
       roster: roster === null ? null : { handle: roster.handle, reading: roster.preview.reading, columns },
       cut,
       write,

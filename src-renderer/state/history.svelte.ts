@@ -1,20 +1,18 @@
-import type { NormProject } from '../../shared-core/norms/norm-project.ts';
-
 const MOST_STEPS = 500;
 
-/** The project with every earlier and undone state of it: projects are plain data that share what did not change. */
-export class ProjectHistory {
-  #states = $state.raw<readonly NormProject[]>([]);
+/** Work with every earlier and undone state of it: states are plain data that share what did not change. */
+export class History<State> {
+  #states = $state.raw<readonly State[]>([]);
   #at = $state(0);
 
-  constructor(project: NormProject) {
-    this.#states = [project];
+  constructor(first: State) {
+    this.#states = [first];
   }
 
-  get project(): NormProject {
-    const project = this.#states[this.#at];
-    if (project === undefined) throw new RangeError('the history has lost its place');
-    return project;
+  get present(): State {
+    const present = this.#states[this.#at];
+    if (present === undefined) throw new RangeError('the history has lost its place');
+    return present;
   }
 
   get canUndo(): boolean {
@@ -26,16 +24,16 @@ export class ProjectHistory {
   }
 
   /** A new step; what was undone is gone. */
-  push(project: NormProject): void {
-    if (project === this.project) return;
+  push(next: State): void {
+    if (next === this.present) return;
     const kept = this.#states.slice(Math.max(0, this.#at + 2 - MOST_STEPS), this.#at + 1);
-    this.#states = [...kept, project];
+    this.#states = [...kept, next];
     this.#at = this.#states.length - 1;
   }
 
   /** Completes the present step, as when the tally for a changed reading has come. */
-  amend(project: NormProject): void {
-    this.#states = [...this.#states.slice(0, this.#at), project, ...this.#states.slice(this.#at + 1)];
+  amend(next: State): void {
+    this.#states = [...this.#states.slice(0, this.#at), next, ...this.#states.slice(this.#at + 1)];
   }
 
   undo(): void {

@@ -14,12 +14,12 @@ export class PressWork {
 
   /** Null before the first press, and once the project says something else than the files. */
   get pressed(): Pressed | null {
-    return this.#pressedFor === this.#for.project() ? this.#pressed : null;
+    return this.#pressedFor === this.#for.present() ? this.#pressed : null;
   }
 
   async run(kind: 'press' | 'release'): Promise<void> {
     const { wire, follow, fail } = this.#for;
-    const project = this.#for.project();
+    const project = this.#for.present();
     this.#pressed = null;
     const name = project.title === '' ? 'Untitled norms' : project.title;
     const started = await wire.ask(kind, { project, name });

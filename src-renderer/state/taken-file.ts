@@ -6,7 +6,7 @@ import type { WorkFor } from './work-for.ts';
  * in the host’s dialog. Null when the dialog was closed, or when something failed, which has then been told.
  */
 export async function takenFile(
-  { wire, fail }: Pick<WorkFor, 'wire' | 'fail'>,
+  { wire, fail }: Pick<WorkFor<unknown>, 'wire' | 'fail'>,
   file: File | FileHandle | null,
   kind: FileKind,
 ): Promise<FileHandle | null> {

@@ -7,23 +7,17 @@ import { readTypedCounts, type LineProblem } from '../../shared-core/tally/typed
 import type { ScoreScale } from '../../shared-core/scale/score-scale.ts';
 import type { DeskWire } from '../desk/desk-wire.ts';
 import { BuiltNorms } from './built-norms.svelte.ts';
-import { DrawnBooklet } from './drawn-booklet.svelte.ts';
+import { Drawing } from './drawing.svelte.ts';
 import { EarlierEditions } from './earlier-editions.svelte.ts';
 import { ErratumWork } from './erratum-work.svelte.ts';
-import { ProjectHistory } from './history.svelte.ts';
+import { History } from './history.svelte.ts';
 import { PressWork } from './press-work.svelte.ts';
 import { ReadStates } from './read-states.ts';
-import { followJob } from './run-job.ts';
+import { RunningJobs } from './running-jobs.svelte.ts';
 import { nounFrom, titleFrom } from './names-from-file.ts';
 import { takenFile } from './taken-file.ts';
 import { withTally } from './with-tally.ts';
 import type { WorkFor } from './work-for.ts';
-
-export interface RunningWork {
-  readonly job: string;
-  readonly doing: string;
-  readonly progress: number;
-}
 
 export type SaveState =
   | { readonly kind: 'unsaved' }
@@ -37,7 +31,8 @@ export class Workspace {
   readonly #wire: DeskWire;
   readonly #workFor: WorkFor;
   readonly #draft: string;
-  readonly #history: ProjectHistory;
+  readonly #jobs: RunningJobs;
+  readonly #history: History<NormProject>;
   #autosave: ReturnType<typeof setTimeout> | null = null;
 
   station = $state<Station>('cohort');
@@ -45,7 +40,6 @@ export class Workspace {
   groupKey = $state<string | null>(null);
   file = $state<string | null>(null);
   saved = $state.raw<SaveState>({ kind: 'unsaved' });
-  work = $state.raw<RunningWork | null>(null);
   problem = $state<string | null>(null);
   preview = $state.raw<CohortPreview | null>(null);
   cohort = $state<FileHandle | null>(null);
@@ -58,7 +52,7 @@ export class Workspace {
 
   /** The numbers of the project, or of the one before it while the new ones are being worked out. */
   readonly norms = new BuiltNorms();
-  readonly booklet: DrawnBooklet;
+  readonly booklet: Drawing<NormProject>;
   readonly presses: PressWork;
   readonly earlier: EarlierEditions;
   readonly erratum: ErratumWork;
@@ -68,18 +62,19 @@ export class Workspace {
 
   constructor(wire: DeskWire, opened: OpenedProject) {
     this.#wire = wire;
+    this.#jobs = new RunningJobs(wire, (problem) => (this.problem = problem));
     this.#workFor = {
       wire,
-      project: () => this.project,
-      follow: (job, doing) => this.#follow(job, doing),
+      present: () => this.project,
+      follow: (job, doing) => this.#jobs.follow(job, doing),
       fail: (problem) => (this.problem = problem),
     };
-    this.booklet = new DrawnBooklet(this.#workFor);
+    this.booklet = new Drawing(this.#workFor, (project) => wire.ask('draw-pages', { project }));
     this.presses = new PressWork(this.#workFor);
     this.earlier = new EarlierEditions(this.#workFor, opened.earlier);
     this.erratum = new ErratumWork(this.#workFor);
     this.#draft = opened.draft;
-    this.#history = new ProjectHistory(opened.project);
+    this.#history = new History(opened.project);
     this.#handle = opened.handle;
     this.file = opened.file;
     this.cohort = opened.cohort;
@@ -90,7 +85,11 @@ export class Workspace {
   }
 
   get project(): NormProject {
-    return this.#history.project;
+    return this.#history.present;
+  }
+
+  get work(): RunningJobs['work'] {
+    return this.#jobs.work;
   }
 
   get canUndo(): boolean {
@@ -203,7 +202,7 @@ export class Workspace {
       this.problem = started.problem;
       return;
     }
-    const result = await this.#follow(started.value.job, 'Reading');
+    const result = await this.#jobs.follow(started.value.job, 'Reading');
     if (this.#overtaken(round) || this.project.reading !== reading) return;
     if (result?.kind === 'tallied') {
       this.#amend(withTally(this.project, result.tallied, this.project.tally ?? this.#lastTally), false);
@@ -257,11 +256,8 @@ export class Workspace {
     return [];
   }
 
-  async cancel(): Promise<void> {
-    const running = this.work;
-    if (running === null) return;
-    await this.#wire.ask('cancel-job', { job: running.job });
-    this.#ended(running.job);
+  cancel(): Promise<void> {
+    return this.#jobs.cancel();
   }
 
   async save(): Promise<void> {
@@ -288,22 +284,6 @@ export class Workspace {
     clearTimeout(this.#autosave);
     this.#autosave = null;
     await this.#keepDraft();
-  }
-
-  async #follow(job: string, doing: string) {
-    this.work = { job, doing, progress: 0 };
-    const result = await followJob(this.#wire, job, (progress, now) => {
-      if (this.work?.job === job) this.work = { job, doing: now, progress };
-    });
-    this.#ended(job);
-    if (result.ok) return result.value;
-    this.problem = result.problem;
-    return null;
-  }
-
-  /** Another job may have taken the place meanwhile. */
-  #ended(job: string): void {
-    if (this.work?.job === job) this.work = null;
   }
 
   #push(project: NormProject, waits: boolean): void {

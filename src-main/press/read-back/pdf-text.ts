@@ -29,14 +29,20 @@ const SAME_LINE = 0.6;
 const NO_GLYPH = '\0';
 
 /** A PDF as another program reads it. */
-export interface PdfRead {
-  readonly pages: PdfPages;
+export interface PdfRead<Page> {
+  readonly pages: readonly Page[];
   /** The program that made it, as it names itself; empty where it does not. */
   readonly producer: string;
 }
 
 /** Reads the lines of every page of a PDF, from the top. Throws on a file that is no PDF. */
-export async function readPdf(bytes: Uint8Array): Promise<PdfRead> {
+export async function readPdf(bytes: Uint8Array): Promise<PdfRead<readonly PdfLine[]>> {
+  const { pages, producer } = await readPdfParts(bytes);
+  return { pages: pages.map(linesOf), producer };
+}
+
+/** Reads the pieces of text of every page as they were drawn, in no order. Throws on a file that is no PDF. */
+export async function readPdfParts(bytes: Uint8Array): Promise<PdfRead<readonly PdfCell[]>> {
   const { getDocument } = await pdfReader();
   const task = getDocument({
     data: Uint8Array.from(bytes),
@@ -46,7 +52,7 @@ export async function readPdf(bytes: Uint8Array): Promise<PdfRead> {
   });
   try {
     const document = await task.promise;
-    const pages: (readonly PdfLine[])[] = [];
+    const pages: (readonly PdfCell[])[] = [];
     for (let number = 1; number <= document.numPages; number += 1) {
       const page = await document.getPage(number);
       const { items } = await page.getTextContent({ disableNormalization: true });
@@ -56,7 +62,7 @@ export async function readPdf(bytes: Uint8Array): Promise<PdfRead> {
         if (size === undefined || slant !== 0 || left === undefined || baseline === undefined) return [];
         return [{ text: item.str.replaceAll(NO_GLYPH, BOX), left, right: left + item.width, baseline, size }];
       });
-      pages.push(linesOf(parts));
+      pages.push(parts);
       page.cleanup();
     }
     const { info } = await document.getMetadata();

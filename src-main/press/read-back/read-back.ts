@@ -1,7 +1,7 @@
 import type { Reply } from '../../../shared-core/desk.ts';
 import type { NormSet } from '../../../shared-core/norms/norm-set.ts';
 import { differenceLine, type CellDifference, type FileReadBack } from './cell-differences.ts';
-import { readPdf, type PdfRead } from './pdf-text.ts';
+import { readPdf, type PdfLine, type PdfRead } from './pdf-text.ts';
 import { pressedContent } from './pressed-kind.ts';
 import { readBooklet } from './read-booklet.ts';
 import { isCertificatePage, readCertificate, readCertificatePage } from './read-certificate.ts';
@@ -90,7 +90,7 @@ async function readOne(
   }
 }
 
-function readPdfFile(file: string, read: PdfRead, normSet: NormSet): FileReadBack {
+function readPdfFile(file: string, read: PdfRead<readonly PdfLine[]>, normSet: NormSet): FileReadBack {
   return isCertificatePage(read.pages)
     ? readCertificatePage(file, read.pages, normSet)
     : readBooklet(file, read, normSet);

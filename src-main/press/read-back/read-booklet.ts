@@ -9,7 +9,7 @@ import { BookletRows } from './booklet-rows.ts';
 import { CellComparison, type CellPlace, type FileReadBack } from './cell-differences.ts';
 import { comparePages } from './compare-pages.ts';
 import { CutRows } from './cut-rows.ts';
-import type { PdfRead } from './pdf-text.ts';
+import type { PdfLine, PdfRead } from './pdf-text.ts';
 import { squeezed } from './read-text.ts';
 
 /**
@@ -20,7 +20,11 @@ import { squeezed } from './read-text.ts';
  * booklet placed anew, so that nothing else on its pages can differ either; one that another version of the program
  * placed may break its lines elsewhere, and is left out of that.
  */
-export function readBooklet(file: string, { pages, producer }: PdfRead, normSet: NormSet): FileReadBack {
+export function readBooklet(
+  file: string,
+  { pages, producer }: PdfRead<readonly PdfLine[]>,
+  normSet: NormSet,
+): FileReadBack {
   const comparison = new CellComparison(file);
   const rows = new BookletRows(normSet, comparison);
   const blocks = [

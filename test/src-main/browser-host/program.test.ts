@@ -6,7 +6,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { JobState } from '../../../shared-core/desk.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { projectToText } from '../../../shared-core/norms/project-text.ts';
-import { fingerprintOf } from '../../../src-main/project-file/project-store.ts';
+import { fingerprintOf } from '../../../src-main/project-file/stored-text.ts';
 import { projectWithTally } from '../project-file/sample-projects.ts';
 import { buildHost, runHost, type Environment, type RunningHost } from './built-host.ts';
 

@@ -2,12 +2,17 @@ import { createHash } from 'node:crypto';
 import { mkdir, mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import type { DeskRequest, DeskRequests, JobState, PressedFile, Reply } from '../../../shared-core/desk.ts';
+import { projectClassTable } from '../../../shared-core/class/class-table-of-set.ts';
+import type { DeskRequest, DeskRequests, JobResult, JobState, PressedFile, Reply } from '../../../shared-core/desk.ts';
 import { editionToText } from '../../../shared-core/norms/edition-file.ts';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
 import type { Reading } from '../../../shared-core/norms/reading.ts';
 import { openDesk, type DeskHost, type DeskOptions } from '../../../src-main/desk/desk-host.ts';
+import { lookAtList } from '../../../src-main/cohort-file/look-at-list.ts';
 import { makeErratum } from '../../../src-main/erratum/make-erratum.ts';
+import { drawClassReport, drawSlips } from '../../../src-main/press/class/press-class.ts';
+import { pressClassInto } from '../../../src-main/press/class/press-class-into.ts';
+import type { PressRequest } from '../../../src-main/press/press-message.ts';
 import { editionFileName } from '../../../src-main/press/released-editions.ts';
 import type { DeskWork } from '../../../src-main/desk/desk-work.ts';
 
@@ -24,7 +29,10 @@ export const READING: Reading = {
   decisions: { duplicateId: 'keep-first', raggedRow: 'leave-out', blankGroup: 'leave-out', blankCluster: 'alone' },
 };
 
-/** Work that stands in for the reader and the press: it writes two small files that hold the project's title. */
+/**
+ * Work that stands in for the reader and the press: it writes two small files that hold the project's title. Classes are
+ * so small that they are drawn and pressed.
+ */
 export const PLAIN_WORK: DeskWork = {
   lookAtCohort(_path, file, reading) {
     const preview = { file, bytes: 1, sheets: [], columns: ['score'], rows: [], remarks: [] };
@@ -33,9 +41,12 @@ export const PLAIN_WORK: DeskWork = {
   tally(_path, file) {
     return Promise.resolve({ ok: false, problem: `${file} holds no scores. Choose another file.` });
   },
+  lookAtList,
+  classTable: ({ project, source }) => Promise.resolve(projectClassTable(project, source)),
   erratum: (request) => makeErratum(request),
   async press(request, hooks) {
     hooks.onProgress(0.5, 'Drawing pages');
+    if ('class' in request) return classWork(request);
     if (request.kind === 'draw')
       return { ok: true, value: { kind: 'drawn', drawn: { pdf: 'JVBERi0=', pages: 1, sections: [], remarks: [] } } };
     const files: PressedFile[] = [];
@@ -50,6 +61,15 @@ export const PLAIN_WORK: DeskWork = {
     return { ok: true, value: { kind: 'pressed', pressed: { folder: request.folder, files, readBack, editionFile } } };
   },
 };
+
+async function classWork(request: Extract<PressRequest, { readonly class: unknown }>): Promise<Reply<JobResult>> {
+  if (request.kind === 'draw-class') {
+    const drawn = await (request.what === 'report' ? drawClassReport : drawSlips)(request.class);
+    return drawn.ok ? { ok: true, value: { kind: 'drawn-class', drawn: drawn.value } } : drawn;
+  }
+  const pressed = await pressClassInto(request.class, request, request);
+  return pressed.ok ? { ok: true, value: { kind: 'pressed-class', pressed: pressed.value } } : pressed;
+}
 
 async function pressedFile(folder: string, file: string): Promise<PressedFile> {
   const bytes = await readFile(join(folder, file));

@@ -128,7 +128,7 @@ describe('projects on the desk', () => {
       dialogs: {
         chooseFile: () => Promise.resolve(join(hand.folder, 'here.normloom')),
         chooseFolder: () => Promise.resolve(null),
-        chooseSave: (path) => {
+        chooseSave: (_kind, path) => {
           suggested.push(path);
           return Promise.resolve(chosen.shift() ?? null);
         },

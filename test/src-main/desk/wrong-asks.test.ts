@@ -1,9 +1,11 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { newClass } from '../../../shared-core/class/new-class.ts';
 import { DESK_REQUESTS } from '../../../shared-core/desk.ts';
 import { newProject } from '../../../shared-core/norms/new-project.ts';
 import { deskAtHand, READING, type DeskAtHand } from './desk-at-hand.ts';
 
 const project = newProject('Ostrey Vale');
+const file = newClass('Class 5a', 1);
 const draft = 'a-draft-name';
 
 /** For every request: things it must not be asked with. */
@@ -40,6 +42,21 @@ const WRONG: Readonly<Record<(typeof DESK_REQUESTS)[number], readonly unknown[]>
     { before: project, after: { ...project, title: 7 }, roster: null, cut: '', write: true },
     { before: project, after: project, roster: { handle: 'x' }, cut: '', write: true },
   ],
+  'list-classes': [false],
+  'open-class': [{}, { handle: 3 }],
+  'save-class': [
+    { handle: null, name: 'x' },
+    { handle: null, class: file },
+    { handle: null, name: 'x', class: { ...file, format: 'normloom-project' } },
+    { handle: null, name: 'x', class: { ...file, sharing: { as: 'everybody', seed: 1 } } },
+  ],
+  'class-table': [{}, { handle: 3 }],
+  'look-at-list': [{ handle: 'x' }, { handle: 'x', sheet: 1 }, { handle: null, sheet: null }],
+  'draw-class': [{ class: file }, { class: file, what: 'key' }, { class: null, what: 'report' }],
+  'press-class': [
+    { class: file, slips: true },
+    { class: { ...file, list: [] }, slips: true, name: 'x' },
+  ],
   'job-state': [{}, { job: {} }],
   'cancel-job': [{}, { job: 'x'.repeat(65) }],
   'show-pressed': ['x'],
@@ -73,6 +90,10 @@ describe('what a desk is asked is checked when it is asked', () => {
     expect(await hand.problem('tally-cohort', { handle, reading: READING })).toMatch(unknown);
     expect(await hand.problem('keep-draft', { draft, handle, project })).toMatch(unknown);
     expect(await hand.problem('save-project', { draft, handle, name: 'x', project })).toMatch(unknown);
+    expect(await hand.problem('open-class', { handle })).toMatch(unknown);
+    expect(await hand.problem('save-class', { handle, name: 'x', class: file })).toMatch(unknown);
+    expect(await hand.problem('class-table', { handle })).toMatch(unknown);
+    expect(await hand.problem('look-at-list', { handle, sheet: null })).toMatch(unknown);
     const roster = { handle, reading: READING, columns: { score: 'score', person: null, by: [] } };
     const erratum = { before: project, after: project, roster, cut: '', write: false };
     expect(await hand.problem('make-erratum', erratum)).toMatch(unknown);

@@ -53,25 +53,37 @@ describe('native dialogs', () => {
     electron.dialog.showOpenDialog.mockResolvedValue({ canceled: true, filePaths: [] });
     electron.dialog.showSaveDialog.mockResolvedValue({ canceled: true, filePath: '' });
     expect(await dialogs.chooseFile('project')).toBeNull();
-    expect(await dialogs.chooseSave('/surveys/grade-4.normloom')).toBeNull();
+    expect(await dialogs.chooseSave('project', '/surveys/grade-4.normloom')).toBeNull();
     expect(await dialogs.chooseFolder()).toBeNull();
     expect(chosen).not.toHaveBeenCalled();
     const without = nativeDialogs(() => null, chosen);
     vi.clearAllMocks();
     expect(await without.chooseFile('cohort')).toBeNull();
-    expect(await without.chooseSave('/surveys/grade-4.normloom')).toBeNull();
+    expect(await without.chooseSave('project', '/surveys/grade-4.normloom')).toBeNull();
     expect(electron.dialog.showOpenDialog).not.toHaveBeenCalled();
     expect(electron.dialog.showSaveDialog).not.toHaveBeenCalled();
   });
 
   it('save under the suggested name and give a name without ending its ending', async () => {
     electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: '/surveys/grade-5' });
-    expect(await dialogs.chooseSave('/surveys/grade-4.normloom')).toBe('/surveys/grade-5.normloom');
+    expect(await dialogs.chooseSave('project', '/surveys/grade-4.normloom')).toBe('/surveys/grade-5.normloom');
     const options = electron.dialog.showSaveDialog.mock.calls[0]?.[1];
     expect(options?.defaultPath).toBe('/surveys/grade-4.normloom');
     expect(options?.properties).toContain('showOverwriteConfirmation');
     expect(options?.filters?.map(({ extensions }) => extensions)).toEqual([['normloom']]);
     expect(chosen.mock.calls).toEqual([['/surveys/grade-5.normloom']]);
+  });
+
+  it('choose and save classes by their ending, and tell the system of none, since their names are nobody’s business', async () => {
+    electron.dialog.showOpenDialog.mockResolvedValue({ canceled: false, filePaths: ['/lists/5b.normclass'] });
+    expect(await dialogs.chooseFile('class')).toBe('/lists/5b.normclass');
+    expect(await dialogs.chooseFile('class-list')).toBe('/lists/5b.normclass');
+    const filters = electron.dialog.showOpenDialog.mock.calls.map(([, asked]) => asked.filters?.[0]?.extensions);
+    expect(filters).toEqual([['normclass'], ['csv', 'tsv', 'txt', 'xlsx', 'ods', 'xls']]);
+    electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: '/lists/5c' });
+    expect(await dialogs.chooseSave('class', '/lists/5b.normclass')).toBe('/lists/5c.normclass');
+    expect(electron.dialog.showSaveDialog.mock.calls[0]?.[1].filters?.[0]?.extensions).toEqual(['normclass']);
+    expect(chosen).not.toHaveBeenCalled();
   });
 
   it('ask again where the full name is taken, so that nothing is written over unasked', async () => {
@@ -80,7 +92,7 @@ describe('native dialogs', () => {
     writeFileSync(taken, '{}');
     electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: false, filePath: join(folder, 'grade-4') });
     electron.dialog.showSaveDialog.mockResolvedValueOnce({ canceled: true, filePath: '' });
-    expect(await dialogs.chooseSave(join(folder, 'new.normloom'))).toBeNull();
+    expect(await dialogs.chooseSave('project', join(folder, 'new.normloom'))).toBeNull();
     expect(electron.dialog.showSaveDialog.mock.calls[1]?.[1].defaultPath).toBe(taken);
     rmSync(folder, { recursive: true });
   });

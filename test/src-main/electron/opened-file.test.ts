@@ -2,7 +2,7 @@ import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { fileToOpen, openedKind } from '../../../src-main/electron/opened-file.ts';
+import { fileToOpen } from '../../../src-main/electron/opened-file.ts';
 
 let folder = '';
 beforeAll(() => {
@@ -27,12 +27,5 @@ describe('the file to open', () => {
     expect(fileToOpen([], folder)).toBeNull();
     expect(fileToOpen(['program', '--scores.csv'], folder)).toBeNull();
     expect(fileToOpen(['absent.normloom'], folder)).toBeNull();
-  });
-
-  it('is a project by its ending and a cohort otherwise', () => {
-    expect(openedKind('/surveys/Grade 4.NORMLOOM')).toBe('project');
-    expect(openedKind('/surveys/edition-1.0.NormEdition')).toBe('project');
-    expect(openedKind('/surveys/scores.csv')).toBe('cohort');
-    expect(openedKind('/surveys/normloom')).toBe('cohort');
   });
 });

@@ -1,11 +1,12 @@
 import { execFileSync } from 'node:child_process';
-import { mkdtemp, rm } from 'node:fs/promises';
+import { mkdtemp, readdir, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { build } from 'vite';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { NormProject } from '../../../shared-core/norms/norm-project.ts';
-import { startPressJob } from '../../../src-main/press/press-job.ts';
+import { newClass } from '../../../shared-core/class/new-class.ts';
+import { startPressJob, startTableJob } from '../../../src-main/press/press-job.ts';
 import { LOG_LINEAR, sampleProject, WHOLE_SCALE } from '../../shared-core/pages/sample-norm-set.ts';
 
 const root = fileURLToPath(new URL('../../../', import.meta.url));
@@ -50,6 +51,41 @@ describe('startPressJob', () => {
     if (!reply.ok || reply.value.kind !== 'pressed') throw new Error('not pressed');
     expect(reply.value.pressed.folder).toBe(into);
     expect(reply.value.pressed.files).toHaveLength(6);
+  });
+
+  it('works out the tables for a class, and draws and presses one, in the same thread', async () => {
+    const table = await startTableJob({ project, source: 'project' }, worker);
+    if (!table.ok) throw new Error(table.problem);
+    expect(table.value.groups[0]?.rows).toHaveLength(41);
+    const row = { name: 'Ida', code: '', scoreText: '12', group: '', statusText: '' };
+    const rows = [1, 2].map((line) => ({ ...row, line, name: `Ida ${line}` }));
+    const file = {
+      ...newClass('Class 5b', 1),
+      table: table.value,
+      group: table.value.groups[0]?.values ?? null,
+      list: { decimalMark: '.' as const, rows },
+    };
+    const drawn = await startPressJob({ kind: 'draw-class', class: file, what: 'report' }, quiet, never(), worker);
+    expect(drawn).toMatchObject({ ok: true, value: { kind: 'drawn-class', drawn: { remarks: [] } } });
+    const into = { folder: join(folder, 'class'), keyFolder: join(folder, 'class-key') };
+    const coded = { ...file, sharing: { as: 'codes' as const, seed: 3 } };
+    const pressed = await startPressJob(
+      { kind: 'press-class', class: coded, slips: true, ...into },
+      quiet,
+      never(),
+      worker,
+    );
+    if (!pressed.ok || pressed.value.kind !== 'pressed-class') throw new Error(JSON.stringify(pressed));
+    expect(await readdir(into.keyFolder)).toEqual(['key-to-codes.csv']);
+    expect(await readdir(into.folder)).toHaveLength(5);
+    const stopped = new AbortController();
+    stopped.abort();
+    expect(
+      await startPressJob({ kind: 'draw-class', class: file, what: 'slips' }, quiet, stopped.signal, worker),
+    ).toEqual({
+      ok: false,
+      problem: 'The press was stopped. Press again when you are ready.',
+    });
   });
 
   it('presses the same bytes in every language and time zone', () => {

@@ -8,7 +8,8 @@ import { projectToText } from '../../../shared-core/norms/project-text.ts';
 import { diskTrouble } from '../../../src-main/project-file/disk-trouble.ts';
 import { Drafts } from '../../../src-main/project-file/drafts.ts';
 import { ProjectSaver } from '../../../src-main/project-file/project-saver.ts';
-import { fingerprintOf, MAX_PROJECT_BYTES, readProject } from '../../../src-main/project-file/project-store.ts';
+import { MAX_PROJECT_BYTES, readProject } from '../../../src-main/project-file/project-store.ts';
+import { fingerprintOf } from '../../../src-main/project-file/stored-text.ts';
 import { Recents } from '../../../src-main/project-file/recents.ts';
 import { projectWithTally } from './sample-projects.ts';
 
@@ -178,7 +179,7 @@ describe('drafts', () => {
 
 describe('recent projects', () => {
   it('are the last twelve, last used first; missing files are not shown but keep their place', async () => {
-    const recents = new Recents(at('data'));
+    const recents = new Recents(at('data'), 'projects');
     for (let number = 0; number < 14; number += 1) {
       await writeFile(at(`${number}.normloom`), 'x');
       await recents.add(at(`${number}.normloom`), `Title ${number}`);
@@ -194,7 +195,7 @@ describe('recent projects', () => {
   it('count as none when their list is damaged, and can be added to again', async () => {
     await mkdir(at('data'));
     await writeFile(at('data', 'recent-projects.json'), '{"projects": 3');
-    const recents = new Recents(at('data'));
+    const recents = new Recents(at('data'), 'projects');
     expect(await recents.list()).toEqual([]);
     await writeFile(at('a.normloom'), 'x');
     await chmod(at('a.normloom'), 0o600);
