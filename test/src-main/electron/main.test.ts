@@ -43,7 +43,7 @@ vi.mock('electron', async () => {
     exit: vi.fn(),
   });
   class BrowserWindow extends EventEmitter {
-    readonly webContents = { send: fake.sent };
+    readonly webContents = { send: fake.sent, on: vi.fn() };
     readonly show = record('show');
     readonly restore = record('restore');
     readonly focus = record('focus');

@@ -1,22 +1,24 @@
-import type { BrowserWindowConstructorOptions } from 'electron';
+import type { BrowserWindowConstructorOptions, MessageBoxSyncOptions } from 'electron';
 import { describe, expect, it, vi } from 'vitest';
 import { createWindow } from '../../../src-main/electron/window.ts';
 
 const made = vi.hoisted(() => ({
   options: [] as BrowserWindowConstructorOptions[],
   theme: { shouldUseDarkColors: false },
+  ask: vi.fn<(window: unknown, options: MessageBoxSyncOptions) => number>(),
 }));
 
 vi.mock('electron', async () => {
   const { EventEmitter } = await import('node:events');
   class BrowserWindow extends EventEmitter {
     readonly show = vi.fn();
+    readonly webContents = new EventEmitter();
     constructor(options: BrowserWindowConstructorOptions) {
       super();
       made.options.push(options);
     }
   }
-  return { BrowserWindow, nativeTheme: made.theme };
+  return { BrowserWindow, nativeTheme: made.theme, dialog: { showMessageBoxSync: made.ask } };
 });
 
 describe('the window', () => {
@@ -51,5 +53,21 @@ describe('the window', () => {
     expect(window.show).not.toHaveBeenCalled();
     window.emit('ready-to-show');
     expect(window.show).toHaveBeenCalledTimes(1);
+  });
+
+  it('asks before it closes over unsaved work, and stays unless told to leave', () => {
+    const window = createWindow('/preload.cjs', '/icon.png');
+    const closing = (answer: string): boolean => {
+      made.ask.mockImplementationOnce((holder, { buttons = [], defaultId, cancelId }) => {
+        expect([holder, buttons[defaultId ?? -1], buttons[cancelId ?? -1]]).toEqual([window, 'Stay', 'Stay']);
+        return buttons.indexOf(answer);
+      });
+      const event = { preventDefault: vi.fn() };
+      Reflect.apply(window.webContents.emit, window.webContents, ['will-prevent-unload', event]);
+      return event.preventDefault.mock.calls.length === 1;
+    };
+    expect(closing('Stay')).toBe(false);
+    expect(closing('Leave without saving')).toBe(true);
+    expect(made.ask).toHaveBeenCalledTimes(2);
   });
 });
