@@ -35,7 +35,7 @@ export interface SharedGroup {
 
 const FIVE_PLACES: Readonly<Record<SharedStatistic, number>> = { 'lower-hinge': 1, median: 2, 'upper-hinge': 3 };
 
-/** The class as it may be shared: a pure function of its results. Rows left out or still open are in no count. */
+/** The class as it may be shared: a pure function of its results. Rows that an answer left out are in no count. */
 export function classSummary({ results, file }: ClassPrint): ClassSummary {
   const { facts, table, comparison } = results;
   const members = membersOf(results);

@@ -18,6 +18,13 @@ const NO_SUMMARY =
   'A class without a table has no summary: its standing is made of nothing but single pupils. Choose a table, or share ' +
   'the standing with names or codes.';
 
+function unansweredSummary(rows: number): string {
+  return (
+    `${rows === 1 ? 'A row of the list has' : `${rows} rows of the list have`} an open question. A summary counts ` +
+    'everybody once: answer the questions first, or take the rows out of the list.'
+  );
+}
+
 /** What is printed of a class file. The problem is a sentence that tells what to do. */
 export function printOfClass(file: ClassFile): Reply<PrintOfClass> {
   const codes = file.sharing.as === 'codes' ? pupilCodes(file.list.rows.length, file.sharing.seed) : [];
@@ -28,6 +35,8 @@ export function printOfClass(file: ClassFile): Reply<PrintOfClass> {
   const built = classResults(file);
   if (!built.ok) return built;
   const kind = file.sharing.as === 'summary' ? 'summary' : 'report';
+  const { open } = built.results;
+  if (kind === 'summary' && open.length > 0) return { ok: false, problem: unansweredSummary(open.length) };
   return { ok: true, value: { kind, print: { file, codes, results: built.results } } };
 }
 

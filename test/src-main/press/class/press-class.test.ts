@@ -75,7 +75,8 @@ describe('pressing a class', () => {
   });
 
   it('holds no pupil in a summary, neither by name nor by result', async () => {
-    const made = await pressed(summaryOf(CLASS));
+    const answered = sampleFile({ entries: [...spreadScores(25), 'absent', 'absent', 'excused'], groups: ['a', 'b'] });
+    const made = await pressed(summaryOf(answered));
     expect(made.files.map(({ file }) => file)).toEqual([
       'class-report.pdf',
       'class.xlsx',
@@ -83,7 +84,7 @@ describe('pressing a class', () => {
       'class-certificate.json',
     ]);
     expect(made.remarks).toEqual(['A summary names nobody, so it has no slips.']);
-    const print = printOfClass(CLASS);
+    const print = printOfClass(answered);
     if (!print.ok || print.value.kind !== 'report') throw new Error('no report');
     for (const { file, bytes } of made.files) {
       expect(await namesIn(bytes), file).toEqual([]);
@@ -141,6 +142,17 @@ describe('pressing a class', () => {
     const { pressClass } = await import('../../../../src-main/press/class/press-class.ts');
     const made = await pressClass(summaryOf(standingOf(CLASS)), { slips: false });
     expect(made).toEqual({ ok: false, problem: expect.stringContaining('Choose a table') as string });
+  });
+
+  it('makes no summary while a question is open, which would count some of the class alone', async () => {
+    const { pressClass } = await import('../../../../src-main/press/class/press-class.ts');
+    const asked = sampleFile({ entries: [...spreadScores(20), 99] });
+    const made = await pressClass(summaryOf(asked), { slips: false });
+    expect(made).toEqual({
+      ok: false,
+      problem: expect.stringContaining('A row of the list has an open question.') as string,
+    });
+    expect((await pressClass(asked, { slips: false })).ok).toBe(true);
   });
 
   it('marks a draft in every file', async () => {
