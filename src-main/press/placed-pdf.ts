@@ -2,6 +2,7 @@ import type { TDocumentDefinitions } from 'pdfmake/interfaces.js';
 import type { Block, Picture, PlacedPages, Rule, TextLine } from '../../shared-core/pages/booklet.ts';
 import { tableMarks } from '../../shared-core/pages/table-blocks.ts';
 import { PICTURE_FONTS } from './fonts.ts';
+import { producerName, programVersion } from '../program-version.ts';
 import { housePrinter } from './house-printer.ts';
 import { drawPicture, drawRule, drawText } from './page-drawing.ts';
 import { packStructure } from './structure-packing.ts';
@@ -40,7 +41,7 @@ function definition({ title, paper, language }: PlacedPages, day: Date): TDocume
     language,
     tagged: true,
     displayTitle: true,
-    info: { title, creator: 'Normloom', producer: 'Normloom', creationDate: day, modDate: day },
+    info: { title, creator: 'Normloom', producer: producerName(programVersion()), creationDate: day, modDate: day },
     pageSize: { width: paper.width, height: paper.height },
     pageMargins: 0,
     defaultStyle: { font: 'Source Sans 3' },
