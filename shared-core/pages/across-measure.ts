@@ -41,9 +41,11 @@ export function measureAcross(
   const rooms = roomsOf(table, chosenType(sheet));
   const width = (pageWidth - (columns - 1) * GUTTER) / columns;
   const count = table.groups.length;
-  const fewer = groupsInPart(count, fitting(rooms, width, 1));
+  const side = fitting(rooms, width, 1);
+  if (columns > 1 && side < count) return null;
+  const fewer = groupsInPart(count, Math.max(1, side));
   const edges = fewer < FEWEST_WITH_BOTH_EDGES ? 1 : 2;
-  const inPart = edges === 1 ? fewer : groupsInPart(count, fitting(rooms, width, 2));
+  const inPart = edges === 1 ? fewer : groupsInPart(count, Math.max(1, fitting(rooms, width, 2)));
   if (columns > 1 && inPart < count) return null;
   const most = (width - rooms.behind - edgeRoom(rooms, edges)) / inPart - rooms.gap;
   const { heads, shortened } = groupHeads(table, rooms, most);
@@ -105,10 +107,10 @@ function inHeads(usual: number, { head }: TableType): number {
   return (usual * head.size) / TABLE_HEAD.size;
 }
 
-/** How many groups stand beside one or two columns of heads of rows. */
+/** How many groups stand beside one or two columns of heads of rows: 0 where the width is too small for one. */
 function fitting(rooms: Rooms, width: number, edges: number): number {
   const { group, gap, behind } = rooms;
-  return Math.max(1, Math.floor((width - behind - edgeRoom(rooms, edges)) / (group + gap)));
+  return Math.max(0, Math.floor((width - behind - edgeRoom(rooms, edges)) / (group + gap)));
 }
 
 /** Room of the heads of rows; those at the right edge stand off the last group. */

@@ -31,9 +31,10 @@ const checkSvelteTypes = () =>
     [packageFile('svelte-check', 'bin', 'svelte-check'), '--tsconfig', 'src-renderer/tsconfig.json'],
   ]);
 
-const checkLint = () =>
-  check('lint', [
-    [packageFile('eslint', 'bin', 'eslint.js'), '.'],
+const checkLint = () => check('lint', [[packageFile('eslint', 'bin', 'eslint.js'), '.']]);
+
+const checkLayout = () =>
+  check('layout and dead code', [
     [packageFile('prettier', 'bin', 'prettier.cjs'), '--check', '.'],
     [packageFile('knip', 'bin', 'knip.js')],
   ]);
@@ -66,7 +67,7 @@ if (browser !== null) process.env.BROWSER_PATH = browser;
 
 // Two processors are enough for the checks side by side; the tests, which measure and wait, run alone.
 const outcomes = (
-  await Promise.all([inTurn([checkTypes, checkSvelteTypes, checkLint]), inTurn([checkBuild, checkPack])])
+  await Promise.all([inTurn([checkLint]), inTurn([checkBuild, checkPack, checkTypes, checkSvelteTypes, checkLayout])])
 ).flat();
 outcomes.push(...(await inTurn([runUnitTests, runJourney])));
 

@@ -9,6 +9,7 @@ import { tableMarks } from '../../../shared-core/pages/table-blocks.ts';
 import { textWidth } from '../../../shared-core/pages/text-width.ts';
 import { printNumber } from '../../../shared-core/scores/printed-number.ts';
 import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
+import { tries } from '../../thoroughness.ts';
 
 type Sheet = Partial<NormProject['sheet']>;
 
@@ -186,7 +187,7 @@ describe('composeBooklet', () => {
           check(normSet, composeBooklet(normSet));
         },
       ),
-      { numRuns: 40, seed: 20260601 },
+      { numRuns: tries(20, 200), seed: 20260601 },
     );
   }, 60_000);
 

@@ -10,6 +10,7 @@ import type { Booklet } from '../../../shared-core/pages/booklet.ts';
 import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
 import { cellsOf, columnFaults, columnsOf, frameFaults } from './placed-laws.ts';
 import { sampleNormSet, type SampleCohort } from './sample-norm-set.ts';
+import { tries } from '../../thoroughness.ts';
 
 const blocksOf = (...kinds: readonly BlockKind[]): NormProject['sheet']['blocks'] =>
   BLOCK_KINDS.map((kind) => ({ kind, printed: kinds.includes(kind), heading: '', text: '' }));
@@ -47,13 +48,16 @@ function checkConversion({ project, groups }: NormSet, booklet: Booklet): void {
 
 /** Each group and raw score once, each group and percentile once, and each cut in each of its groups. */
 function checkBlocks({ project, groups }: NormSet, booklet: Booklet): void {
-  const titles = groups.map(({ group }, index) => ({ column: index + 1, title: group.title }));
+  const titles = groups.map(({ group }, index) => ({ column: index + 1, title: group.title.replaceAll(' ', '') }));
+  const shortened = booklet.remarks.some((remark) => remark.startsWith('Titles of groups are too long'));
   for (const table of ['groups-across', 'inverse-across'] as const) {
     const columns = columnsOf(booklet, table);
     for (const head of columns.flatMap(({ heads }) => heads)) {
       if (head.column === 0) continue;
       const title = titles.find(({ column }) => column === head.column)?.title ?? '';
-      expect(head.lines.join('').replaceAll(' ', '')).toBe(title.replaceAll(' ', ''));
+      const printed = head.lines.join('').replaceAll(' ', '');
+      if (shortened && printed.endsWith('…')) expect(title.startsWith(printed.slice(0, -1))).toBe(true);
+      else expect(printed).toBe(title);
       expect(head.note).toMatch(/^n [\d\u202f]+$/);
     }
   }
@@ -88,6 +92,8 @@ function checkBlocks({ project, groups }: NormSet, booklet: Booklet): void {
 
 const sorted = (cells: ReadonlyMap<string, string>): readonly (readonly [string, string])[] =>
   [...cells].sort(([left], [right]) => (left < right ? -1 : 1));
+
+type Drawn<A> = A extends fc.Arbitrary<infer Value> ? Value : never;
 
 const drawnSheet = fc.record({
   paper: fc.constantFrom('a4', 'letter', 'a5'),
@@ -150,6 +156,25 @@ function withAdjusted(normSet: NormSet): NormSet {
   };
 }
 
+/** One group in a part of a page that is too narrow for it: it must not be set in columns of rows side by side. */
+const NARROW: readonly [Drawn<typeof drawnSheet>, Drawn<typeof drawnCohort>, Drawn<typeof drawnTable>] = [
+  {
+    paper: 'a5',
+    orientation: 'portrait',
+    tableColumns: 4,
+    marginMm: 45,
+    gutterMm: 0,
+    rowType: 8.7,
+    rowHeight: 17,
+    fives: false,
+    rangeRows: false,
+    ogive: false,
+    inverse: false,
+  },
+  { length: 2, min: 0, step: 1, direction: 'high-is-good', weighted: false, groups: ['4'] },
+  { columns: [], decimals: 0, ends: 'signs' },
+];
+
 describe('tables on the page', () => {
   it('hold every score of every group once, within the frame, whatever the setting', () => {
     fc.assert(
@@ -183,7 +208,7 @@ describe('tables on the page', () => {
           checkBlocks(normSet, booklet);
         },
       ),
-      { numRuns: 24, seed: 20260615 },
+      { numRuns: tries(18, 400), seed: 20260615, examples: [[...NARROW, [], false]] },
     );
   }, 120_000);
 });

@@ -9,6 +9,7 @@ import { composeBooklet } from '../../../shared-core/pages/booklet-pages.ts';
 import { overlaps, widowedHeadings } from './block-laws.ts';
 import { frameFaults, linesOn, textOf } from './placed-laws.ts';
 import { KERNEL, LOG_LINEAR, sampleNormSet, WHOLE_SCALE, type SampleCohort } from './sample-norm-set.ts';
+import { tries } from '../../thoroughness.ts';
 
 type Sheet = Partial<NormProject['sheet']>;
 
@@ -100,7 +101,7 @@ describe('a whole booklet', () => {
           if (sheet.fillToFours) expect(booklet.pages.length % 4).toBe(0);
         },
       ),
-      { numRuns: 20, seed: 20260601 },
+      { numRuns: tries(12, 300), seed: 20260601 },
     );
   }, 240_000);
 

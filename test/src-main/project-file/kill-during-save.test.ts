@@ -10,8 +10,9 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Drafts } from '../../../src-main/project-file/drafts.ts';
 import { ProjectSaver } from '../../../src-main/project-file/project-saver.ts';
 import { readProject } from '../../../src-main/project-file/project-store.ts';
+import { tries } from '../../thoroughness.ts';
 
-const KILLS = 30;
+const KILLS = tries(10, 60);
 const here = (path: string): string => fileURLToPath(new URL(path, import.meta.url));
 
 describe('a kill in the midst of saving', () => {
@@ -42,7 +43,7 @@ describe('a kill in the midst of saving', () => {
       const ended = once(child, 'exit');
       await once(child.stdout, 'data');
       // Spread over a few rounds of the loop, so that the kills fall on every step of a save.
-      await wait((kill * 7) % 45);
+      await wait((kill * 13) % 45);
       child.kill('SIGKILL');
       await ended;
       for (const name of (await readdir(projects)).filter((each) => each.endsWith('.normloom'))) {

@@ -18,6 +18,7 @@ import {
   type SampleCohort,
 } from '../../../shared-core/pages/sample-norm-set.ts';
 import { misprinter, misprintsOf, withBlocks, withColumns, type Misprinter } from './misprint.ts';
+import { tries } from '../../../thoroughness.ts';
 
 type Sheet = Partial<NormProject['sheet']>;
 
@@ -322,7 +323,7 @@ describe('a fault planted in a booklet', () => {
           expect(lines.length).toBeGreaterThan(0);
         },
       ),
-      { numRuns: 25, seed: 20260615 },
+      { numRuns: tries(15, 150), seed: 20260615 },
     );
   }, 120_000);
 });
