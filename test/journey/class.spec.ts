@@ -1,7 +1,17 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { expect, test, type Page } from 'playwright/test';
-import { complaintsOf, expectAccessible, expectNoSidewaysScroll, goTo } from './page-checks.ts';
+import {
+  complaintsOf,
+  DARK,
+  expectAccessible,
+  goTo,
+  keepPicture,
+  LARGE,
+  type Look,
+  showIn,
+  SMALL,
+} from './page-checks.ts';
 import { Program } from './program.ts';
 
 let program: Program;
@@ -14,23 +24,15 @@ test.afterEach(async () => {
   await program.end();
 });
 
-const SMALL = { width: 1024, height: 700, scheme: 'light' } as const;
-const LARGE = { width: 1440, height: 900, scheme: 'light' } as const;
-const DARK = { width: 1280, height: 800, scheme: 'dark' } as const;
-
 /** Keeps a picture of a station in a size and a scheme. */
-async function picture(page: Page, name: string, size: typeof SMALL | typeof LARGE | typeof DARK): Promise<void> {
-  const { width, height, scheme } = size;
-  await page.setViewportSize({ width, height });
-  await page.emulateMedia({ colorScheme: scheme });
-  await expectNoSidewaysScroll(page);
-  await page.waitForTimeout(150);
-  await page.screenshot({ path: `.cache/journey-pictures/class-${name}-${width}-${scheme}.png` });
+async function picture(page: Page, name: string, look: Look): Promise<void> {
+  await showIn(page, look);
+  await keepPicture(page, `class-${name}`, look);
 }
 
 /** The same, and what the accessibility checker finds there. */
-async function lookAt(page: Page, name: string, size: typeof SMALL | typeof LARGE | typeof DARK): Promise<void> {
-  await picture(page, name, size);
+async function lookAt(page: Page, name: string, look: Look): Promise<void> {
+  await picture(page, name, look);
   await expectAccessible(page);
 }
 

@@ -15,6 +15,30 @@ export async function expectNoSidewaysScroll(page: Page): Promise<void> {
   expect(inner).toBeLessThanOrEqual(outer);
 }
 
+export interface Look {
+  readonly width: number;
+  readonly height: number;
+  readonly scheme: 'light' | 'dark';
+}
+
+/** The least window, a usual one, and a dark one. */
+export const SMALL: Look = { width: 1024, height: 700, scheme: 'light' };
+export const LARGE: Look = { width: 1440, height: 900, scheme: 'light' };
+export const DARK: Look = { width: 1280, height: 800, scheme: 'dark' };
+
+/** The page in a size and a scheme: it never scrolls sideways. */
+export async function showIn(page: Page, { width, height, scheme }: Look): Promise<void> {
+  await page.setViewportSize({ width, height });
+  await page.emulateMedia({ colorScheme: scheme });
+  await page.waitForTimeout(150);
+  await expectNoSidewaysScroll(page);
+}
+
+/** Keeps a picture of the page as it is shown. */
+export async function keepPicture(page: Page, name: string, { width, scheme }: Look): Promise<void> {
+  await page.screenshot({ path: `.cache/journey-pictures/${name}-${width}-${scheme}.png` });
+}
+
 /** Takes down what the page complains of: errors, and breaches of its own policy. */
 export function complaintsOf(page: Page): readonly string[] {
   const complaints: string[] = [];

@@ -2,14 +2,8 @@ import { createHash } from 'node:crypto';
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { expect, test, type Page } from 'playwright/test';
-import { complaintsOf, expectAccessible, expectNoSidewaysScroll, goTo } from './page-checks.ts';
+import { complaintsOf, DARK, expectAccessible, goTo, keepPicture, LARGE, showIn, SMALL } from './page-checks.ts';
 import { Program } from './program.ts';
-
-const SIZES = [
-  { width: 1024, height: 700, scheme: 'light' },
-  { width: 1440, height: 900, scheme: 'light' },
-  { width: 1280, height: 800, scheme: 'dark' },
-] as const;
 
 const EDITION = 'edition-1.0.normedition';
 const PRESSED = ['booklet.pdf', 'certificate.json', 'certificate.pdf', 'norm-set.json', 'tables.csv', 'tables.xlsx'];
@@ -68,21 +62,17 @@ async function release(page: Page, edition: string): Promise<void> {
 
 /** Looks at the station in every size, at each of its parts. */
 async function look(page: Page, name: string, parts: readonly string[]): Promise<void> {
-  for (const { width, height, scheme } of SIZES) {
-    await page.setViewportSize({ width, height });
-    await page.emulateMedia({ colorScheme: scheme });
-    await expectNoSidewaysScroll(page);
-    await expectAccessible(page);
+  for (const each of [SMALL, LARGE, DARK]) {
+    await showIn(page, each);
+    if (each !== LARGE) await expectAccessible(page);
     for (const part of parts) {
       await page.getByRole('heading', { name: part }).evaluate((heading) => {
         heading.scrollIntoView({ block: 'start' });
       });
-      const file = `${name}-${part.toLowerCase().replaceAll(/\W+/g, '-')}-${width}-${scheme}.png`;
-      await page.screenshot({ path: `.cache/journey-pictures/${file}` });
+      await keepPicture(page, `${name}-${part.toLowerCase().replaceAll(/\W+/g, '-')}`, each);
     }
   }
-  await page.setViewportSize({ width: 1280, height: 860 });
-  await page.emulateMedia({ colorScheme: 'light' });
+  await showIn(page, { width: 1280, height: 860, scheme: 'light' });
 }
 
 test('an edition is signed, released, changed, compared, released again, and its erratum written', async ({ page }) => {
