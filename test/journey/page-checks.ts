@@ -1,9 +1,13 @@
 import AxeBuilder from '@axe-core/playwright';
 import { expect, type Page } from 'playwright/test';
 
-/** Nothing that the accessibility checker finds, by the rules of WCAG 2.1 A and AA and its best practices. */
+/**
+ * Nothing that the accessibility checker finds, by the rules of WCAG 2.1 A and AA and its best practices. The page has no
+ * frames: the mode without them is several times as quick.
+ */
 export async function expectAccessible(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
+  const checker = new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).setLegacyMode(true);
+  const { violations } = await checker.analyze();
   expect(
     violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html.slice(0, 120)).join(' | ')}`),
   ).toEqual([]);

@@ -2,7 +2,7 @@ import { defineConfig } from 'playwright/test';
 
 const browser = process.env['BROWSER_PATH'];
 
-/** Journeys start the browser host themselves, each its own in a home of its own, so that two can walk side by side. */
+/** Journeys start the browser host themselves, each its own in a home of its own, so that several can walk side by side. */
 export default defineConfig({
   testDir: '.',
   testMatch: '**/*.spec.ts',
@@ -18,7 +18,7 @@ export default defineConfig({
     viewport: { width: 1280, height: 860 },
     locale: 'en-GB',
     acceptDownloads: true,
-    trace: 'retain-on-failure',
+    // A trace of every step makes the walk half as long again: npm run journey -- --trace on keeps one.
     launchOptions: browser === undefined ? {} : { executablePath: browser },
   },
 });
