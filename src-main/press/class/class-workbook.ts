@@ -67,6 +67,13 @@ function fillProse(worksheet: Worksheet, { title, rows }: ClassSheet): number {
   return PROSE_WIDTHS[0] + PROSE_WIDTHS[1];
 }
 
+const WORDS = { horizontal: 'left', wrapText: true } as const;
+
+/** Words behind figures stand off them: the figures end where the words begin. */
+function indentAt(kinds: ClassSheet['kinds'], place: number): number {
+  return kinds[place - 1] === 'figures' ? 1 : 0;
+}
+
 /** Title, subtitle, heads and rows in fives; returns the width in characters. */
 function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassSheet): number {
   const widths = heads.map((head, place) =>
@@ -82,7 +89,7 @@ function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassShe
     const cell = worksheet.getCell(HEAD_ROW, place + 1);
     cell.value = head;
     asHead(cell);
-    if (kinds[place] === 'words') cell.alignment = { horizontal: 'left', vertical: 'bottom', wrapText: true };
+    if (kinds[place] === 'words') cell.alignment = { ...WORDS, indent: indentAt(kinds, place), vertical: 'bottom' };
   });
   worksheet.getRow(HEAD_ROW).height = 30;
   rows.forEach((row, index) => {
@@ -90,7 +97,7 @@ function fillTable(worksheet: Worksheet, { title, heads, kinds, rows }: ClassShe
       const cell = worksheet.getCell(HEAD_ROW + 1 + index, place + 1);
       if (text !== '') {
         fillCell(cell, kinds[place] === 'figures' ? typedCell(text) : { kind: 'text', value: text });
-        if (kinds[place] === 'words') cell.alignment = { horizontal: 'left', vertical: 'top', wrapText: true };
+        if (kinds[place] === 'words') cell.alignment = { ...WORDS, indent: indentAt(kinds, place), vertical: 'top' };
       }
       const last = index === rows.length - 1;
       if (last || (index + 1) % ROWS_IN_FIVE === 0) ruleBelow(cell, last ? 'strong' : 'fine');
