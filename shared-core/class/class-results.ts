@@ -1,27 +1,21 @@
 import { checkCodeOf } from '../norms/check-code.ts';
 import { printScore } from '../scores/printed-number.ts';
 import type { ClassFile } from './class-file.ts';
-import type { ClassListRow } from './class-list.ts';
-import { rowsOfClass, type ClassCounts, type ClassRows, type PupilMissed, type PupilSetAside } from './class-rows.ts';
+import {
+  rowsOfClass,
+  type ClassCounts,
+  type ClassRows,
+  type PupilMissed,
+  type PupilSetAside,
+  type ScoredPupil,
+} from './class-rows.ts';
 import type { ClassTable, ClassTableGroup, ClassTableRow } from './class-table.ts';
 import { compareGroups, type GroupComparison } from './group-comparison.ts';
 import { quarterCounts, quarterOf, type Quarter, type QuarterCount } from './rank-quarters.ts';
 import { scoreFacts, type ScoreFacts } from './score-facts.ts';
 
 /** A pupil with a score that the table holds. */
-export interface PupilResult {
-  /** Place in the list, from 0: the pupil's key in codes and pages. */
-  readonly index: number;
-  readonly row: ClassListRow;
-  /** As printed, after corrections; the code where the list has no name. */
-  readonly name: string;
-  /** As the list names it; empty where it names none. */
-  readonly group: string;
-  /** Raw-score points, and as printed. */
-  readonly score: number;
-  readonly scoreText: string;
-  /** True where the score was typed anew in an answer. */
-  readonly corrected: boolean;
+export interface PupilResult extends ScoredPupil {
   /** The table and the row of it that the score was found in: every printed text of the pupil is one of the row's. */
   readonly table: ClassTableGroup;
   readonly found: ClassTableRow;

@@ -2,6 +2,22 @@ import type { ClassFile } from './class-file.ts';
 import type { ClassListRow, MissedStatus } from './class-list.ts';
 import { sortClass, type RowOutcome, type SortedRow } from './sorted-class.ts';
 
+/** A pupil who has a score. */
+export interface ScoredPupil {
+  /** Place in the list, from 0: the pupil's key in codes and pages. */
+  readonly index: number;
+  readonly row: ClassListRow;
+  /** As printed, after corrections; the code where the list has no name. */
+  readonly name: string;
+  /** As the list names it; empty where it names none. */
+  readonly group: string;
+  /** Raw-score points, and as printed. */
+  readonly score: number;
+  readonly scoreText: string;
+  /** True where the score was typed anew in an answer. */
+  readonly corrected: boolean;
+}
+
 /** A pupil without a score, and why. */
 export interface PupilMissed {
   /** Place in the list, from 0: the pupil's key in codes and pages. */

@@ -9,21 +9,11 @@ import { printCount, printNumber, printRatio } from '../scores/printed-number.ts
 import { inferScale } from '../tally/cohort-counter-scores.ts';
 import { tableFromCounts } from '../tally/frequency-table.ts';
 import type { ClassFile } from './class-file.ts';
-import type { ClassListRow } from './class-list.ts';
-import { rowsOfClass, type ClassCounts, type PupilMissed, type PupilSetAside } from './class-rows.ts';
+import { rowsOfClass, type ClassCounts, type PupilMissed, type PupilSetAside, type ScoredPupil } from './class-rows.ts';
 import { scoreFacts, type ScoreFacts } from './score-facts.ts';
 
 /** Where a pupil stands among those of the class who have a score. */
-export interface StandingPupil {
-  /** Place in the list, from 0: the pupil's key in codes and pages. */
-  readonly index: number;
-  readonly row: ClassListRow;
-  readonly name: string;
-  readonly group: string;
-  /** Raw-score points, and as printed. */
-  readonly score: number;
-  readonly scoreText: string;
-  readonly corrected: boolean;
+export interface StandingPupil extends ScoredPupil {
   /** Places from 1, the best; those of the same score share theirs. */
   readonly firstPlace: number;
   readonly lastPlace: number;

@@ -30,7 +30,7 @@ export const FRENCH_WORKBOOK: Readonly<Record<keyof typeof ENGLISH_WORKBOOK, str
   'about.smoothing': 'Lissage : {group}',
   'about.fit': 'Ajustement : {group}',
   'about.adjusted': 'Modifié à la main : {group}',
-  'about.how-to-read': 'Mode de lecture',
+  'about.how-to-read': 'Comment lire',
   'about.cautions': 'Mises en garde',
   'about.notes': 'Remarques',
   'about.population': 'Population',
